@@ -1,0 +1,94 @@
+/**
+ * Results as JSON and back, number for number: a Float64Array becomes `{ f8: base64 of its little-endian bytes }`.
+ * Small, quick to read, and the same in Node, a browser and a worker. NaN and infinities have no place in a result
+ * and are refused.
+ */
+import { SimError } from '../error.ts';
+
+/** What stands for a Float64Array in JSON. */
+interface PortableArray {
+  readonly f8: string;
+}
+
+/** RFC 4648 base64 of a string with a byte in each letter, and back: in Node, browsers and workers alike. */
+declare function btoa(binary: string): string;
+declare function atob(base64: string): string;
+
+const isLittleEndian = new Uint8Array(Uint16Array.of(1).buffer)[0] === 1;
+
+/**
+ * A copy of `value` that JSON can hold; anything but typed arrays, plain objects, arrays and primitives is refused.
+ * Errors: SimError that names the path of a number that is not finite.
+ */
+export function toPortable(value: unknown, path = 'result'): unknown {
+  if (value instanceof Float64Array) return encode(value, path);
+  if (typeof value === 'number' && !Number.isFinite(value)) throw notFinite(path, value);
+  if (typeof value === 'function') throw new SimError(path, 'a function cannot be stored', 'Keep results plain data');
+  if (value === null || typeof value !== 'object') return value;
+  if (Array.isArray(value)) return value.map((item, index) => toPortable(item, `${path}.${index}`));
+  if (isPortableArray(value))
+    throw new SimError(path, 'this would be read back as numbers', 'Choose another key than f8');
+  return Object.fromEntries(Object.entries(value).map(([key, item]) => [key, toPortable(item, `${path}.${key}`)]));
+}
+
+/** What `toPortable` was given. The caller knows the type. */
+export function fromPortable<T>(value: unknown): T {
+  return restore(value) as T;
+}
+
+function restore(value: unknown): unknown {
+  if (value === null || typeof value !== 'object') return value;
+  if (Array.isArray(value)) return value.map(restore);
+  if (isPortableArray(value)) return decode(value.f8);
+  return Object.fromEntries(Object.entries(value).map(([key, item]) => [key, restore(item)]));
+}
+
+function isPortableArray(value: object): value is PortableArray {
+  return 'f8' in value && typeof value.f8 === 'string' && Object.keys(value).length === 1;
+}
+
+function encode(data: Float64Array, path: string): PortableArray {
+  for (let at = 0; at < data.length; at++) {
+    if (!Number.isFinite(data[at])) throw notFinite(`${path}.${at}`, data[at]!);
+  }
+  return { f8: btoa(binaryText(littleEndianBytes(data))) };
+}
+
+function decode(text: string): Float64Array {
+  const bytes = bytesOf(text);
+  return isLittleEndian ? new Float64Array(bytes.buffer) : swapped(new Float64Array(bytes.buffer));
+}
+
+function littleEndianBytes(data: Float64Array): Uint8Array {
+  const ordered = isLittleEndian ? data : swapped(data);
+  return new Uint8Array(ordered.buffer, ordered.byteOffset, ordered.byteLength);
+}
+
+/** A copy with the bytes of each number the other way round. */
+function swapped(data: Float64Array): Float64Array {
+  const copy = data.slice();
+  const view = new DataView(copy.buffer);
+  for (let at = 0; at < copy.byteLength; at += 8) view.setFloat64(at, view.getFloat64(at, true), false);
+  return copy;
+}
+
+/** A letter for each byte, in pieces that fit a call's arguments. */
+function binaryText(bytes: Uint8Array): string {
+  const pieces: string[] = [];
+  for (let from = 0; from < bytes.length; from += 8192) {
+    pieces.push(Reflect.apply(String.fromCharCode, null, bytes.subarray(from, from + 8192)));
+  }
+  return pieces.join('');
+}
+
+function bytesOf(base64: string): Uint8Array<ArrayBuffer> {
+  const binary = atob(base64);
+  if (binary.length % 8 !== 0) throw new SimError('f8', 'the stored numbers are cut short', 'Make the file anew');
+  const bytes = new Uint8Array(binary.length);
+  for (let at = 0; at < bytes.length; at++) bytes[at] = binary.charCodeAt(at);
+  return bytes;
+}
+
+function notFinite(path: string, value: number): SimError {
+  return new SimError(path, `${value} is not a result`, 'Only finite numbers are stored');
+}

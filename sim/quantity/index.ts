@@ -1,0 +1,9 @@
+/** Numbers with units, uncertain numbers and dates: read at the border, SI inside, printed back in the user's units. */
+export { type Dimension, type DimensionName, dimensions } from './dimension.ts';
+export { formatNumber, formatQuantity, fromUnit, inUnit } from './format.ts';
+export { formatInstantUtc, type Instant, julianDateTdb, parseInstant, type TimeScale } from './instant.ts';
+export { nearest } from './nearest.ts';
+export { normalQuantile } from './normalQuantile.ts';
+export { parseQuantity, type QuantitySpec } from './parse.ts';
+export type { Distribution, Quantity } from './types.ts';
+export { parseUnit, type Unit } from './units.ts';
