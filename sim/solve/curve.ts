@@ -82,19 +82,35 @@ export function curveValue(curve: Curve, s: number): number {
   return pieceValue(piece, (s - piece.left) / piece.width);
 }
 
-/** Values at increasing positions, into `values`. */
+/** Values at increasing positions, into `values`. The coefficients stay in locals: this is the inner loop of all output. */
 export function curveValuesInto(curve: Curve, positions: Float64Array, values: Float64Array): void {
-  const piece = emptyPiece();
-  const last = curve.position.length - 2;
-  let index = positions.length > 0 ? pieceAt(curve, positions[0]) : 0;
-  let loaded = -1;
-  for (let i = 0; i < positions.length; i++) {
-    while (index < last && positions[i] >= curve.position[index + 1]) index++;
-    if (index !== loaded) {
-      loadPiece(curve, index, piece);
-      loaded = index;
-    }
-    values[i] = pieceValue(piece, (positions[i] - piece.left) / piece.width);
+  const { position, value, slope, curvature } = curve;
+  const last = position.length - 2;
+  const count = positions.length;
+  let index = count > 0 ? pieceAt(curve, positions[0]) : 0;
+  for (let i = 0; i < count; ) {
+    while (index < last && positions[i] >= position[index + 1]) index++;
+    const a = 2 * index;
+    const b = a + 1;
+    const left = position[index];
+    const h = position[index + 1] - left;
+    const inverse = 1 / h;
+    const end = index < last ? position[index + 1] : Number.POSITIVE_INFINITY;
+    const c0 = value[a];
+    const rise = value[b] - c0;
+    const v0 = slope[a] * h;
+    const v1 = slope[b] * h;
+    const w0 = curvature[a] * h * h;
+    const w1 = curvature[b] * h * h;
+    const c2 = 0.5 * w0;
+    const c3 = 10 * rise - 6 * v0 - 4 * v1 - 1.5 * w0 + 0.5 * w1;
+    const c4 = -15 * rise + 8 * v0 + 7 * v1 + 1.5 * w0 - w1;
+    const c5 = 6 * rise - 3 * (v0 + v1) - 0.5 * (w0 - w1);
+    do {
+      const x = (positions[i] - left) * inverse;
+      values[i] = c0 + x * (v0 + x * (c2 + x * (c3 + x * (c4 + x * c5))));
+      i++;
+    } while (i < count && positions[i] < end);
   }
 }
 
@@ -106,12 +122,14 @@ export function periodicCurve(
   curvature: Float64Array,
   scale: number,
 ): Curve {
-  const position = new Float64Array(size + 1);
+  // One allocation for all columns: cheaper than one each.
+  const store = new Float64Array(7 * size + 1);
   const ends = {
-    value: new Float64Array(2 * size),
-    slope: new Float64Array(2 * size),
-    curvature: new Float64Array(2 * size),
+    value: store.subarray(0, 2 * size),
+    slope: store.subarray(2 * size, 4 * size),
+    curvature: store.subarray(4 * size, 6 * size),
   };
+  const position = store.subarray(6 * size);
   for (let i = 0; i < size; i++) {
     const next = i + 1 === size ? 0 : i + 1;
     position[i] = (2 * Math.PI * i) / size;

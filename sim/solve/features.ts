@@ -95,30 +95,6 @@ export function shareBetween(curve: Curve, low: number, high: number, clock: (s:
   return Math.min(1, Math.max(0, inside / (clock(end) - clock(start))));
 }
 
-/** Greatest (sign = 1) or least (sign = −1) slope per unit of the clock, `pace` being d(clock)/ds: sampled, then refined. */
-export function steepest(
-  curve: Curve,
-  pace: (s: number) => number,
-  sign: 1 | -1,
-): { readonly position: number; readonly slope: number } {
-  const piece = emptyPiece();
-  let best = { index: 0, x: 0, slope: Number.NEGATIVE_INFINITY };
-  for (let index = 0; index + 1 < curve.position.length; index++) {
-    loadPiece(curve, index, piece);
-    for (let k = 0; k <= samplesPerPiece; k++) {
-      const x = k / samplesPerPiece;
-      const slope = (sign * pieceSlope(piece, x)) / pace(piece.left + x * piece.width);
-      if (slope > best.slope) best = { index, x, slope };
-    }
-  }
-  loadPiece(curve, best.index, piece);
-  const at = (x: number) => (sign * pieceSlope(piece, x)) / pace(piece.left + x * piece.width);
-  const x = summit(at, Math.max(0, best.x - 1 / samplesPerPiece), Math.min(1, best.x + 1 / samplesPerPiece));
-  const refined = at(x);
-  const [position, slope] = refined > best.slope ? [x, refined] : [best.x, best.slope];
-  return { position: piece.left + position * piece.width, slope: sign * slope };
-}
-
 /** ∫ f(s, value) ds by five-point Gauss–Legendre on every piece. */
 export function integrate(curve: Curve, f: (s: number, value: number) => number): number {
   const piece = emptyPiece();
@@ -134,7 +110,6 @@ export function integrate(curve: Curve, f: (s: number, value: number) => number)
   return total;
 }
 
-const samplesPerPiece = 4;
 const halves = [
   [0, 0.5],
   [0.5, 1],
@@ -159,31 +134,4 @@ function eachPiece(curve: Curve, piece: Piece, visit: () => void): void {
     loadPiece(curve, index, piece);
     visit();
   }
-}
-
-/** Golden-section search for a maximum. */
-function summit(f: (x: number) => number, low: number, high: number): number {
-  const golden = (Math.sqrt(5) - 1) / 2;
-  let a = low;
-  let b = high;
-  let left = b - golden * (b - a);
-  let right = a + golden * (b - a);
-  let atLeft = f(left);
-  let atRight = f(right);
-  for (let trial = 0; trial < 40; trial++) {
-    if (atLeft > atRight) {
-      b = right;
-      right = left;
-      atRight = atLeft;
-      left = b - golden * (b - a);
-      atLeft = f(left);
-    } else {
-      a = left;
-      left = right;
-      atLeft = atRight;
-      right = a + golden * (b - a);
-      atRight = f(right);
-    }
-  }
-  return (a + b) / 2;
 }

@@ -1,14 +1,13 @@
 /**
- * Periodic solution of a `Separable` equation with one smooth piece, all steps at once: three-stage Radau IIA collocation,
+ * Periodic solution of y′ = k (p(s) u(y) − r(s) v(y)) with smooth laws u and v (see `separable.ts`), all steps at once: three-stage Radau IIA collocation,
  * quasi-linearised, so that each step is an affine map of its first value and the period closes as y₀ = β/(1 − α).
  * The mesh is doubled until two agree at every node, odd ones against the coarser's interpolation. For any laws u and v;
  * `periodicQuartic` is the faster special case. Source: Ascher, Mattheij & Russell (1995) ch. 5; Hairer & Wanner (1996) §IV.5.
  */
 import { circleCache } from './circle.ts';
-import type { Curve } from './curve.ts';
+import { circleDifferencesInto } from './circleDifferences.ts';
+import { type Curve, periodicCurve } from './curve.ts';
 import { linearStages, solveStages, stagePositions } from './radau.ts';
-import type { Separable } from './separable.ts';
-import { pushStiffPiece, type StiffEnds, settleStiffPieces, stiffSteepness } from './stiffPieces.ts';
 
 /** p, r and their slopes on a mesh. */
 export interface SeparableTable {
@@ -18,8 +17,20 @@ export interface SeparableTable {
   readonly clockSlope: Float64Array;
 }
 
+/** u, u′, v and v′ at many ordinates. */
+export interface LawTable {
+  readonly gain: Float64Array;
+  readonly gainSlope: Float64Array;
+  readonly loss: Float64Array;
+  readonly lossSlope: Float64Array;
+}
+
 export interface PeriodicProblem {
-  readonly equation: Separable;
+  /** k of the equation, and the ordinate that iterates stay above. */
+  readonly rate: number;
+  readonly floor: number;
+  /** Overwrites the first `count` entries with the laws at the ordinates `y`. */
+  readonly lawsInto: (y: Float64Array, count: number, into: LawTable) => void;
   /** Overwrites the first `count` entries with the forcing at the points of given cosine and sine. */
   readonly tableInto: (cosines: Float64Array, sines: Float64Array, count: number, into: SeparableTable) => void;
   readonly tolerance: number;
@@ -40,6 +51,10 @@ const maximumSize = 8192;
 const maximumSweeps = 40;
 const safety = 6;
 const rounding = 1e-13;
+/** |∂f/∂y| × step above which slopes come from differences of the nodes, for whole meshes at a time. */
+const steepStep = 4;
+/** Newton's next change is below this times the square of the last. */
+const newtonConstant = 20;
 /** 1 − multiplier below which the level comes from the mean balance. */
 const slowGap = 0.05;
 
@@ -49,9 +64,10 @@ export function periodicSeparable(): (problem: PeriodicProblem) => PeriodicSolut
   let work: Work;
 
   return (problem) => {
-    const { equation, tolerance } = problem;
+    const { tolerance, floor } = problem;
     let size = problem.firstSize;
     let sweeps = 0;
+    let leftover = 0;
     const load = (): void => {
       if (6 * size > capacity) {
         // Room for the stages of this mesh and, when it is prolonged, of the next.
@@ -68,10 +84,11 @@ export function periodicSeparable(): (problem: PeriodicProblem) => PeriodicSolut
     };
     const settle = (target: number): boolean => {
       for (let count = 0; count < maximumSweeps; count++) {
-        const change = newtonSweep(equation, work, size);
+        const change = newtonSweep(problem, work, size);
         sweeps++;
         if (!Number.isFinite(change)) return false;
-        if (change * change * 20 <= target) return true;
+        leftover = newtonConstant * change * change;
+        if (leftover <= target) return true;
       }
       return false;
     };
@@ -81,53 +98,62 @@ export function periodicSeparable(): (problem: PeriodicProblem) => PeriodicSolut
     let settled = settle(1e-4);
     let difference = Number.POSITIVE_INFINITY;
     let converged = false;
-    let curve: Curve | null = null;
-    let logMultiplier = 0;
+    let nodes: NodeCurve | null = null;
     while (size < maximumSize && !converged) {
-      curve = settled ? nodesToCurve(equation, work, size) : null;
-      if (curve !== null) prolong(curve, size, equation.floor, work.next);
+      nodes = settled ? curveThroughNodes(problem, work, size) : null;
+      if (nodes !== null) prolong(nodes.curve, size, floor, work.next);
       size *= 2;
       load();
-      if (curve !== null) work.y.set(work.next.subarray(0, 3 * size));
+      if (nodes !== null) work.y.set(work.next.subarray(0, 3 * size));
       else guess();
-      settled = settle(1e-5 * tolerance);
-      if (settled && curve !== null) {
+      settled = settle(0.02 * tolerance);
+      if (settled && nodes !== null) {
         difference = largestNodeChange(work, size);
         converged = difference < safety * tolerance;
       }
     }
-    if (settled) {
-      logMultiplier = multiplierOf(equation, work, size);
-      curve = nodesToCurve(equation, work, size);
-    }
+    if (settled) nodes = curveThroughNodes(problem, work, size);
     return {
-      curve: curve ?? {
-        position: new Float64Array(1),
-        value: new Float64Array(0),
-        slope: new Float64Array(0),
-        curvature: new Float64Array(0),
-      },
-      errorEstimate: difference / safety + rounding,
+      curve: nodes?.curve ?? emptyCurve(),
+      errorEstimate: difference / safety + leftover + rounding,
       converged: settled && converged,
-      logMultiplier,
+      logMultiplier: nodes?.logMultiplier ?? 0,
       sweeps,
     };
   };
 }
 
+/** What an unconverged solve hands over. */
+function emptyCurve(): Curve {
+  const none = () => new Float64Array(0);
+  return { position: new Float64Array(1), value: none(), slope: none(), curvature: none() };
+}
+
 interface Work {
   readonly table: SeparableTable;
+  readonly laws: LawTable;
   /** Stage values; entry 3i + 2 is node i + 1. */
   readonly y: Float64Array;
   readonly next: Float64Array;
+  /** The nodes alone, and the laws there. */
+  readonly node: Float64Array;
+  readonly nodeSlope: Float64Array;
+  readonly nodeCurvature: Float64Array;
+  readonly nodeLaws: LawTable;
   readonly homogeneous: Float64Array;
   readonly particular: Float64Array;
 }
 
 function workspace(capacity: number): Work {
   const column = () => new Float64Array(capacity);
+  const laws = (): LawTable => ({ gain: column(), gainSlope: column(), loss: column(), lossSlope: column() });
   return {
     table: { arrival: column(), arrivalSlope: column(), clock: column(), clockSlope: column() },
+    laws: laws(),
+    node: column(),
+    nodeSlope: column(),
+    nodeCurvature: column(),
+    nodeLaws: laws(),
     y: column(),
     next: column(),
     homogeneous: column(),
@@ -160,10 +186,12 @@ function stageCircle(): (size: number) => { readonly cosines: Float64Array; read
 }
 
 /** One Newton iteration of all stages; returns the largest relative change, or NaN where the laws left their domain. */
-function newtonSweep(equation: Separable, work: Work, size: number): number {
-  const { rate, gain, gainSlope, loss, lossSlope, floor } = equation;
+function newtonSweep(problem: PeriodicProblem, work: Work, size: number): number {
+  const { rate, floor } = problem;
   const { y, homogeneous, particular } = work;
   const { arrival, clock } = work.table;
+  const { gain, gainSlope, loss, lossSlope } = work.laws;
+  problem.lawsInto(y, 3 * size, work.laws);
   const h = (2 * Math.PI) / size;
   const k = rate * h;
   const stages = linearStages();
@@ -171,25 +199,22 @@ function newtonSweep(equation: Separable, work: Work, size: number): number {
   let b = 0;
   for (let i = 0; i < size; i++) {
     const o = 3 * i;
-    const y1 = y[o];
-    const y2 = y[o + 1];
-    const y3 = y[o + 2];
     const p1 = k * arrival[o];
     const p2 = k * arrival[o + 1];
     const p3 = k * arrival[o + 2];
     const r1 = k * clock[o];
     const r2 = k * clock[o + 1];
     const r3 = k * clock[o + 2];
-    const j1 = p1 * gainSlope(y1, 0) - r1 * lossSlope(y1);
-    const j2 = p2 * gainSlope(y2, 0) - r2 * lossSlope(y2);
-    const j3 = p3 * gainSlope(y3, 0) - r3 * lossSlope(y3);
+    const j1 = p1 * gainSlope[o] - r1 * lossSlope[o];
+    const j2 = p2 * gainSlope[o + 1] - r2 * lossSlope[o + 1];
+    const j3 = p3 * gainSlope[o + 2] - r3 * lossSlope[o + 2];
     solveStages(
       j1,
       j2,
       j3,
-      p1 * gain(y1, 0) - r1 * loss(y1) - j1 * y1,
-      p2 * gain(y2, 0) - r2 * loss(y2) - j2 * y2,
-      p3 * gain(y3, 0) - r3 * loss(y3) - j3 * y3,
+      p1 * gain[o] - r1 * loss[o] - j1 * y[o],
+      p2 * gain[o + 1] - r2 * loss[o + 1] - j2 * y[o + 1],
+      p3 * gain[o + 2] - r3 * loss[o + 2] - j3 * y[o + 2],
       stages,
     );
     homogeneous[o] = stages.first1 * a;
@@ -202,11 +227,13 @@ function newtonSweep(equation: Separable, work: Work, size: number): number {
     particular[o + 2] = b;
   }
   const first = b / (1 - a);
-  const lift = 1 - a < slowGap ? levelOf(equation, work, size, first) : 0;
+  const values = particular;
+  for (let i = 0; i < 3 * size; i++) values[i] += homogeneous[i] * first;
+  const lift = 1 - a < slowGap ? levelOf(problem, work, values, size) : 0;
   let largest = 0;
   for (let i = 0; i < 3 * size; i++) {
     const from = y[i];
-    let to = homogeneous[i] * first + particular[i] + lift;
+    let to = values[i] + lift;
     // Never below 0.3 of the way down to the floor: the laws may not be defined beneath.
     const lowest = floor + 0.3 * (from - floor);
     if (!(to > lowest)) to = Number.isFinite(to) ? lowest : Number.NaN;
@@ -221,59 +248,51 @@ function newtonSweep(equation: Separable, work: Work, size: number): number {
  * A slow system closes at 1 − α ≪ 1 and loses the digits of its level; but ⟨p u⟩ = ⟨r v⟩ holds for every periodic solution.
  * Returns what must be added to all values (one Newton step; the trapezoidal rule on the nodes is spectrally accurate).
  */
-function levelOf(equation: Separable, work: Work, size: number, first: number): number {
-  const { homogeneous, particular, table } = work;
+function levelOf(problem: PeriodicProblem, work: Work, values: Float64Array, size: number): number {
+  const { table, laws } = work;
+  problem.lawsInto(values, 3 * size, laws);
   let imbalance = 0;
   let slope = 0;
   for (let i = 2; i < 3 * size; i += 3) {
-    const y = homogeneous[i] * first + particular[i];
-    imbalance += table.arrival[i] * equation.gain(y, 0) - table.clock[i] * equation.loss(y);
-    slope += table.clock[i] * equation.lossSlope(y) - table.arrival[i] * equation.gainSlope(y, 0);
+    imbalance += table.arrival[i] * laws.gain[i] - table.clock[i] * laws.loss[i];
+    slope += table.clock[i] * laws.lossSlope[i] - table.arrival[i] * laws.gainSlope[i];
   }
   return imbalance / slope;
 }
 
-function nodesToCurve(equation: Separable, work: Work, size: number): Curve {
-  const { rate, gain, gainSlope, loss, lossSlope } = equation;
-  const { y, table } = work;
+interface NodeCurve {
+  readonly curve: Curve;
+  /** ∮ ∂y′/∂y ds by the trapezoidal rule on the nodes: spectrally accurate for a smooth periodic integrand. */
+  readonly logMultiplier: number;
+}
+
+function curveThroughNodes(problem: PeriodicProblem, work: Work, size: number): NodeCurve {
+  const { rate } = problem;
+  const { y, table, node, nodeSlope, nodeCurvature } = work;
+  const { gain, gainSlope, loss, lossSlope } = work.nodeLaws;
   const h = (2 * Math.PI) / size;
-  const position = new Float64Array(size + 1);
-  const value = new Float64Array(2 * size);
-  const slope = new Float64Array(2 * size);
-  const curvature = new Float64Array(2 * size);
-  const stiff: StiffEnds = { index: [], slope: [], curvature: [] };
-  let previousStiffness = 0;
-  for (let i = -1; i < size; i++) {
-    // Node i + 1: the right end of step i and the left end of step i + 1.
-    const o = i < 0 ? 3 * size - 1 : 3 * i + 2;
-    const node = y[o];
-    const u = gain(node, 0);
-    const v = loss(node);
-    const slopeOfRate = rate * (table.arrival[o] * gainSlope(node, 0) - table.clock[o] * lossSlope(node));
-    const f = rate * (table.arrival[o] * u - table.clock[o] * v);
-    const second = rate * (table.arrivalSlope[o] * u - table.clockSlope[o] * v) + slopeOfRate * f;
-    const stiffness = Math.abs(slopeOfRate) * h;
-    position[i + 1] = (i + 1) * h;
-    if (i >= 0) {
-      value[2 * i + 1] = node;
-      slope[2 * i + 1] = f;
-      curvature[2 * i + 1] = second;
-      const start = value[2 * i];
-      if (Math.max(stiffness, previousStiffness) > stiffSteepness) {
-        pushStiffPiece(stiff, i, h, y[3 * i] - start, y[3 * i + 1] - start, node - start);
-      }
-    }
-    if (i + 1 < size) {
-      value[2 * i + 2] = node;
-      slope[2 * i + 2] = f;
-      curvature[2 * i + 2] = second;
-    }
-    previousStiffness = stiffness;
+  for (let i = 0; i < size; i++) node[i] = y[stageOfNode(i, size)];
+  problem.lawsInto(node, size, work.nodeLaws);
+  let sum = 0;
+  let steepest = 0;
+  for (let i = 0; i < size; i++) {
+    const o = stageOfNode(i, size);
+    const slopeOfRate = rate * (table.arrival[o] * gainSlope[i] - table.clock[o] * lossSlope[i]);
+    const f = rate * (table.arrival[o] * gain[i] - table.clock[o] * loss[i]);
+    nodeSlope[i] = f;
+    nodeCurvature[i] = rate * (table.arrivalSlope[o] * gain[i] - table.clockSlope[o] * loss[i]) + slopeOfRate * f;
+    sum += slopeOfRate;
+    steepest = Math.max(steepest, -slopeOfRate);
   }
-  position[size] = 2 * Math.PI;
-  const curve = { position, value, slope, curvature };
-  settleStiffPieces(curve, stiff);
-  return curve;
+  if (steepest * h > steepStep) {
+    circleDifferencesInto(node, size, nodeSlope, nodeCurvature);
+  }
+  return { curve: periodicCurve(size, node, nodeSlope, nodeCurvature, 1), logMultiplier: sum * h };
+}
+
+/** Node i is the last stage of the step before it. */
+function stageOfNode(i: number, size: number): number {
+  return i === 0 ? 3 * size - 1 : 3 * i - 1;
 }
 
 /** The curve at the stages of the mesh of twice its size, kept well above the floor on coarse meshes. */
@@ -309,14 +328,4 @@ function largestNodeChange(work: Work, size: number): number {
     if (!(change <= largest)) largest = change;
   }
   return largest;
-}
-
-/** ∮ ∂y′/∂y ds by the trapezoidal rule on the nodes: spectrally accurate for a smooth periodic integrand. */
-function multiplierOf(equation: Separable, work: Work, size: number): number {
-  let sum = 0;
-  for (let i = 2; i < 3 * size; i += 3) {
-    sum +=
-      work.table.arrival[i] * equation.gainSlope(work.y[i], 0) - work.table.clock[i] * equation.lossSlope(work.y[i]);
-  }
-  return (equation.rate * sum * 2 * Math.PI) / size;
 }

@@ -1,0 +1,92 @@
+/** `perilag run`: every case of each scenario, as a table and as files. */
+import { basename, extname, join, resolve } from 'node:path';
+import { SimError } from '../../sim/error.ts';
+import { type RunResult, runScenario } from '../../sim/run.ts';
+import { exitCode } from '../exit.ts';
+import type { Io } from '../io.ts';
+import { accountLines } from '../output/accounts.ts';
+import { type OutputFile, writeFolder } from '../output/folder.ts';
+import { jsonText } from '../output/json.ts';
+import { plotLines } from '../output/plot.ts';
+import { reportPieces } from '../output/report.ts';
+import { scenarioYamlText } from '../output/scenarioYaml.ts';
+import { seriesText } from '../output/series.ts';
+import { summaryOf, summaryText } from '../output/summary.ts';
+import { tableLines } from '../output/table.ts';
+import { type Terminal, terminalOf } from '../output/terminal.ts';
+import { printable } from '../output/text.ts';
+import { readScenarioFiles, type ScenarioFile } from '../scenarioFile.ts';
+import { onlyCases } from './only.ts';
+
+export interface RunOptions {
+  readonly out?: string;
+  readonly only?: readonly string[];
+  readonly fractions?: boolean;
+  readonly json?: boolean;
+  readonly quiet?: boolean;
+}
+
+/** Gives the exit code. Errors: SimError and ScenarioError for the input's faults; nothing is computed unless all files read. */
+export async function run(files: readonly string[], options: RunOptions, version: string, io: Io): Promise<number> {
+  const read = readScenarioFiles(files, io.cwd);
+  const chosen = onlyCases(read, options.only ?? []);
+  const folders = outputFolders(chosen, options.out);
+  const results: RunResult[] = [];
+  for (const [index, item] of chosen.entries()) {
+    const result = runScenario(item.scenario, { sha256: item.sha256, version });
+    await writeFolder(resolve(io.cwd, folders[index]!), filesOf(item, result, io));
+    show(result, folders[index]!, index > 0, options, io);
+    results.push(result);
+  }
+  if (options.json) {
+    const summaries = results.map(summaryOf);
+    io.stdout.write(`${jsonText(summaries.length === 1 ? summaries[0] : summaries)}\n`);
+  }
+  const misses = results.map((result) => tellMisses(result, io));
+  return misses.includes(true) ? exitCode.notWithinTolerance : exitCode.done;
+}
+
+function filesOf({ scenario }: ScenarioFile, result: RunResult, io: Io): readonly OutputFile[] {
+  return [
+    { name: 'summary.json', pieces: [summaryText(result)] },
+    { name: 'series.csv', pieces: [seriesText(result)] },
+    { name: 'scenario.yaml', pieces: [scenarioYamlText(scenario)] },
+    { name: 'report.html', pieces: reportPieces(result, io.reportTemplate) },
+  ];
+}
+
+/** `-o` itself for one scenario, a folder in it for each of several; without it, folders in `out/`. */
+function outputFolders(items: readonly ScenarioFile[], out: string | undefined): readonly string[] {
+  if (items.length === 1 && out !== undefined) return [out];
+  const names = items.map(({ file }) => basename(file, extname(file)));
+  const twice = names.find((name, index) => names.indexOf(name) !== index);
+  if (twice !== undefined) {
+    throw new SimError(
+      '-o',
+      `two scenarios would both write to the folder "${twice}"`,
+      'Run them one at a time, each with its own -o',
+    );
+  }
+  return names.map((name) => join(out ?? 'out', name));
+}
+
+function show(result: RunResult, folder: string, isLater: boolean, options: RunOptions, io: Io): void {
+  if (options.quiet) return;
+  const terminal = terminalOf(io);
+  if (!options.json) io.stdout.write(`${isLater ? '\n' : ''}${textOf(result, terminal, options)}\n`);
+  io.stderr.write(
+    `report  ${terminal.say(join(folder, 'report.html'))}\nfiles   summary.json, series.csv, scenario.yaml beside it\n`,
+  );
+}
+
+function textOf(result: RunResult, terminal: Terminal, { fractions = false }: RunOptions): string {
+  const parts = [tableLines(result, terminal, fractions), plotLines(result, terminal), accountLines(result, terminal)];
+  return parts.map((lines) => lines.join('\n')).join('\n\n');
+}
+
+/** Says which cases were not computed within their tolerance; true when there are some. The table says how far off. */
+function tellMisses({ cases }: RunResult, io: Io): boolean {
+  const missed = cases.filter(({ passed }) => !passed).map(({ name }) => name);
+  if (missed.length > 0) io.stderr.write(`not within tolerance: ${printable(missed.join(', '))}\n`);
+  return missed.length > 0;
+}

@@ -1,0 +1,129 @@
+/**
+ * Writes the files of a run so that they appear whole or not at all: into a temporary folder inside the output folder
+ * (so on the same disk), and then each renamed to its place. Other files in the output folder are left alone.
+ */
+import { closeSync, openSync, writeSync } from 'node:fs';
+import { mkdir, readdir, rename, rm, rmdir, stat } from 'node:fs/promises';
+import { hostname } from 'node:os';
+import { dirname, join } from 'node:path';
+import { setImmediate } from 'node:timers/promises';
+import { SimError } from '../../sim/error.ts';
+import { interruptible } from '../interrupt.ts';
+
+/** A file to write: its name in the folder, and its pieces one after the other. */
+export interface OutputFile {
+  readonly name: string;
+  readonly pieces: readonly (string | Uint8Array)[];
+}
+
+const stagePrefix = '.perilag-';
+
+/**
+ * `folder` is an absolute path; it and its parents are made where missing.
+ * Errors: SimError when the folder cannot be written, Interrupted on a signal; either way nothing of this run is left.
+ */
+export async function writeFolder(folder: string, files: readonly OutputFile[]): Promise<void> {
+  await interruptible(async (checkpoint) => {
+    const firstMade = await attempt(folder, () => mkdir(folder, { recursive: true }));
+    const stage = join(folder, `${stagePrefix}${hostname()}-${process.pid}`);
+    try {
+      await attempt(folder, () => fillStage(stage, files, checkpoint));
+      await attempt(folder, () => moveInto(folder, stage, files));
+    } catch (error) {
+      await rm(stage, { recursive: true, force: true });
+      if (firstMade !== undefined) await removeEmpty(folder, firstMade);
+      throw error;
+    }
+    await rm(stage, { recursive: true, force: true });
+    await removeAbandonedStages(folder);
+  });
+}
+
+async function fillStage(stage: string, files: readonly OutputFile[], checkpoint: () => void): Promise<void> {
+  await rm(stage, { recursive: true, force: true });
+  await mkdir(stage);
+  for (const { name, pieces } of files) {
+    writeWhole(join(stage, name), pieces);
+    await setImmediate(); // a signal is heard between files
+    checkpoint();
+  }
+}
+
+/** All at once: for a few megabytes the thread pool costs more than it saves. */
+function writeWhole(path: string, pieces: OutputFile['pieces']): void {
+  const file = openSync(path, 'wx');
+  try {
+    for (const piece of pieces) {
+      const bytes = typeof piece === 'string' ? Buffer.from(piece) : piece;
+      for (let at = 0; at < bytes.length; ) at += writeSync(file, bytes, at);
+    }
+  } finally {
+    closeSync(file);
+  }
+}
+
+async function moveInto(folder: string, stage: string, files: readonly OutputFile[]): Promise<void> {
+  for (const file of files) await refuseFolder(join(folder, file.name));
+  for (const file of files) await rename(join(stage, file.name), join(folder, file.name));
+}
+
+/** A folder where a file should go would stop the renames half-way: found before the first. */
+async function refuseFolder(path: string): Promise<void> {
+  const found = await stat(path).catch(() => null);
+  if (found?.isDirectory())
+    throw new SimError(
+      path,
+      'a folder stands where this file should go',
+      'Move it away, or choose another folder with -o',
+    );
+}
+
+/** From `folder` up to the first one that this run made. */
+async function removeEmpty(folder: string, firstMade: string): Promise<void> {
+  for (let path = folder; path.length >= firstMade.length; path = dirname(path)) {
+    await rmdir(path).catch(() => undefined);
+  }
+}
+
+/** What a killed run on this machine left behind. */
+async function removeAbandonedStages(folder: string): Promise<void> {
+  const ours = `${stagePrefix}${hostname()}-`;
+  const stages = (await readdir(folder)).filter((name) => name.startsWith(ours));
+  const dead = stages.filter((name) => !isAlive(Number(name.slice(ours.length))));
+  await Promise.all(dead.map((name) => rm(join(folder, name), { recursive: true, force: true })));
+}
+
+function isAlive(pid: number): boolean {
+  try {
+    process.kill(pid, 0);
+    return true;
+  } catch (error) {
+    return (error as NodeJS.ErrnoException).code !== 'ESRCH';
+  }
+}
+
+async function attempt<T>(folder: string, work: () => Promise<T>): Promise<T> {
+  try {
+    return await work();
+  } catch (error) {
+    const fault = writingFaults[(error as NodeJS.ErrnoException).code ?? ''];
+    throw fault === undefined ? error : new SimError(folder, fault, 'Choose another folder with -o', error);
+  }
+}
+
+const writingFaults: Readonly<Record<string, string>> = {
+  EACCES: 'the output folder may not be written',
+  EPERM: 'the output folder may not be written',
+  EROFS: 'the output folder is on a read-only disk',
+  ENOSPC: 'the disk is full',
+  EDQUOT: 'the disk quota is used up',
+  EFBIG: 'a file would be larger than allowed here',
+  ENOENT: 'the output folder cannot be made here',
+  EEXIST: 'a file stands where the output folder should be',
+  ENOTDIR: 'a part of this path is a file, not a folder',
+  ENAMETOOLONG: 'this path is too long',
+  ELOOP: 'this path goes round in links',
+  EIO: 'the disk failed',
+  EMFILE: 'too many files are open',
+  ENFILE: 'too many files are open',
+};

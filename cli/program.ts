@@ -1,0 +1,68 @@
+/** The command line: which commands there are. Each loads what it needs only when it is called. */
+import { Command, CommanderError } from 'commander';
+import packageJson from '../package.json' with { type: 'json' };
+import { exitCode, tellError } from './exit.ts';
+import type { Io } from './io.ts';
+
+/** Runs one command line, without the program's name. Gives the exit code; throws nothing. */
+export async function main(argv: readonly string[], io: Io): Promise<number> {
+  const outcome = { code: exitCode.done as number };
+  try {
+    await program(io, outcome).parseAsync(argv, { from: 'user' });
+    return outcome.code;
+  } catch (error) {
+    if (error instanceof CommanderError) return error.exitCode === 0 ? exitCode.done : exitCode.inputFault;
+    return tellError(error, io);
+  }
+}
+
+function program(io: Io, outcome: { code: number }): Command {
+  const perilag = new Command('perilag')
+    .description('How hot a planet on an eccentric orbit gets, when, and how late behind periapsis.')
+    .version(packageJson.version)
+    .exitOverride()
+    .configureOutput({ writeOut: (text) => io.stdout.write(text), writeErr: (text) => io.stderr.write(text) })
+    .configureHelp({ helpWidth: Math.min(io.columns, 120) })
+    .addHelpText('after', '\nStart with `perilag new planet.yaml`, then `perilag run planet.yaml`.');
+  perilag
+    .command('run')
+    .description('compute every case; print the table; write the report and the data files')
+    .argument('<scenario...>', 'scenario files, YAML or JSON')
+    .option('-o, --out <dir>', 'output folder (default: out/<file name without extension>)')
+    .option('--only <case>', 'compute only this case; may be given several times', collect)
+    .option('--fractions', 'show the textbook value for other absorbing fractions as well')
+    .option('--json', 'print the summary as JSON on standard output, and nothing else there')
+    .option('--quiet', 'print nothing but errors')
+    .action(async (files: string[], options) => {
+      const { run } = await import('./commands/run.ts');
+      outcome.code = await run(files, options, packageJson.version, io);
+    });
+  perilag
+    .command('check')
+    .description('explain each scenario: derived values, defaults used, what run would do; computes nothing')
+    .argument('<scenario...>', 'scenario files, YAML or JSON')
+    .action(async (files: string[]) => {
+      const { check } = await import('./commands/check.ts');
+      outcome.code = await check(files, io);
+    });
+  perilag
+    .command('new')
+    .description('write a commented scenario to start from')
+    .argument('[file]', 'file to write (default: scenario.yaml)')
+    .action(async (file: string | undefined) => {
+      const { newScenario } = await import('./commands/new.ts');
+      outcome.code = await newScenario(file, io);
+    });
+  perilag
+    .command('schema')
+    .description('print the JSON Schema of scenario files, for editors')
+    .action(async () => {
+      const { schema } = await import('./commands/schema.ts');
+      outcome.code = schema(io);
+    });
+  return perilag;
+}
+
+function collect(value: string, earlier: readonly string[] = []): readonly string[] {
+  return [...earlier, value];
+}

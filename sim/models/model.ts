@@ -1,0 +1,50 @@
+/** What every model exports. A new model is a folder that fills this in, and a line in the registry. */
+import type { ZodRawShape } from 'zod';
+import type { Dataset } from '../dataset/dataset.ts';
+import type { Finding } from '../findings/finding.ts';
+import type { SolveOptions, Window, World } from '../world.ts';
+
+/** One periodic state (or one forward run) and what is known of its stability. */
+export interface State {
+  /** `warm`, `cold`, `middle`, or `only` when a single state exists; `forward` for a run from a start. */
+  readonly label: string;
+  /** Null for a forward run. */
+  readonly stable: boolean | null;
+  /** Dominant multiplier of the orbit map; null for a forward run. */
+  readonly multiplier: number | null;
+  /** ln μ / ln μ₀: 1 no feedback, 0 a fold, negative unstable; null for a forward run. */
+  readonly stabilityMargin: number | null;
+  /** Upper bound of the relative temperature error. */
+  readonly errorEstimate: number;
+  /** Whether the estimate is within the tolerance asked for. */
+  readonly converged: boolean;
+  readonly dataset: Dataset;
+  readonly findings: readonly Finding[];
+  readonly energyBalance: EnergyBalance;
+}
+
+/** Orbit means (forward runs: means over the run), W m⁻². */
+export interface EnergyBalance {
+  readonly absorbed: number;
+  readonly internalHeat: number;
+  readonly emitted: number;
+  readonly stored: number;
+  /** |absorbed + internal − emitted − stored| / absorbed. */
+  readonly relativeDifference: number;
+}
+
+export interface Solution {
+  /** Warm first. */
+  readonly states: readonly State[];
+  readonly warnings: readonly string[];
+  /** Newton sweeps or steps taken, for the log. */
+  readonly iterations: number;
+}
+
+export interface Model {
+  /** What `model:` says in a scenario. */
+  readonly name: string;
+  /** Keys that only some models know, merged into the strict schema: the lumped model brings absorbingFraction. */
+  readonly keys: { readonly planet?: ZodRawShape; readonly solve?: ZodRawShape; readonly top?: ZodRawShape };
+  solve(world: World, options: SolveOptions, windows: readonly Window[]): Solution;
+}

@@ -1,0 +1,40 @@
+/** Windows: ranges as given, and published habitable limits at this star's temperature. */
+import type { Kelvin } from '../../si.ts';
+import { habitableFlux, habitableTemperatureRange } from '../../star/habitable.ts';
+import type { Window } from '../../world.ts';
+import type { Given } from './given.ts';
+import { shown } from './show.ts';
+
+export function buildWindows(given: Given, starTemperature: Kelvin | null): readonly Window[] {
+  given.use('windows');
+  return Object.entries(given.keys.windows ?? {}).flatMap(([name, window]) => {
+    if (!('habitable' in window)) return [{ name, of: window.of, from: window.from, to: window.to }];
+    given.use('star.temperature');
+    return habitableWindow(given, name, window.habitable as [HabitableName, HabitableName], starTemperature) ?? [];
+  });
+}
+
+type HabitableName = Parameters<typeof habitableFlux>[0];
+
+function habitableWindow(
+  given: Given,
+  name: string,
+  limits: [HabitableName, HabitableName],
+  temperature: Kelvin | null,
+): Window | null {
+  const [inner, outer] = limits;
+  if (inner === outer) {
+    return given.wrong(`windows.${name}.habitable`, `both limits are ${inner}`, 'Name an inner and an outer limit');
+  }
+  const reason = whyNot(temperature);
+  if (reason) return { name, of: 'instellation', from: 0, to: 0, unavailable: reason };
+  const fluxes = limits.map((limit) => habitableFlux(limit, temperature!));
+  return { name, of: 'instellation', from: Math.min(...fluxes), to: Math.max(...fluxes) };
+}
+
+function whyNot(temperature: Kelvin | null): string | null {
+  if (temperature === null) return 'the habitable limits depend on the temperature of the star, which is not given';
+  const { from, to } = habitableTemperatureRange;
+  if (temperature >= from && temperature <= to) return null;
+  return `the star has ${shown(temperature, 'K', 5)}; the habitable limits were published for ${from} to ${to} K`;
+}

@@ -1,0 +1,102 @@
+/**
+ * Lays one tree over another: key by key, lists replaced whole, null removing a key, and alternatives replacing one
+ * another whole. Cases use it, and so does everything that varies an input.
+ */
+import { type Branch, type Entry, isNull, type Tree } from './tree.ts';
+
+/** Ways to say one thing; each way is the keys that it needs. */
+export interface Alternatives {
+  /** The section that holds the keys, dotted. */
+  readonly section: string;
+  readonly ways: readonly (readonly string[])[];
+  /** Keys that belong to the first way without being needed for it. */
+  readonly companions?: readonly string[];
+  /** Several ways may stand together when they agree (checked where the World is built). */
+  readonly mayAgree?: boolean;
+  /** Keys of an unfinished way have other uses: temperature alone places habitable limits. */
+  readonly keepsUnfinished?: boolean;
+}
+
+/** The one table of alternatives. */
+export const alternatives: readonly Alternatives[] = [
+  { section: 'star', ways: [['luminosity'], ['temperature', 'radius']], mayAgree: true, keepsUnfinished: true },
+  { section: 'star', ways: [['mass'], ['density']] },
+  {
+    section: 'orbit',
+    ways: [['semiMajorAxis'], ['period'], ['scaledSemiMajorAxis'], ['instellation']],
+    mayAgree: true,
+  },
+  {
+    section: 'orbit',
+    ways: [['eccentricity'], ['eCosOmega', 'eSinOmega'], ['sqrtECosOmega', 'sqrtESinOmega']],
+    companions: ['argumentOfPeriapsis'],
+  },
+  { section: 'orbit', ways: [['periapsisTime'], ['transitTime'], ['epoch', 'meanAnomaly']] },
+  { section: 'planet', ways: [['bondAlbedo'], ['albedo']] },
+  { section: 'planet', ways: [['emissivity'], ['emission']] },
+  { section: 'planet.emission', ways: [['opticalDepth'], ['linear']] },
+  { section: 'planet.heatStore', ways: [['heatCapacity'], ['mixedLayer'], ['atmosphere'], ['ground']] },
+];
+
+/** All keys of a way, companions included. */
+export function keysOf(group: Alternatives, way: readonly string[]): readonly string[] {
+  return way === group.ways[0] ? [...way, ...(group.companions ?? [])] : way;
+}
+
+/** `base` with `patch` laid over it. Nothing is copied that does not change. */
+export function merge(base: Branch, patch: Branch, section = ''): Branch {
+  const entries = new Map<string, Entry>();
+  const replaced = replacedKeys(base, patch, section);
+  for (const [key, entry] of base.entries) if (!replaced.has(key)) entries.set(key, entry);
+  for (const [key, entry] of patch.entries) {
+    const below = entries.get(key)?.tree;
+    if (isNull(entry.tree)) entries.delete(key);
+    else if (below?.kind === 'branch' && entry.tree.kind === 'branch') {
+      entries.set(key, { ...entries.get(key)!, tree: merge(below, entry.tree, section ? `${section}.${key}` : key) });
+    } else entries.set(key, { keyAt: entry.keyAt, tree: withoutNulls(entry.tree) });
+  }
+  return { ...base, entries };
+}
+
+/** Keys of the base that give way because the patch says the same thing another way. */
+function replacedKeys(base: Branch, patch: Branch, section: string): ReadonlySet<string> {
+  const replaced = new Set<string>();
+  for (const group of alternatives) {
+    if (group.section !== section) continue;
+    const chosen = group.ways.filter((way) => isChosen(way, base, patch));
+    if (!chosen.length) continue;
+    const kept = new Set(chosen.flatMap((way) => keysOf(group, way)));
+    for (const way of group.ways) {
+      if (chosen.includes(way) || (group.keepsUnfinished && !way.every((key) => base.entries.has(key)))) continue;
+      for (const key of keysOf(group, way)) if (!kept.has(key)) replaced.add(key);
+    }
+  }
+  return replaced;
+}
+
+/** The patch gives a key of this way, and with the base it is complete. */
+function isChosen(way: readonly string[], base: Branch, patch: Branch): boolean {
+  const gives = (key: string) => patch.entries.has(key) && !isNull(patch.entries.get(key)?.tree);
+  return way.some(gives) && way.every((key) => gives(key) || (base.entries.has(key) && !patch.entries.has(key)));
+}
+
+function withoutNulls(tree: Tree): Tree {
+  if (tree.kind !== 'branch') return tree;
+  const entries = new Map<string, Entry>();
+  for (const [key, entry] of tree.entries) {
+    if (!isNull(entry.tree)) entries.set(key, { keyAt: entry.keyAt, tree: withoutNulls(entry.tree) });
+  }
+  return { ...tree, entries };
+}
+
+/** A patch that sets one dotted key, for `merge`: what `--along` and live controls lay over a case. */
+export function patchOf(key: string, value: string | number): Branch {
+  const at = { line: 1, column: 1 };
+  const steps = key.split('.');
+  let tree: Tree = { kind: 'leaf', at, path: steps, value, text: String(value), quoted: typeof value === 'string' };
+  for (let depth = steps.length - 1; depth >= 0; depth--) {
+    const entries: Map<string, Entry> = new Map([[steps[depth]!, { keyAt: at, tree }]]);
+    tree = { kind: 'branch', at, path: steps.slice(0, depth), entries };
+  }
+  return tree as Branch;
+}

@@ -1,0 +1,135 @@
+/** Text of a scenario file → Scenario, or every problem of the file at once. */
+
+import { desk } from './build/given.ts';
+import { type Built, buildWorld } from './build/world.ts';
+import { type CaseTree, conflicts, takeApart } from './cases.ts';
+import { withDefaults, withStartDefault } from './defaults.ts';
+import { readDocument } from './document.ts';
+import { yamlLines } from './emit.ts';
+import { listInputs } from './inputs.ts';
+import { ScenarioError } from './problem.ts';
+import { shorten } from './syntax.ts';
+import { type Branch, placeOf } from './tree.ts';
+import type { Problem, Scenario, ScenarioCase } from './types.ts';
+import { type Fault, validateCase, validateHead } from './validate.ts';
+
+/**
+ * Reads a scenario: YAML 1.2 or JSON.
+ * Shape:  text and the name of its file (for messages only) in, every case as a World out.
+ * Units:  SI and radians inside; the user's own number text stays beside it.
+ * Errors: ScenarioError with all problems of the file, sorted by place.
+ */
+export function readScenario(text: string, file: string): Scenario {
+  const { root, problems: syntax } = readDocument(text, file);
+  if (!root) throw new ScenarioError(syntax);
+  const { head, base, cases, faults } = takeApart(root);
+  const { title, notes, faults: headFaults } = validateHead(head);
+  const read = cases.map(readCase);
+  const problems = [
+    ...syntax,
+    ...[...faults, ...headFaults].map((fault) => problemAt(root, fault, file)),
+    ...baseFaults(base).map((fault) => problemAt(base, fault, file)),
+    ...read.flatMap(({ tree, keyFaults }) => keyFaults.map((fault) => problemAt(tree, fault, file))),
+    ...namingCases(read, file),
+  ];
+  if (problems.length) throw new ScenarioError(inOrder(problems));
+  const asUnderstood = understood(root, head, base, read);
+  return { title, notes, file, cases: read.map(({ result }) => result!), asUnderstood };
+}
+
+/** Faults of the scenario itself, for the keys that every case replaces. What is missing may come with the cases. */
+function baseFaults(base: Branch): Fault[] {
+  return [...validateCase(base).faults.filter(({ isMissing }) => !isMissing), ...conflicts(base)];
+}
+
+interface ReadCase {
+  readonly name: string;
+  readonly tree: Branch;
+  /** What a key says wrongly, whatever the case. */
+  readonly keyFaults: readonly Fault[];
+  /** What does not fit together in this case. */
+  readonly caseFaults: readonly Fault[];
+  readonly result: ScenarioCase | null;
+}
+
+function readCase({ name, tree }: CaseTree): ReadCase {
+  const filled = withDefaults(tree);
+  const { keys, broken, faults } = validateCase(filled);
+  const clashes = conflicts(filled);
+  const found = desk(filled, keys, broken);
+  const built = found.attempt(() => buildWorld(found));
+  const isSound = !faults.length && !clashes.length && !found.faults.length;
+  return {
+    name,
+    tree: filled,
+    keyFaults: [...faults, ...clashes],
+    caseFaults: found.faults,
+    result: isSound && built ? assemble(name, filled, found, built) : null,
+  };
+}
+
+function assemble(name: string, tree: Branch, found: ReturnType<typeof desk>, built: Built): ScenarioCase {
+  return {
+    name,
+    model: found.keys.model!,
+    ...built,
+    inputs: listInputs(tree, found.keys, found.used),
+    derived: found.derived,
+    warnings: found.warnings,
+  };
+}
+
+function problemAt(tree: Branch, { path, atKey, what, mend }: Fault, file: string): Problem {
+  const place = placeOf(tree, path, atKey);
+  const key = place.path.filter((step) => step.trim() !== '').join('.') || 'scenario';
+  return { file, ...place.at, key: printable(shorten(key, 120)), what: printable(what), mend: printable(mend) };
+}
+
+/** A user's text may hold characters that steer a terminal; a message must not. */
+function printable(text: string): string {
+  return text.replace(/[\p{Cc}\p{Cf}\p{Zl}\p{Zp}]/gu, '?');
+}
+
+/** A fault of some cases only names them, unless it already points into the case. */
+function namingCases(read: readonly ReadCase[], file: string): Problem[] {
+  const names = new Map<string, { problem: Problem; isInside: boolean; cases: string[] }>();
+  for (const { name, tree, caseFaults } of read) {
+    for (const fault of caseFaults) {
+      const problem = problemAt(tree, fault, file);
+      const id = identity(problem);
+      const isInside = placeOf(tree, fault.path, fault.atKey).path[0] === 'cases';
+      const known = names.get(id) ?? { problem, isInside, cases: [] };
+      if (!known.cases.includes(name)) known.cases.push(name);
+      names.set(id, known);
+    }
+  }
+  return [...names.values()].map(({ problem, isInside, cases }) => {
+    if (isInside || cases.length === read.length) return problem;
+    const shown = cases.map((name) => `\`${shorten(printable(name))}\``).join(', ');
+    return { ...problem, what: `${problem.what} (${cases.length > 1 ? 'cases' : 'case'} ${shown})` };
+  });
+}
+
+function identity({ line, column, key, what }: Problem): string {
+  return JSON.stringify([line, column, key, what]);
+}
+
+function inOrder(problems: readonly Problem[]): Problem[] {
+  const once = new Map(problems.map((problem) => [identity(problem), problem]));
+  return [...once.values()].sort((a, b) => a.line - b.line || a.column - b.column);
+}
+
+function understood(root: Branch, head: Branch, base: Branch, read: readonly ReadCase[]): string {
+  const entries = new Map([...head.entries].filter(([key]) => key !== '$schema'));
+  for (const [key, entry] of withDefaults(base).entries) entries.set(key, entry);
+  const cases = root.entries.get('cases');
+  if (cases?.tree.kind === 'branch') {
+    const shown = [...cases.tree.entries].map(([name, entry], i) => {
+      const tree = entry.tree as Branch;
+      return [name, { ...entry, tree: withStartDefault(tree, read[i]!.tree) }] as const;
+    });
+    entries.set('cases', { ...cases, tree: { ...cases.tree, entries: new Map(shown) } });
+  }
+  const lines = yamlLines({ ...root, entries });
+  return `# The scenario as understood: every default shown. Running it gives the same numbers.\n${lines.join('\n')}\n`;
+}

@@ -1,0 +1,74 @@
+/** A report opened in Chromium from disk, offline, with everything that it should not do written down. */
+import { writeFile } from 'node:fs/promises';
+import { join } from 'node:path';
+import { fileURLToPath, pathToFileURL } from 'node:url';
+import { type Browser, type BrowserContextOptions, chromium, type Page } from 'playwright-core';
+import { reportPieces } from '../../cli/output/report.ts';
+import type { RunResult } from '../../sim/run.ts';
+import { toolPath } from '../support/require.ts';
+
+/** The page that `npm run build` makes. */
+export const builtPage = new URL('../../dist/report.html', import.meta.url);
+
+export const chromiumPath = (): string | null => process.env.CHROMIUM ?? toolPath('chromium');
+
+const flags = ['--no-sandbox', '--disable-gpu', '--disable-quic', '--no-first-run', '--disable-background-networking'];
+
+export function launch(): Promise<Browser> {
+  return chromium.launch({
+    executablePath: chromiumPath()!,
+    args: [...flags, '--disable-component-update', '--disable-sync'],
+  });
+}
+
+export interface OpenReport {
+  readonly page: Page;
+  /** Console messages, page errors, requests and policy violations; to be empty. */
+  readonly complaints: () => Promise<readonly string[]>;
+  readonly close: () => Promise<void>;
+}
+
+/** Writes a report as the command line does. */
+export async function reportFile(folder: string, name: string, result: RunResult): Promise<string> {
+  const path = join(folder, `${name}.html`);
+  await writeFile(path, reportPieces(result, fileURLToPath(builtPage)));
+  return path;
+}
+
+export async function openFile(
+  browser: Browser,
+  path: string,
+  options: BrowserContextOptions = {},
+): Promise<OpenReport> {
+  const context = await browser.newContext({
+    offline: true,
+    acceptDownloads: true,
+    reducedMotion: 'reduce',
+    viewport: { width: 1280, height: 900 },
+    ...options,
+  });
+  const page = await context.newPage();
+  const heard: string[] = [];
+  const file = pathToFileURL(path).href;
+  page.on('console', (message) => heard.push(`console ${message.type()}: ${message.text()}`));
+  page.on('pageerror', (error) => heard.push(`error: ${error.message}`));
+  page.on('dialog', (dialog) => {
+    heard.push(`dialog: ${dialog.message()}`);
+    void dialog.dismiss();
+  });
+  page.on('request', (request) => {
+    const url = request.url();
+    if (url !== file && !/^(data|blob):/.test(url)) heard.push(`request: ${url}`);
+  });
+  await page.addInitScript(() => {
+    const violations: string[] = [];
+    addEventListener('securitypolicyviolation', (event) => violations.push(`policy: ${event.violatedDirective}`));
+    Object.assign(globalThis, { violations });
+  });
+  await page.goto(file);
+  const violations = (): Promise<string[]> =>
+    page.evaluate(() => (globalThis as unknown as { violations: string[] }).violations);
+  return { page, complaints: async () => [...heard, ...(await violations())], close: () => context.close() };
+}
+
+export const drawn = (page: Page): Promise<void> => page.locator('body[data-drawn="yes"]').waitFor({ timeout: 30_000 });

@@ -1,0 +1,36 @@
+/** What README.md shows is what the program does. */
+import { readFileSync } from 'node:fs';
+import { fileURLToPath } from 'node:url';
+import { expect, test } from 'vitest';
+import { workplace } from './support.ts';
+
+const root = fileURLToPath(new URL('../../', import.meta.url));
+const readme = readFileSync(`${root}README.md`, 'utf8');
+const example = readFileSync(`${root}configs/three-inertias.yaml`, 'utf8');
+const blockAfter = (mark: string) => new RegExp(`${mark}[^]*?\`\`\`\\w+\\n([^]*?)\`\`\``).exec(readme)![1]!;
+
+test('the table of the tour is printed by the example; the scenario shown gives the same', async () => {
+  const place = workplace();
+  place.write('example.yaml', example);
+  place.write('shown.yaml', blockAfter('the file reads'));
+  const shown = blockAfter('the output of: perilag run configs/three-inertias.yaml');
+  // The last digits of the accounts are rounding errors; the numbers above them are results.
+  const results = (text: string) => text.split('\naccounts')[0];
+  expect(results((await place.perilag('run', 'example.yaml')).stdout)).toBe(results(shown));
+  expect(results((await place.perilag('run', 'shown.yaml')).stdout)).toBe(results(shown));
+  place.remove();
+});
+
+test('every finding, command and option is named', async () => {
+  const place = workplace();
+  place.write('example.yaml', example);
+  const { stdout } = await place.perilag('run', 'example.yaml', '--json', '--quiet');
+  const findings = Object.keys(JSON.parse(stdout).cases[0].findings).map((name) => name.split('.')[0]!);
+  for (const name of findings) expect(readme).toMatch(new RegExp(`\`${name}[\`.]`));
+  const commands = [...(await place.perilag('--help')).stdout.matchAll(/^ {2}(\w+) /gm)].map(([, name]) => name!);
+  for (const name of commands.filter((word) => word !== 'help')) expect(readme).toContain(`perilag ${name} `);
+  const options = [...(await place.perilag('run', '--help')).stdout.matchAll(/--[a-z]+/g)].map(([option]) => option);
+  for (const option of options.filter((word) => word !== '--help')) expect(readme).toContain(`\`${option}`);
+  expect(findings.length * commands.length * options.length).toBeGreaterThan(0);
+  place.remove();
+});

@@ -1,0 +1,35 @@
+/** What every figure builder returns: plain JSON for Plotly and the words that stand with it. */
+import type { Data, Layout } from 'plotly.js-dist-min';
+import type { ChartLine } from './chartLine.ts';
+import type { Theme } from './theme.ts';
+
+export interface Figure {
+  /** File name of a download, without extension. */
+  readonly name: string;
+  readonly title: string;
+  /** What a reader who cannot see the figure needs: its main finding in a sentence or two. */
+  readonly textAlternative: string;
+  /** How to read it. */
+  readonly caption: string;
+  /** For a legend where there is no room beside the lines. */
+  readonly lines: readonly ChartLine[];
+  readonly data: Data[];
+  readonly layout: Partial<Layout>;
+}
+
+/** How a figure is to be set. */
+export interface FigureStyle {
+  readonly theme: Theme;
+  /** A phone's width: fewer ticks, no labels beside the lines. */
+  readonly narrow: boolean;
+  /** The part that the reader has zoomed to, so that names and dates stand where they belong; null for the whole. */
+  readonly view: View | null;
+}
+
+/** Ends of both axes, in their units. */
+export interface View {
+  readonly x: readonly [number, number];
+  readonly y: readonly [number, number];
+}
+
+export const figureFont = 'system-ui, -apple-system, "Segoe UI", Roboto, "Noto Sans", "Liberation Sans", sans-serif';

@@ -1,0 +1,211 @@
+/** Temperature against time: what the chart of one orbit and that of a run from a start have in common. Pure. */
+import type { Annotation, Layout } from 'plotly.js-dist-min';
+import type { Seconds, TdbSeconds } from '../../sim/si.ts';
+import { findingValue } from '../words/columns.ts';
+import { list, type TimeUnit } from '../words/number.ts';
+import { type ChartLine, glyph, lastInView, type Owner, traceOf } from './chartLine.ts';
+import { dateAxisAnchor, dateAxisLayout } from './dateAxis.ts';
+import { type Figure, type FigureStyle, figureFont, type View } from './figure.ts';
+import { lineLabels } from './lineLabels.ts';
+import { type TemperatureLine, temperatureLines } from './temperatureLines.ts';
+import { extremes } from './variables.ts';
+import {
+  barRowHeight,
+  type Drawing,
+  type Frame,
+  instellationBars,
+  instellationRows,
+  isShown,
+  temperatureBands,
+} from './windowBands.ts';
+import { distinctWindows } from './windowSpans.ts';
+
+/** A moment worth a vertical line. */
+export interface Moment {
+  readonly at: Seconds;
+  readonly label: string;
+  readonly strong: boolean;
+}
+
+export interface TemperatureChart {
+  readonly lines: readonly TemperatureLine[];
+  readonly from: Seconds;
+  readonly to: Seconds;
+  readonly unit: TimeUnit;
+  readonly timeTitle: string;
+  readonly moments: readonly Moment[];
+  /** Date of zero on the time axis, where it is known. */
+  readonly zeroDate: TdbSeconds | null;
+  readonly style: FigureStyle;
+}
+
+const plotHeight = { wide: 400, narrow: 300 };
+
+export function temperatureFigure(
+  chart: TemperatureChart,
+  words: Pick<Figure, 'name' | 'title' | 'textAlternative' | 'caption'>,
+): Figure {
+  const { unit, style } = chart;
+  const lines = temperatureLines(chart.lines, unit, style.theme);
+  const whole = temperatureFrame(chart.lines);
+  const view = style.view ?? {
+    x: [chart.from / unit.seconds, chart.to / unit.seconds],
+    y: [whole.low, whole.high],
+  };
+  const traces = lines.map((line) => traceOf(line, '%{y:.1f} K'));
+  const layout = temperatureLayout(chart, lines, view);
+  const dates = chart.zeroDate === null ? null : { zero: chart.zeroDate, unit, atMost: style.narrow ? 3 : 7 };
+  return {
+    ...words,
+    caption: [words.caption, ...windowWords(chart, whole)].join(' '),
+    lines,
+    data: dates ? [...traces, dateAxisAnchor(view.x[0], view.y[0])] : traces,
+    layout: dates ? { ...layout, xaxis2: dateAxisLayout(dates, view.x, style) } : layout,
+  };
+}
+
+/** The range of temperatures shown: every line and the textbook values, with a little air; windows do not stretch it. */
+export function temperatureFrame(lines: readonly TemperatureLine[]): Frame {
+  const seen = lines.flatMap(({ column }) => [
+    ...extremes(column.dataset, 'temperature'),
+    ...extremes(column.dataset, 'steadyTemperature'),
+    ...[findingValue(column, 'equilibriumTemperature')].filter((value) => value !== null),
+  ]);
+  const [low, high] = [Math.min(...seen), Math.max(...seen)];
+  const air = Math.max(1, 0.06 * (high - low));
+  return { low: Math.max(0, low - air), high: high + air };
+}
+
+function temperatureLayout(chart: TemperatureChart, lines: readonly ChartLine[], view: View): Partial<Layout> {
+  const { style, unit } = chart;
+  const { theme, narrow } = style;
+  const rows = instellationRows(chart.lines, style);
+  const height = narrow ? plotHeight.narrow : plotHeight.wide;
+  const below = rows.length * barRowHeight;
+  const total = height + below;
+  const margin = margins(style);
+  const drawings = [
+    temperatureBands(temperatureWindows(chart), { lines, view, height }, style),
+    instellationBars(rows, total, unit, style),
+    momentLines(chart),
+  ];
+  return {
+    height: total + margin.t + margin.b,
+    margin,
+    paper_bgcolor: 'rgba(0,0,0,0)',
+    plot_bgcolor: 'rgba(0,0,0,0)',
+    font: { family: figureFont, size: narrow ? 12 : 13, color: theme.ink },
+    showlegend: false,
+    hovermode: 'x unified',
+    hoverlabel: { bgcolor: theme.paper, bordercolor: theme.quiet, font: { color: theme.ink }, namelength: -1 },
+    xaxis: {
+      ...axisStyle(style),
+      title: { text: chart.timeTitle, standoff: 8 },
+      range: [...view.x],
+      anchor: 'free',
+      position: 0,
+      nticks: narrow ? 5 : 10,
+      unifiedhovertitle: { text: `%{x:.4~g} ${unit.symbol}` },
+      showgrid: false,
+    },
+    yaxis: {
+      ...axisStyle(style),
+      title: { text: 'Temperature (K)', standoff: 10 },
+      range: [...view.y],
+      domain: [below / total, 1],
+      gridcolor: theme.hairline,
+    },
+    shapes: drawings.flatMap(({ shapes }) => shapes),
+    annotations: [
+      ...drawings.flatMap(({ annotations }) => annotations),
+      ...(narrow ? [] : namesBesideLines(lines, view, height, style)),
+    ],
+  };
+}
+
+/** A name for every line that the view shows, where the line leaves it. */
+function namesBesideLines(
+  lines: readonly ChartLine[],
+  view: View,
+  height: number,
+  style: FigureStyle,
+): Partial<Annotation>[] {
+  const sign = ({ marker, colour }: Owner): string => `<span style="color:${colour}">${glyph(marker)}</span>`;
+  const labels = lines.flatMap((line) => {
+    const { shortName, marker, colour, referenceFor } = line;
+    const value = lastInView(line, view);
+    if (value === null) return [];
+    const signs = marker ? [{ marker, colour }] : (referenceFor ?? []);
+    const words = referenceFor ? `<i>${shortName}</i>` : shortName;
+    return [{ text: [...signs.map(sign), words].join(' '), value, colour }];
+  });
+  const [low, high] = view.y;
+  return lineLabels(labels, { low, high, height }, style);
+}
+
+function momentLines({ moments, unit, style }: TemperatureChart): Drawing {
+  const { theme } = style;
+  return {
+    shapes: moments.map(({ at, label, strong }) => ({
+      type: 'line',
+      name: label,
+      xref: 'x',
+      x0: at / unit.seconds,
+      x1: at / unit.seconds,
+      yref: 'paper',
+      y0: 0,
+      y1: 1,
+      line: { color: strong ? theme.ink : theme.bandEdge, width: 1, dash: strong ? 'solid' : 'dot' },
+      layer: 'below',
+    })),
+    annotations: moments
+      .filter(({ label }) => label !== '')
+      .map(({ at, label, strong }) => ({
+        text: strong ? `<b>${label}</b>` : label,
+        showarrow: false,
+        font: { color: strong ? theme.ink : theme.quiet, size: 12 },
+        x: at / unit.seconds,
+        xref: 'x',
+        xanchor: 'left',
+        xshift: 2,
+        y: 1,
+        yref: 'paper',
+        yanchor: 'top',
+      })),
+  };
+}
+
+function temperatureWindows({ lines }: TemperatureChart): ReturnType<typeof distinctWindows> {
+  return distinctWindows(
+    lines.map(({ column }) => column),
+    'temperature',
+  );
+}
+
+/** What the caption says of windows: what the shading is, and which lie outside the temperatures shown. */
+function windowWords(chart: TemperatureChart, frame: Frame): string[] {
+  const windows = temperatureWindows(chart);
+  const hidden = windows.filter((window) => !isShown(window, frame)).map(({ name }) => `“${name}”`);
+  const hasBars = instellationRows(chart.lines, chart.style).length > 0;
+  return [
+    ...(windows.length > hidden.length ? ['Shaded: temperature windows.'] : []),
+    ...(hasBars ? ['Bars under the chart: when the instellation lies within a window.'] : []),
+    ...(hidden.length > 0 ? [`Outside the temperatures shown: ${list(hidden)}.`] : []),
+  ];
+}
+
+function axisStyle({ theme }: FigureStyle): Partial<Layout['xaxis']> {
+  return {
+    linecolor: theme.quiet,
+    showline: true,
+    ticks: 'outside',
+    ticklen: 5,
+    tickcolor: theme.quiet,
+    tickfont: { color: theme.quiet },
+    zeroline: false,
+  };
+}
+
+function margins({ narrow }: FigureStyle): { l: number; r: number; t: number; b: number } {
+  return narrow ? { l: 56, r: 12, t: 30, b: 46 } : { l: 64, r: 224, t: 34, b: 50 };
+}

@@ -1,0 +1,99 @@
+/** A figure on the page: drawn by Plotly, redrawn as the surroundings change, saved on request. */
+import type { Config, Layout } from 'plotly.js-dist-min';
+import type { Figure, FigureStyle, View } from '../figures/figure.ts';
+import { lightTheme } from '../figures/theme.ts';
+import { element } from './element.ts';
+import { lineSample } from './lineSample.ts';
+import { plotly } from './plotly.ts';
+import { saveFile } from './saveFile.ts';
+import type { Setting } from './surroundings.ts';
+import { watchZoom } from './zoom.ts';
+
+export interface FigureView {
+  readonly element: HTMLElement;
+  /** Call once the element is in the document, and again when the setting has changed. */
+  draw(setting: Setting): Promise<void>;
+}
+
+type Build = (style: FigureStyle) => Figure;
+
+/** A double click is answered by the page: Plotly would go back to the last view that it was given. */
+const config: Partial<Config> = { displayModeBar: false, doubleClick: false, showTips: false };
+/** For papers: light and wide whatever the screen is. */
+const savedStyle: FigureStyle = { theme: lightTheme, narrow: false, view: null };
+const savedWidth = 1100;
+/** Device pixels to each CSS pixel of a saved PNG. */
+const pngScale = 3;
+/** Below this Plotly has no room between its margins, and writes positions that are no numbers. */
+const leastWidth = { wide: 560, narrow: 240 };
+
+/** `build` makes the figure for a style; `number` is its place on the page. */
+export function figureView(number: number, build: Build): FigureView {
+  let setting: Setting | null = null;
+  let view: View | null = null;
+  const { title, textAlternative, caption } = build(savedStyle);
+  const plot = element('div', { class: 'plot', role: 'group', 'aria-label': `${title}. ${textAlternative}` });
+  const legend = element('ul', { class: 'legend' });
+  const whole = button('Show all', () => show(null));
+  whole.hidden = true;
+  const saving = (['svg', 'png'] as const).map((format) =>
+    button(`Save ${format.toUpperCase()}`, () => save(build, format)),
+  );
+  const tools = element('p', { class: 'tools' }, whole, ...saving);
+  const words = element('figcaption', {}, element('b', {}, `Figure ${number}. ${title}. `), caption);
+
+  async function show(part: View | null): Promise<void> {
+    if (setting === null) return;
+    view = part;
+    whole.hidden = view === null;
+    const figure = build({ ...setting.style, view });
+    legend.replaceChildren(...(setting.style.narrow ? legendEntries(figure) : []));
+    await plotly().react(plot, figure.data, drawnLayout(figure, setting, widthFor(plot, setting)), config);
+  }
+
+  async function draw(changed: Setting): Promise<void> {
+    const isFirst = setting === null;
+    setting = changed;
+    await show(view);
+    if (!isFirst) return;
+    watchZoom(plot, { zoomed: (part) => void show(part), left: () => void show(null) });
+    new ResizeObserver(() => void followWidth(plot, setting!)).observe(plot);
+  }
+
+  return {
+    element: element('figure', { class: 'chart' }, plot, legend, element('div', { class: 'under' }, words, tools)),
+    draw,
+  };
+}
+
+function widthFor(plot: HTMLElement, { width, style }: Setting): number {
+  return width ?? Math.max(style.narrow ? leastWidth.narrow : leastWidth.wide, plot.clientWidth);
+}
+
+async function followWidth(plot: HTMLElement, setting: Setting): Promise<void> {
+  const width = widthFor(plot, setting);
+  const drawn = (plot as unknown as { readonly layout: Partial<Layout> }).layout.width;
+  if (drawn !== width) await plotly().relayout(plot, { width });
+}
+
+function drawnLayout({ layout }: Figure, { touch }: Setting, width: number): Partial<Layout> {
+  return { ...layout, width, dragmode: touch ? false : 'zoom' };
+}
+
+function legendEntries({ lines }: Figure): HTMLElement[] {
+  return lines.map((line) => element('li', {}, lineSample(line), element('bdi', {}, line.plainName)));
+}
+
+function button(label: string, pressed: () => unknown): HTMLButtonElement {
+  const made = element('button', { type: 'button' }, label);
+  made.addEventListener('click', () => void pressed());
+  return made;
+}
+
+async function save(build: Build, format: 'svg' | 'png'): Promise<void> {
+  const { data, layout, name } = build(savedStyle);
+  const size = { width: savedWidth, height: layout.height! };
+  const picture = { data, layout: { ...layout, ...size, paper_bgcolor: '#ffffff' } };
+  const scale = format === 'png' ? pngScale : 1;
+  saveFile(`${name}.${format}`, await plotly().toImage(picture, { format, ...size, scale }));
+}

@@ -1,0 +1,164 @@
+/** How this run was computed: the equations that it used, each with its source; and what its numbers are not. Pure. */
+import type { RunResult } from '../../sim/run.ts';
+
+export interface Step {
+  readonly words: string;
+  /** Plain mathematics: `x_{name}` is a subscript, `x^{name}` a superscript. */
+  readonly equation?: string;
+  readonly source?: string;
+}
+
+/** What decides whether a step was used. */
+interface Used {
+  /** Does some case have this input, or one below it? Places in a list do not count: `heatStore.0.ground` is `heatStore.ground`. */
+  has(key: string): boolean;
+  readonly periodic: boolean;
+  readonly forward: boolean;
+  readonly habitableLimits: boolean;
+}
+
+interface Rule {
+  readonly when: (used: Used) => boolean;
+  readonly step: Step;
+}
+
+const always = (): boolean => true;
+const having =
+  (key: string) =>
+  (used: Used): boolean =>
+    used.has(key);
+
+const rules: readonly Rule[] = [
+  {
+    when: always,
+    step: {
+      words: 'What arrives from the star, at the distance that Kepler’s laws give.',
+      equation: 'S(r) = L / (4πr²),  r = a(1 − e²) / (1 + e cos ν)',
+      source: 'Meeus (1998), Astronomical Algorithms, 2nd ed., eq. 25.5 and ch. 30',
+    },
+  },
+  {
+    when: always,
+    step: {
+      words:
+        'One heat store per square metre of surface takes up what is absorbed, and q from inside; it loses what is emitted.',
+      equation: 'C dT/dt = f (1 − A) S(r) + q − E(T)',
+    },
+  },
+  {
+    when: (used) => !used.has('planet.emission'),
+    step: { words: 'A grey body emits.', equation: 'E(T) = ε σ T⁴', source: 'Stefan–Boltzmann law; σ: CODATA 2018' },
+  },
+  {
+    when: having('planet.emission.opticalDepth'),
+    step: {
+      words: 'The surface emits through a grey atmosphere of infrared optical depth τ.',
+      equation: 'E(T) = σ T⁴ / (1 + ¾ τ)',
+      source: 'Eddington approximation; Goody & Yung (1989), Atmospheric Radiation, 2nd ed., ch. 9',
+    },
+  },
+  {
+    when: having('planet.emission.linear'),
+    step: {
+      words: 'Emission is linear in temperature, T in °C.',
+      equation: 'E(T) = a + b T',
+      source: 'Budyko (1969), Tellus 21, 611; North, Cahalan & Coakley (1981), Rev. Geophys. 19, 91',
+    },
+  },
+  {
+    when: having('planet.albedo'),
+    step: {
+      words: 'Ice brightens the surface: the albedo falls from its ice value to its warm one between two temperatures.',
+      equation:
+        'A(T) = A_{ice} + (A_{warm} − A_{ice}) x² (3 − 2x),  x = (T − T_{from}) / (T_{to} − T_{from}), held in 0…1',
+      source: 'Ice–albedo feedback: Budyko (1969), Tellus 21, 611; Sellers (1969), J. Appl. Meteorol. 8, 392',
+    },
+  },
+  {
+    when: having('planet.heatStore.mixedLayer'),
+    step: {
+      words: 'A stirred ocean of depth d stores heat as a whole.',
+      equation: 'C = ρ c d',
+      source: 'Sea water: Gill (1982), Atmosphere–Ocean Dynamics, app. 3',
+    },
+  },
+  {
+    when: having('planet.heatStore.atmosphere'),
+    step: {
+      words: 'A column of air with surface pressure p stores heat as a whole.',
+      equation: 'C = p c_{p} / g',
+      source: 'Pierrehumbert (2010), Principles of Planetary Climate',
+    },
+  },
+  {
+    when: having('planet.heatStore.ground'),
+    step: {
+      words:
+        'Ground of thermal inertia Γ is one store with the quadrature part of a half-space’s response in a cycle of length P.',
+      equation: 'C = Γ √(P / 4π)',
+      source: 'Half-space: Carslaw & Jaeger (1959), Conduction of Heat in Solids, 2nd ed., § 2.6',
+    },
+  },
+  {
+    when: always,
+    step: {
+      words:
+        'The steady value balances absorption and emission at every moment; the textbook has one number for the whole orbit.',
+      equation: 'E(T_{steady}) = f (1 − A) S(r) + q,  T_{eq} = [L (1 − A) / (16πσa²)]^{¼}',
+    },
+  },
+  {
+    when: ({ periodic }) => periodic,
+    step: {
+      words:
+        'The orbit that repeats itself is solved for directly, all its steps at once; no start has to fade. The tolerance bounds the relative error of every temperature.',
+    },
+  },
+  {
+    when: ({ forward }) => forward,
+    step: { words: 'A run from a start follows the temperature step by step, to the same tolerance.' },
+  },
+  {
+    when: always,
+    step: {
+      words: 'The first account compares the orbit-mean instellation with its closed form.',
+      equation: '⟨S⟩ = L / (4πa² √(1 − e²))',
+      source: 'Williams & Pollard (2002), Int. J. Astrobiology 1, 61',
+    },
+  },
+  {
+    when: ({ habitableLimits }) => habitableLimits,
+    step: {
+      words:
+        'Habitable limits, where a window names them, are those for planets of one Earth mass under stars of 2600 to 7200 K.',
+      source: 'Kopparapu et al. (2014), ApJ 787, L29',
+    },
+  },
+];
+
+export function methodSteps(result: RunResult): Step[] {
+  const used = usedBy(result);
+  return rules.filter(({ when }) => when(used)).map(({ step }) => step);
+}
+
+function usedBy({ cases }: RunResult): Used {
+  const keys = cases.flatMap(({ inputs }) => inputs.map(({ key }) => key.replace(/\.\d+(?=\.|$)/g, '')));
+  const labels = cases.flatMap(({ states }) => states.map(({ label }) => label));
+  return {
+    has: (wanted) => keys.some((key) => key === wanted || key.startsWith(`${wanted}.`)),
+    periodic: labels.some((label) => label !== 'forward'),
+    forward: labels.includes('forward'),
+    habitableLimits: keys.some((key) => /^windows\..*\.habitable$/.test(key)),
+  };
+}
+
+/** The usual cautions: they stand beside every page of numbers. */
+export const cautions: readonly string[] = [
+  'No clouds, no winds or currents, no chemistry: one temperature stands for the whole surface, and real worlds move heat, cover themselves and change what they are made of.',
+  'These are planning figures. They are no basis for qualifying hardware or for anyone’s safety: that is for licensed practice and test.',
+  'Times for observing come from the observatory’s own tools; a date here is as good as the orbit it was made from.',
+  'A “±” is the numerical error of the solution and says nothing of how well the inputs are known.',
+];
+
+export const argumentOfPeriapsisNote =
+  'The argument of periapsis ω follows the radial-velocity convention: it is that of the star’s orbit, so a transit falls at true anomaly 90° − ω.';
