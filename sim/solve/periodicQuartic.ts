@@ -266,8 +266,8 @@ function newtonSweep(
     let d = homogeneous[i] * d0 + particular[i];
     if (t + d < 0.3 * t) d = -0.7 * t;
     y[i] = t + d;
-    const change = Math.abs(d) / t;
-    if (!(change <= largest)) largest = change;
+    // Divides only when a new largest is found; NaN is one.
+    if (!(Math.abs(d) <= largest * t)) largest = Math.abs(d) / t;
   }
   sweep.change = largest;
   sweep.stiffness = stiffness;
@@ -344,8 +344,8 @@ function pinMean(y: Float64Array, forcing: QuarticForcing, size: number): void {
 function largestRelativeChange(y: Float64Array, from: Float64Array, size: number): number {
   let largest = 0;
   for (let i = 0; i < size; i++) {
-    const change = Math.abs(y[i] - from[i]) / y[i];
-    if (!(change <= largest)) largest = change;
+    const change = Math.abs(y[i] - from[i]);
+    if (!(change <= largest * y[i])) largest = change / y[i];
   }
   return largest;
 }

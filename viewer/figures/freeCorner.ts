@@ -20,7 +20,7 @@ const corners: readonly Corner[] = [
   { side: 'right', edge: 'bottom' },
 ];
 
-/** The corner of `band` in which a label of this width and height, in data units, meets the fewest line points. */
+/** The corner of `band` in which a label of this width and height, in data units, is crossed the least. */
 export function freeCorner(lines: readonly ChartLine[], band: Box, width: number, height: number): Corner {
   const crowds = corners.map((corner) => crowd(lines, cornerBox(corner, band, width, height)));
   return corners[crowds.indexOf(Math.min(...crowds))]!;
@@ -35,13 +35,13 @@ function cornerBox({ side, edge }: Corner, band: Box, width: number, height: num
   };
 }
 
-/** Line points inside the box, and steps that cross it from one point to the next. */
+/** How much of the box's width the lines in it cover, all together. */
 function crowd(lines: readonly ChartLine[], box: Box): number {
   return lines.reduce((sum, { x, y }) => {
-    const touched = x.slice(1).filter((end, at) => {
-      if (end < box.left || x[at]! > box.right) return false;
-      return Math.max(y[at]!, y[at + 1]!) >= box.low && Math.min(y[at]!, y[at + 1]!) <= box.high;
+    const covered = x.slice(1).map((end, at) => {
+      const isBeside = Math.max(y[at]!, y[at + 1]!) < box.low || Math.min(y[at]!, y[at + 1]!) > box.high;
+      return isBeside ? 0 : Math.max(0, Math.min(end, box.right) - Math.max(x[at]!, box.left));
     });
-    return sum + touched.length;
+    return covered.reduce((a, b) => a + b, sum);
   }, 0);
 }
