@@ -7,6 +7,7 @@ import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { Script } from 'node:vm';
 import { build } from 'esbuild';
+import { buildHdf5, hdf5Change, hdf5Outside } from './buildHdf5.mjs';
 
 const root = fileURLToPath(new URL('..', import.meta.url));
 const at = (name) => join(root, 'dist', name);
@@ -28,11 +29,14 @@ const { metafile } = await build({
   mainFields: ['module', 'main'],
   banner: { js: '(function(require){const module={exports:{}};' },
   footer: { js: 'return module.exports})' },
+  supported: { 'dynamic-import': false }, // what lies outside is required
+  plugins: [hdf5Outside],
   legalComments: 'none',
   metafile: true,
   logLevel: 'warning',
 });
-await writeFile(at('LICENSES.txt'), (await Promise.all(bundledPackages().map(licenceOf))).join('\n'));
+const packages = packagesIn(metafile, await buildHdf5(root));
+await writeFile(at('LICENSES.txt'), (await Promise.all(packages.map(licenceOf))).join('\n'));
 await writeFile(at('perilag.v8'), await compiledForm(at('perilag.cjs')));
 await copyFile(join(root, 'cli/start.mjs'), at('perilag.mjs'));
 await chmod(at('perilag.mjs'), 0o755);
@@ -63,9 +67,10 @@ async function compiledForm(filename) {
   return script.createCachedData();
 }
 
-/** Names of the packages whose code is in the bundle. */
-function bundledPackages() {
-  const names = Object.keys(metafile.inputs).map((path) => /node_modules\/((?:@[^/]+\/)?[^/]+)\//.exec(path)?.[1]);
+/** Names of the packages whose code is in the bundles. */
+function packagesIn(...metafiles) {
+  const paths = metafiles.flatMap(({ inputs }) => Object.keys(inputs));
+  const names = paths.map((path) => /node_modules\/((?:@[^/]+\/)?[^/]+)\//.exec(path)?.[1]);
   return [...new Set(names.filter((name) => name !== undefined))].sort();
 }
 
@@ -74,5 +79,6 @@ async function licenceOf(name) {
   const file = (await readdir(folder)).find((entry) => /^licen[cs]e/i.test(entry));
   const { version, license } = JSON.parse(await readFile(join(folder, 'package.json'), 'utf8'));
   const text = file === undefined ? `Licence: ${license}` : await readFile(join(folder, file), 'utf8');
-  return `=== ${name} ${version} ===\n\n${text.trim()}\n`;
+  const change = name === 'h5wasm' ? `${hdf5Change}\n\n` : '';
+  return `=== ${name} ${version} ===\n\n${change}${text.trim()}\n`;
 }

@@ -8,7 +8,7 @@ import type { Io } from './io.ts';
 export async function main(argv: readonly string[], io: Io): Promise<number> {
   const outcome = { code: exitCode.done as number };
   try {
-    await program(io, outcome).parseAsync(argv, { from: 'user' });
+    await program(argv, io, outcome).parseAsync(argv, { from: 'user' });
     return outcome.code;
   } catch (error) {
     if (error instanceof CommanderError) return error.exitCode === 0 ? exitCode.done : exitCode.inputFault;
@@ -16,7 +16,7 @@ export async function main(argv: readonly string[], io: Io): Promise<number> {
   }
 }
 
-function program(io: Io, outcome: { code: number }): Command {
+function program(words: readonly string[], io: Io, outcome: { code: number }): Command {
   const perilag = new Command('perilag')
     .description('How hot a planet on an eccentric orbit gets, when, and how late behind periapsis.')
     .version(packageJson.version)
@@ -35,7 +35,7 @@ function program(io: Io, outcome: { code: number }): Command {
     .option('--quiet', 'print nothing but errors')
     .action(async (files: string[], options) => {
       const { run } = await import('./commands/run.ts');
-      outcome.code = await run(files, options, packageJson.version, io);
+      outcome.code = await run(files, options, { version: packageJson.version, words }, io);
     });
   perilag
     .command('check')
@@ -44,6 +44,19 @@ function program(io: Io, outcome: { code: number }): Command {
     .action(async (files: string[]) => {
       const { check } = await import('./commands/check.ts');
       outcome.code = await check(files, io);
+    });
+  perilag
+    .command('trace')
+    .description('follow the climates of each case as one input changes: where they end, and where there are two')
+    .argument('<scenario>', 'scenario file, YAML or JSON')
+    .requiredOption('--along <key=range>', "the input and its range, e.g. 'star.luminosity=0.8 to 1.3 Lsun'")
+    .option('-o, --out <dir>', 'output folder (default: out/<file name without extension>/trace)')
+    .option('--only <case>', 'follow only this case; may be given several times', collect)
+    .option('--json', 'print the summary as JSON on standard output, and nothing else there')
+    .option('--quiet', 'print nothing but errors')
+    .action(async (file: string, options) => {
+      const { trace } = await import('./commands/trace.ts');
+      outcome.code = await trace(file, options, { version: packageJson.version, words }, io);
     });
   perilag
     .command('new')

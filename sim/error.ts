@@ -9,11 +9,16 @@ export class SimError extends Error {
   readonly mend: string;
 
   constructor(where: string, what: string, mend: string, cause?: unknown) {
-    super(`${where}: ${what}. ${mend}.`, { cause });
+    super(`${where}: ${what}. ${sentence(mend)}`, { cause });
     this.where = where;
     this.what = what;
     this.mend = mend;
   }
+}
+
+/** Advice as it is printed: a question ends as one. */
+export function sentence(mend: string): string {
+  return `${mend}${mend.startsWith('Did you mean') ? '?' : '.'}`;
 }
 
 /** Throws SimError unless `value` is a finite number above zero. */

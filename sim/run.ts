@@ -4,6 +4,7 @@ import { orbitMeanByQuadrature, orbitMeanClosedForm } from './findings/orbitMean
 import { textbookTemperature } from './findings/world.ts';
 import { models } from './models/index.ts';
 import type { State } from './models/model.ts';
+import { spreadNotes } from './scenario/spreads.ts';
 import type { CaseInput, Derived, Scenario, ScenarioCase } from './scenario/types.ts';
 import type { Window, World } from './world.ts';
 
@@ -51,6 +52,8 @@ export interface RunResult {
     readonly sha256: string;
   };
   readonly cases: readonly CaseResult[];
+  /** Of the run as a whole: that spreads are not propagated, and which centres are used instead. */
+  readonly notes: readonly string[];
 }
 
 /** Runs every case, in order. `identity` is what only the caller knows. */
@@ -63,6 +66,7 @@ export function runScenario(
     program: { name: 'perilag', version: identity.version },
     scenario: { title, notes, file, sha256: identity.sha256 },
     cases: scenario.cases.map(runCase),
+    notes: spreadNotes(scenario.cases),
   };
 }
 

@@ -61,10 +61,40 @@ export interface Surface {
   readonly heatCapacity: ArealHeatCapacity;
 }
 
+/** Land beside sea in every band: two temperatures that exchange heat. */
+export interface Land {
+  /** Share of each band's area that is land, as a table over sin(latitude), −1 … 1; linear between, constant beyond. */
+  readonly fraction: { readonly sineLatitude: readonly number[]; readonly value: readonly number[] };
+  readonly heatCapacity: ArealHeatCapacity;
+  /** W m⁻² K⁻¹ between land and sea, per unit area of the band. */
+  readonly exchange: number;
+}
+
+/** What models with latitude need beyond the surface, whose heat capacity is then that of the sea. */
+export interface Globe {
+  /** Equal-area bands from pole to pole. */
+  readonly bands: number;
+  readonly obliquity: Radians;
+  /** Solar longitude at periapsis: 0 is the northern spring equinox. */
+  readonly solarLongitudeOfPeriapsis: Radians;
+  readonly insolation: 'daily' | 'annualMean' | { readonly legendre: readonly number[] };
+  /** D of the diffusive transport, W m⁻² K⁻¹. */
+  readonly heatTransport: number;
+  /** Coefficient of P₂(sin latitude) added to the warm albedo. */
+  readonly albedoP2: number;
+  /** Heat capacity of a frozen sea; null when freezing does not change it. */
+  readonly frozenHeatCapacity: ArealHeatCapacity | null;
+  readonly land: Land | null;
+  /** Solar day; null when the rotation is not given. */
+  readonly solarDay: Seconds | null;
+}
+
 export interface World {
   readonly star: Star;
   readonly orbit: Orbit;
   readonly surface: Surface;
+  /** Null for models without latitude. */
+  readonly globe?: Globe | null;
 }
 
 /** A temperature, instellation or published-limit window whose share of time is reported. SI bounds. */

@@ -1,6 +1,7 @@
 /** The examples in configs/: each reads, teaches in its first lines, and gives the same numbers when written out. */
 import { readdirSync, readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
+import { runCase } from '../sim/run.ts';
 import { readScenario } from '../sim/scenario/read.ts';
 import type { Scenario } from '../sim/scenario/types.ts';
 
@@ -29,7 +30,13 @@ describe.each(names)('%s', (name) => {
       inputs.filter(({ used, isDefault }) => !used && !isDefault).map(({ key }) => key),
     );
     // What a run does not need but a reader of the example wants to see.
-    const forReaders = ['orbit.argumentOfPeriapsis', 'orbit.inclination', 'planet.radius', 'star.temperature'];
+    const forReaders = [
+      'orbit.argumentOfPeriapsis',
+      'orbit.inclination',
+      'orbit.scaledSemiMajorAxis', // a second way to the axis, held against the first
+      'planet.radius',
+      'star.temperature',
+    ];
     expect([...new Set(idle)].filter((key) => !forReaders.includes(key))).toEqual([]);
   });
 
@@ -37,6 +44,16 @@ describe.each(names)('%s', (name) => {
     const numbers = ({ cases }: Scenario) =>
       cases.map(({ name: of, world, options, windows }) => JSON.stringify({ of, world, options, windows }));
     expect(numbers(readScenario(scenario.asUnderstood, name))).toEqual(numbers(scenario));
+  });
+
+  test('runs within its tolerance, and both accounts are kept', () => {
+    for (const item of scenario.cases) {
+      const { passed, checks, states } = runCase(item);
+      expect(
+        passed,
+        `${item.name}: ${JSON.stringify({ checks, errors: states.map((state) => state.errorEstimate) })}`,
+      ).toBe(true);
+    }
   });
 
   test('has no window that cannot be had', () => {

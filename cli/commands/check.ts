@@ -1,6 +1,7 @@
 /** `perilag check`: what a scenario says, what follows from it, and what a run would do. Computes nothing. */
 
 import { formatNumber, formatQuantity } from '../../sim/quantity/index.ts';
+import { centreText, spreadNotes } from '../../sim/scenario/spreads.ts';
 import type { Scenario, ScenarioCase } from '../../sim/scenario/types.ts';
 import { exitCode } from '../exit.ts';
 import type { Io } from '../io.ts';
@@ -16,6 +17,11 @@ export async function check(files: readonly string[], io: Io): Promise<number> {
   io.stdout.write(`${read.map(({ scenario }) => describeScenario(scenario, terminal)).join('\n\n')}\n`);
   return exitCode.done;
 }
+
+/** Texts up to this width have their remarks in one column. */
+const widestText = 34;
+/** With less room beside the names, texts go below them. */
+const narrowestText = 22;
 
 type Page = Pick<Terminal, 'width' | 'say' | 'paint'>;
 
@@ -35,7 +41,21 @@ export function describeScenario(scenario: Scenario, page: Page): string {
     rowSections('Inputs', cases, inputRows, page),
     rowSections('What follows from them', cases, derivedRows, page),
     section('Unused', unusedLines(cases, page), page),
-    section('Warnings', warningLines(cases, page), page),
+    section(
+      'Remarks',
+      toldLines(cases, ({ remarks }) => remarks, page),
+      page,
+    ),
+    section(
+      'Warnings',
+      toldLines(cases, ({ warnings }) => warnings, page),
+      page,
+    ),
+    section(
+      'Notes',
+      spreadNotes(cases).flatMap((note) => hanging('  ', page.say(note), page.width)),
+      page,
+    ),
   ];
   return parts
     .filter((lines) => lines.length > 0)
@@ -76,10 +96,10 @@ function windowText({ windows }: ScenarioCase): string {
 }
 
 function inputRows({ inputs }: ScenarioCase): Row[] {
-  return inputs.map(({ key, text, isDefault, distribution, value, unit }) => {
-    const isUncertain = distribution.form !== 'exact';
-    const centre = value === null ? 'the middle' : formatQuantity(value, unit);
-    return { name: key, text, remark: isDefault ? 'default' : isUncertain ? `run uses ${centre}` : '' };
+  return inputs.map((input) => {
+    const isUncertain = input.distribution.form !== 'exact';
+    const remark = input.isDefault ? 'default' : isUncertain ? `run uses ${centreText(input)}` : '';
+    return { name: input.key, text: input.text, remark };
   });
 }
 
@@ -102,14 +122,19 @@ function unusedLines(cases: readonly ScenarioCase[], page: Page): string[] {
     });
 }
 
-function warningLines(cases: readonly ScenarioCase[], page: Page): string[] {
+/** What is told of several cases stands once, with their names. */
+function toldLines(
+  cases: readonly ScenarioCase[],
+  told: (one: ScenarioCase) => readonly string[],
+  page: Page,
+): string[] {
   const whose = new Map<string, string[]>();
-  for (const { name, warnings } of cases) {
-    for (const warning of warnings) whose.set(warning, [...(whose.get(warning) ?? []), name]);
+  for (const one of cases) {
+    for (const text of told(one)) whose.set(text, [...(whose.get(text) ?? []), one.name]);
   }
-  return [...whose].flatMap(([warning, names]) => {
+  return [...whose].flatMap(([text, names]) => {
     const head = names.length === cases.length ? '' : `${names.join(', ')}: `;
-    return hanging('  ', page.say(head + warning), page.width);
+    return hanging('  ', page.say(head + text), page.width);
   });
 }
 
@@ -125,8 +150,11 @@ function rowSections(
   const shared = all[0]?.rows.filter(isShared) ?? [];
   const own = all.map(({ name, rows }) => ({ name, rows: rows.filter((row) => !isShared(row)) }));
   const nameWidth = Math.max(...all.flatMap(({ rows }) => rows.map(({ name }) => textWidth(page.say(name)))), 0);
-  const textColumn = Math.max(...all.flatMap(({ rows }) => rows.map(({ text }) => textWidth(page.say(text)))), 0);
-  const widths = { name: Math.min(nameWidth, 44), text: Math.min(textColumn, 24) };
+  const remarked = all.flatMap(({ rows }) => rows.filter(({ remark }) => remark !== ''));
+  const name = Math.min(nameWidth, 44);
+  const room = Math.min(widestText, page.width - name - 'default'.length - 8);
+  const textsInColumn = remarked.map(({ text }) => textWidth(page.say(text))).filter((width) => width <= room);
+  const widths = { name, text: Math.max(...textsInColumn, 0) };
   const lines = [
     ...shared.flatMap((row) => rowLines(row, widths, page)),
     ...own.flatMap(({ name, rows }) =>
@@ -138,10 +166,26 @@ function rowSections(
 
 function rowLines(row: Row, widths: { name: number; text: number }, page: Page, indent = '  '): string[] {
   const name = padEnd(page.say(row.name), widths.name + 4 - indent.length);
+  const head = `${indent}${name}  `;
   const text = padEnd(page.say(row.text), widths.text);
-  const line = `${indent}${name}  ${text}  ${page.say(row.remark)}`.trimEnd();
+  const line = `${head}${text}  ${page.say(row.remark)}`.trimEnd();
   if (textWidth(line) <= page.width) return [line];
-  return hanging(indent, page.say(`${row.name}  ${row.text}  ${row.remark}`), page.width);
+  // Too wide for one line: text and remark below each other, in the column of the texts as long as there is room.
+  const below = [row.text, row.remark].filter((part) => part !== '').map((part) => page.say(part));
+  if (page.width - textWidth(head) >= narrowestText) {
+    const blank = ' '.repeat(textWidth(head));
+    return below.flatMap((part, index) => aligned(index === 0 ? head : blank, part, page.width));
+  }
+  return [
+    ...aligned(indent, page.say(row.name), page.width),
+    ...below.flatMap((part) => aligned(`${indent}  `, part, page.width)),
+  ];
+}
+
+/** Wrapped, every line in the column where the head ends. */
+function aligned(head: string, text: string, width: number): string[] {
+  const indent = textWidth(head);
+  return wrap(text, width - indent).map((line, index) => (index === 0 ? head : ' '.repeat(indent)) + line);
 }
 
 function section(title: string, lines: readonly string[], page: Page): string[] {

@@ -10,6 +10,10 @@ const defaultFile = 'scenario.yaml';
 /** Writes the starter and says so. Gives the exit code. Errors: SimError when the file exists or cannot be written. */
 export async function newScenario(file: string | undefined, io: Io): Promise<number> {
   const name = file ?? defaultFile;
+  if (/\.json$/i.test(name)) {
+    const mend = `Name it ${name.replace(/\.json$/i, '.yaml')}: run reads both`;
+    throw new SimError(name, 'the starter explains itself in comments, which JSON has not', mend);
+  }
   try {
     await writeFile(resolve(io.cwd, name), starterScenario(), { flag: 'wx' });
   } catch (error) {
@@ -47,8 +51,8 @@ star:                              # Ismene is invented
 orbit:
   semiMajorAxis: 0.55 au           # or period, scaledSemiMajorAxis (a/R*), or instellation: 1.3 S0
   eccentricity: 0.45               # uncertain values may stand here: 0.45 ± 0.03
-  argumentOfPeriapsis: 70 deg      # radial-velocity convention
-  # periapsisTime: 2026-03-04T05:00Z   # puts dates on the figures; or transitTime, or epoch and meanAnomaly
+  # periapsisTime: 2026-03-04T05:00Z   # puts dates on the figures; or epoch and meanAnomaly, or
+  # transitTime: 2461103.71 TDB        # with argumentOfPeriapsis: 70 deg (radial-velocity convention)
 
 planet:
   bondAlbedo: 0.3                  # or albedo: { warm: 0.3, ice: 0.62, from: 258 K, to: 273 K }

@@ -2,10 +2,13 @@
 import { basename, extname, join, resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
 import { type RunResult, runScenario } from '../../sim/run.ts';
+import type { Scenario } from '../../sim/scenario/types.ts';
 import { exitCode } from '../exit.ts';
 import type { Io } from '../io.ts';
 import { accountLines } from '../output/accounts.ts';
+import { fieldsFile, hasFields } from '../output/fields.ts';
 import { type OutputFile, writeFolder } from '../output/folder.ts';
+import { historyLine } from '../output/history.ts';
 import { jsonText } from '../output/json.ts';
 import { plotLines } from '../output/plot.ts';
 import { reportPieces } from '../output/report.ts';
@@ -14,7 +17,7 @@ import { seriesText } from '../output/series.ts';
 import { summaryOf, summaryText } from '../output/summary.ts';
 import { tableLines } from '../output/table.ts';
 import { type Terminal, terminalOf } from '../output/terminal.ts';
-import { printable } from '../output/text.ts';
+import { hanging, printable } from '../output/text.ts';
 import { readScenarioFiles, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
 
@@ -26,16 +29,23 @@ export interface RunOptions {
   readonly quiet?: boolean;
 }
 
+/** What runs, and the words with which it was called. */
+export interface Program {
+  readonly version: string;
+  readonly words: readonly string[];
+}
+
 /** Gives the exit code. Errors: SimError and ScenarioError for the input's faults; nothing is computed unless all files read. */
-export async function run(files: readonly string[], options: RunOptions, version: string, io: Io): Promise<number> {
+export async function run(files: readonly string[], options: RunOptions, program: Program, io: Io): Promise<number> {
   const read = readScenarioFiles(files, io.cwd);
   const chosen = onlyCases(read, options.only ?? []);
   const folders = outputFolders(chosen, options.out);
   const results: RunResult[] = [];
   for (const [index, item] of chosen.entries()) {
-    const result = runScenario(item.scenario, { sha256: item.sha256, version });
-    await writeFolder(resolve(io.cwd, folders[index]!), filesOf(item, result, io));
-    show(result, folders[index]!, index > 0, options, io);
+    const result = runScenario(item.scenario, { sha256: item.sha256, version: program.version });
+    const products = filesOf(item, result, program, io);
+    await writeFolder(resolve(io.cwd, folders[index]!), products);
+    show(result, { folder: folders[index]!, products, isLater: index > 0 }, options, io);
     results.push(result);
   }
   if (options.json) {
@@ -46,17 +56,32 @@ export async function run(files: readonly string[], options: RunOptions, version
   return misses.includes(true) ? exitCode.notWithinTolerance : exitCode.done;
 }
 
-function filesOf({ scenario }: ScenarioFile, result: RunResult, io: Io): readonly OutputFile[] {
+/** The report is the last: it is what the others stand beside. */
+function filesOf({ scenario }: ScenarioFile, result: RunResult, program: Program, io: Io): readonly OutputFile[] {
   return [
     { name: 'summary.json', pieces: [summaryText(result)] },
     { name: 'series.csv', pieces: [seriesText(result)] },
+    ...(hasFields(result) ? [fieldsOf(scenario, result, program)] : []),
     { name: 'scenario.yaml', pieces: [scenarioYamlText(scenario)] },
     { name: 'report.html', pieces: reportPieces(result, io.reportTemplate) },
   ];
 }
 
+/** What writes it is large, and loaded only when there is something to write. */
+function fieldsOf(scenario: Scenario, result: RunResult, { version, words }: Program): OutputFile {
+  return {
+    name: 'fields.nc',
+    write: async (path, checkpoint) => {
+      const { writeNetcdf } = await import('../output/netcdf.ts');
+      await writeNetcdf(path, fieldsFile(result, scenario, historyLine(new Date(), version, words)), checkpoint);
+    },
+  };
+}
+
 /** `-o` itself for one scenario, a folder in it for each of several; without it, folders in `out/`. */
 function outputFolders(items: readonly ScenarioFile[], out: string | undefined): readonly string[] {
+  if (out?.trim() === '')
+    throw new SimError('-o', 'the folder has no name', 'Name one, e.g. `-o results`, or leave -o out');
   if (items.length === 1 && out !== undefined) return [out];
   const names = items.map(({ file }) => basename(file, extname(file)));
   const twice = names.find((name, index) => names.indexOf(name) !== index);
@@ -70,13 +95,21 @@ function outputFolders(items: readonly ScenarioFile[], out: string | undefined):
   return names.map((name) => join(out ?? 'out', name));
 }
 
-function show(result: RunResult, folder: string, isLater: boolean, options: RunOptions, io: Io): void {
+interface Written {
+  readonly folder: string;
+  readonly products: readonly OutputFile[];
+  /** Another scenario was shown before. */
+  readonly isLater: boolean;
+}
+
+function show(result: RunResult, { folder, products, isLater }: Written, options: RunOptions, io: Io): void {
   if (options.quiet) return;
   const terminal = terminalOf(io);
   if (!options.json) io.stdout.write(`${isLater ? '\n' : ''}${textOf(result, terminal, options)}\n`);
-  io.stderr.write(
-    `report  ${terminal.say(join(folder, 'report.html'))}\nfiles   summary.json, series.csv, scenario.yaml beside it\n`,
-  );
+  const data = products.map(({ name }) => name).filter((name) => name !== 'report.html');
+  const files = hanging('files   ', `${data.join(', ')} beside it`, terminal.width);
+  // The path stays in one piece, to be copied.
+  io.stderr.write(`report  ${terminal.say(join(folder, 'report.html'))}\n${files.join('\n')}\n`);
 }
 
 function textOf(result: RunResult, terminal: Terminal, { fractions = false }: RunOptions): string {

@@ -40,6 +40,11 @@ export function isForward({ label }: State): boolean {
   return label === 'forward';
 }
 
+/** Whether the model has latitudes, so that its other numbers are means over the area. */
+export function hasLatitudes({ dataset }: Pick<State, 'dataset'>): boolean {
+  return 'latitude' in dataset.variables;
+}
+
 export function findingOf(state: State, name: string): Finding | undefined {
   return state.findings.find((finding) => finding.name === name);
 }

@@ -11,10 +11,18 @@ import { SimError } from '../../sim/error.ts';
 import { interruptible } from '../interrupt.ts';
 
 /** A file to write: its name in the folder, and its pieces one after the other. */
-export interface OutputFile {
+export interface PiecedFile {
   readonly name: string;
   readonly pieces: readonly (string | Uint8Array)[];
 }
+
+/** A file of a format that writes itself, to a path where nothing stands yet; it calls `checkpoint` where it may stop. */
+export interface SelfWritingFile {
+  readonly name: string;
+  write(path: string, checkpoint: () => void): Promise<void>;
+}
+
+export type OutputFile = PiecedFile | SelfWritingFile;
 
 const stagePrefix = '.perilag-';
 
@@ -24,7 +32,7 @@ const stagePrefix = '.perilag-';
  */
 export async function writeFolder(folder: string, files: readonly OutputFile[]): Promise<void> {
   await interruptible(async (checkpoint) => {
-    const firstMade = await attempt(folder, () => mkdir(folder, { recursive: true }));
+    const firstMade = await attempt(folder, () => makeFolder(folder));
     const stage = join(folder, `${stagePrefix}${hostname()}-${process.pid}`);
     try {
       await attempt(folder, () => fillStage(stage, files, checkpoint));
@@ -39,18 +47,58 @@ export async function writeFolder(folder: string, files: readonly OutputFile[]):
   });
 }
 
+/**
+ * Makes `folder` and what is missing above it, one by one: gives the first that was made, undefined when it stood already.
+ * (Node's own recursive mkdir never returns where the system refuses a folder although the one above it is there, as in /proc.)
+ */
+async function makeFolder(folder: string): Promise<string | undefined> {
+  const missing: string[] = [];
+  for (let path = folder; !(await isFolder(path)); path = dirname(path)) missing.unshift(path);
+  const made: string[] = [];
+  try {
+    for (const path of missing) if (await makeOne(path)) made.push(path);
+  } catch (error) {
+    for (const path of made.toReversed()) await rmdir(path).catch(() => undefined);
+    throw error;
+  }
+  return made[0];
+}
+
+/** False where nothing stands. Errors: EEXIST for a file. */
+async function isFolder(path: string): Promise<boolean> {
+  const found = await stat(path).catch((error: NodeJS.ErrnoException) => {
+    if (error.code === 'ENOENT') return null;
+    throw error;
+  });
+  if (found === null || found.isDirectory()) return found !== null;
+  throw Object.assign(new Error('a file stands there'), { code: 'EEXIST' });
+}
+
+/** False when another run has made it in the meantime. */
+async function makeOne(path: string): Promise<boolean> {
+  try {
+    await mkdir(path);
+    return true;
+  } catch (error) {
+    if ((error as NodeJS.ErrnoException).code === 'EEXIST' && (await isFolder(path))) return false;
+    throw error;
+  }
+}
+
 async function fillStage(stage: string, files: readonly OutputFile[], checkpoint: () => void): Promise<void> {
   await rm(stage, { recursive: true, force: true });
   await mkdir(stage);
-  for (const { name, pieces } of files) {
-    writeWhole(join(stage, name), pieces);
+  for (const file of files) {
+    const path = join(stage, file.name);
+    if ('write' in file) await file.write(path, checkpoint);
+    else writeWhole(path, file.pieces);
     await setImmediate(); // a signal is heard between files
     checkpoint();
   }
 }
 
 /** All at once: for a few megabytes the thread pool costs more than it saves. */
-function writeWhole(path: string, pieces: OutputFile['pieces']): void {
+function writeWhole(path: string, pieces: PiecedFile['pieces']): void {
   const file = openSync(path, 'wx');
   try {
     for (const piece of pieces) {

@@ -33,7 +33,7 @@ export function transposed({ headings, rows, cells }: Grid): Grid {
   };
 }
 
-/** Lines of each panel, none wider than the terminal; cells are never cut. */
+/** Lines of each panel, none wider than the terminal; cells are never cut. A row that says nothing in a panel is left out of it. */
 export function panels(grid: Grid, terminal: Terminal): string[][] {
   const widths = grid.headings.map((heading, column) => columnWidth(heading, columnOf(grid, column)));
   const labels = Math.min(widestLabel, labelWidth(grid), terminal.width - gap - Math.max(...widths));
@@ -81,14 +81,16 @@ interface Panel {
 function panelLines(grid: Grid, panel: Panel, terminal: Terminal): string[] {
   const { chosen, widths, labels } = panel;
   const headings = standing(chosen.map((column) => wrap(grid.headings[column]!, widths[column]!)));
+  const filled = grid.rows
+    .map((row, index) => ({ row, texts: chosen.map((column) => grid.cells[index]![column]!) }))
+    .filter(({ texts }) => texts.some((text) => text !== ''));
   const total = chosen.reduce((sum, column) => sum + gap + widths[column]!, labels);
   return [
     ...headings.map((texts) => terminal.paint('bold', lineOf('', texts, panel))),
     terminal.paint('dim', (terminal.unicode ? '─' : '-').repeat(total)),
-    ...grid.rows.flatMap((row, index) => {
-      const isNew = row.section !== grid.rows[index - 1]?.section && row.label !== '';
+    ...filled.flatMap(({ row, texts }, index) => {
+      const isNew = row.section !== filled[index - 1]?.row.section && row.label !== '';
       const section = isNew ? wrap(row.section, terminal.width) : [];
-      const texts = chosen.map((column) => grid.cells[index]![column]!);
       return [...section.map((text) => terminal.paint('dim', text)), ...rowLines(row, texts, panel)];
     }),
   ];

@@ -53,7 +53,7 @@ function remainder(missing: number): string {
 }
 
 /** Where everything stands. */
-interface Layout {
+export interface Layout {
   readonly canvas: Canvas;
   /** Text left of the axis, a row each. */
   readonly values: readonly string[];
@@ -63,7 +63,7 @@ interface Layout {
   readonly names: number;
 }
 
-function layoutOf(
+export function layoutOf(
   lines: readonly Line[],
   scale: RowScale,
   names: number,
@@ -81,7 +81,7 @@ function layoutOf(
   return { canvas: { columns, rows, x: rangeOf(lines.map((line) => line.x)), y, braille }, values, margin, names };
 }
 
-function bodyLines(lines: readonly Line[], layout: Layout, marksZero: boolean, terminal: Terminal): string[] {
+export function bodyLines(lines: readonly Line[], layout: Layout, marksZero: boolean, terminal: Terminal): string[] {
   const { canvas, values, margin, names } = layout;
   const [left, right] = canvas.x;
   const zero = marksZero ? Math.floor((-left / (right - left)) * canvas.columns) : -1;
@@ -136,7 +136,7 @@ function shortened(name: string, width: number, terminal: Terminal): string {
   return head.join('') + (terminal.unicode ? '…' : '~') + letters.slice(tail).join('');
 }
 
-function horizontalAxis({ canvas: { columns, x }, margin }: Layout, terminal: Terminal): string[] {
+export function horizontalAxis({ canvas: { columns, x }, margin }: Layout, terminal: Terminal): string[] {
   const [left, right] = x;
   const values = ticks(left, right, Math.floor(columns / 10));
   const step = values.length > 1 ? values[1]! - values[0]! : right - left;
@@ -154,7 +154,7 @@ function horizontalAxis({ canvas: { columns, x }, margin }: Layout, terminal: Te
   return [`${' '.repeat(margin - 1)}${corner}${axis.join('')}`, texts];
 }
 
-function centred(text: string, { canvas, margin }: Layout): string {
+export function centred(text: string, { canvas, margin }: Layout): string {
   return ' '.repeat(Math.max(0, margin + Math.floor((canvas.columns - textWidth(text)) / 2))) + text;
 }
 

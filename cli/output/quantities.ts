@@ -1,29 +1,22 @@
 /** What the terminal table shows of each state, in the order and the words a reader wants them. */
-import type { Finding } from '../../sim/findings/finding.ts';
 import type { Window } from '../../sim/world.ts';
-import { type Column, commonTimeUnit, findingOf, isForward, periodOf, type TimeUnit } from './columns.ts';
-import type { GridRow } from './grid.ts';
+import { type Column, commonTimeUnit, hasLatitudes, isForward, periodOf, type TimeUnit } from './columns.ts';
+import { latitudeRows, latitudeWindowRows } from './latitudeRows.ts';
 import { percent, significant, withError } from './numbers.ts';
-
-/** A number as text; or why there is none; null where the model gives no such number. */
-export type Cell = { readonly text: string } | { readonly reason: string } | null;
-
-export interface Row extends GridRow {
-  readonly cell: (column: Column) => Cell;
-}
-
-/** A finding that has a value. */
-type Defined = Finding & { readonly value: number };
+import { type Cell, type Defined, type Row, row } from './row.ts';
 
 /** Every row that at least one column can fill. `fractions` adds the textbook values for other absorbing fractions. */
 export function rowsOf(columns: readonly Column[], fractions: boolean): readonly Row[] {
   const unit = commonTimeUnit(columns);
+  const ofMean = columns.some(({ state }) => hasLatitudes(state)) ? ' of the area mean' : '';
   const rows = [
     ...orbitRows(unit).filter(({ cell }) => commonText(columns, cell) === null),
-    ...temperatureRows(),
-    ...timingRows(unit),
+    ...temperatureRows(ofMean),
+    ...timingRows(unit, ofMean),
     ...responseRows(),
-    ...windowRows(columns),
+    ...groundRows(unit),
+    ...latitudeRows(unit),
+    ...windowRows(columns, unit, ofMean),
     ...(fractions ? fractionRows(columns) : []),
   ];
   return rows.filter(({ cell }) => columns.some((column) => cell(column) !== null));
@@ -63,7 +56,8 @@ function commonText(columns: readonly Column[], cell: Row['cell']): string | nul
   return texts.every((text) => text === texts[0]) ? (texts[0] ?? null) : null;
 }
 
-function temperatureRows(): readonly Row[] {
+/** `ofMean` says that a globe's temperature is that of its area mean. */
+function temperatureRows(ofMean: string): readonly Row[] {
   const kelvin = ({ value, plusMinus }: Defined) => withError(value, 2, plusMinus);
   return [
     ['textbook equilibrium', 'equilibriumTemperature'],
@@ -73,12 +67,12 @@ function temperatureRows(): readonly Row[] {
     ['steady value, mean', 'steadyTemperatureMean'],
     ['steady value, maximum', 'steadyTemperatureMax'],
     ['steady value, minimum', 'steadyTemperatureMin'],
-  ].map(([label, finding]) => row('temperature, K', label!, finding!, kelvin, `${label}, K`));
+  ].map(([label, finding]) => row(`temperature${ofMean}, K`, label!, finding!, kelvin, `${label}${ofMean}, K`));
 }
 
 /** Runs from a start count from there, periodic states from periapsis. */
-function timingRows({ symbol, seconds }: TimeUnit): readonly Row[] {
-  const section = 'maximum comes';
+function timingRows({ symbol, seconds }: TimeUnit, ofMean: string): readonly Row[] {
+  const section = `maximum${ofMean} comes`;
   const time = ({ value, plusMinus = 0 }: Defined, column: Column) =>
     withError(value / seconds, decimalsFor(periodOf(column) / seconds), plusMinus / seconds);
   const timeAfter = (origin: string, counts: (column: Column) => boolean): Row => {
@@ -108,18 +102,39 @@ function responseRows(): readonly Row[] {
       section: margin,
       label: '',
       alone: margin,
-      cell: ({ result, state }) =>
-        result.states.length < 2 || state.stabilityMargin === null
-          ? null
-          : { text: significant(state.stabilityMargin, 3) },
+      cell: ({ result, state }) => {
+        const isTelling = result.states.length > 1 || hasLatitudes(state);
+        return !isTelling || state.stabilityMargin === null ? null : { text: significant(state.stabilityMargin, 3) };
+      },
     },
   ];
 }
 
-function windowRows(columns: readonly Column[]): readonly Row[] {
+/** What a small swing would do in real ground, beside the one store that stands for it: the case's own numbers rest on the latter. */
+function groundRows({ symbol, seconds }: TimeUnit): readonly Row[] {
+  const section = 'small swing of the ground alone';
+  return [
+    ['damping, half-space', 'halfSpaceDamping', 1],
+    ['damping, one lumped store', 'lumpedDamping', 1],
+    [`lag, half-space, ${symbol}`, 'halfSpaceLag', seconds],
+    [`lag, one lumped store, ${symbol}`, 'lumpedLag', seconds],
+  ].map(([label, name, unit]) => ({
+    section,
+    label: `${label}`,
+    alone: `ground alone: ${label}`,
+    cell: ({ result }) => {
+      const found = result.derived.filter(({ key }) => key.endsWith(`.ground.${name}`));
+      if (found.length === 0) return null;
+      return { text: found.map(({ value }) => significant(value / Number(unit), 3)).join(', ') };
+    },
+  }));
+}
+
+function windowRows(columns: readonly Column[], unit: TimeUnit, ofMean: string): readonly Row[] {
   const windows = new Map(columns.flatMap(({ result }) => result.windows.map((window) => [window.name, window])));
   return [
-    ...[...windows.values()].map(shareRow),
+    ...[...windows.values()].map((window) => shareRow(window, ofMean)),
+    ...latitudeWindowRows([...windows.keys()], unit),
     ...[...windows.keys()].map((name) =>
       row(
         'orbit-mean instellation in',
@@ -133,15 +148,11 @@ function windowRows(columns: readonly Column[]): readonly Row[] {
 }
 
 /** The instant's instellation is not what a climate feels: the row says that it is meant. */
-function shareRow({ name, of }: Window): Row {
+function shareRow({ name, of }: Window, ofMean: string): Row {
   const label = of === 'instellation' ? `${name} (instantaneous)` : name;
-  return row(
-    'share of time in, %',
-    label,
-    `fractionInWindow.${name}`,
-    ({ value }) => percent(value),
-    `time in ${label}, %`,
-  );
+  const whose = of === 'temperature' ? ofMean : '';
+  const share = ({ value }: Defined) => percent(value);
+  return row(`share of time${whose} in, %`, label, `fractionInWindow.${name}`, share, `time${whose} in ${label}, %`);
 }
 
 const fractionNames: ReadonlyMap<number, string> = new Map([
@@ -161,21 +172,4 @@ function fractionRows(columns: readonly Column[]): readonly Row[] {
       cell: ({ result }) => ({ text: withError(result.steadyByFraction[index]!.temperature, 2) }),
     };
   });
-}
-
-/** A row that shows a finding. */
-function row(
-  section: string,
-  label: string,
-  finding: string,
-  text: (found: Defined, column: Column) => string,
-  alone = label === '' ? section : label,
-): Row {
-  const cell = (column: Column): Cell => {
-    const found = findingOf(column.state, finding);
-    if (found === undefined) return null;
-    if (found.value === null) return { reason: found.reason ?? 'not defined' };
-    return { text: text({ ...found, value: found.value }, column) };
-  };
-  return { section, label, alone, cell };
 }

@@ -7,15 +7,20 @@ import type { RunResult } from '../../sim/run.ts';
 const dataBlock = '<script type="application/json" id="perilag-data"></script>';
 const blockEnd = '</script>';
 
-/** The page in pieces, ready to write. Errors: SimError when the template is missing or is not a report. */
+/** The page of a run in pieces, ready to write. Errors: SimError when the template is missing or is not a report. */
 export function reportPieces(result: RunResult, template: string): readonly (string | Uint8Array)[] {
+  return pagePieces({ result }, template);
+}
+
+/** The page with anything in its data block. */
+export function pagePieces(data: object, template: string): readonly (string | Uint8Array)[] {
   const page = readTemplate(template);
   const at = page.indexOf(dataBlock);
   if (at < 0 || page.indexOf(dataBlock, at + 1) >= 0) {
     throw new SimError(template, 'the report page has no single place for data', 'Run `npm run build`');
   }
   const cut = at + dataBlock.length - blockEnd.length;
-  return [page.subarray(0, cut), embeddedJson({ result }), page.subarray(cut)];
+  return [page.subarray(0, cut), embeddedJson(data), page.subarray(cut)];
 }
 
 /** JSON that cannot end the script block it stands in. */

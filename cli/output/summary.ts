@@ -13,7 +13,8 @@ export function summaryText(result: RunResult): string {
 /** The summary as plain data, in the order of the contract. */
 export function summaryOf(result: RunResult) {
   const { title, file, sha256 } = result.scenario;
-  return { program: result.program, scenario: { title, file, sha256 }, cases: result.cases.map(caseSummary) };
+  const { program, cases, notes } = result;
+  return { program, scenario: { title, file, sha256 }, cases: cases.map(caseSummary), notes };
 }
 
 function caseSummary(result: CaseResult) {
@@ -30,11 +31,12 @@ function caseSummary(result: CaseResult) {
   };
 }
 
-/** A word has no value: its text stands for it. */
-function inputSummary({ value, unit, text, isDefault, used, distribution }: CaseInput) {
+/** A word has no value: its text stands for it. A date has the seconds since the moment that `since` names. */
+function inputSummary({ value, unit, since, text, isDefault, used, distribution }: CaseInput) {
   return {
     value,
     unit,
+    ...(since === undefined ? {} : { since }),
     text,
     ...(isDefault ? { isDefault } : {}),
     ...(used ? {} : { used }),
@@ -57,8 +59,13 @@ function stateSummary(state: State) {
   };
 }
 
+/** The bound is called by what it bounds: a reader would take ± for how well the planet is known. */
 function findingsSummary(findings: readonly Finding[]) {
-  return Object.fromEntries(findings.map(({ name, ...rest }) => [name, rest]));
+  return Object.fromEntries(
+    findings.map(({ name, plusMinus, ...rest }) => {
+      return [name, { ...rest, ...(plusMinus === undefined ? {} : { numericalError: plusMinus }) }];
+    }),
+  );
 }
 
 function byKey<T extends { readonly key: string }, U>(items: readonly T[], summarise: (item: T) => U) {

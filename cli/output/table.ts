@@ -2,7 +2,8 @@
 import type { RunResult } from '../../sim/run.ts';
 import { type Column, columnsOf } from './columns.ts';
 import { type Grid, panels, transposed } from './grid.ts';
-import { type Cell, orbitText, type Row, rowsOf } from './quantities.ts';
+import { orbitText, rowsOf } from './quantities.ts';
+import type { Cell, Row } from './row.ts';
 import type { Terminal } from './terminal.ts';
 import { hanging, wrap } from './text.ts';
 

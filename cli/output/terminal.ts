@@ -38,7 +38,8 @@ function knowsUnicode(env: Io['env']): boolean {
 
 /** As node:util decides: FORCE_COLOR before NO_COLOR before what the stream is. */
 function wantsColour(env: Io['env'], isTTY: boolean): boolean {
+  if (env.TERM === 'dumb') return false; // it would show the escapes
   if (env.FORCE_COLOR !== undefined) return !/^(0|false)$/.test(env.FORCE_COLOR);
-  if ((env.NO_COLOR ?? '') !== '' || env.TERM === 'dumb') return false;
+  if ((env.NO_COLOR ?? '') !== '') return false;
   return isTTY;
 }

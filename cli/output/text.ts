@@ -19,9 +19,9 @@ const asciiOf: Readonly<Record<string, string>> = {
   µ: 'u',
 };
 
-/** Control characters become `?`: a title from a file must not move the cursor. Line feeds stay. */
+/** Control characters and marks of writing direction become `?`: a title must not move the cursor or turn a line round. Line feeds stay. */
 export function printable(text: string): string {
-  return text.replace(/[^\P{Cc}\n]/gu, '?');
+  return text.replace(/[^\P{Cc}\n]|\p{Bidi_Control}/gu, '?');
 }
 
 /** For terminals without Unicode: accents dropped, the rest spelled or `?`. */

@@ -26,3 +26,28 @@ export const timeSeriesVariables = [
   'temperature',
   'steadyTemperature',
 ] as const;
+
+/**
+ * What models with latitude add. The variables above are then area means; `steadyTemperature` is the temperature that would
+ * emit the area mean of absorbed and internal heat.
+ *
+ * | name               | dims           | unit | what |
+ * |--------------------|----------------|------|------|
+ * | solarLongitude     | time           | rad  | 0 is the northern spring equinox; 0 … 2π |
+ * | latitude           | latitude       | rad  | middle of each equal-area band, south to north |
+ * | latitudeBounds     | latitude, edge | rad  | its southern and northern edge |
+ * | bandTemperature    | time, latitude | K    | |
+ * | bandInsolation     | time, latitude | W/m2 | daily mean (or what `planet.insolation` says), mean over the band |
+ * | bandAlbedo         | time, latitude | 1    | |
+ * | bandEmitted        | time, latitude | W/m2 | |
+ * | bandConvergence    | time, latitude | W/m2 | heat that transport brings; its area mean is zero |
+ * | bandIceFraction    | time, latitude | 1    | |
+ */
+export const bandVariables = [
+  'bandTemperature',
+  'bandInsolation',
+  'bandAlbedo',
+  'bandEmitted',
+  'bandConvergence',
+  'bandIceFraction',
+] as const;

@@ -1,14 +1,16 @@
 /**
  * Results as JSON and back, number for number: a Float64Array becomes `{ f8: base64 of its little-endian bytes }`.
  * Small, quick to read, and the same in Node, a browser and a worker. NaN and infinities have no place in a result
- * and are refused.
+ * and are refused. Fields of many numbers go in single precision, `{ f4: … }`: they are looked at here, and stand in full in
+ * their own file.
  */
 import { SimError } from '../error.ts';
 
 /** What stands for a Float64Array in JSON. */
-interface PortableArray {
-  readonly f8: string;
-}
+type PortableArray = { readonly f8: string } | { readonly f4: string };
+
+/** Arrays longer than this are stored in single precision. */
+export const longestExact = 16_384;
 
 /** RFC 4648 base64 of a string with a byte in each letter, and back: in Node, browsers and workers alike. */
 declare function btoa(binary: string): string;
@@ -27,7 +29,7 @@ export function toPortable(value: unknown, path = 'result'): unknown {
   if (value === null || typeof value !== 'object') return value;
   if (Array.isArray(value)) return value.map((item, index) => toPortable(item, `${path}.${index}`));
   if (isPortableArray(value))
-    throw new SimError(path, 'this would be read back as numbers', 'Choose another key than f8');
+    throw new SimError(path, 'this would be read back as numbers', 'Choose another key than f8 or f4');
   return Object.fromEntries(Object.entries(value).map(([key, item]) => [key, toPortable(item, `${path}.${key}`)]));
 }
 
@@ -36,27 +38,79 @@ export function fromPortable<T>(value: unknown): T {
   return restore(value) as T;
 }
 
+/** The same, but an array that stands in an object is decoded when it is first read: for pages that show a part of a large result. */
+export function fromPortableLazily<T>(value: unknown): T {
+  return restoreLazily(value) as T;
+}
+
+function restoreLazily(value: unknown): unknown {
+  if (value === null || typeof value !== 'object') return value;
+  if (Array.isArray(value)) return value.map(restoreLazily);
+  if (isPortableArray(value)) return decode(value);
+  const restored = {};
+  for (const [key, item] of Object.entries(value)) {
+    Object.defineProperty(restored, key, {
+      enumerable: true,
+      ...(isStoredArray(item) ? whenRead(item) : { value: restoreLazily(item) }),
+    });
+  }
+  return restored;
+}
+
+function isStoredArray(value: unknown): value is PortableArray {
+  return value !== null && typeof value === 'object' && isPortableArray(value);
+}
+
+function whenRead(stored: PortableArray): { get(): Float64Array } {
+  const text = 'f8' in stored ? stored.f8 : stored.f4;
+  const padding = text.endsWith('==') ? 2 : Number(text.endsWith('='));
+  requireWhole((text.length / 4) * 3 - padding, 'f8' in stored ? 8 : 4);
+  let decoded: Float64Array | null = null;
+  return {
+    get() {
+      decoded ??= decode(stored);
+      return decoded;
+    },
+  };
+}
+
 function restore(value: unknown): unknown {
   if (value === null || typeof value !== 'object') return value;
   if (Array.isArray(value)) return value.map(restore);
-  if (isPortableArray(value)) return decode(value.f8);
+  if (isPortableArray(value)) return decode(value);
   return Object.fromEntries(Object.entries(value).map(([key, item]) => [key, restore(item)]));
 }
 
 function isPortableArray(value: object): value is PortableArray {
-  return 'f8' in value && typeof value.f8 === 'string' && Object.keys(value).length === 1;
+  const stored = 'f8' in value ? value.f8 : 'f4' in value ? value.f4 : null;
+  return typeof stored === 'string' && Object.keys(value).length === 1;
 }
 
 function encode(data: Float64Array, path: string): PortableArray {
   for (let at = 0; at < data.length; at++) {
     if (!Number.isFinite(data[at])) throw notFinite(`${path}.${at}`, data[at]!);
   }
-  return { f8: btoa(binaryText(littleEndianBytes(data))) };
+  return data.length > longestExact
+    ? { f4: btoa(binaryText(singleBytes(data))) }
+    : { f8: btoa(binaryText(littleEndianBytes(data))) };
 }
 
-function decode(text: string): Float64Array {
-  const bytes = bytesOf(text);
+function decode(stored: PortableArray): Float64Array {
+  if ('f4' in stored) return singles(bytesOf(stored.f4, 4));
+  const bytes = bytesOf(stored.f8, 8);
   return isLittleEndian ? new Float64Array(bytes.buffer) : swapped(new Float64Array(bytes.buffer));
+}
+
+function singleBytes(data: Float64Array): Uint8Array {
+  const bytes = new Uint8Array(4 * data.length);
+  const view = new DataView(bytes.buffer);
+  for (let at = 0; at < data.length; at++) view.setFloat32(4 * at, data[at], true);
+  return bytes;
+}
+
+function singles(bytes: Uint8Array<ArrayBuffer>): Float64Array {
+  const view = new DataView(bytes.buffer);
+  return Float64Array.from({ length: bytes.length / 4 }, (_, at) => view.getFloat32(4 * at, true));
 }
 
 function littleEndianBytes(data: Float64Array): Uint8Array {
@@ -81,12 +135,16 @@ function binaryText(bytes: Uint8Array): string {
   return pieces.join('');
 }
 
-function bytesOf(base64: string): Uint8Array<ArrayBuffer> {
+function bytesOf(base64: string, each: 4 | 8): Uint8Array<ArrayBuffer> {
   const binary = atob(base64);
-  if (binary.length % 8 !== 0) throw new SimError('f8', 'the stored numbers are cut short', 'Make the file anew');
+  requireWhole(binary.length, each);
   const bytes = new Uint8Array(binary.length);
   for (let at = 0; at < bytes.length; at++) bytes[at] = binary.charCodeAt(at);
   return bytes;
+}
+
+function requireWhole(bytes: number, each: 4 | 8): void {
+  if (bytes % each !== 0) throw new SimError(`f${each}`, 'the stored numbers are cut short', 'Make the file anew');
 }
 
 function notFinite(path: string, value: number): SimError {

@@ -1,11 +1,11 @@
 /** Findings that follow from the world alone: the steady numbers that a run is compared with. */
 import { stefanBoltzmann } from '../constants.ts';
 import { instellation } from '../instellation/instellation.ts';
-import { steadyTemperature } from '../models/steadyState.ts';
 import type { Kelvin } from '../si.ts';
 import type { World } from '../world.ts';
 import type { Finding } from './finding.ts';
 import { orbitMeanClosedForm } from './orbitMean.ts';
+import { steadyTemperature } from './steadyState.ts';
 
 /** The textbook and catalogue number: [f L(1−A)/(4πσa²)]^¼ with the warm albedo and unit emissivity; f = ¼ for a whole sphere. */
 export function textbookTemperature(world: World, absorbingFraction = 0.25): Kelvin {

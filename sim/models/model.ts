@@ -29,7 +29,7 @@ export interface EnergyBalance {
   readonly internalHeat: number;
   readonly emitted: number;
   readonly stored: number;
-  /** |absorbed + internal − emitted − stored| / absorbed. */
+  /** |absorbed + internal − emitted − stored| over the largest of absorbed, emitted and stored. */
   readonly relativeDifference: number;
 }
 
@@ -41,9 +41,20 @@ export interface Solution {
   readonly iterations: number;
 }
 
+/** What a model asks of a scenario beyond star, orbit and surface. Keys for what it does not ask are read, and left unused. */
+export interface ModelAsks {
+  /** The share of the flux that a square metre receives; without it light falls on a whole sphere. */
+  readonly absorbingFraction: boolean;
+  /** A globe: bands, spin, transport, land and sea. */
+  readonly globe: boolean;
+  /** Whether it runs forward from a start, too. */
+  readonly start: boolean;
+}
+
 export interface Model {
   /** What `model:` says in a scenario. */
   readonly name: string;
+  readonly asks: ModelAsks;
   /** Keys that only some models know, merged into the strict schema: the lumped model brings absorbingFraction. */
   readonly keys: { readonly planet?: ZodRawShape; readonly solve?: ZodRawShape; readonly top?: ZodRawShape };
   solve(world: World, options: SolveOptions, windows: readonly Window[]): Solution;

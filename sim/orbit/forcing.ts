@@ -24,18 +24,6 @@ export interface ForcingTable {
   readonly clockCurvature: Float64Array;
 }
 
-export function forcingTable(capacity: number): ForcingTable {
-  const column = () => new Float64Array(capacity);
-  return {
-    arrival: column(),
-    arrivalSlope: column(),
-    arrivalCurvature: column(),
-    clock: column(),
-    clockSlope: column(),
-    clockCurvature: column(),
-  };
-}
-
 /** Fills `table` at s = s_i for the given cos s_i and sin s_i, i < count. */
 export function forcingInto(
   eccentricity: number,

@@ -5,5 +5,6 @@ export { formatInstantUtc, type Instant, julianDateTdb, parseInstant, type TimeS
 export { nearest } from './nearest.ts';
 export { normalQuantile } from './normalQuantile.ts';
 export { parseQuantity, type QuantitySpec } from './parse.ts';
+export { quantityPattern, unitsInWords } from './pattern.ts';
 export type { Distribution, Quantity } from './types.ts';
 export { parseUnit, type Unit } from './units.ts';

@@ -3,6 +3,7 @@ import { secondsPerDay } from '../constants.ts';
 import { SimError } from '../error.ts';
 import type { Seconds, TdbSeconds } from '../si.ts';
 import { isoText, readCalendarDate } from './calendar.ts';
+import { dateAdvice } from './dateSystems.ts';
 import { parseQuantity } from './parse.ts';
 import { endsLeapSecond, tdbFromTt, tdbMinusTt, ttFromUtc, utcFromTtRounded } from './timeScale.ts';
 import type { Distribution } from './types.ts';
@@ -26,9 +27,11 @@ const julianDateOfJ2000 = 2_451_545;
 const firstJulianDate = 1_721_059.5;
 const lastJulianDate = 5_373_484.5;
 
-const scaleWord = /\s+(TDB|UTC)(?=\s|$)/gi;
+/** `TDB` or `UTC`, alone or as papers join it: `BJD_TDB`, `BJD(TDB)`, `JD UTC`. */
+const scaleWord = /\s+(?:B?JD[_ ]?)?\(?(TDB|UTC)\)?(?=\s|$)/gi;
 const julianPrefix = /^B?JD(?:[_ ]?\(?(TDB|UTC)\)?)?\s*(?=\d)/i;
 const julianNumber = /^\d+(?:\.\d*)?$/;
+const bareNumber = /^\d*\.?\d+(?:[eE][+-]?\d+)?$/;
 const plusMinus = /\s*(?:±|\+\/-)\s*/;
 const rangeWord = /\s+to\s+/;
 const duration = String.raw`\d*\.?\d+(?:[eE][+-]?\d+)?(?: ?[a-z]+)?`;
@@ -39,7 +42,7 @@ const advice = 'Write e.g. `2026-03-04T05:00Z` or `2461103.71 TDB`';
 /**
  * A moment from text.
  * Shape:  `2026-03-04T05:00Z` (seconds, fractions and an offset such as +01:00 are welcome; a date alone is 0 h UTC),
- *         `2461103.71 TDB`, `2461103.71 UTC`, `JD 2461103.71 TDB`, `BJD_TDB 2461103.71`; with a spread that is a duration:
+ *         `2461103.71 TDB`, `2461103.71 UTC`, `JD 2461103.71 TDB`, `BJD_TDB 2461103.71`, `2461103.71 BJD_TDB`; with a spread that is a duration:
  *         `2461103.71 ± 0.002 d TDB`, `2461103.71 TDB ± 0.002 d`, `… +0.003 -0.002 d`; or two moments with `to` between.
  * Units:  → TDB seconds since J2000.0. A double holds a Julian date to 0.04 ms.
  * Errors: SimError at `date`: another form, no scale, no zone, a day that does not exist, years outside 0000–9999.
@@ -56,8 +59,9 @@ export function parseInstant(text: string): Instant {
   const sides = body.split(plusMinus);
   if (sides.length > 2) throw fault(`\`${plain}\` has more than one spread`, 'Write one, e.g. `± 0.002 d`');
   const split = upAndDown.exec(body);
-  const moment = readMoment(split?.[1] ?? sides[0]!, scale, plain);
-  return { text: text.trim(), ...moment, distribution: readSpread(sides[1], split) };
+  const centre = split?.[1] ?? sides[0]!;
+  const moment = readMoment(centre, scale, plain);
+  return { text: text.trim(), ...moment, distribution: readSpread(sides[1], split, { text: centre, scale }) };
 }
 
 /**
@@ -123,11 +127,14 @@ function readMoment(text: string, scale: TimeScale | null, whole: string): Momen
 function readJulianDate(text: string, word: TimeScale | null, whole: string): Moment {
   const prefix = julianPrefix.exec(text);
   const number = text.slice(prefix?.[0].length ?? 0);
-  if (!julianNumber.test(number)) throw fault(`\`${text}\` is not a date`, advice);
+  if (!julianNumber.test(number)) {
+    const known = dateAdvice(text, word);
+    throw known ? fault(known.what, known.mend) : fault(`\`${text}\` is not a date`, advice);
+  }
   const named = (prefix?.[1]?.toUpperCase() as TimeScale | undefined) ?? null;
   if (named && word && named !== word) throw fault(`\`${whole}\` names two time scales`, 'Write TDB or UTC once');
   const scale = named ?? word;
-  if (scale === null) throw fault(`\`${text}\` has no time scale`, `Write \`${text} TDB\` or \`${text} UTC\``);
+  if (scale === null) throw fault(`\`${text}\` has no time scale`, `Write \`${number} TDB\` or \`${number} UTC\``);
   const julianDate = Number(number);
   if (!(julianDate >= firstJulianDate && julianDate < lastJulianDate)) {
     throw fault(`\`${text}\` is outside the years 0000 to 9999`, 'Write the full Julian date, e.g. `2461103.71 TDB`');
@@ -136,12 +143,28 @@ function readJulianDate(text: string, word: TimeScale | null, whole: string): Mo
   return { tdbSeconds: scale === 'TDB' ? seconds : tdbFromTt(ttFromUtc(seconds)), scale };
 }
 
-function readSpread(symmetric: string | undefined, split: RegExpExecArray | null): Distribution {
+function readSpread(symmetric: string | undefined, split: RegExpExecArray | null, shown: ShownMoment): Distribution {
+  if (symmetric !== undefined && bareNumber.test(symmetric)) throw noDuration(`± ${symmetric}`, shown);
+  if (split && bareNumber.test(split[2]!) && bareNumber.test(split[3]!)) {
+    throw noDuration(`+${split[2]} -${split[3]}`, shown);
+  }
   if (symmetric !== undefined) return { form: 'normal', sigma: readDuration(symmetric) };
   if (!split) return { form: 'exact' };
   const down = split[3]!;
   const up = /[a-z]$/.test(split[2]!) ? split[2]! : `${split[2]} ${/[a-z]+$/.exec(down)?.[0] ?? ''}`.trim();
   return { form: 'splitNormal', up: readDuration(up), down: readDuration(down) };
+}
+
+interface ShownMoment {
+  readonly text: string;
+  /** As it stood behind the spread. */
+  readonly scale: TimeScale | null;
+}
+
+/** Days are what papers mean, and the whole is shown as it should be written. */
+function noDuration(spread: string, { text, scale }: ShownMoment): SimError {
+  const whole = [text, spread, 'd', scale].filter((part) => part !== null).join(' ');
+  return fault(`the spread \`${spread}\` of a date has no unit`, `Write e.g. \`${whole}\``);
 }
 
 function readDuration(text: string): Seconds {

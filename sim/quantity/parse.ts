@@ -35,6 +35,9 @@ interface Reading {
 }
 
 const unsigned = String.raw`(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?`;
+/** Of two whole numbers, where a pure number is wanted. */
+const fractionPattern = /^([+-]?\d+)\/(\d+)(?![\d.])/;
+const vulgarFraction = /(?<![\d.])[¼½¾⅐-⅞]/g;
 const numberPattern = new RegExp(`[+-]?${unsigned}`, 'y');
 const plusMinus = /\s*(?:±|\+\/-)\s*/;
 const rangeWord = /\s+to\s+/;
@@ -47,7 +50,7 @@ const longestText = 200;
 /**
  * A quantity from text (or from a plain number, where the key takes pure numbers).
  * Shape:  `0.48 au`, `0.62 ± 0.03`, `0.62 +/- 0.03`, `0.62 +0.03 -0.05`, `0.1 to 0.5`, `1e5 to 1e9 J/m2/K log`,
- *         `< 0.12 (95%)`, `isotropic`. One unit at the end serves every number, or each has its own.
+ *         `< 0.12 (95%)`, `isotropic`; a pure number also as a fraction, `1/4` or `¼`. One unit at the end serves every number, or each has its own.
  * Units:  any of the table → SI. The spread of a temperature is a difference: `10 ± 2 degC` has sigma 2 K.
  * Centre: as written; a range's midpoint, geometric with `log`; a limit's median; isotropic π/2.
  * Errors: SimError at `spec.dimension`: no number, no unit or a wrong one, out of bounds, an empty spread, not finite.
@@ -73,7 +76,8 @@ function fault(what: string, mend: string): SimError {
 function read(text: string, spec: QuantitySpec): Reading {
   if (text.length > longestText)
     throw fault(`the text is ${text.length} characters long`, 'Write a number and its unit');
-  const plain = text.replace(/−/g, '-').replace(/\s+/g, ' ');
+  const typed = text.replace(/−/g, '-').replace(/\s+/g, ' ');
+  const plain = spec.dimension === 'number' ? typed.replace(vulgarFraction, spelledFraction) : typed;
   if (plain === 'isotropic') return readIsotropic(spec);
   if (plain.startsWith('<')) return readLimit(plain, spec);
   const sides = plain.split(plusMinus);
@@ -86,6 +90,11 @@ function read(text: string, spec: QuantitySpec): Reading {
   const split = start === '' ? null : upAndDown.exec(plain.slice(start.length));
   if (split) return readSplitNormal(start, split, spec);
   return readExact(plain, spec);
+}
+
+/** `¼` → `1/4`. */
+function spelledFraction(sign: string): string {
+  return sign.normalize('NFKD').replace('⁄', '/');
 }
 
 function readExact(plain: string, spec: QuantitySpec): Reading {
@@ -175,12 +184,20 @@ function readPiece(text: string, spec: QuantitySpec): Piece {
 function readNumber(text: string, spec: QuantitySpec): { value: number; length: number } {
   if (text === '') throw fault('a number is missing', `Write e.g. \`${example(0, spec)}\``);
   if (text.includes(',')) throw fault(`\`${text}\` has a comma`, 'Write a decimal point and no thousands separator');
+  const fraction = spec.dimension === 'number' ? fractionPattern.exec(text) : null;
+  if (fraction) return { value: fractionValue(fraction), length: fraction[0].length };
   numberPattern.lastIndex = 0;
   const number = numberPattern.exec(text)?.[0];
   if (number === undefined) throw fault(`\`${text}\` is not a number`, `Write e.g. \`${example(0, spec)}\``);
   const value = Number(number);
   if (!Number.isFinite(value)) throw fault(`\`${number}\` is not a finite number`, 'Write a smaller one');
   return { value, length: number.length };
+}
+
+function fractionValue([text, above, below]: RegExpExecArray): number {
+  const value = Number(above) / Number(below);
+  if (!Number.isFinite(value)) throw fault(`\`${text}\` is not a finite number`, 'Divide by another number than zero');
+  return value;
 }
 
 /** The unit of each piece: its own, or the one at the end for all. */

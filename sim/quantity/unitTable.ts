@@ -72,7 +72,7 @@ export const unitTable: readonly TableUnit[] = [
   unit('mm', of('length'), { divisor: 1000 }),
   unit('um', of('length'), { divisor: 1e6 }, ['µm', 'micron', 'microns']),
   unit('nm', of('length'), { divisor: 1e9 }),
-  unit('au', of('length'), { factor: metresPerAu }, ['AU']),
+  unit('au', of('length'), { factor: metresPerAu }, ['AU', 'A.U.', 'a.u.']),
   unit('Rearth', of('length'), { factor: earthRadius }, astronomical('R', 'earth', '⊕')),
   unit('Rjup', of('length'), { factor: jupiterRadius }, ['RJup', 'R_Jup', 'R_J', ...astronomical('R', 'jup', '♃')]),
   unit('Rsun', of('length'), { factor: solarRadius }, astronomical('R', 'sun', ...sunSigns)),
@@ -121,3 +121,17 @@ export const unitTable: readonly TableUnit[] = [
 export const unitByName: ReadonlyMap<string, TableUnit> = new Map(
   unitTable.flatMap((entry) => [entry.symbol, ...entry.aliases].map((name) => [name, entry] as const)),
 );
+
+/** Symbols of Sun, Earth and Jupiter mean one thing, however they are capitalised. */
+const anyCase = /^[RML]_?(?:sun|earth|jup)$/i;
+
+const unitByLowerName: ReadonlyMap<string, TableUnit> = new Map(
+  unitTable
+    .flatMap((entry) => [entry.symbol, ...entry.aliases].map((name) => [name.toLowerCase(), entry] as const))
+    .filter(([name]) => anyCase.test(name)),
+);
+
+/** A unit that stands in the table. */
+export function unitNamed(name: string): TableUnit | undefined {
+  return unitByName.get(name) ?? unitByLowerName.get(name.toLowerCase());
+}

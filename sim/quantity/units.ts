@@ -1,8 +1,8 @@
 /** Reads a unit: one of the table, or products and quotients of them with whole or half exponents. */
 import { SimError } from '../error.ts';
-import { type Dimension, type DimensionName, dimensions } from './dimension.ts';
+import { type Dimension, type DimensionName, dimensions, sameDimension } from './dimension.ts';
 import { nearest } from './nearest.ts';
-import { type TableUnit, type Unit, unitByName } from './unitTable.ts';
+import { type TableUnit, type Unit, unitByName, unitNamed } from './unitTable.ts';
 
 export type { Unit } from './unitTable.ts';
 
@@ -38,10 +38,10 @@ const separatorPattern = /\s*(\/)\s*(\()?\s*|\s*\*\s*|\s+/y;
  * Errors: SimError at `unit`, with a near spelling or the usual units, for anything unknown or ambiguous.
  */
 export function parseUnit(text: string, expected?: DimensionName): Unit {
-  const known = unitByName.get(text);
+  const known = unitNamed(text);
   if (known) return known;
   const plain = text.trim().replace(fancySign, (sign) => plainUnitSign[sign]!);
-  return unitByName.get(plain) ?? combine(readTerms(plain, text, expected), text);
+  return unitNamed(plain) ?? combine(readTerms(plain, text, expected), text);
 }
 
 /** `value` in `unit` as SI; a unit with an offset takes it in. */
@@ -63,8 +63,8 @@ function readTerms(plain: string, text: string, expected: DimensionName | undefi
     symbolPattern.lastIndex = at;
     const symbol = symbolPattern.exec(plain)?.[0];
     if (symbol === undefined) throw unknownUnit(text, expected);
-    const unit = unitByName.get(symbol);
-    if (!unit) throw unknownUnit(symbol, expected);
+    const unit = unitNamed(symbol);
+    if (!unit) throw unknownUnit(symbol, symbol === plain ? expected : undefined, expected);
     at += symbol.length;
 
     exponentPattern.lastIndex = at;
@@ -142,10 +142,28 @@ function powerSymbol({ unit, exponent }: Term): string {
   return unit.symbol + (needsCaret ? '^' : '') + size;
 }
 
-function unknownUnit(word: string, expected: DimensionName | undefined): SimError {
-  const near = /^[\p{L}_]+$/u.test(word) ? nearest(word, unitByName.keys()) : null;
+/** `ofWhole`: what the word should measure, where it is the whole unit and no part of one. */
+function unknownUnit(word: string, ofWhole: DimensionName | undefined, expected = ofWhole): SimError {
+  const near = /^[\p{L}_]+$/u.test(word) ? nearest(word, plausibleUnits(word, ofWhole)) : null;
   const mend = near === null ? usualUnits(expected) : `Did you mean \`${unitByName.get(near)!.symbol}\``;
   return new SimError('unit', `\`${word}\` is not a unit`, mend);
+}
+
+/** Units that a misspelt word can mean: of the kind that is wanted, and for a short word more than one letter in common. */
+function plausibleUnits(word: string, expected: DimensionName | undefined): string[] {
+  return [...unitByName].flatMap(([name, { dimension }]) => {
+    const fits = expected === undefined || sameDimension(dimension, dimensions[expected].exponents);
+    return fits && (word.length > shortWord || isSlip(word.toLowerCase(), name.toLowerCase())) ? [name] : [];
+  });
+}
+
+const shortWord = 3;
+
+/** One letter too many or too few, or the same letters in another order or case; another letter makes another word. */
+function isSlip(word: string, name: string): boolean {
+  if (word.length !== name.length) return true; // how far is for `nearest` to say
+  const inOrder = (text: string) => [...text].sort().join('');
+  return inOrder(word) === inOrder(name);
 }
 
 function usualUnits(expected: DimensionName | undefined): string {

@@ -11,13 +11,11 @@ const exact = { form: 'exact' } as const;
 export function listInputs(tree: Branch, keys: CaseKeys, used: ReadonlySet<string>): CaseInput[] {
   return [...leaves(tree)].map(({ path, leaf }) => {
     const key = path.join('.');
-    const { value, unit, distribution } = reading(path.reduce(step, keys as unknown));
+    const read = reading(path.reduce(step, keys as unknown));
     return {
       key,
-      value,
-      unit,
+      ...read,
       text: leaf.text,
-      distribution,
       isDefault: leaf.isDefault ?? false,
       used: key === 'model' || path.some((_, depth) => used.has(path.slice(0, depth + 1).join('.'))),
       label: path[0] === 'windows' ? path.slice(1).join(', ') : labelOf(path),
@@ -43,18 +41,20 @@ function step(value: unknown, key: string): unknown {
   return typeof value === 'object' && value !== null ? (value as Record<string, unknown>)[key] : undefined;
 }
 
-interface Reading {
-  readonly value: number | null;
-  readonly unit: string;
-  readonly distribution: CaseInput['distribution'];
-}
+type Reading = Pick<CaseInput, 'value' | 'unit' | 'since' | 'writtenUnit' | 'distribution'>;
 
 function reading(parsed: unknown): Reading {
-  if (typeof parsed === 'number') return { value: parsed, unit: '1', distribution: exact };
-  if (isQuantity(parsed)) return { value: parsed.value, unit: siUnit(parsed.unit), distribution: parsed.distribution };
+  if (typeof parsed === 'number') return { value: parsed, unit: '1', writtenUnit: '1', distribution: exact };
+  if (isQuantity(parsed)) {
+    const { value, unit, distribution } = parsed;
+    return { value, unit: siUnit(unit), writtenUnit: unit, distribution };
+  }
   if (isPeriod(parsed)) return reading(parsed.period);
-  if (isInstant(parsed)) return { value: null, unit: '', distribution: parsed.distribution };
-  return { value: null, unit: '', distribution: exact };
+  if (isInstant(parsed)) {
+    const { tdbSeconds, distribution } = parsed;
+    return { value: tdbSeconds, unit: 's', since: 'J2000.0 TDB', writtenUnit: 's', distribution };
+  }
+  return { value: null, unit: '', writtenUnit: '', distribution: exact };
 }
 
 function isQuantity(parsed: unknown): parsed is Quantity {

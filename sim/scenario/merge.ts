@@ -17,6 +17,8 @@ export interface Alternatives {
   readonly keepsUnfinished?: boolean;
 }
 
+const heatStores = [['heatCapacity'], ['mixedLayer'], ['atmosphere'], ['ground']] as const;
+
 /** The one table of alternatives. */
 export const alternatives: readonly Alternatives[] = [
   { section: 'star', ways: [['luminosity'], ['temperature', 'radius']], mayAgree: true, keepsUnfinished: true },
@@ -35,7 +37,9 @@ export const alternatives: readonly Alternatives[] = [
   { section: 'planet', ways: [['bondAlbedo'], ['albedo']] },
   { section: 'planet', ways: [['emissivity'], ['emission']] },
   { section: 'planet.emission', ways: [['opticalDepth'], ['linear']] },
-  { section: 'planet.heatStore', ways: [['heatCapacity'], ['mixedLayer'], ['atmosphere'], ['ground']] },
+  { section: 'planet.heatStore', ways: heatStores },
+  { section: 'planet.landHeatStore', ways: heatStores },
+  { section: 'planet.frozenHeatStore', ways: heatStores },
 ];
 
 /** All keys of a way, companions included. */

@@ -1,10 +1,10 @@
 /** What is wrong with a file, all at once. */
-import { SimError } from '../error.ts';
+import { SimError, sentence } from '../error.ts';
 import type { Problem } from './types.ts';
 
 /** `FILE:LINE:COL: key: what was found. How to mend it.` */
 export function problemText({ file, line, column, key, what, mend }: Problem): string {
-  return `${file}:${line}:${column}: ${key}: ${what}. ${mend}.`;
+  return `${file}:${line}:${column}: ${key}: ${what}. ${sentence(mend)}`;
 }
 
 /** Every problem of a scenario file, in the order of the file; its message has one line for each. */

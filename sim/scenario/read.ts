@@ -8,6 +8,7 @@ import { readDocument } from './document.ts';
 import { yamlLines } from './emit.ts';
 import { listInputs } from './inputs.ts';
 import { ScenarioError } from './problem.ts';
+import { spreadWarnings } from './spreads.ts';
 import { shorten } from './syntax.ts';
 import { type Branch, placeOf } from './tree.ts';
 import type { Problem, Scenario, ScenarioCase } from './types.ts';
@@ -42,7 +43,7 @@ function baseFaults(base: Branch): Fault[] {
   return [...validateCase(base).faults.filter(({ isMissing }) => !isMissing), ...conflicts(base)];
 }
 
-interface ReadCase {
+export interface ReadCase {
   readonly name: string;
   readonly tree: Branch;
   /** What a key says wrongly, whatever the case. */
@@ -52,7 +53,8 @@ interface ReadCase {
   readonly result: ScenarioCase | null;
 }
 
-function readCase({ name, tree }: CaseTree): ReadCase {
+/** One case's tree, built; what is wrong with it stands in the faults. */
+export function readCase({ name, tree }: CaseTree): ReadCase {
   const filled = withDefaults(tree);
   const { keys, broken, faults } = validateCase(filled);
   const clashes = conflicts(filled);
@@ -69,13 +71,15 @@ function readCase({ name, tree }: CaseTree): ReadCase {
 }
 
 function assemble(name: string, tree: Branch, found: ReturnType<typeof desk>, built: Built): ScenarioCase {
+  const inputs = listInputs(tree, found.keys, found.used);
   return {
     name,
     model: found.keys.model!,
     ...built,
-    inputs: listInputs(tree, found.keys, found.used),
+    inputs,
     derived: found.derived,
-    warnings: found.warnings,
+    warnings: [...found.warnings, ...spreadWarnings(inputs)],
+    remarks: found.remarks,
   };
 }
 
@@ -121,7 +125,8 @@ function inOrder(problems: readonly Problem[]): Problem[] {
 
 function understood(root: Branch, head: Branch, base: Branch, read: readonly ReadCase[]): string {
   const entries = new Map([...head.entries].filter(([key]) => key !== '$schema'));
-  for (const [key, entry] of withDefaults(base).entries) entries.set(key, entry);
+  const models = [...new Set(read.map(({ result }) => result!.model))];
+  for (const [key, entry] of withDefaults(base, models).entries) entries.set(key, entry);
   const cases = root.entries.get('cases');
   if (cases?.tree.kind === 'branch') {
     const shown = [...cases.tree.entries].map(([name, entry], i) => {

@@ -6,9 +6,13 @@ import type { SolveOptions, Window, World } from '../world.ts';
 export interface CaseInput {
   /** Dotted key, `orbit.eccentricity`. List items by index: `planet.heatStore.0.mixedLayer`. */
   readonly key: string;
-  /** SI; null for words (`rotationPeriod: synchronous`, dates print as text). */
+  /** SI; null for words (`rotationPeriod: synchronous`). */
   readonly value: number | null;
   readonly unit: string;
+  /** Set for dates, whose `value` counts from there. */
+  readonly since?: 'J2000.0 TDB';
+  /** The unit that was typed, `Msun`; `1` for a pure number, `s` for a date, empty for words. */
+  readonly writtenUnit: string;
   /** The user's own text, or the default's. */
   readonly text: string;
   readonly distribution: Distribution;
@@ -35,6 +39,8 @@ export interface ScenarioCase {
   readonly inputs: readonly CaseInput[];
   readonly derived: readonly Derived[];
   readonly warnings: readonly string[];
+  /** What only `check` tells: harmless, but worth knowing. */
+  readonly remarks: readonly string[];
 }
 
 export interface Scenario {

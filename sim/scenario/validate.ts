@@ -1,7 +1,7 @@
 /** A tree of one case → its typed keys, every key that does not fit told in plain words. */
 import type * as z from 'zod';
 import { nearest } from '../quantity/index.ts';
-import { aboutKey, keysIn, sectionOf } from './schema/lookup.ts';
+import { aboutKey, keyOfSymbol, keysIn, sectionOf } from './schema/lookup.ts';
 import { type CaseKeys, caseSchema, headSchema, modelNames } from './schema/scenario.ts';
 import { shorten } from './syntax.ts';
 import { type Branch, isNull, plain, subtree, type Tree, without } from './tree.ts';
@@ -102,7 +102,7 @@ function unknownKey(key: string, path: readonly string[], tree: Tree): Pick<Faul
   if (key === '<<') return { what: '`<<` belongs to YAML 1.1', mend: 'Write the keys out, or use cases' };
   const what = `\`${shorten(key)}\` is not a key of ${section}`;
   const known = keysIn(path);
-  const meant = nearest(key, known);
+  const meant = keyOfSymbol(path, key) ?? nearest(key, known);
   if (meant) return { what, mend: `Did you mean \`${meant}\``, meant: [...path, meant] };
   const elsewhere = sectionOf(key);
   if (elsewhere) return { what, mend: `It belongs in ${elsewhere}`, meant: [elsewhere, key] };

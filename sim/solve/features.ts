@@ -100,14 +100,21 @@ export function integrate(curve: Curve, f: (s: number, value: number) => number)
   const piece = emptyPiece();
   let total = 0;
   eachPiece(curve, piece, () => {
-    let sum = 0;
-    for (let k = 0; k < gaussNodes.length; k++) {
-      const x = gaussNodes[k];
-      sum += gaussWeights[k] * f(piece.left + x * piece.width, pieceValue(piece, x));
-    }
-    total += sum * piece.width;
+    total += gauss(
+      (s) => f(s, pieceValue(piece, (s - piece.left) / piece.width)),
+      piece.left,
+      piece.left + piece.width,
+    );
   });
   return total;
+}
+
+/** ∫ f ds from `from` to `to` by five-point Gauss–Legendre; never evaluates the ends. */
+export function gauss(f: (s: number) => number, from: number, to: number): number {
+  const width = to - from;
+  let sum = 0;
+  for (let k = 0; k < gaussNodes.length; k++) sum += gaussWeights[k] * f(from + gaussNodes[k] * width);
+  return sum * width;
 }
 
 const halves = [
@@ -124,10 +131,10 @@ const quarters = [
 // Abramowitz & Stegun (1964) table 25.4, n = 5, from the closed forms, moved to [0, 1].
 const inner = Math.sqrt(5 - 2 * Math.sqrt(10 / 7)) / 3;
 const outer = Math.sqrt(5 + 2 * Math.sqrt(10 / 7)) / 3;
-const gaussNodes = [(1 - outer) / 2, (1 - inner) / 2, 0.5, (1 + inner) / 2, (1 + outer) / 2];
+export const gaussNodes: readonly number[] = [(1 - outer) / 2, (1 - inner) / 2, 0.5, (1 + inner) / 2, (1 + outer) / 2];
 const innerWeight = (322 + 13 * Math.sqrt(70)) / 1800;
 const outerWeight = (322 - 13 * Math.sqrt(70)) / 1800;
-const gaussWeights = [outerWeight, innerWeight, 64 / 225, innerWeight, outerWeight];
+export const gaussWeights: readonly number[] = [outerWeight, innerWeight, 64 / 225, innerWeight, outerWeight];
 
 function eachPiece(curve: Curve, piece: Piece, visit: () => void): void {
   for (let index = 0; index + 1 < curve.position.length; index++) {

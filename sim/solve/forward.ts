@@ -30,7 +30,7 @@ export function forward(
   });
   if (!first.completed) return null;
   const solveOn = (boundaries: Float64Array): { curve: Curve; steps: number } | null => {
-    const run = march(problem, { from, to, value, tolerance, keep: true, boundaries });
+    const run = march(problem, { from, to, value, tolerance, keep: true, boundaries, maximumSteps });
     return run.completed && run.curve !== null ? { curve: run.curve, steps: run.steps } : null;
   };
   const certified = certify(solveOn, first.boundaries, tolerance, maximumSteps);

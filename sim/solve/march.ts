@@ -31,7 +31,7 @@ export interface March {
   /** −k ∫ r v′ ds: the same with the gain held fixed. */
   readonly frozenLogMultiplier: number;
   readonly steps: number;
-  /** Ends of the steps taken, without those that a break put in. */
+  /** Ends of the steps taken, at breaks too: halving them then refines what lies on either side. */
   readonly boundaries: Float64Array;
   readonly curve: Curve | null;
   /** False when steps became too short or too many. */
@@ -124,7 +124,10 @@ export function march(problem: Separable, options: MarchOptions): March {
       y = crossing.level;
       piece += crossing.up ? 1 : -1;
       logMultiplier += Math.log(Math.abs(stepper.rateAt(s, y, piece) / before));
-      if (Math.abs(width) < Math.abs(remaining)) continue;
+      if (Math.abs(width) < Math.abs(remaining)) {
+        ends.push(s);
+        continue;
+      }
     } else {
       accept(width);
       crossingsInARow = 0;
@@ -231,6 +234,7 @@ class Stepper {
       const n3 = y + stages.rest3;
       if (!(n1 > problem.floor && n2 > problem.floor && n3 > problem.floor)) return false;
       const moved = Math.max(Math.abs(n1 - y1), Math.abs(n2 - y2), Math.abs(n3 - y3)) / Math.abs(n3);
+      f3.rate += f3.slope * (n3 - y3); // the rate at the new end: a stiff slope would feel what Newton still moved
       y1 = n1;
       y2 = n2;
       y3 = n3;
@@ -353,7 +357,7 @@ class Recorder {
   }
 
   push(stepper: Stepper, s: number, width: number): void {
-    if (!this.keep || width === 0) return;
+    if (!this.keep || s + width === s) return;
     const left = stepper.startRates;
     const right = stepper.endRates;
     if (this.position.length === 0) this.position.push(s);

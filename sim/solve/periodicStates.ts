@@ -71,7 +71,7 @@ function scanGrid(low: number, high: number, crowded: readonly number[]): number
   const grid = new Set<number>();
   const add = (from: number, to: number, points: number): void => {
     for (let i = 0; i < points; i++) {
-      const value = from + ((to - from) * i) / (points - 1);
+      const value = i + 1 === points ? to : from + ((to - from) * i) / (points - 1); // rounding must not lose an end
       if (value >= low && value <= high) grid.add(value);
     }
   };
@@ -149,7 +149,7 @@ function polish(problem: Separable, bracket: Bracket, tolerance: number, maximum
   const direction = bracket.rising ? -1 : 1;
   return {
     curve: result.curve,
-    errorEstimate,
+    errorEstimate: errorEstimate + result.leftover,
     converged,
     logMultiplier: direction * result.run.logMultiplier,
     frozenLogMultiplier: direction * result.run.frozenLogMultiplier,
@@ -186,6 +186,8 @@ function settleAdaptively(problem: Separable, bracket: Bracket): { value: number
 
 interface Polished {
   readonly value: number;
+  /** Newton's next change of the start, relative: small enough not to be made. */
+  readonly leftover: number;
   readonly run: March;
   readonly curve: Curve;
 }
@@ -204,9 +206,11 @@ function settleOn(
     const run = march(problem, { from, to, value, tolerance, keep: true, boundaries });
     if (!run.completed || run.curve === null) return null;
     const correction = -run.change / Math.expm1(run.logMultiplier);
-    if (Math.abs(correction) < 1e-3 * tolerance * value)
-      return { value, run, curve: to > from ? run.curve : reversed(run.curve) };
-    if (!(Math.abs(correction) < 0.3 * value)) return null;
+    const leftover = Math.abs(correction) / value;
+    if (leftover < 1e-3 * tolerance) {
+      return { value, leftover, run, curve: to > from ? run.curve : reversed(run.curve) };
+    }
+    if (!(leftover < 0.3)) return null;
     value += correction;
   }
   return null;

@@ -1,8 +1,10 @@
 /** What README.md shows is what the program does. */
+import { execFileSync } from 'node:child_process';
 import { readFileSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { expect, test } from 'vitest';
-import { workplace } from './support.ts';
+import { requireTool, toolPath } from '../support/require.ts';
+import { workplace, zonalText } from './support.ts';
 
 const root = fileURLToPath(new URL('../../', import.meta.url));
 const readme = readFileSync(`${root}README.md`, 'utf8');
@@ -21,11 +23,32 @@ test('the table of the tour is printed by the example; the scenario shown gives 
   place.remove();
 });
 
+test.skipIf(!requireTool('xarray'))('the lines for xarray give the annual mean at each latitude', async () => {
+  const place = workplace();
+  place.write('ice-line.yaml', readFileSync(`${root}configs/ice-line.yaml`, 'utf8'));
+  await place.perilag('run', 'ice-line.yaml', '--quiet');
+  const [load, open, mean] = /( {4}import xarray.*\n)( {4}.*\n)( {4}.*?) *#/
+    .exec(readme)!
+    .slice(1)
+    .map((line) => line.trim());
+  const code = `${load}\n${open}\nprint((${mean}).sizes["latitude"], float((${mean}).mean()))`;
+  const printed = execFileSync(toolPath('xarray')!, ['-c', code], { cwd: place.folder, encoding: 'utf8' });
+  const [bands, found] = printed.trim().split(' ').map(Number);
+  const { cases } = JSON.parse(readFileSync(place.path('out/ice-line/summary.json'), 'utf8'));
+  expect(bands).toBe(90);
+  // Rows stand 720 to the orbit and the finding is an integral: equal to a few parts in a million.
+  expect(Math.abs(found! / cases[0].findings.temperatureMean.value - 1)).toBeLessThan(1e-5);
+  place.remove();
+});
+
 test('every finding, command and option is named', async () => {
   const place = workplace();
   place.write('example.yaml', example);
-  const { stdout } = await place.perilag('run', 'example.yaml', '--json', '--quiet');
-  const findings = Object.keys(JSON.parse(stdout).cases[0].findings).map((name) => name.split('.')[0]!);
+  place.write('zonal.yaml', zonalText);
+  const { stdout } = await place.perilag('run', 'example.yaml', 'zonal.yaml', '--json', '--quiet');
+  const findings = JSON.parse(stdout).flatMap((summary: { cases: [{ findings: object }] }) =>
+    Object.keys(summary.cases[0].findings).map((name) => name.split('.')[0]!),
+  );
   for (const name of findings) expect(readme).toMatch(new RegExp(`\`${name}[\`.]`));
   const commands = [...(await place.perilag('--help')).stdout.matchAll(/^ {2}(\w+) /gm)].map(([, name]) => name!);
   for (const name of commands.filter((word) => word !== 'help')) expect(readme).toContain(`perilag ${name} `);

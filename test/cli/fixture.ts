@@ -36,6 +36,7 @@ export function fixtureResult(
     program: { name: 'perilag', version: '9.8.7' },
     scenario: { title, notes: null, file: 'corvane.yaml', sha256: 'ab'.repeat(32) },
     cases: shapes.map(fixtureCase),
+    notes: [],
   };
 }
 
@@ -80,15 +81,26 @@ function fixtureInputs(shape: CaseShape): readonly CaseInput[] {
       key: 'orbit.eccentricity',
       value: shape.eccentricity ?? 0.62,
       unit: '1',
+      writtenUnit: '1',
       text: '0.62',
       label: 'Eccentricity',
     },
-    { ...plain, key: 'planet.emissivity', value: 1, unit: '1', text: '1', label: 'Emissivity', isDefault: true },
+    {
+      ...plain,
+      key: 'planet.emissivity',
+      value: 1,
+      unit: '1',
+      writtenUnit: '1',
+      text: '1',
+      label: 'Emissivity',
+      isDefault: true,
+    },
     {
       ...plain,
       key: 'planet.rotationPeriod',
       value: null,
       unit: '1',
+      writtenUnit: '1',
       text: 'synchronous',
       label: 'Rotation',
       used: false,
@@ -98,6 +110,7 @@ function fixtureInputs(shape: CaseShape): readonly CaseInput[] {
       key: 'planet.bondAlbedo',
       value: 0.3,
       unit: '1',
+      writtenUnit: '1',
       text: '0.30 ± 0.05',
       label: 'Bond albedo',
       distribution: { form: 'normal', sigma: 0.05 },

@@ -3,7 +3,7 @@ import { spawn, spawnSync } from 'node:child_process';
 import { existsSync, readdirSync, readFileSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
-import { threeCasesText, type Workplace, workplace } from './support.ts';
+import { threeCasesText, type Workplace, workplace, zonalText } from './support.ts';
 
 const program = fileURLToPath(new URL('../../dist/perilag.mjs', import.meta.url));
 const bash = (script: string) =>
@@ -24,6 +24,15 @@ describe('the built program', () => {
     const report = readFileSync(place.path('out/corvane/report.html'), 'utf8');
     expect(report).toMatch(/<script type="application\/json" id="perilag-data">\{"result":\{/);
     expect(report.trimEnd()).toMatch(/<\/html>$/);
+  });
+
+  test('writes the fields of a model with latitude with its own copy of the library', () => {
+    place.write('chione.yaml', zonalText);
+    const { status, stderr } = bash('"$PROGRAM" run chione.yaml -o chione');
+    expect({ status, stderr }).toMatchObject({ status: 0 });
+    const products = 'fields.nc,report.html,scenario.yaml,series.csv,summary.json';
+    expect(readdirSync(place.path('chione')).sort().join()).toBe(products);
+    expect(readFileSync(place.path('chione/fields.nc')).subarray(0, 4).toString('latin1')).toBe('\x89HDF');
   });
 
   test('prints the same without the compiled form beside it', () => {

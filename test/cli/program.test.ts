@@ -1,10 +1,13 @@
 import { existsSync, mkdirSync, readdirSync, readFileSync, rmSync } from 'node:fs';
+import type { Dataset } from 'h5wasm/node';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { Interrupted, tellError } from '../../cli/exit.ts';
 import type { Io } from '../../cli/io.ts';
+import { loadHdf5 } from '../../cli/output/hdf5.ts';
+import { main } from '../../cli/program.ts';
 import packageJson from '../../package.json' with { type: 'json' };
 import { SimError } from '../../sim/error.ts';
-import { threeCasesText, type Workplace, workplace } from './support.ts';
+import { threeCasesText, type Workplace, workplace, zonalText } from './support.ts';
 
 const products = ['report.html', 'scenario.yaml', 'series.csv', 'summary.json'];
 let place: Workplace;
@@ -17,16 +20,31 @@ afterEach(() => place.remove());
 
 const read = (...names: string[]) => readFileSync(place.path(...names), 'utf8');
 
+/** What a run in a window of so many columns tells on standard error. */
+async function toldIn(columns: number): Promise<string> {
+  let stderr = '';
+  const io: Io = {
+    stdout: { write: () => true },
+    stderr: { write: (text: string) => (stderr += text) },
+    isTTY: false,
+    columns,
+    env: { LANG: 'C.UTF-8' },
+    cwd: place.folder,
+    reportTemplate: place.path('page.html'),
+  };
+  expect(await main(['run', 'corvane.yaml'], io)).toBe(0);
+  return stderr;
+}
+
 describe('help', () => {
   test('no command: help on standard error, exit 2; --help: on standard output, exit 0', async () => {
     const none = await place.perilag();
     expect([none.code, none.stdout]).toEqual([2, '']);
     const asked = await place.perilag('--help');
     expect([asked.code, asked.stderr]).toEqual([0, '']);
-    for (const name of ['run', 'check', 'new', 'schema'])
+    for (const name of ['run', 'trace', 'check', 'new', 'schema'])
       expect(asked.stdout).toMatch(new RegExp(`^  ${name}\\b`, 'm'));
-    for (const name of ['spread', 'grid', 'trace', 'gather', 'dates', 'fit', 'survey'])
-      expect(asked.stdout).not.toContain(name);
+    for (const name of ['spread', 'grid', 'gather', 'dates', 'fit', 'survey']) expect(asked.stdout).not.toContain(name);
   });
 
   test('--version is the one of the package', async () => {
@@ -85,6 +103,31 @@ describe('run', () => {
     );
   });
 
+  test('a model with latitude writes fields.nc as well, which tells how it was made', async () => {
+    place.write('chione.yaml', zonalText);
+    const { code, stdout, stderr } = await place.perilag('run', 'chione.yaml', '-o', 'by latitude');
+    expect(code).toBe(0);
+    expect(stdout).toMatch(/hottest at latitude/);
+    expect(stderr).toContain('summary.json, series.csv, fields.nc, scenario.yaml beside it');
+    expect(readdirSync(place.path('by latitude')).sort()).toEqual([...products, 'fields.nc'].sort());
+    const { File } = await loadHdf5();
+    const file = new File(place.path('by latitude', 'fields.nc'), 'r');
+    expect(file.attrs.history!.value).toMatch(
+      /^\d{4}-\d\d-\d\dT\d\d:\d\d:\d\dZ: perilag \S+: perilag run chione.yaml -o 'by latitude'$/,
+    );
+    expect(file.attrs.groups!.value).toBe('base/warm base/cold');
+    const field = file.get('base/warm/band_temperature') as Dataset;
+    expect(field.shape).toEqual([48, 36]);
+    // Bands have equal areas: the mean over the latitudes of a row is the area mean of series.csv.
+    const rows = field.value as Float64Array;
+    const [first] = read('by latitude', 'series.csv').split('\n').slice(1);
+    expect(rows.subarray(0, 36).reduce((sum, value) => sum + value / 36, 0)).toBeCloseTo(
+      Number(first!.split(',')[10]),
+      9,
+    );
+    file.close();
+  });
+
   test('scenario.yaml runs again to the same numbers', async () => {
     await place.perilag('run', 'corvane.yaml', '--quiet');
     const again = await place.perilag('run', 'out/corvane/scenario.yaml', '-o', 'again', '--quiet');
@@ -120,9 +163,62 @@ describe('run', () => {
     expect(wrong).toEqual({
       code: 2,
       stdout: '',
-      stderr: '--only: there is no case `bare rok`. Did you mean `bare rock`.\n',
+      stderr: '--only: there is no case `bare rok`. Did you mean `bare rock`?\n',
     });
     expect(existsSync(place.path('out'))).toBe(false);
+  });
+
+  test('a case with ground: the half-space itself beside the one store, in the table', async () => {
+    const { stdout } = await place.perilag('run', 'corvane.yaml');
+    const { cases } = JSON.parse(read('out', 'corvane', 'summary.json'));
+    const derived = (name: string) => cases[1].derived[`planet.heatStore.ground.${name}`].value;
+    const shown = (label: string) => {
+      const cells = new RegExp(`^  ${label}(.*)$`, 'm')
+        .exec(stdout)![1]!
+        .trim()
+        .split(/\s{2,}/);
+      expect(cells).toHaveLength(1); // the other cases have no ground
+      return Number(cells[0]);
+    };
+    expect(stdout).toContain('\nsmall swing of the ground alone\n');
+    expect(shown('damping, half-space')).toBeCloseTo(derived('halfSpaceDamping'), 3);
+    expect(shown('damping, one lumped store')).toBeCloseTo(derived('lumpedDamping'), 3);
+    expect(shown('lag, half-space, d')).toBeCloseTo(derived('halfSpaceLag') / 86_400, 2);
+    expect(shown('lag, one lumped store, d')).toBeCloseTo(derived('lumpedLag') / 86_400, 2);
+    const without = await place.perilag('run', 'corvane.yaml', '--only', 'thick air');
+    expect(without.stdout).not.toContain('half-space');
+  });
+
+  test('spreads: said once, in the table and in the summary, with the centres that nobody typed', async () => {
+    place.write(
+      'vague.yaml',
+      threeCasesText.replace('0.62', '0.62 ± 0.03').replace('bondAlbedo: 0.3', 'bondAlbedo: < 0.4 (95%)'),
+    );
+    const { stdout } = await place.perilag('run', 'vague.yaml');
+    expect(stdout.match(/Spreads of inputs are not propagated by run/g)).toHaveLength(1);
+    expect(stdout).toContain('planet.bondAlbedo < 0.4 (95%) is used at 0.1377, its median.');
+    const { notes } = JSON.parse(read('out', 'vague', 'summary.json'));
+    expect(notes).toHaveLength(2);
+    await place.perilag('run', 'corvane.yaml');
+    expect(JSON.parse(read('out', 'corvane', 'summary.json')).notes).toEqual([]);
+  });
+
+  test('the summary calls the numerical bound by its name, and dates have their seconds', async () => {
+    place.write('dated.yaml', threeCasesText.replace('0.62', '0.62, periapsisTime: 2000-01-02T12:00 TDB'));
+    await place.perilag('run', 'dated.yaml', '--quiet');
+    const text = read('out', 'dated', 'summary.json');
+    const [first] = JSON.parse(text).cases;
+    expect(first.findings.temperatureMax.numericalError).toBeGreaterThan(0);
+    expect(text).not.toContain('plusMinus');
+    // A day after J2000.0, 2000-01-01T12:00 TDB.
+    expect(first.inputs['orbit.periapsisTime']).toMatchObject({ value: 86_400, unit: 's', since: 'J2000.0 TDB' });
+  });
+
+  test('in a narrow window the line on the files wraps', async () => {
+    const narrow = await toldIn(40);
+    for (const line of narrow.split('\n').filter((text) => !text.startsWith('report')))
+      expect(line.length).toBeLessThanOrEqual(40);
+    expect(narrow.replace(/\s+/g, ' ')).toContain('files summary.json, series.csv, scenario.yaml beside it');
   });
 
   test('--fractions adds the textbook value for each absorbing fraction', async () => {
@@ -172,6 +268,12 @@ describe('run', () => {
     expect(readdirSync(place.folder).sort()).toEqual(['corvane.yaml', 'page.html']);
   });
 
+  test('an output folder without a name: exit 2', async () => {
+    const { code, stderr } = await place.perilag('run', 'corvane.yaml', '-o', '');
+    expect([code, stderr]).toEqual([2, '-o: the folder has no name. Name one, e.g. `-o results`, or leave -o out.\n']);
+    expect(existsSync(place.path('out'))).toBe(false);
+  });
+
   test('a missing page names npm run build', async () => {
     rmSync(place.path('page.html'));
     const { code, stderr } = await place.perilag('run', 'corvane.yaml');
@@ -182,7 +284,6 @@ describe('run', () => {
 
   test('a fault of ours: the stack, a line that asks for a report, exit 1', async () => {
     // An environment that throws when it is asked stands for any error that nobody foresaw.
-    const { main } = await import('../../cli/program.ts');
     let stderr = '';
     const io = {
       stdout: { write: () => true },

@@ -18,6 +18,25 @@ windows:
   liquid water at 1 bar: 273.15 K to 373.15 K
 `;
 
+/** By latitude, coarse enough to be quick: a planet with a warm and a frozen climate. */
+export const zonalText = `title: Chione b, with polar caps or frozen over
+model: zonal
+star: { luminosity: 0.48 Lsun, mass: 0.82 Msun }
+orbit: { instellation: 0.95 S0, eccentricity: 0.05, periapsisTime: 2026-03-04T05:00Z }
+planet:
+  albedo: { warm: 0.3, ice: 0.6, from: 258 K, to: 272 K }
+  emission: { opticalDepth: 0.83 }
+  heatStore: { mixedLayer: 12 m }
+  heatTransport: 0.5 W/m2/K
+  obliquity: 24 deg
+  rotationPeriod: 22 h
+  solarLongitudeOfPeriapsis: 120 deg
+  bands: 36
+windows:
+  liquid water at 1 bar: 273.15 K to 373.15 K
+solve: { samples: 48, tolerance: 1e-5 }
+`;
+
 export const emptyPage =
   '<!doctype html><title>page</title><script type="application/json" id="perilag-data"></script>';
 

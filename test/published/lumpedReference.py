@@ -37,6 +37,12 @@ def arrival(mean, e):
     return 1.0 / (1 - e * math.cos(eccentric(wrapped, e))) ** 2
 
 
+def ice(y):
+    """Share of the ice-albedo ramp that is ice, from 1 at y = 0.940 to 0 at 0.955, and its slope: the cubic smoothstep."""
+    x = min(1.0, max(0.0, (y - 0.940) / 0.015))
+    return 1 - x * x * (3 - 2 * x), -6 * x * (1 - x) / 0.015
+
+
 LAWS = {
     "plain": (lambda y: 1.0, lambda y: y**4, lambda y: 4 * y**3, lambda y: 0.0),
     # emission linear in temperature, as A + B T_C with A = 203.3, B = 2.09 and T0 = 290 K, absorbed 238 W/m2 at distance a
@@ -48,6 +54,13 @@ LAWS = {
     ),
     # internal heat of 0.3 of the flux absorbed at distance a
     "heated": (lambda y: 1.0, lambda y: y**4 - 0.3, lambda y: 4 * y**3, lambda y: 0.0),
+    # albedo 0.6 where icy, 0.3 where warm; T0 is the steady temperature at distance a without ice
+    "ramp": (
+        lambda y: 1 - 0.3 / 0.7 * ice(y)[0],
+        lambda y: y**4,
+        lambda y: 4 * y**3,
+        lambda y: -0.3 / 0.7 * ice(y)[1],
+    ),
 }
 
 
@@ -85,6 +98,7 @@ def periodic(e, kappa, law):
 
 CASES = [(e, kappa, "plain") for e in (0.02, 0.3, 0.7, 0.95) for kappa in (472.0, 47.2, 4.72, 0.472, 0.0472, 0.00472)]
 CASES += [(0.5, 0.7, "linear"), (0.2, 30.0, "linear"), (0.6, 1.1, "heated"), (0.9, 12.0, "heated")]
+CASES += [(0.2, 4.7, "ramp"), (0.4, 15.7, "ramp"), (0.7, 1.3, "ramp")]
 
 
 def main():

@@ -6,10 +6,20 @@ import { spawnSync } from 'node:child_process';
 import { accessSync, constants } from 'node:fs';
 import { delimiter, join } from 'node:path';
 
-export type Tool = 'chromium' | 'scipy';
+export type Tool = 'chromium' | 'scipy' | 'xarray' | 'ncdump';
 
-const finders: Readonly<Record<Tool, () => string | null>> = { chromium: findChromium, scipy: findScipy };
-const packages: Readonly<Record<Tool, string>> = { chromium: 'chromium', scipy: 'python3-scipy' };
+const finders: Readonly<Record<Tool, () => string | null>> = {
+  chromium: () => onPath(['chromium', 'chromium-browser', 'google-chrome', 'google-chrome-stable']),
+  scipy: () => pythonWith('scipy.integrate'),
+  xarray: () => pythonWith('xarray, netCDF4'),
+  ncdump: () => onPath(['ncdump']),
+};
+const packages: Readonly<Record<Tool, string>> = {
+  chromium: 'chromium',
+  scipy: 'python3-scipy',
+  xarray: 'python3-xarray python3-netcdf4',
+  ncdump: 'netcdf-bin',
+};
 
 /** True when the tool is here. Errors: throws when it is not and PERILAG_REQUIRE=all. */
 export function requireTool(tool: Tool): boolean {
@@ -20,18 +30,14 @@ export function requireTool(tool: Tool): boolean {
   return false;
 }
 
-/** The program to start: Chromium itself, or a Python that can import scipy; null where there is none. */
+/** The program to start: the tool itself, or a Python that can import it; null where there is none. */
 export function toolPath(tool: Tool): string | null {
   return finders[tool]();
 }
 
-function findChromium(): string | null {
-  return onPath(['chromium', 'chromium-browser', 'google-chrome', 'google-chrome-stable']);
-}
-
-function findScipy(): string | null {
+function pythonWith(modules: string): string | null {
   const pythons = ['/usr/bin/python3', onPath(['python3'])].filter((python) => python !== null);
-  return pythons.find((python) => spawnSync(python, ['-c', 'import scipy.integrate']).status === 0) ?? null;
+  return pythons.find((python) => spawnSync(python, ['-c', `import ${modules}`]).status === 0) ?? null;
 }
 
 function onPath(names: readonly string[]): string | null {

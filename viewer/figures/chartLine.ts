@@ -5,19 +5,31 @@ import type { CaseMarker } from './theme.ts';
 
 export type Dash = 'solid' | 'dash' | 'dot' | 'dashdot';
 
-export interface ChartLine {
+/** How a line looks, wherever a sample of it stands. */
+export interface LineLook {
+  readonly colour: string;
+  readonly dash: Dash;
+  readonly marker: Marker | null;
+  /** The colour of a map on which it lies. */
+  readonly ground?: string;
+  /** Edge that sets it off from the ground. */
+  readonly casing?: string;
+}
+
+/** An entry of a legend. */
+export interface LegendLine extends LineLook {
   /** As a reader sees it. */
   readonly plainName: string;
+}
+
+export interface ChartLine extends LegendLine {
   /** The same, safe as a Plotly label. */
   readonly name: string;
   /** The same, short enough to stand beside the line. */
   readonly shortName: string;
   readonly x: number[];
   readonly y: number[];
-  readonly colour: string;
-  readonly dash: Dash;
   readonly width: number;
-  readonly marker: Marker | null;
   /** A line to compare with: the signs of the states that it belongs to, none where it belongs to all; null for a state. */
   readonly referenceFor: readonly Owner[] | null;
 }

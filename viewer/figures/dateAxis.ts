@@ -1,10 +1,11 @@
 /** A second time axis with calendar dates, above the first and zooming with it. Pure. */
-import type { Data, Layout } from 'plotly.js-dist-min';
+import type { Layout } from 'plotly.js-dist-min';
 import type { TdbSeconds } from '../../sim/si.ts';
 import { utcMillis } from '../words/date.ts';
 import type { TimeUnit } from '../words/number.ts';
 import { calendarTicks } from './calendarTicks.ts';
 import type { FigureStyle } from './figure.ts';
+import { type TopTicks, topAxisLayout } from './topAxis.ts';
 
 export interface DateAxis {
   /** The date of zero on the time axis. */
@@ -14,11 +15,7 @@ export interface DateAxis {
 }
 
 /** Tick places in the time axis's own unit, and their words: for the range in view, so that zooming brings finer dates. */
-export function dateTicks(
-  { zero, unit, atMost }: DateAxis,
-  from: number,
-  to: number,
-): { places: number[]; labels: string[] } {
+export function dateTicks({ zero, unit, atMost }: DateAxis, from: number, to: number): TopTicks {
   const start = utcMillis(zero + from * unit.seconds);
   const end = utcMillis(zero + to * unit.seconds);
   const ticks = calendarTicks(start, end, atMost);
@@ -33,40 +30,7 @@ export function dateTicks(
 export function dateAxisLayout(
   dates: DateAxis,
   range: readonly [number, number],
-  { theme }: FigureStyle,
+  style: FigureStyle,
 ): Partial<Layout['xaxis']> {
-  const { places, labels } = dateTicks(dates, range[0], range[1]);
-  return {
-    overlaying: 'x',
-    matches: 'x',
-    side: 'top',
-    anchor: 'free',
-    position: 1,
-    range: [...range],
-    tickmode: 'array',
-    tickvals: places,
-    ticktext: labels,
-    ticks: 'outside',
-    ticklen: 5,
-    tickcolor: theme.quiet,
-    tickfont: { color: theme.quiet, size: 12 },
-    linecolor: theme.hairline,
-    showline: true,
-    showgrid: false,
-    zeroline: false,
-  };
-}
-
-/** Plotly draws an axis only where some trace stands on it: one invisible point. */
-export function dateAxisAnchor(x: number, y: number): Data {
-  return {
-    type: 'scatter',
-    mode: 'markers',
-    name: 'dates',
-    x: [x],
-    y: [y],
-    xaxis: 'x2',
-    marker: { opacity: 0 },
-    hoverinfo: 'skip',
-  };
+  return topAxisLayout(dateTicks(dates, range[0], range[1]), range, style);
 }

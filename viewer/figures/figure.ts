@@ -1,6 +1,6 @@
 /** What every figure builder returns: plain JSON for Plotly and the words that stand with it. */
 import type { Data, Layout } from 'plotly.js-dist-min';
-import type { ChartLine } from './chartLine.ts';
+import type { LegendLine } from './chartLine.ts';
 import type { Theme } from './theme.ts';
 
 export interface Figure {
@@ -12,7 +12,7 @@ export interface Figure {
   /** How to read it. */
   readonly caption: string;
   /** For a legend where there is no room beside the lines. */
-  readonly lines: readonly ChartLine[];
+  readonly lines: readonly LegendLine[];
   readonly data: Data[];
   readonly layout: Partial<Layout>;
 }
@@ -31,5 +31,3 @@ export interface View {
   readonly x: readonly [number, number];
   readonly y: readonly [number, number];
 }
-
-export const figureFont = 'system-ui, -apple-system, "Segoe UI", Roboto, "Noto Sans", "Liberation Sans", sans-serif';

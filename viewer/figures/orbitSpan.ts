@@ -14,17 +14,17 @@ export interface Span {
 export const quarterBefore = 0.25;
 
 /**
- * One whole orbit of a periodic state from −¼ to +¾ period. The rows next to both ends are repeated a period away, so
- * that a line reaches the edges.
+ * One whole orbit of a periodic state from −¼ to +¾ period: every row, or the chosen ones. The rows next to both ends are
+ * repeated a period away, so that a line reaches the edges.
  */
-export function orbitSpan(dataset: Dataset, period: Seconds): Span {
+export function orbitSpan(dataset: Dataset, period: Seconds, chosen?: readonly number[]): Span {
   const time = values(dataset, 'time');
-  const cut = (1 - quarterBefore) * period;
-  const split = firstAtOrAfter(time, cut);
-  const all = Array.from(time, (_, row) => row);
+  const all = chosen ?? Array.from(time, (_, row) => row);
+  const split = firstAtOrAfter(all, time, (1 - quarterBefore) * period);
   const early = all.slice(Math.max(0, split - 1)).map((row) => ({ row, at: time[row]! - period }));
   const late = all.slice(0, split).map((row) => ({ row, at: time[row]! }));
-  const next = split < time.length ? { row: split, at: time[split]! } : { row: 0, at: time[0]! + period };
+  const after = all[split];
+  const next = after === undefined ? { row: all[0]!, at: time[all[0]!]! + period } : { row: after, at: time[after]! };
   const points = [...early, ...late, next];
   return { time: points.map(({ at }) => at), rows: points.map(({ row }) => row) };
 }
@@ -35,7 +35,7 @@ export function wholeSpan(dataset: Dataset): Span {
   return { time, rows: time.map((_, row) => row) };
 }
 
-function firstAtOrAfter(time: Float64Array, cut: Seconds): number {
-  const row = time.findIndex((t) => t >= cut);
-  return row < 0 ? time.length : row;
+function firstAtOrAfter(rows: readonly number[], time: Float64Array, cut: Seconds): number {
+  const place = rows.findIndex((row) => time[row]! >= cut);
+  return place < 0 ? rows.length : place;
 }

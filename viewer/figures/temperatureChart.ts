@@ -1,13 +1,15 @@
 /** Temperature against time: what the chart of one orbit and that of a run from a start have in common. Pure. */
-import type { Annotation, Layout } from 'plotly.js-dist-min';
+import type { Layout } from 'plotly.js-dist-min';
 import type { Seconds, TdbSeconds } from '../../sim/si.ts';
 import { findingValue } from '../words/columns.ts';
 import { list, type TimeUnit } from '../words/number.ts';
-import { type ChartLine, glyph, lastInView, type Owner, traceOf } from './chartLine.ts';
-import { dateAxisAnchor, dateAxisLayout } from './dateAxis.ts';
-import { type Figure, type FigureStyle, figureFont, type View } from './figure.ts';
-import { lineLabels } from './lineLabels.ts';
+import { axisStyle, plainLayout } from './chartLayout.ts';
+import { type ChartLine, traceOf } from './chartLine.ts';
+import { dateAxisLayout } from './dateAxis.ts';
+import type { Figure, FigureStyle, View } from './figure.ts';
+import { namesBesideLines } from './lineNames.ts';
 import { type TemperatureLine, temperatureLines } from './temperatureLines.ts';
+import { topAxisAnchor } from './topAxis.ts';
 import { extremes } from './variables.ts';
 import {
   barRowHeight,
@@ -59,7 +61,7 @@ export function temperatureFigure(
     ...words,
     caption: [words.caption, ...windowWords(chart, whole)].join(' '),
     lines,
-    data: dates ? [...traces, dateAxisAnchor(view.x[0], view.y[0])] : traces,
+    data: dates ? [...traces, topAxisAnchor('dates', view.x[0], view.y[0])] : traces,
     layout: dates ? { ...layout, xaxis2: dateAxisLayout(dates, view.x, style) } : layout,
   };
 }
@@ -92,12 +94,8 @@ function temperatureLayout(chart: TemperatureChart, lines: readonly ChartLine[],
   return {
     height: total + margin.t + margin.b,
     margin,
-    paper_bgcolor: 'rgba(0,0,0,0)',
-    plot_bgcolor: 'rgba(0,0,0,0)',
-    font: { family: figureFont, size: narrow ? 12 : 13, color: theme.ink },
-    showlegend: false,
+    ...plainLayout(style),
     hovermode: 'x unified',
-    hoverlabel: { bgcolor: theme.paper, bordercolor: theme.quiet, font: { color: theme.ink }, namelength: -1 },
     xaxis: {
       ...axisStyle(style),
       title: { text: chart.timeTitle, standoff: 8 },
@@ -121,26 +119,6 @@ function temperatureLayout(chart: TemperatureChart, lines: readonly ChartLine[],
       ...(narrow ? [] : namesBesideLines(lines, view, height, style)),
     ],
   };
-}
-
-/** A name for every line that the view shows, where the line leaves it. */
-function namesBesideLines(
-  lines: readonly ChartLine[],
-  view: View,
-  height: number,
-  style: FigureStyle,
-): Partial<Annotation>[] {
-  const sign = ({ marker, colour }: Owner): string => `<span style="color:${colour}">${glyph(marker)}</span>`;
-  const labels = lines.flatMap((line) => {
-    const { shortName, marker, colour, referenceFor } = line;
-    const value = lastInView(line, view);
-    if (value === null) return [];
-    const signs = marker ? [{ marker, colour }] : (referenceFor ?? []);
-    const words = referenceFor ? `<i>${shortName}</i>` : shortName;
-    return [{ text: [...signs.map(sign), words].join(' '), value, colour }];
-  });
-  const [low, high] = view.y;
-  return lineLabels(labels, { low, high, height }, style);
 }
 
 function momentLines({ moments, unit, style }: TemperatureChart): Drawing {
@@ -192,18 +170,6 @@ function windowWords(chart: TemperatureChart, frame: Frame): string[] {
     ...(hasBars ? ['Bars under the chart: when the instellation lies within a window.'] : []),
     ...(hidden.length > 0 ? [`Outside the temperatures shown: ${list(hidden)}.`] : []),
   ];
-}
-
-function axisStyle({ theme }: FigureStyle): Partial<Layout['xaxis']> {
-  return {
-    linecolor: theme.quiet,
-    showline: true,
-    ticks: 'outside',
-    ticklen: 5,
-    tickcolor: theme.quiet,
-    tickfont: { color: theme.quiet },
-    zeroline: false,
-  };
 }
 
 function margins({ narrow }: FigureStyle): { l: number; r: number; t: number; b: number } {

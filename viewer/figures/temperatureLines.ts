@@ -21,15 +21,17 @@ export function temperatureLines(lines: readonly TemperatureLine[], unit: TimeUn
   ];
 }
 
-/** Solid for the first state of a case, dash-dotted for further stable ones, dotted for unstable; dashes mean steady. */
 function stateLine({ column, span }: TemperatureLine, unit: TimeUnit, theme: Theme): ChartLine {
+  return { ...stateLook(column, theme), x: inUnit(span, unit), y: along(column, span, 'temperature') };
+}
+
+/** Solid for the first state of a case, dash-dotted for further stable ones, dotted for unstable; dashes mean steady. */
+export function stateLook(column: Column, theme: Theme): Omit<ChartLine, 'x' | 'y'> {
   const { marker, colour } = signOf(column, theme);
   const isUnstable = column.state.stable === false;
   const stableDash = column.stateIndex === 0 ? 'solid' : 'dashdot';
   return {
     ...names(columnName(column)),
-    x: inUnit(span, unit),
-    y: along(column, span, 'temperature'),
     colour,
     dash: isUnstable ? 'dot' : stableDash,
     width: isUnstable ? 1.5 : 2.5,

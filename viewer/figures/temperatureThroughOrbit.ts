@@ -2,6 +2,7 @@
 import type { Seconds } from '../../sim/si.ts';
 import { answerFor } from '../words/answer.ts';
 import { type Column, columnName, commonTimeUnit, periodOf } from '../words/columns.ts';
+import { hasLatitude } from '../words/latitude.ts';
 import type { Figure, FigureStyle } from './figure.ts';
 import { orbitSpan, quarterBefore } from './orbitSpan.ts';
 import { type Moment, type TemperatureChart, temperatureFigure } from './temperatureChart.ts';
@@ -23,9 +24,9 @@ export function temperatureThroughOrbit(columns: readonly Column[], style: Figur
   };
   return temperatureFigure(chart, {
     name: 'temperature-through-the-orbit',
-    title: 'Temperature through the orbit',
+    title: columns.some(hasLatitude) ? 'Area-mean temperature through the orbit' : 'Temperature through the orbit',
     textAlternative: columns.map((column) => `${columnName(column)}: ${answerFor(column, unit)}`).join(' '),
-    caption: caption(periods),
+    caption: caption(columns, periods),
   });
 }
 
@@ -44,9 +45,12 @@ function allEqual(periods: readonly Seconds[]): boolean {
   return periods.every((period) => Math.abs(period - periods[0]!) <= 1e-9 * periods[0]!);
 }
 
-function caption(periods: readonly Seconds[]): string {
+function caption(columns: readonly Column[], periods: readonly Seconds[]): string {
   const span = allEqual(periods)
     ? 'One whole orbit, from a quarter before periapsis.'
     : 'One whole orbit of each case, from a quarter of it before periapsis; the cases have different periods.';
+  if (columns.some(hasLatitude)) {
+    return `${span} Solid: the temperature, as its mean over the area. Dashed: the steady value, the temperature that would emit at once what the area absorbs and what comes from inside.`;
+  }
   return `${span} Solid: the temperature with its heat store. Dashed: the steady value, what a surface without heat store would have at that moment.`;
 }

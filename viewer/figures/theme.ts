@@ -1,5 +1,5 @@
 /**
- * Colours of page and figures, light and dark: the one place where they are named.
+ * Colours of page and figures, light and dark: the one place where they are named (those of maps: `colourScale.ts`).
  *
  * Case colours are the qualitative set of Okabe & Ito (2008) "Color Universal Design (CUD): How to make figures and
  * presentations that are friendly to colorblind people", https://jfly.uni-koeln.de/color/ (codes from memory). Each

@@ -1,15 +1,8 @@
 /** A short piece of a line with its marker, as it looks in the figures: for legends and table heads. */
-import type { Dash, Marker } from '../figures/chartLine.ts';
+import type { Dash, LineLook } from '../figures/chartLine.ts';
 import { type CaseMarker, caseMarker, lightTheme } from '../figures/theme.ts';
 import type { Column } from '../words/columns.ts';
 import { svgElement } from './element.ts';
-
-export interface Sample {
-  /** Any CSS colour. */
-  readonly colour: string;
-  readonly dash: Dash;
-  readonly marker: Marker | null;
-}
 
 const dashes: Readonly<Record<Dash, string>> = { solid: 'none', dash: '6 3', dot: '1.5 3', dashdot: '6 2.5 1.5 2.5' };
 
@@ -24,14 +17,8 @@ const outlines: Readonly<Record<CaseMarker, string>> = {
   hexagon: 'M-2.6 -4.5H2.6L5.2 0L2.6 4.5H-2.6L-5.2 0Z',
 };
 
-export function lineSample({ colour, dash, marker }: Sample): SVGSVGElement {
-  const line = svgElement('path', {
-    d: 'M1 7H33',
-    fill: 'none',
-    stroke: colour,
-    'stroke-width': marker ? '2.5' : '1.5',
-    'stroke-dasharray': dashes[dash],
-  });
+/** Colours may be any that CSS knows. */
+export function lineSample({ colour, dash, marker, ground, casing }: LineLook): SVGSVGElement {
   const sign = marker
     ? svgElement('path', {
         d: outlines[marker.shape],
@@ -41,7 +28,24 @@ export function lineSample({ colour, dash, marker }: Sample): SVGSVGElement {
         'stroke-width': marker.open ? '1.5' : '0',
       })
     : null;
-  return svgElement('svg', { class: 'sample', viewBox: '0 0 34 14', 'aria-hidden': 'true' }, line, sign);
+  return svgElement(
+    'svg',
+    { class: 'sample', viewBox: '0 0 34 14', 'aria-hidden': 'true' },
+    ground === undefined ? null : svgElement('path', { d: 'M0 0H34V14H0Z', fill: ground }),
+    casing === undefined ? null : stroke(casing, 4, 'solid'),
+    stroke(colour, marker ? 2.5 : 1.5, dash),
+    sign,
+  );
+}
+
+function stroke(colour: string, width: number, dash: Dash): SVGPathElement {
+  return svgElement('path', {
+    d: 'M1 7H33',
+    fill: 'none',
+    stroke: colour,
+    'stroke-width': String(width),
+    'stroke-dasharray': dashes[dash],
+  });
 }
 
 /** The sample of a column: its colour follows the scheme by itself. */

@@ -30,7 +30,7 @@ export function page(result: RunResult): Page {
     accountsSection(result, columns),
     inputsSection(result.cases),
     methodSection(result),
-    cautionsSection(),
+    cautionsSection(result),
     footer(result),
   );
   return { element: made, figures };

@@ -1,5 +1,6 @@
 /** The run that the page carries. Pure: the text of the data block in, a RunResult or a message for the reader out. */
-import { fromPortable } from '../../sim/dataset/portable.ts';
+import type { Dataset } from '../../sim/dataset/dataset.ts';
+import { fromPortableLazily } from '../../sim/dataset/portable.ts';
 import type { RunResult } from '../../sim/run.ts';
 
 /** What the page says instead of a report. */
@@ -8,27 +9,52 @@ export class PageError extends Error {
 }
 
 const needed = ['time', 'meanAnomaly', 'trueAnomaly', 'distance', 'instellation', 'temperature', 'steadyTemperature'];
+const neededByLatitude = ['bandTemperature', 'bandInsolation', 'bandIceFraction'];
 
 /** Errors: PageError when the block is empty, is not JSON, or holds no run that this page can show. */
 export function readResult(text: string): RunResult {
-  if (text.trim() === '') {
-    throw new PageError('This page holds no run yet. `perilag run` writes a copy of it with the results inside.');
-  }
-  const { result } = parsed(text);
+  return checkedRun(parsed(text).result);
+}
+
+/** Errors: PageError as for `readResult`. */
+export function checkedRun(result: unknown): RunResult {
   if (!isRun(result)) throw damaged('the data are not a run');
   for (const { name, states } of result.cases) {
-    for (const { dataset } of states) {
-      const lengths = needed.map((variable) => dataset?.variables?.[variable]?.data?.length ?? 0);
-      if (lengths.some((length) => length < 2 || length !== lengths[0]))
-        throw damaged(`numbers of “${name}” are missing`);
-    }
+    if (!states.every(({ dataset }) => isWhole(dataset))) throw damaged(`numbers of “${name}” are missing`);
   }
   return result;
 }
 
-function parsed(text: string): { result?: unknown } {
+/** Every row of what the page shows, and every latitude where there are any. */
+function isWhole(dataset: Dataset | undefined): boolean {
+  const rows = lengthOf(dataset, 'time');
+  if (rows < 2 || needed.some((name) => lengthOf(dataset, name) !== rows)) return false;
+  if (dataset?.variables.latitude === undefined) return true;
+  const bands = lengthOf(dataset, 'latitude');
+  return (
+    bands > 1 &&
+    lengthOf(dataset, 'latitudeBounds') === 2 * bands &&
+    lengthOf(dataset, 'solarLongitude') === rows &&
+    neededByLatitude.every((name) => lengthOf(dataset, name) === rows * bands)
+  );
+}
+
+/** 0 for what is not there or cannot be decoded. */
+function lengthOf(dataset: Dataset | undefined, name: string): number {
   try {
-    return fromPortable<{ result?: unknown } | null>(JSON.parse(text)) ?? {};
+    return dataset?.variables?.[name]?.data?.length ?? 0;
+  } catch {
+    return 0;
+  }
+}
+
+/** Errors: PageError when the block is empty or is not JSON. */
+export function parsed(text: string): { result?: unknown; trace?: unknown } {
+  if (text.trim() === '') {
+    throw new PageError('This page holds no run yet. `perilag run` writes a copy of it with the results inside.');
+  }
+  try {
+    return fromPortableLazily<{ result?: unknown; trace?: unknown } | null>(JSON.parse(text)) ?? {};
   } catch {
     throw damaged('the data cannot be read');
   }
@@ -43,6 +69,6 @@ function isRun(value: unknown): value is RunResult {
   return cases.every((one) => typeof one?.name === 'string' && Array.isArray(one.states) && one.states.length > 0);
 }
 
-function damaged(what: string): PageError {
+export function damaged(what: string): PageError {
   return new PageError(`This report is damaged: ${what}. Run the scenario again to write a new one.`);
 }

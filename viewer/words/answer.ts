@@ -3,9 +3,11 @@
  * how far the textbook's one number is from it. Plain text from numbers; pure.
  */
 import type { RunResult } from '../../sim/run.ts';
-import type { Seconds } from '../../sim/si.ts';
-import { type Column, columnsOf, commonTimeUnit, finding, findingValue, periodOf } from './columns.ts';
-import { fixed, kelvin, list, nbsp, percent, type TimeUnit, timeDecimals } from './number.ts';
+import { type Column, columnsOf, commonTimeUnit, finding, findingValue } from './columns.ts';
+import { hasLatitude } from './latitude.ts';
+import { localAnswer, localPeaks } from './latitudeAnswer.ts';
+import { moment, timeText } from './moment.ts';
+import { kelvin, list, percent, type TimeUnit } from './number.ts';
 
 export interface Answer {
   /** For the whole run. */
@@ -19,24 +21,18 @@ export function answer(result: RunResult): Answer {
   const unit = commonTimeUnit(columns);
   const [only] = columns;
   if (columns.length === 1 && only) {
-    const lead = sentences(
-      temperatureText(only),
-      timing(only, unit),
-      swing(only),
-      steadySwing(columns),
-      textbook(columns),
-    );
+    const lead = sentences(answerFor(only, unit), steadySwing(columns), textbook(columns));
     return { lead, details: [] };
   }
   return {
-    lead: sentences(peaks(columns, unit), steadySwing(columns), textbook(columns)),
+    lead: sentences(peaks(columns, unit), localPeaks(columns, unit), steadySwing(columns), textbook(columns)),
     details: columns.map((column) => ({ column, text: answerFor(column, unit) })),
   };
 }
 
 /** One column in a few sentences: for the list under the answer and for text alternatives. */
 export function answerFor(column: Column, unit: TimeUnit): string {
-  return sentences(temperatureText(column), timing(column, unit), swing(column));
+  return sentences(temperatureText(column), timing(column, unit), swing(column), localAnswer(column, unit));
 }
 
 function sentences(...parts: readonly string[]): string {
@@ -48,9 +44,10 @@ function temperatureText(column: Column): string {
   if (low === null || high === null)
     return `No temperature: ${finding(column, 'temperatureMax')?.reason ?? 'not computed'}.`;
   const when = column.isForwardRun ? 'over the run from its start' : 'through the orbit';
-  if (kelvin(low) === kelvin(high)) return `The temperature stays at ${kelvin(high)} ${when}.`;
+  const what = hasLatitude(column) ? 'The area-mean temperature' : 'The temperature';
+  if (kelvin(low) === kelvin(high)) return `${what} stays at ${kelvin(high)} ${when}.`;
   const meanText = mean === null ? '' : `, with a mean of ${kelvin(mean)}`;
-  return `The temperature goes from ${kelvin(low)} to ${kelvin(high)} ${when}${meanText}.`;
+  return `${what} goes from ${kelvin(low)} to ${kelvin(high)} ${when}${meanText}.`;
 }
 
 /** When the maximum comes, and how late that is. */
@@ -73,8 +70,9 @@ function swing(column: Column): string {
   return damping === null || column.isForwardRun ? '' : `It keeps ${percent(damping)} of the steady swing.`;
 }
 
-/** What would happen without a heat store, where all columns agree on it. */
+/** What would happen without a heat store, where all columns agree on it; latitudes would then part, and no one value tell. */
 function steadySwing(columns: readonly Column[]): string {
+  if (columns.some(hasLatitude)) return '';
   const texts = columns.map((column) => {
     const low = findingValue(column, 'steadyTemperatureMin');
     const high = findingValue(column, 'steadyTemperatureMax');
@@ -91,10 +89,11 @@ function peaks(columns: readonly Column[], unit: TimeUnit): string {
   if (known.length === 0) return 'No case has a temperature.';
   const inOrder = known.toSorted((a, b) => peakOf(a) - peakOf(b));
   const [coolest, hottest] = [inOrder[0]!, inOrder.at(-1)!];
+  const what = known.some(hasLatitude) ? 'The peak of the area-mean temperature' : 'The peak temperature';
   if (kelvin(peakOf(coolest)) === kelvin(peakOf(hottest))) {
-    return `The peak temperature is ${kelvin(peakOf(hottest))} in every case.`;
+    return `${what} is ${kelvin(peakOf(hottest))} in every case.`;
   }
-  return `The peak temperature lies between ${peakText(coolest, unit)} and ${peakText(hottest, unit)}.`;
+  return `${what} lies between ${peakText(coolest, unit)} and ${peakText(hottest, unit)}.`;
 }
 
 function peakText(column: Column, unit: TimeUnit): string {
@@ -118,27 +117,11 @@ function textbook(columns: readonly Column[]): string {
 
 function missOf(column: Column): number | null {
   const number = findingValue(column, 'equilibriumTemperature');
-  const { low, high } = temperatures(column);
+  const area = temperatures(column);
+  const low = findingValue(column, 'coldestTemperature') ?? area.low;
+  const high = findingValue(column, 'hottestTemperature') ?? area.high;
   if (number === null || low === null || high === null) return null;
   return Math.max(Math.abs(high - number), Math.abs(low - number));
-}
-
-function moment(time: Seconds, column: Column, unit: TimeUnit): string {
-  if (column.isForwardRun) return time === 0 ? 'at the start' : `${timeText(time, column, unit)} after the start`;
-  const offset = fromPeriapsis(time, column);
-  if (offset === 0) return 'at periapsis';
-  return `${timeText(Math.abs(offset), column, unit)} ${offset < 0 ? 'before' : 'after'} periapsis`;
-}
-
-/** In the last quarter of the orbit the next periapsis is the one that a reader thinks of. */
-function fromPeriapsis(time: Seconds, column: Column): Seconds {
-  const period = periodOf(column);
-  return time > 0.75 * period ? time - period : time;
-}
-
-/** About a thousandth of the orbit. */
-function timeText(seconds: Seconds, column: Column, unit: TimeUnit): string {
-  return `${fixed(seconds / unit.seconds, timeDecimals(periodOf(column), unit, 1))}${nbsp}${unit.symbol}`;
 }
 
 function hasPeak(column: Column): boolean {

@@ -1,42 +1,34 @@
 /** The table of cases: the numbers that people quote, each beside the steady value. Same rows as on the terminal. Pure. */
-import type { Finding } from '../../sim/findings/finding.ts';
 import type { Window } from '../../sim/world.ts';
+import { type Cell, type TableRow, temperature, time, without } from './cells.ts';
 import { type Column, commonTimeUnit, finding, findingValue, periodOf } from './columns.ts';
-import { fixed, nbsp, percent, significant, type TimeUnit, timeDecimals, withUnit } from './number.ts';
-
-/** One number as the table shows it. `text` is a dash where there is none, and `reason` says why. */
-export interface Cell {
-  readonly text: string;
-  /** True where the numerical error reaches the last digit shown, and stands in the text. */
-  readonly hasError?: boolean;
-  readonly reason?: string;
-  /** The same quantity of the instantaneous steady value, where it has one. */
-  readonly steady?: string;
-}
-
-export interface TableRow {
-  readonly label: string;
-  /** One a column of the run. */
-  readonly cells: readonly Cell[];
-}
+import { hasLatitude } from './latitude.ts';
+import { latitudeRows, latitudeWindowRows } from './latitudeRows.ts';
+import { percent, significant, type TimeUnit, withUnit } from './number.ts';
 
 export function caseTable(columns: readonly Column[]): TableRow[] {
   const unit = commonTimeUnit(columns);
+  const ofMean = columns.some(hasLatitude) ? ', area mean' : '';
   const row = (label: string, cell: (column: Column) => Cell): TableRow => ({ label, cells: columns.map(cell) });
   return [
     row('Textbook equilibrium temperature', (column) => temperature(column, 'equilibriumTemperature')),
-    row('Mean temperature', (column) => besideSteady(column, 'temperatureMean', 'steadyTemperatureMean')),
-    row('Maximum temperature', (column) => besideSteady(column, 'temperatureMax', 'steadyTemperatureMax')),
-    row('Minimum temperature', (column) => besideSteady(column, 'temperatureMin', 'steadyTemperatureMin')),
-    ...timeOfMaxRows(columns, unit),
+    row(`Mean temperature${ofMean}`, (column) => besideSteady(column, 'temperatureMean', 'steadyTemperatureMean')),
+    row(`Maximum temperature${ofMean}`, (column) => besideSteady(column, 'temperatureMax', 'steadyTemperatureMax')),
+    row(`Minimum temperature${ofMean}`, (column) => besideSteady(column, 'temperatureMin', 'steadyTemperatureMin')),
+    ...timeOfMaxRows(columns, unit, ofMean),
     row('Lag of the maximum behind the steady maximum', (column) => time(column, 'lagOfMax', unit)),
     row('Damping: swing over steady swing', (column) => ratio(column, 'damping', 1)),
     row('Radiative time constant, in orbits', (column) => ratio(column, 'radiativeTimeConstant', periodOf(column))),
-    ...windowsOf(columns).map((window) => row(shareLabel(window), (column) => share(column, window.name))),
+    ...groundRows(columns, unit),
+    ...latitudeRows(columns, unit),
+    ...windowsOf(columns).map((window) => row(shareLabel(window, ofMean), (column) => share(column, window.name))),
+    ...latitudeWindowRows(columns, unit),
     ...meanWindows(columns).map(({ name }) =>
       row(`Orbit-mean instellation in “${name}”`, (column) => meanInside(column, name)),
     ),
-    ...(hasSeveralStates(columns) ? [row('Stability margin (0: tips over, below 0: unstable)', margin)] : []),
+    ...(hasSeveralStates(columns) || columns.some(hasLatitude)
+      ? [row('Stability margin (0: tips over, below 0: unstable)', margin)]
+      : []),
   ];
 }
 
@@ -45,25 +37,38 @@ export function steadyIsShared(rows: readonly TableRow[]): boolean {
   return rows.every(({ cells }) => cells.every(({ steady }) => steady === cells[0]!.steady));
 }
 
-function temperature(column: Column, name: string): Cell {
-  return numberCell(finding(column, name), (value) => ({ value, unit: 'K', decimals: 2 }));
-}
-
 function besideSteady(column: Column, name: string, steadyName: string): Cell {
   const steady = findingValue(column, steadyName);
   const cell = temperature(column, name);
   return steady === null ? cell : { ...cell, steady: temperature(column, steadyName).text };
 }
 
-function time(column: Column, name: string, unit: TimeUnit): Cell {
-  const decimals = timeDecimals(periodOf(column), unit);
-  return numberCell(finding(column, name), (value) => ({ value: value / unit.seconds, unit: unit.symbol, decimals }));
-}
-
 function ratio(column: Column, name: string, divisor: number): Cell {
   const found = finding(column, name);
   if (found === undefined || found.value === null) return without(found);
   return { text: significant(found.value / divisor, 3) };
+}
+
+/** Real ground beside the one store that stands for it: only where some case has ground. */
+function groundRows(columns: readonly Column[], unit: TimeUnit): TableRow[] {
+  const rows: readonly (readonly [label: string, half: string, lumped: string, divisor: number, symbol: string])[] = [
+    ['Damping', 'halfSpaceDamping', 'lumpedDamping', 1, '1'],
+    ['Lag', 'halfSpaceLag', 'lumpedLag', unit.seconds, unit.symbol],
+  ];
+  return rows
+    .flatMap(([label, half, lumped, divisor, symbol]) => [
+      groundRow(columns, `${label} of a small swing, half-space ground`, half, divisor, symbol),
+      groundRow(columns, `${label} of a small swing, this one lumped store`, lumped, divisor, symbol),
+    ])
+    .filter(({ cells }) => cells.some(({ text }) => text !== '—'));
+}
+
+function groundRow(columns: readonly Column[], label: string, name: string, divisor: number, symbol: string): TableRow {
+  const cells = columns.map(({ derived }) => {
+    const found = derived.filter(({ key }) => key.endsWith(`.ground.${name}`));
+    return { text: found.map(({ value }) => withUnit(significant(value / divisor, 3), symbol)).join(', ') || '—' };
+  });
+  return { label, cells };
 }
 
 function share(column: Column, name: string): Cell {
@@ -78,36 +83,11 @@ function meanInside(column: Column, name: string): Cell {
   return { text: found.value === 1 ? 'yes' : 'no' };
 }
 
-function margin({ state, stateName }: Column): Cell {
-  if (stateName === null || state.stabilityMargin === null) return { text: '—', reason: 'one state only' };
-  return { text: significant(state.stabilityMargin, 3) };
-}
-
-interface Shown {
-  readonly value: number;
-  readonly unit: string;
-  readonly decimals: number;
-}
-
-/** Fixed decimals; where the error reaches the last digit, fewer of them and the error beside. */
-function numberCell(found: Finding | undefined, show: (value: number) => Shown): Cell {
-  if (found === undefined || found.value === null) return without(found);
-  const { value, unit, decimals } = show(found.value);
-  const error = show(found.plusMinus ?? 0).value;
-  if (error < 0.5 * 10 ** -decimals) return { text: withUnit(fixed(value, decimals), unit) };
-  const kept = Math.max(0, Math.min(decimals, 1 - Math.floor(Math.log10(error))));
-  const text = `${fixed(value, kept)} ±${nbsp}${fixed(roundedUp(error, kept), kept)}`;
-  return { text: withUnit(text, unit), hasError: true };
-}
-
-function without(found: Finding | undefined): Cell {
-  return { text: '—', reason: found ? (found.reason ?? 'not defined') : 'not computed' };
-}
-
-/** An error bound must not shrink by rounding. */
-function roundedUp(value: number, decimals: number): number {
-  const unit = 10 ** -decimals;
-  return Math.ceil(value / unit - 1e-9) * unit;
+function margin(column: Column): Cell {
+  const { stabilityMargin } = column.state;
+  const isTelling = column.stateName !== null || hasLatitude(column);
+  if (!isTelling || stabilityMargin === null) return { text: '—', reason: 'one state only' };
+  return { text: significant(stabilityMargin, 3) };
 }
 
 function windowsOf(columns: readonly Column[]): Window[] {
@@ -121,15 +101,15 @@ function meanWindows(columns: readonly Column[]): Window[] {
 }
 
 /** The instellation of a moment is not what a climate feels: the row says that it is meant. */
-function shareLabel({ name, of }: Window): string {
-  return `Share of time in “${name}”${of === 'instellation' ? ' (instantaneous)' : ''}`;
+function shareLabel({ name, of }: Window, ofMean: string): string {
+  return `Share of time in “${name}”${of === 'instellation' ? ' (instantaneous)' : ofMean}`;
 }
 
 /** Periodic states count from periapsis, runs from their start: a row for each that occurs. */
-function timeOfMaxRows(columns: readonly Column[], unit: TimeUnit): TableRow[] {
+function timeOfMaxRows(columns: readonly Column[], unit: TimeUnit, ofMean: string): TableRow[] {
   const origins = [...new Set(columns.map(({ isForwardRun }) => isForwardRun))].toSorted();
   return origins.map((forward) => ({
-    label: `Maximum comes, after ${forward ? 'the start' : 'periapsis'}`,
+    label: `Maximum comes${ofMean}, after ${forward ? 'the start' : 'periapsis'}`,
     cells: columns.map((column) => (column.isForwardRun === forward ? time(column, 'timeOfMax', unit) : { text: '—' })),
   }));
 }

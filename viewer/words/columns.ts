@@ -6,6 +6,7 @@ import type { Dataset } from '../../sim/dataset/dataset.ts';
 import type { Finding } from '../../sim/findings/finding.ts';
 import type { State } from '../../sim/models/model.ts';
 import type { CaseResult, RunResult } from '../../sim/run.ts';
+import type { CaseInput, Derived } from '../../sim/scenario/types.ts';
 import type { Seconds, TdbSeconds } from '../../sim/si.ts';
 import type { Window } from '../../sim/world.ts';
 import { type TimeUnit, timeUnit } from './number.ts';
@@ -22,6 +23,8 @@ export interface Column {
   readonly state: State;
   readonly dataset: Dataset;
   readonly windows: readonly Window[];
+  readonly inputs: readonly CaseInput[];
+  readonly derived: readonly Derived[];
   readonly periapsisTime: TdbSeconds | null;
 }
 
@@ -36,6 +39,8 @@ export function columnsOf(result: RunResult): Column[] {
       state,
       dataset: state.dataset,
       windows: oneCase.windows,
+      inputs: oneCase.inputs,
+      derived: oneCase.derived,
       periapsisTime: periapsisTime(oneCase),
     })),
   );

@@ -10,7 +10,7 @@ const periapsisKey = 'orbit.periapsisTime';
 export interface InputCell {
   /** As the user wrote it, or as the default reads. */
   readonly text: string;
-  /** In SI; null for words. */
+  /** In SI, a date in UTC; null for words. */
   readonly si: string | null;
   readonly isDefault: boolean;
   readonly used: boolean;
@@ -68,8 +68,9 @@ function inputRow(cases: readonly CaseResult[], key: string): InputRow {
 
 function inputCell(input: CaseInput | undefined): InputCell | null {
   if (input === undefined) return null;
-  const { text, value, unit, isDefault, used } = input;
-  return { text, si: value === null ? null : withUnit(exact(value), unit), isDefault, used };
+  const { text, value, unit, since, isDefault, used } = input;
+  const si = value === null ? null : since === undefined ? withUnit(exact(value), unit) : dateText(value);
+  return { text, si, isDefault, used };
 }
 
 /** Written alike everywhere; which cases use it is said beside it. */

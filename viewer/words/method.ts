@@ -1,5 +1,7 @@
 /** How this run was computed: the equations that it used, each with its source; and what its numbers are not. Pure. */
 import type { RunResult } from '../../sim/run.ts';
+import { hasLatitude } from './latitude.ts';
+import { latitudeRules, latitudeSolutionRules } from './latitudeMethod.ts';
 
 export interface Step {
   readonly words: string;
@@ -9,15 +11,20 @@ export interface Step {
 }
 
 /** What decides whether a step was used. */
-interface Used {
+export interface Used {
   /** Does some case have this input, or one below it? Places in a list do not count: `heatStore.0.ground` is `heatStore.ground`. */
   has(key: string): boolean;
+  /** Does some case write just this there? */
+  says(key: string, text: string): boolean;
+  /** Some case tells latitudes apart; some case has one temperature for all. */
+  readonly byLatitude: boolean;
+  readonly asOne: boolean;
   readonly periodic: boolean;
   readonly forward: boolean;
   readonly habitableLimits: boolean;
 }
 
-interface Rule {
+export interface Rule {
   readonly when: (used: Used) => boolean;
   readonly step: Step;
 }
@@ -38,13 +45,14 @@ const rules: readonly Rule[] = [
     },
   },
   {
-    when: always,
+    when: ({ asOne }) => asOne,
     step: {
       words:
         'One heat store per square metre of surface takes up what is absorbed, and q from inside; it loses what is emitted.',
       equation: 'C dT/dt = f (1 − A) S(r) + q − E(T)',
     },
   },
+  ...latitudeRules,
   {
     when: (used) => !used.has('planet.emission'),
     step: { words: 'A grey body emits.', equation: 'E(T) = ε σ T⁴', source: 'Stefan–Boltzmann law; σ: CODATA 2018' },
@@ -100,15 +108,16 @@ const rules: readonly Rule[] = [
     },
   },
   {
-    when: always,
+    when: ({ asOne }) => asOne,
     step: {
       words:
         'The steady value balances absorption and emission at every moment; the textbook has one number for the whole orbit.',
       equation: 'E(T_{steady}) = f (1 − A) S(r) + q,  T_{eq} = [L (1 − A) / (16πσa²)]^{¼}',
     },
   },
+  ...latitudeSolutionRules,
   {
-    when: ({ periodic }) => periodic,
+    when: ({ periodic, asOne }) => periodic && asOne,
     step: {
       words:
         'The orbit that repeats itself is solved for directly, all its steps at once; no start has to fade. The tolerance bounds the relative error of every temperature.',
@@ -142,10 +151,17 @@ export function methodSteps(result: RunResult): Step[] {
 }
 
 function usedBy({ cases }: RunResult): Used {
-  const keys = cases.flatMap(({ inputs }) => inputs.map(({ key }) => key.replace(/\.\d+(?=\.|$)/g, '')));
-  const labels = cases.flatMap(({ states }) => states.map(({ label }) => label));
+  const inputs = cases.flatMap(({ inputs: own }) =>
+    own.map(({ key, text }) => ({ key: key.replace(/\.\d+(?=\.|$)/g, ''), text })),
+  );
+  const keys = inputs.map(({ key }) => key);
+  const states = cases.flatMap(({ states: own }) => own);
+  const labels = states.map(({ label }) => label);
   return {
     has: (wanted) => keys.some((key) => key === wanted || key.startsWith(`${wanted}.`)),
+    says: (wanted, text) => inputs.some((input) => input.key === wanted && input.text === text),
+    byLatitude: states.some(hasLatitude),
+    asOne: !states.every(hasLatitude),
     periodic: labels.some((label) => label !== 'forward'),
     forward: labels.includes('forward'),
     habitableLimits: keys.some((key) => /^windows\..*\.habitable$/.test(key)),
@@ -153,8 +169,24 @@ function usedBy({ cases }: RunResult): Used {
 }
 
 /** The usual cautions: they stand beside every page of numbers. */
-export const cautions: readonly string[] = [
-  'No clouds, no winds or currents, no chemistry: one temperature stands for the whole surface, and real worlds move heat, cover themselves and change what they are made of.',
+export function cautions(result: RunResult): string[] {
+  const { asOne, byLatitude } = usedBy(result);
+  return [
+    ...(asOne
+      ? [
+          'No clouds, no winds or currents, no chemistry: one temperature stands for the whole surface, and real worlds move heat, cover themselves and change what they are made of.',
+        ]
+      : []),
+    ...(byLatitude
+      ? [
+          'By latitude, one temperature stands for the whole circle and the whole day: no clouds, no mountains, no weather; winds and currents are a single number D that spreads heat as if it diffused.',
+        ]
+      : []),
+    ...alwaysSaid,
+  ];
+}
+
+const alwaysSaid: readonly string[] = [
   'These are planning figures. They are no basis for qualifying hardware or for anyone’s safety: that is for licensed practice and test.',
   'Times for observing come from the observatory’s own tools; a date here is as good as the orbit it was made from.',
   'A “±” is the numerical error of the solution and says nothing of how well the inputs are known.',

@@ -36,6 +36,7 @@ export function exact(value: number): string {
 /** `W/m2/K` as `W m⁻² K⁻¹`, a pure number as nothing. */
 export function unitText(unit: string): string {
   if (unit === '1') return '';
+  if (unit === 'S0') return 'S₀'; // a name, no power
   const [head, ...below] = unit.split('/') as [string, ...string[]];
   return [raisedDigits(head), ...below.map(inverted)].join(nbsp);
 }

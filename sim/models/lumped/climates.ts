@@ -1,7 +1,8 @@
 /** Ice–albedo worlds: every periodic state that one orbit allows, from the warmest to the coldest, stable or not. */
+
+import { steadyAtAlbedo } from '../../findings/steadyState.ts';
 import { periodicStates } from '../../solve/periodicStates.ts';
 import type { World } from '../../world.ts';
-import { steadyAtAlbedo } from '../steadyState.ts';
 import { instellationAtAxis, lumpedEquation } from './problem.ts';
 import type { Trajectory } from './trajectory.ts';
 

@@ -10,6 +10,7 @@ import type { Flux, Metres, Radians, Seconds } from '../../si.ts';
 import { forcingPoint } from '../../solve/separable.ts';
 import type { World } from '../../world.ts';
 import { instellationAtAxis } from './problem.ts';
+import type { Trajectory } from './trajectory.ts';
 
 export interface OrbitClock {
   /** Mean anomaly at s, rad; increasing, through any number of orbits. */
@@ -42,4 +43,12 @@ export function orbitClock(world: World): OrbitClock {
     instellation: (s) => atAxis / distanceRatioFromBalanced(s, eccentricity) ** 2,
     fromMean: (mean) => balancedFromMean(mean, eccentricity),
   };
+}
+
+/** Seconds after periapsis within the orbit, or after the start of a forward run. */
+export function timeAt(trajectory: Trajectory, clock: OrbitClock, s: Radians): Seconds {
+  const since = clock.mean(s) - clock.mean(trajectory.curve.position[0]);
+  const turn = 2 * Math.PI;
+  const folded = trajectory.logMultiplier === null ? since : since - turn * Math.floor(since / turn);
+  return folded * clock.secondsPerRadian;
 }

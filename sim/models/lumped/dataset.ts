@@ -1,8 +1,8 @@
 /** A trajectory as rows: the Dataset of the lumped model (names and units in `dataset/names.ts`). */
 import { type Dataset, series } from '../../dataset/dataset.ts';
+import { steadyTemperature } from '../../findings/steadyState.ts';
 import { type Curve, curveValuesInto } from '../../solve/curve.ts';
 import type { SolveOptions, World } from '../../world.ts';
-import { steadyTemperature } from '../steadyState.ts';
 import type { OrbitClock } from './clock.ts';
 
 type Sampling = Pick<SolveOptions, 'samples' | 'spacing'>;

@@ -1,4 +1,6 @@
 /** The energy account of a trajectory by Gauss–Legendre quadrature, which no solver here uses. */
+
+import { accountReference } from '../../findings/accountReference.ts';
 import type { Curve } from '../../solve/curve.ts';
 import { integrate } from '../../solve/features.ts';
 import type { World } from '../../world.ts';
@@ -20,7 +22,7 @@ export function energyBalance(world: World, curve: Curve, clock: OrbitClock): En
   const rise = curve.value[curve.value.length - 1] - curve.value[0];
   const stored = (surface.heatCapacity * rise) / (span * clock.secondsPerRadian);
   const internalHeat = surface.internalHeat;
-  const reference = absorbed > 0 ? absorbed : internalHeat;
+  const reference = accountReference(absorbed, emitted, stored);
   const relativeDifference = Math.abs(absorbed + internalHeat - emitted - stored) / reference;
   return { absorbed, internalHeat, emitted, stored, relativeDifference };
 }

@@ -3,14 +3,14 @@
  * the root of dN/ds = f(1−A) dS/ds − (E′ + f S A′) dT/ds, found to rounding rather than read off samples.
  */
 import type { Finding } from '../../findings/finding.ts';
+import { netHeating } from '../../findings/steadyState.ts';
 import { forcingAt } from '../../orbit/forcing.ts';
-import type { Kelvin, Radians } from '../../si.ts';
-import { type Curve, curveValue, emptyPiece, loadPiece, pieceValue } from '../../solve/curve.ts';
+import type { Radians } from '../../si.ts';
+import { type Curve, curveValue, curveValuesInto } from '../../solve/curve.ts';
 import { rootBetween } from '../../solve/roots.ts';
 import { forcingPoint } from '../../solve/separable.ts';
 import type { World } from '../../world.ts';
-import { netHeating } from '../steadyState.ts';
-import type { OrbitClock } from './clock.ts';
+import { type OrbitClock, timeAt } from './clock.ts';
 import { instellationAtAxis, pacing } from './problem.ts';
 import type { Trajectory } from './trajectory.ts';
 
@@ -42,38 +42,52 @@ function fastest(
     ];
   }
   const { curve, errorEstimate } = trajectory;
-  const s = placeOfFastest(world, curve, clock, sign);
+  const s = placeOfFastest(world, trajectory, clock, sign);
   const temperature = curveValue(curve, s);
   const flux = clock.instellation(s);
   const { heatCapacity } = world.surface;
   const value = netHeating(world.surface, flux, temperature) / heatCapacity;
   const shifted = netHeating(world.surface, flux, temperature * (1 + errorEstimate)) / heatCapacity;
-  const since = clock.mean(s) - clock.mean(curve.position[0]);
   return [
     { ...rate, value, plusMinus: Math.abs(shifted - value) },
-    { ...time, value: since * clock.secondsPerRadian },
+    { ...time, value: timeAt(trajectory, clock, s) },
   ];
 }
 
-function placeOfFastest(world: World, curve: Curve, clock: OrbitClock, sign: 1 | -1): Radians {
-  const positions: Radians[] = [];
-  const temperatures: Kelvin[] = [];
-  const piece = emptyPiece();
-  for (let index = 0; index + 1 < curve.position.length; index++) {
-    loadPiece(curve, index, piece);
-    for (let k = 0; k <= samplesPerPiece; k++) {
-      const x = k / samplesPerPiece;
-      positions.push(piece.left + x * piece.width);
-      temperatures.push(pieceValue(piece, x));
-    }
-  }
+/** The best of the samples, and then the root of the change of heating beside it. */
+function placeOfFastest(world: World, { curve, logMultiplier }: Trajectory, clock: OrbitClock, sign: 1 | -1): Radians {
+  const positions = samplePositions(curve);
+  const temperatures = new Float64Array(positions.length);
+  curveValuesInto(curve, positions, temperatures);
   const heating = positions.map((s, i) => sign * netHeating(world.surface, clock.instellation(s), temperatures[i]));
   let best = 0;
   for (let i = 1; i < heating.length; i++) if (heating[i] > heating[best]) best = i;
   const change = changeOfHeating(world, curve);
-  const low = positions[Math.max(0, best - 1)];
-  const high = positions[Math.min(positions.length - 1, best + 1)];
-  return sign * change(low) > 0 && sign * change(high) < 0 ? rootBetween(change, low, high) : positions[best];
+  const last = positions.length - 1;
+  const isPeriodic = logMultiplier !== null;
+  // Index of the left sample of the intervals before and after; round the orbit where that closes.
+  const before = best > 0 ? best - 1 : isPeriodic ? last - 1 : best;
+  const after = best < last ? best : isPeriodic ? 0 : best - 1;
+  for (const left of [before, after]) {
+    const low = positions[left];
+    const high = positions[left + 1];
+    if (sign * change(low) > 0 && sign * change(high) < 0) return rootBetween(change, low, high);
+  }
+  return positions[best];
+}
+
+/** Several places in every piece, and the end; increasing. */
+function samplePositions({ position }: Curve): Float64Array {
+  const pieces = position.length - 1;
+  const positions = new Float64Array(samplesPerPiece * pieces + 1);
+  for (let index = 0; index < pieces; index++) {
+    const width = position[index + 1] - position[index];
+    for (let k = 0; k < samplesPerPiece; k++) {
+      positions[samplesPerPiece * index + k] = position[index] + (k / samplesPerPiece) * width;
+    }
+  }
+  positions[samplesPerPiece * pieces] = position[pieces];
+  return positions;
 }
 
 /** dN/ds along the curve. */

@@ -1,24 +1,24 @@
 /** What people quote of a trajectory. Times are found as roots of the rate, never as the largest sample. */
 import { stefanBoltzmann } from '../../constants.ts';
 import type { Finding } from '../../findings/finding.ts';
-import { orbitMeanClosedForm } from '../../findings/orbitMean.ts';
+import { instellationWindowFindings } from '../../findings/instellationWindow.ts';
+import { netHeating } from '../../findings/steadyState.ts';
 import { worldFindings } from '../../findings/world.ts';
 import type { Kelvin, Radians, Seconds } from '../../si.ts';
 import { type Curve, curveValue } from '../../solve/curve.ts';
 import { extremes, integrate, shareBetween, type TurningPoint } from '../../solve/features.ts';
 import type { Window, World } from '../../world.ts';
-import { netHeating } from '../steadyState.ts';
-import type { OrbitClock } from './clock.ts';
+import { type OrbitClock, timeAt } from './clock.ts';
 import { fastestChanges } from './fastest.ts';
 import { pacing } from './problem.ts';
 import { type SteadySeries, steadySeries } from './steadySeries.ts';
 import type { Trajectory } from './trajectory.ts';
-import { instellationShare } from './windows.ts';
 
 /** A time of an extreme counts as undefined when its own error is larger than this share of an orbit. */
 const largestTimeError = 0.02;
 /** A swing below this share of the temperature is rounding. */
 const smallestSwing = 1e-13;
+const notPeriodic = 'a run from a start is not periodic';
 const circular = 'the instellation does not vary on a circular orbit';
 
 export function lumpedFindings(
@@ -49,29 +49,31 @@ export function lumpedFindings(
     kelvin('temperatureMean', mean, 'Mean temperature'),
     ...timing(world, trajectory, clock, steady, highest, lowest, moving),
     harmonicLag(world, trajectory, clock, steady, moving),
-    damping(swing, steady, error(highest.value) + error(lowest.value)),
-    kelvin(
-      'emissionTemperatureMean',
-      meanOver(curve, clock, (temperature) => (world.surface.emission.at(temperature) / stefanBoltzmann) ** 0.25),
-      'Mean emission temperature',
-    ),
+    damping(trajectory, swing, steady, error(highest.value) + error(lowest.value)),
+    emissionTemperature(world, curve, clock, error),
     ...fastestChanges(world, trajectory, clock, moving),
     ...windows.flatMap((window) => windowFindings(world, curve, clock, window)),
   ];
 }
 
+/** Null where a linear law, far below its range, emits less than nothing: only a run from a cold start gets there. */
+function emissionTemperature(
+  world: World,
+  curve: Curve,
+  clock: OrbitClock,
+  error: (temperature: Kelvin) => Kelvin,
+): Finding {
+  const base = { name: 'emissionTemperatureMean', unit: 'K', label: 'Mean emission temperature' };
+  const { emission } = world.surface;
+  const value = meanOver(curve, clock, (temperature) => (emission.at(temperature) / stefanBoltzmann) ** 0.25);
+  return Number.isFinite(value)
+    ? { ...base, value, plusMinus: error(value) }
+    : { ...base, value: null, reason: 'the emission law falls below zero at the lowest temperatures' };
+}
+
 function meanOver(curve: Curve, clock: OrbitClock, f: (temperature: Kelvin) => number): number {
   const span = clock.mean(curve.position[curve.position.length - 1]) - clock.mean(curve.position[0]);
   return integrate(curve, (s, temperature) => f(temperature) * clock.pace(s)) / span;
-}
-
-/** Seconds after periapsis within the orbit, or after the start of a forward run. */
-function timeAt(trajectory: Trajectory, clock: OrbitClock, s: Radians): Seconds {
-  const { position } = trajectory.curve;
-  const since = clock.mean(s) - clock.mean(position[0]);
-  const turn = 2 * Math.PI;
-  const folded = trajectory.logMultiplier === null ? since : since - turn * Math.floor(since / turn);
-  return folded * clock.secondsPerRadian;
 }
 
 /**
@@ -127,13 +129,30 @@ function timing(
     const plusMinus = moving ? errorOf(point) : Number.POSITIVE_INFINITY;
     const base = { name, unit: 's', label };
     if (!moving) return { ...base, value: null, reason: still };
+    const end = endOfRun(trajectory, point);
+    if (end === runEnd) return { ...base, value: null, reason: 'the run ends before the temperature turns' };
+    if (end === runStart) return { ...base, value: 0, plusMinus: 0 };
     if (!(plusMinus <= largestTimeError * period)) return { ...base, value: null, reason: tooFlat };
     return { ...base, value: timeAt(trajectory, clock, point.position), plusMinus };
   };
   const timeOfMax = when('timeOfMax', `Time of maximum, ${since}`, highest);
   const timeOfMin = when('timeOfMin', `Time of minimum, ${since}`, lowest);
-  const atStart = trajectory.logMultiplier === null && highest.position === trajectory.curve.position[0];
-  return [timeOfMax, timeOfMin, ...lagFindings(world, clock, steady, highest, timeOfMax, atStart)];
+  return [
+    timeOfMax,
+    timeOfMin,
+    ...lagFindings(world, clock, steady, highest, timeOfMax, endOfRun(trajectory, highest)),
+  ];
+}
+
+const runStart = 'the start itself';
+const runEnd = 'the end of the run';
+
+/** Set when a forward run's extreme lies there: no turning point at all. */
+function endOfRun(trajectory: Trajectory, point: TurningPoint): string | null {
+  const { position } = trajectory.curve;
+  if (trajectory.logMultiplier !== null) return null;
+  if (point.position === position[0]) return runStart;
+  return point.position === position[position.length - 1] ? runEnd : null;
 }
 
 const tooFlat =
@@ -145,7 +164,7 @@ function lagFindings(
   steady: SteadySeries,
   highest: TurningPoint,
   timeOfMax: Finding,
-  atStart: boolean,
+  end: string | null,
 ): Finding[] {
   const { period } = world.orbit;
   const lag = { name: 'lagOfMax', unit: 's', label: 'Lag of the maximum behind the steady maximum' };
@@ -154,11 +173,13 @@ function lagFindings(
     { ...lag, value: null, reason },
     { ...inOrbits, value: null, reason },
   ];
+  if (end !== null) return undefinedLag(`the maximum is ${end}`);
   if (timeOfMax.value === null) return undefinedLag(timeOfMax.reason ?? tooFlat);
-  if (atStart) return undefinedLag('the maximum is the start itself');
-  const behind = steady.maximumBefore(highest.position);
+  // A maximum that is late by less than its own error may seem to come before the one that it follows.
+  const reach = (timeOfMax.plusMinus ?? 0) / (clock.pace(highest.position) * clock.secondsPerRadian);
+  const behind = steady.maximumBefore(highest.position + reach);
   if (behind === null) return undefinedLag(circular);
-  const value = (clock.mean(highest.position) - clock.mean(behind.position)) * clock.secondsPerRadian;
+  const value = Math.max(0, clock.mean(highest.position) - clock.mean(behind.position)) * clock.secondsPerRadian;
   const plusMinus = (timeOfMax.plusMinus ?? 0) + behind.error * clock.secondsPerRadian;
   return [
     { ...lag, value, plusMinus },
@@ -175,44 +196,38 @@ function harmonicLag(
   moving: boolean,
 ): Finding {
   const base = { name: 'lagOfFirstHarmonic', unit: 's', label: 'Lag of the first harmonic' };
-  if (trajectory.logMultiplier === null) return { ...base, value: null, reason: 'a run from a start is not periodic' };
+  if (trajectory.logMultiplier === null) return { ...base, value: null, reason: notPeriodic };
   if (!moving) return { ...base, value: null, reason: 'the temperature does not vary' };
   const { curve } = trajectory;
   const project = (wave: (mean: Radians) => number) =>
     integrate(curve, (s, temperature) => temperature * wave(clock.mean(s)) * clock.pace(s));
   const phase = Math.atan2(project(Math.sin), project(Math.cos));
-  const difference = phase - steady.harmonicPhase;
+  const difference = phase - steady.harmonicPhase();
   const folded = difference - 2 * Math.PI * Math.round(difference / (2 * Math.PI));
   return { ...base, value: (folded / (2 * Math.PI)) * world.orbit.period };
 }
 
-function damping(swing: Kelvin, steady: SteadySeries, error: Kelvin): Finding {
+function damping(trajectory: Trajectory, swing: Kelvin, steady: SteadySeries, error: Kelvin): Finding {
   const base = { name: 'damping', unit: '1', label: 'Damping (swing over steady swing)' };
+  if (trajectory.logMultiplier === null) return { ...base, value: null, reason: notPeriodic };
   const steadySwing = steady.highest - steady.lowest;
   if (!(steadySwing > smallestSwing * steady.highest)) return { ...base, value: null, reason: circular };
   return { ...base, value: swing / steadySwing, plusMinus: error / steadySwing };
 }
 
+/** Mean anomaly at the curve's two ends. */
+function spanOf(curve: Curve, clock: OrbitClock): [Radians, Radians] {
+  return [clock.mean(curve.position[0]), clock.mean(curve.position[curve.position.length - 1])];
+}
+
 function windowFindings(world: World, curve: Curve, clock: OrbitClock, window: Window): Finding[] {
-  const ofFlux = window.of === 'instellation';
-  const share = {
-    name: `fractionInWindow.${window.name}`,
-    unit: '1',
-    label: ofFlux ? `Time in “${window.name}” (instantaneous instellation)` : `Time in “${window.name}”`,
-  };
-  const mean = {
-    name: `orbitMeanInWindow.${window.name}`,
-    unit: '1',
-    label: `Orbit-mean instellation in “${window.name}” (1 yes, 0 no)`,
-  };
-  if (window.unavailable !== undefined) {
-    const reason = window.unavailable;
-    return [{ ...share, value: null, reason }, ...(ofFlux ? [{ ...mean, value: null, reason }] : [])];
-  }
-  if (!ofFlux) return [{ ...share, value: shareBetween(curve, window.from, window.to, (s) => clock.mean(s)) }];
-  const meanFlux = orbitMeanClosedForm(world);
+  if (window.of === 'instellation') return instellationWindowFindings(world, window, ...spanOf(curve, clock));
   return [
-    { ...share, value: instellationShare(world, curve, clock, window) },
-    { ...mean, value: meanFlux >= window.from && meanFlux <= window.to ? 1 : 0 },
+    {
+      name: `fractionInWindow.${window.name}`,
+      value: shareBetween(curve, window.from, window.to, (s) => clock.mean(s)),
+      unit: '1',
+      label: `Time in “${window.name}”`,
+    },
   ];
 }

@@ -82,6 +82,7 @@ export function lumpedModel(): Model {
 
   return {
     name: 'lumped',
+    asks: { absorbingFraction: true, globe: false, start: true },
     keys: {},
     solve(world, options, windows) {
       requireSomeHeat(world);
@@ -117,7 +118,9 @@ const largestLog = 700;
 function periodicLabel(trajectory: Trajectory, index: number, count: number) {
   const log = trajectory.logMultiplier ?? 0;
   const frozen = trajectory.frozenLogMultiplier ?? 0;
-  const label = count === 1 ? 'only' : index === 0 ? 'warm' : index === count - 1 ? 'cold' : 'middle';
+  // More than three are numbered, so that every state of a case has a name of its own.
+  const between = count > 3 ? `middle ${index}` : 'middle';
+  const label = count === 1 ? 'only' : index === 0 ? 'warm' : index === count - 1 ? 'cold' : between;
   return {
     label,
     stable: log < 0,

@@ -13,7 +13,7 @@ import { firstMeshSize, instellationAtAxis, pacing } from './problem.ts';
 import type { Trajectory } from './trajectory.ts';
 
 /** T₀, φ and κ of a plain world with emission coefficient `c`. */
-export function plainNumbers(world: World, c: number): { scale: number; share: number; rate: number } {
+function plainNumbers(world: World, c: number): { scale: number; share: number; rate: number } {
   const { albedo, absorbingFraction, internalHeat } = world.surface;
   const absorbed = absorbingFraction * (1 - albedo.warm) * instellationAtAxis(world);
   const scale = ((absorbed + internalHeat) / c) ** 0.25;

@@ -1,4 +1,6 @@
 /** The general path: any emission law under a constant albedo, all steps of the orbit at once. */
+
+import { steadyAtAlbedo } from '../../findings/steadyState.ts';
 import { forcingInto } from '../../orbit/forcing.ts';
 import {
   type LawTable,
@@ -7,7 +9,6 @@ import {
   type SeparableTable,
 } from '../../solve/periodicSeparable.ts';
 import type { World } from '../../world.ts';
-import { steadyAtAlbedo } from '../steadyState.ts';
 import { firstMeshSize, instellationAtAxis, pacing } from './problem.ts';
 import type { Trajectory } from './trajectory.ts';
 

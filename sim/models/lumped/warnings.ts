@@ -1,11 +1,16 @@
 /** What a reader of the result must know before using it. */
 import { zeroCelsius } from '../../constants.ts';
+import { curveValue } from '../../solve/curve.ts';
 import { extremes } from '../../solve/features.ts';
 import type { World } from '../../world.ts';
 import type { Trajectory } from './trajectory.ts';
 
 export function lumpedWarnings(world: World, trajectories: readonly Trajectory[], unresolved: number): string[] {
-  return [...emissionWarnings(world, trajectories), ...stateWarnings(world, trajectories, unresolved)];
+  return [
+    ...emissionWarnings(world, trajectories),
+    ...stateWarnings(world, trajectories, unresolved),
+    ...trajectories.flatMap(unsettledWarning),
+  ];
 }
 
 function emissionWarnings(world: World, trajectories: readonly Trajectory[]): string[] {
@@ -48,4 +53,20 @@ function unresolvedWarning(world: World, unresolved: number): string {
     return `${unresolved} unstable periodic state${several} rest${several === '' ? 's' : ''} on the albedo step itself and cannot be followed there; a narrow ramp shows ${several === '' ? 'it' : 'them'}.`;
   }
   return `${unresolved} further periodic state${several} ${several === '' ? 'was' : 'were'} seen but could not be followed to the tolerance.`;
+}
+
+/** A run from a start that has not come to rest: the last orbit ends elsewhere than it began. */
+function unsettledWarning({ curve, logMultiplier, errorEstimate }: Trajectory): string[] {
+  const end = curve.position[curve.position.length - 1];
+  const oneOrbitBefore = end - 2 * Math.PI;
+  if (logMultiplier !== null) return [];
+  if (oneOrbitBefore < curve.position[0])
+    return ['The run is shorter than one orbit: its means are those of the part it covers.'];
+  const last = curve.value[curve.value.length - 1];
+  const change = last - curveValue(curve, oneOrbitBefore);
+  if (Math.abs(change) < Math.max(0.01, 10 * errorEstimate * last)) return [];
+  const direction = change > 0 ? 'warmer' : 'cooler';
+  return [
+    `The run has not settled: its last orbit ends ${Math.abs(change).toPrecision(3)} K ${direction} than it began. Means and extremes are those of the run, not of a settled climate.`,
+  ];
 }

@@ -14,6 +14,8 @@ export interface Given {
   quantity(key: string): Quantity | null;
   /** Marks keys as used. */
   use(...keys: readonly string[]): void;
+  /** Takes the mark away: another input says the same and is used. What needs the key for itself later marks it again. */
+  passOver(...keys: readonly string[]): void;
   /** An error at the value of a key. */
   wrong(key: string, what: string, mend: string): null;
   /** An error at a section that lacks something, unless one of `keys` is there but broken. */
@@ -21,12 +23,15 @@ export interface Given {
   /** Runs a part's factory; its SimError becomes an error of the file. */
   attempt<T>(make: () => T): T | null;
   warn(text: string): void;
+  /** For `check` only. */
+  remark(text: string): void;
   derive(key: string, value: number, unit: string, label: string): void;
 }
 
 export interface Desk extends Given {
   readonly faults: readonly Fault[];
   readonly warnings: readonly string[];
+  readonly remarks: readonly string[];
   readonly derived: readonly Derived[];
   readonly used: ReadonlySet<string>;
 }
@@ -34,6 +39,7 @@ export interface Desk extends Given {
 export function desk(tree: Branch, keys: CaseKeys, broken: ReadonlySet<string>): Desk {
   const faults: Fault[] = [];
   const warnings: string[] = [];
+  const remarks: string[] = [];
   const derived: Derived[] = [];
   const used = new Set<string>();
 
@@ -47,6 +53,7 @@ export function desk(tree: Branch, keys: CaseKeys, broken: ReadonlySet<string>):
     keys,
     faults,
     warnings,
+    remarks,
     derived,
     used,
     has: (key) => {
@@ -60,6 +67,9 @@ export function desk(tree: Branch, keys: CaseKeys, broken: ReadonlySet<string>):
     },
     use: (...names) => {
       for (const name of names) used.add(name);
+    },
+    passOver: (...names) => {
+      for (const name of names) used.delete(name);
     },
     wrong: (key, what, mend) => fault(key.split('.'), false, what, mend),
     missing: (section, names, what, mend) => {
@@ -76,6 +86,9 @@ export function desk(tree: Branch, keys: CaseKeys, broken: ReadonlySet<string>):
     },
     warn: (text) => {
       warnings.push(text);
+    },
+    remark: (text) => {
+      remarks.push(text);
     },
     derive: (key, value, unit, label) => {
       derived.push({ key, value, unit, label });

@@ -14,17 +14,39 @@ const forms = alternatives
   .ways.flat() as (keyof HeatStoreKeys)[];
 const oneForm = 'Write one of heatCapacity, mixedLayer, atmosphere, ground';
 
+/** A key that holds heat stores, and what they are called. */
+export type StoreKey = 'heatStore' | 'landHeatStore' | 'frozenHeatStore';
+
+const namesOf = {
+  heatStore: { missing: 'no heat store is given', capacity: 'heatCapacity', label: 'Heat capacity' },
+  landHeatStore: {
+    missing: 'no heat store of land is given',
+    capacity: 'landHeatCapacity',
+    label: 'Heat capacity of land',
+  },
+  frozenHeatStore: {
+    missing: 'no heat store of frozen sea is given',
+    capacity: 'frozenHeatCapacity',
+    label: 'Heat capacity of frozen sea',
+  },
+} as const;
+
 /** Total heat capacity; null when it cannot be had. `setting` is null while the orbit is not known. */
-export function buildHeatStore(given: Given, setting: GroundSetting | null): ArealHeatCapacity | null {
-  given.use('planet.heatStore');
-  const store = given.keys.planet?.heatStore;
+export function buildHeatStore(
+  given: Given,
+  setting: GroundSetting | null,
+  name: StoreKey = 'heatStore',
+): ArealHeatCapacity | null {
+  given.use(`planet.${name}`);
+  const store = given.keys.planet?.[name];
+  const { missing, capacity: derivedKey, label } = namesOf[name];
   if (!store) {
-    const mend = 'Write heatStore, e.g. { mixedLayer: 20 m }, { heatCapacity: 4e7 J/m2/K }, or an atmosphere or ground';
-    return given.missing('planet', ['heatStore'], 'no heat store is given', mend);
+    const mend = `Write ${name}, e.g. { mixedLayer: 20 m }, { heatCapacity: 4e7 J/m2/K }, or an atmosphere or ground`;
+    return given.missing('planet', [name], missing, mend);
   }
   const stores = Array.isArray(store) ? store : [store];
   const capacities = stores.map((one, index) => {
-    const key = Array.isArray(store) ? `planet.heatStore.${index}` : 'planet.heatStore';
+    const key = Array.isArray(store) ? `planet.${name}.${index}` : `planet.${name}`;
     const capacity = oneCapacity(given, key, one, setting);
     if (capacity !== null && stores.length > 1) {
       given.derive(`${key}.heatCapacity`, capacity, 'J/m2/K', `Heat capacity of ${formOf(one)}`);
@@ -33,7 +55,7 @@ export function buildHeatStore(given: Given, setting: GroundSetting | null): Are
   });
   if (capacities.some((capacity) => capacity === null)) return null;
   const total = capacities.reduce<number>((sum, capacity) => sum + capacity!, 0);
-  given.derive('planet.heatCapacity', total, 'J/m2/K', 'Heat capacity');
+  given.derive(`planet.${derivedKey}`, total, 'J/m2/K', label);
   return total;
 }
 

@@ -1,10 +1,11 @@
 /** Orbit keys → the orbit of a World, and what follows from it. */
+import { metresPerAu } from '../../constants.ts';
 import { orbitMeanInverseSquare } from '../../orbit/averages.ts';
 import type { Orbit } from '../../world.ts';
 import { buildPeriapsisTime } from './epoch.ts';
 import type { Given } from './given.ts';
 import { buildShape, type Shape } from './shape.ts';
-import { shownNumber } from './show.ts';
+import { shown, shownNumber } from './show.ts';
 import { buildSize, type Size } from './size.ts';
 import type { StarParts } from './star.ts';
 
@@ -21,6 +22,7 @@ export function buildOrbit(given: Given, star: StarParts): BuiltOrbit | null {
   const size = buildSize(given, star);
   if (!shape || !size) return null;
   deriveOrbit(given, star, shape, size);
+  checkAxis(given, size);
   checkPeriapsis(given, star, shape, size);
   const orbit = {
     semiMajorAxis: size.semiMajorAxis,
@@ -46,6 +48,16 @@ function deriveOrbit(given: Given, star: StarParts, { eccentricity }: Shape, { s
   given.derive('orbit.orbitMeanInstellation', mean, 'W/m2', 'Orbit-mean instellation');
   given.derive('orbit.periapsisInstellation', instellation(near), 'W/m2', 'Instellation at periapsis');
   given.derive('orbit.apoapsisInstellation', instellation(far), 'W/m2', 'Instellation at apoapsis');
+}
+
+/** Wider, passing stars would have taken the planet away. */
+const widestOrbit = 1e5 * metresPerAu;
+
+function checkAxis(given: Given, { semiMajorAxis }: Size): void {
+  if (semiMajorAxis <= widestOrbit) return;
+  given.warn(
+    `A semi-major axis of ${shown(semiMajorAxis, 'au', 3)} is wider than the orbits that stars can hold, some 1e5 au. Is its unit right?`,
+  );
 }
 
 function checkPeriapsis(given: Given, star: StarParts, { eccentricity }: Shape, { semiMajorAxis }: Size): void {

@@ -1,5 +1,5 @@
 /** Sidereal rotation period from any of its forms. */
-import type { Seconds } from '../../si.ts';
+import type { Radians, Seconds } from '../../si.ts';
 import type { RotationPeriod } from '../schema/planet.ts';
 
 /**
@@ -19,9 +19,14 @@ export function siderealPeriod(rotation: RotationPeriod, orbit: { period: Second
   }
 }
 
-/** Time from noon to noon at low obliquity; Infinity for a planet that keeps one face to its star. */
-export function solarDay(sidereal: Seconds, orbitalPeriod: Seconds): Seconds {
-  return 1 / Math.abs(1 / sidereal - 1 / orbitalPeriod);
+/**
+ * Time from noon to noon, over the year; Infinity for a planet that keeps one face to its star. An obliquity above 90° is
+ * retrograde: the star then comes up against the orbit's own turn, and the day is shorter than the rotation.
+ */
+export function solarDay(sidereal: Seconds, orbitalPeriod: Seconds, obliquity: Radians = 0): Seconds {
+  const turns = 1 / sidereal;
+  const orbits = 1 / orbitalPeriod;
+  return 1 / Math.abs(obliquity > Math.PI / 2 ? turns + orbits : turns - orbits);
 }
 
 /** Turns an orbit at which tides no longer change the spin of a planet on a fixed eccentric orbit. */

@@ -25,6 +25,7 @@ export function buildSize(given: Given, star: StarParts): Size | null {
   for (const { key, estimate } of axes.slice(1)) {
     const label = 'Semi-major axis';
     agree(given, { key: `orbit.${key}`, label, unit: 'au', chosen: chosen.estimate, other: estimate });
+    given.passOver(`orbit.${key}`);
   }
   const semiMajorAxis = chosen.estimate.value;
   if (chosen.key !== 'semiMajorAxis') given.derive('orbit.semiMajorAxis', semiMajorAxis, 'm', 'Semi-major axis');
@@ -67,14 +68,14 @@ function axisEstimates(given: Given, star: StarParts, period: Quantity | null, t
     const estimate = { value: axis.value, relativeSigma: relativeSigma(axis), source, isGiven: true as const };
     found.push({ key: 'semiMajorAxis', estimate });
   }
-  const scaled = scaledAxis(given, star.radius);
+  const scaled = scaledAxis(given, star);
   if (scaled) found.push({ key: 'scaledSemiMajorAxis', estimate: scaled });
   const lit = litAxis(given, star.luminosity);
   if (lit) found.push({ key: 'instellation', estimate: lit });
   return found;
 }
 
-function scaledAxis(given: Given, radius: Estimate | null): Estimate | null {
+function scaledAxis(given: Given, { radius, radiusKeys }: StarParts): Estimate | null {
   const scaled = given.quantity('orbit.scaledSemiMajorAxis');
   if (!scaled) return null;
   if (!radius) {
@@ -82,6 +83,7 @@ function scaledAxis(given: Given, radius: Estimate | null): Estimate | null {
     const what = 'a/R* gives an axis only with the radius of the star';
     return given.wrong('orbit.scaledSemiMajorAxis', what, 'Add star.radius, e.g. 0.924 Rsun');
   }
+  given.use(...radiusKeys);
   return {
     value: scaled.value * radius.value,
     relativeSigma: Math.hypot(relativeSigma(scaled), radius.relativeSigma),

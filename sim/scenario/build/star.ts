@@ -9,20 +9,36 @@ export interface StarParts {
   readonly luminosity: Estimate | null;
   readonly temperature: number | null;
   readonly radius: Estimate | null;
+  /** What temperature and radius rest on beside the luminosity: marked as used by what needs them. */
+  readonly temperatureKeys: readonly string[];
+  readonly radiusKeys: readonly string[];
   readonly mass: Estimate | null;
 }
 
 export function buildStar(given: Given): StarParts {
-  const temperature = given.quantity('star.temperature');
-  const radius = given.quantity('star.radius');
+  const { temperature = null, radius = null } = given.keys.star ?? {};
+  checkTemperature(given, temperature);
   const luminosity = buildLuminosity(given, temperature, radius);
   const knownRadius = radius ? estimate('radius', radius) : radiusOf(luminosity, temperature);
+  const radiusKeys = [radius ? 'star.radius' : 'star.temperature'];
   return {
     luminosity,
     temperature: temperature?.value ?? temperatureOf(given, luminosity, radius),
     radius: knownRadius,
-    mass: buildMass(given, knownRadius),
+    temperatureKeys: [temperature ? 'star.temperature' : 'star.radius'],
+    radiusKeys,
+    mass: buildMass(given, knownRadius, radiusKeys),
   };
+}
+
+/** From brown dwarfs to the hottest stars that burn hydrogen, K. */
+const [coolestStar, hottestStar] = [2000, 60_000];
+
+function checkTemperature(given: Given, temperature: Quantity | null): void {
+  if (!temperature || (temperature.value >= coolestStar && temperature.value <= hottestStar)) return;
+  given.warn(
+    `A star of ${temperature.text} would be unusual: most have between ${coolestStar} and ${hottestStar} K. Is star.temperature right?`,
+  );
 }
 
 function estimate(name: string, quantity: Quantity): Estimate {
@@ -45,6 +61,7 @@ function buildLuminosity(given: Given, temperature: Quantity | null, radius: Qua
     return direct;
   }
   if (radiated) {
+    given.use('star.temperature', 'star.radius');
     given.derive('star.luminosity', radiated.value, 'W', 'Luminosity');
     return radiated;
   }
@@ -80,7 +97,7 @@ function radiusOf(luminosity: Estimate | null, temperature: Quantity | null): Es
   };
 }
 
-function buildMass(given: Given, radius: Estimate | null): Estimate | null {
+function buildMass(given: Given, radius: Estimate | null, radiusKeys: readonly string[]): Estimate | null {
   const mass = given.quantity('star.mass');
   if (mass) return estimate('star mass', mass);
   const density = given.quantity('star.density');
@@ -93,6 +110,7 @@ function buildMass(given: Given, radius: Estimate | null): Estimate | null {
       'Add star.radius, e.g. 0.924 Rsun, or write star.mass',
     );
   }
+  given.use(...radiusKeys);
   const value = massFromDensity(density.value, radius.value);
   given.derive('star.mass', value, 'kg', 'Star mass');
   return {

@@ -18,11 +18,15 @@ export interface Skin {
   readonly internalHeat: Flux | null;
 }
 
-export function buildSkin(given: Given): Skin {
+/** Light that falls evenly on a whole sphere: its cross-section over its surface. */
+const wholeSphere = 1 / 4;
+
+/** `asksFraction`: the model reads absorbingFraction; for others light falls on a whole sphere. */
+export function buildSkin(given: Given, asksFraction: boolean): Skin {
   return {
     albedo: buildAlbedo(given),
     emission: buildEmission(given),
-    absorbingFraction: given.quantity('planet.absorbingFraction')?.value ?? null,
+    absorbingFraction: asksFraction ? (given.quantity('planet.absorbingFraction')?.value ?? null) : wholeSphere,
     internalHeat: given.quantity('planet.internalHeat')?.value ?? null,
   };
 }
@@ -37,6 +41,11 @@ function buildAlbedo(given: Given): Albedo | null {
     if (from.value > to.value) {
       const what = `from ${from.text} is above to ${to.text}`;
       return given.wrong('planet.albedo.from', what, 'All ice at `from` and below, none at `to` and above: swap them');
+    }
+    if (ice.value < warm.value) {
+      given.warn(
+        `The albedo of ice, ${ice.text}, is below the warm one, ${warm.text}: freezing would darken this planet.`,
+      );
     }
     return given.attempt(() => rampAlbedo({ warm: warm.value, ice: ice.value, from: from.value, to: to.value }));
   }

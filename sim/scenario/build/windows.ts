@@ -4,13 +4,14 @@ import { habitableFlux, habitableTemperatureRange } from '../../star/habitable.t
 import type { Window } from '../../world.ts';
 import type { Given } from './given.ts';
 import { shown } from './show.ts';
+import type { StarParts } from './star.ts';
 
-export function buildWindows(given: Given, starTemperature: Kelvin | null): readonly Window[] {
+export function buildWindows(given: Given, star: StarParts): readonly Window[] {
   given.use('windows');
   return Object.entries(given.keys.windows ?? {}).flatMap(([name, window]) => {
     if (!('habitable' in window)) return [{ name, of: window.of, from: window.from, to: window.to }];
-    given.use('star.temperature');
-    return habitableWindow(given, name, window.habitable as [HabitableName, HabitableName], starTemperature) ?? [];
+    given.use(...star.temperatureKeys);
+    return habitableWindow(given, name, window.habitable as [HabitableName, HabitableName], star.temperature) ?? [];
   });
 }
 
@@ -26,11 +27,18 @@ function habitableWindow(
   if (inner === outer) {
     return given.wrong(`windows.${name}.habitable`, `both limits are ${inner}`, 'Name an inner and an outer limit');
   }
+  if (habitableFlux(inner, sunlike) < habitableFlux(outer, sunlike)) {
+    const what = `${inner} lies farther out than ${outer}`;
+    return given.wrong(`windows.${name}.habitable`, what, `Write the inner limit first: [${outer}, ${inner}]`);
+  }
   const reason = whyNot(temperature);
   if (reason) return { name, of: 'instellation', from: 0, to: 0, unavailable: reason };
   const fluxes = limits.map((limit) => habitableFlux(limit, temperature!));
   return { name, of: 'instellation', from: Math.min(...fluxes), to: Math.max(...fluxes) };
 }
+
+/** Where the limits are compared, K: their order is the same for every star that they are published for. */
+const sunlike: Kelvin = 5780;
 
 function whyNot(temperature: Kelvin | null): string | null {
   if (temperature === null) return 'the habitable limits depend on the temperature of the star, which is not given';

@@ -1,9 +1,13 @@
 /** The keys of one case → a World, how to solve it, and what to tell about it. */
 import { stefanBoltzmann } from '../../constants.ts';
+import { models } from '../../models/index.ts';
+import type { ModelAsks } from '../../models/model.ts';
 import { orbitMeanInverseSquare } from '../../orbit/averages.ts';
-import type { Orbit, SolveOptions, Star, Surface, Window, World } from '../../world.ts';
+import type { Globe, Orbit, SolveOptions, Star, Surface, Window, World } from '../../world.ts';
 import type { Desk, Given } from './given.ts';
+import { buildGlobe } from './globe.ts';
 import { buildHeatStore, surfaceGravity } from './heatStore.ts';
+import { isAllLand } from './land.ts';
 import { buildOrbit } from './orbit.ts';
 import { buildOptions } from './solve.ts';
 import { buildStar, type StarParts } from './star.ts';
@@ -18,21 +22,50 @@ export interface Built {
 
 /** Null when something is missing or wrong: the desk then holds what. */
 export function buildWorld(given: Desk): Built | null {
+  const asks = models[given.keys.model ?? '']?.asks ?? anyModel;
   const parts = buildStar(given);
   const placed = buildOrbit(given, parts);
-  const skin = buildSkin(given);
+  const skin = buildSkin(given, asks.absorbingFraction);
   const star = placed && finishStar(parts, placed.starMass);
   const slope = placed && radiativeSlope(parts, placed.orbit, skin);
-  const heatCapacity = buildHeatStore(given, placed && { ...placed.orbit, radiativeSlope: slope });
-  const windows = buildWindows(given, parts.temperature);
-  const options = buildOptions(given);
+  const ground = placed && { ...placed.orbit, radiativeSlope: slope };
+  const heatCapacity = buildHeatStore(given, ground);
+  const orbit = placed?.orbit ?? null;
+  const globe = asks.globe ? buildGlobe(given, { orbit, ground, albedo: skin.albedo, heatCapacity }) : null;
+  const windows = buildWindows(given, parts);
+  const options = buildOptions(given, asks.start);
   const surface = finishSurface(skin, heatCapacity);
-  if (!placed || !star || !surface || !options) return null;
-  const { orbit } = placed;
+  if (!orbit || !star || !surface || !options || (asks.globe && !globe)) return null;
   derivePlanet(given, star, orbit, surface);
-  const world = { star, orbit, surface };
-  if (!isUsable(world, given)) return null;
+  const world = globe === null ? { star, orbit, surface } : withGlobe(given, { star, orbit, surface }, globe);
+  if (!isUsable(world, given) || !fits(globe, options, given)) return null;
   return { world, options, windows };
+}
+
+/** What a scenario is held to whose model is not known: an error that is told elsewhere. */
+const anyModel: ModelAsks = { absorbingFraction: true, globe: false, start: true };
+
+/** A globe of land alone has one heat store, that of the land, and no sea that freezes. */
+function withGlobe(given: Given, world: World, globe: Globe): World {
+  if (globe.land === null || !isAllLand(globe.land)) return { ...world, globe };
+  given.passOver('planet.heatStore', 'planet.frozenHeatStore');
+  const { heatCapacity } = globe.land;
+  return {
+    ...world,
+    surface: { ...world.surface, heatCapacity },
+    globe: { ...globe, land: null, frozenHeatCapacity: null },
+  };
+}
+
+/** Values that one field of latitude and time may have: a hundred megabytes of them stand in a report. */
+const mostFieldValues = 2_000_000;
+
+function fits(globe: Globe | null, { samples }: SolveOptions, given: Given): boolean {
+  const values = (globe?.bands ?? 0) * samples;
+  if (values <= mostFieldValues) return true;
+  const what = `${samples} samples of ${globe?.bands} bands make ${values} values a field, more than ${mostFieldValues}`;
+  given.wrong('solve.samples', what, 'Lower samples or planet.bands');
+  return false;
 }
 
 function finishStar({ luminosity, temperature, radius }: StarParts, mass: number): Star | null {
@@ -64,7 +97,7 @@ function derivePlanet(given: Given, star: Star, orbit: Orbit, { albedo }: Surfac
 }
 
 /** The last guard: numbers that are each in bounds can still overflow, or vanish, together. */
-function isUsable({ star, orbit, surface }: World, given: Desk): boolean {
+function isUsable({ star, orbit, surface, globe }: World, given: Desk): boolean {
   const positive = {
     'star.luminosity': star.luminosity,
     'star.temperature': star.temperature,
@@ -74,6 +107,9 @@ function isUsable({ star, orbit, surface }: World, given: Desk): boolean {
     'orbit.period': orbit.period,
     'orbit.instellation': star.luminosity / (4 * Math.PI * orbit.semiMajorAxis ** 2),
     'planet.heatStore': surface.heatCapacity,
+    'planet.landHeatStore': globe?.land?.heatCapacity ?? null,
+    'planet.frozenHeatStore': globe?.frozenHeatCapacity ?? null,
+    'planet.rotationPeriod': globe?.solarDay ?? null,
   };
   const bad =
     Object.entries(positive).find(([, value]) => value !== null && !(value > 0 && Number.isFinite(value))) ??

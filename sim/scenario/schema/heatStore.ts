@@ -1,7 +1,7 @@
 import * as z from 'zod';
 import { SimError } from '../../error.ts';
 import { nearest, parseQuantity, type Quantity } from '../../quantity/index.ts';
-import { leaf, quantity } from './leaf.ts';
+import { type About, described, leaf, quantity } from './leaf.ts';
 
 /** Over which period ground is warmed: the orbit's, the rotation's, or one that is given. */
 export type GroundCycle = 'orbit' | 'rotation' | Quantity;
@@ -10,6 +10,7 @@ const cycle = leaf<GroundCycle>(readCycle, (value) => (typeof value === 'string'
   title: 'Cycle that warms the ground',
   description: 'orbit, rotation (needs planet.rotationPeriod), or a time',
   examples: ['orbit', 'rotation', '26 h'],
+  takes: 'text',
 });
 
 function readCycle(input: string | number): GroundCycle {
@@ -17,10 +18,25 @@ function readCycle(input: string | number): GroundCycle {
   const text = String(input);
   const meant = /^[A-Za-z]+$/.test(text) ? nearest(text, ['orbit', 'rotation']) : null;
   if (meant) throw new SimError('cycle', `\`${text}\` is not known here`, `Did you mean \`${meant}\``);
+  if (/^(?:solar |sidereal )?(?:day|diurnal|daily)$/i.test(text)) {
+    const mend = "Write rotation for the planet's own day (it needs planet.rotationPeriod), or a time, e.g. 26 h";
+    throw new SimError('cycle', `\`${text}\` does not say whose day`, mend);
+  }
+  if (/^(?:year|yearly|annual)$/i.test(text)) {
+    throw new SimError(
+      'cycle',
+      `\`${text}\` is not known here`,
+      "Write orbit for the planet's own year, or a time, e.g. 130 d",
+    );
+  }
+  if (/^[A-Za-z]+$/.test(text)) {
+    throw new SimError('cycle', `\`${text}\` is not known here`, 'Write orbit, rotation, or a time, e.g. 26 h');
+  }
   return parseQuantity(input, { dimension: 'time', positive: true });
 }
 
-const oneStore = z
+/** One form of heat store. */
+export const oneStore = z
   .strictObject({
     heatCapacity: quantity(
       { dimension: 'arealHeatCapacity', positive: true },
@@ -82,7 +98,12 @@ const oneStore = z
 
 export type HeatStoreKeys = z.output<typeof oneStore>;
 
-export const heatStoreSchema = z.union([oneStore, z.array(oneStore).min(1)]).meta({
+/** A key that takes one form, or a list of forms that add up. */
+export function heatStore(about: About) {
+  return described(z.union([oneStore, z.array(oneStore).min(1)]), about);
+}
+
+export const heatStoreSchema = heatStore({
   title: 'Heat store',
   description: 'What stores heat under the surface or above it: one form, or a list of forms that add up',
   examples: ['{ mixedLayer: 20 m }', '{ heatCapacity: 4e7 J/m2/K }'],

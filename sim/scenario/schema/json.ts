@@ -1,9 +1,15 @@
 /** The whole scenario file as JSON Schema (draft 7), for editors. From the input side: text and numbers as they are typed. */
 import * as z from 'zod';
+import { quantityPattern, unitsInWords } from '../../quantity/index.ts';
+import { oneStore } from './heatStore.ts';
 import type { About } from './leaf.ts';
 import { caseSchema, headSchema } from './scenario.ts';
+import { emissionSchema } from './surface.ts';
 
 type Json = { [key: string]: unknown };
+
+/** Sections that say one of several things. */
+const alone: ReadonlySet<z.core.$ZodType> = new Set([oneStore, emissionSchema]);
 
 /** Plain JSON. Cases may hold any part of a scenario, and null to remove a key. */
 export function scenarioJsonSchema(): Json {
@@ -36,11 +42,24 @@ function properties(schema: z.ZodObject): Json {
     target: 'draft-7',
     override: ({ zodSchema, jsonSchema }) => {
       // A converted value loses its examples, which are given as they are typed.
-      const examples = (z.globalRegistry.get(zodSchema) as About | undefined)?.examples;
-      if (examples) jsonSchema.examples = [...examples];
+      const about = z.globalRegistry.get(zodSchema) as About | undefined;
+      if (about?.examples) jsonSchema.examples = [...about.examples];
+      if (about?.takes) asText(jsonSchema as Json, about.takes);
+      if (alone.has(zodSchema)) Object.assign(jsonSchema, { minProperties: 1, maxProperties: 1 });
     },
   });
   return (json as Json).properties as Json;
+}
+
+/** A number with a dimension is text: without its unit it is not understood. Pure numbers stay text or number. */
+function asText(schema: Json, takes: NonNullable<About['takes']>): void {
+  Reflect.deleteProperty(schema, 'takes');
+  if (takes !== 'text' && takes.dimension === 'number') return;
+  Reflect.deleteProperty(schema, 'anyOf');
+  schema.type = 'string';
+  if (takes === 'text') return;
+  schema.pattern = quantityPattern(takes);
+  schema.description = `${schema.description}. Units: ${unitsInWords(takes)}`;
 }
 
 /** What a case may say of a key: the same, in part, or null. */
@@ -50,7 +69,7 @@ function asChange(schema: Json): Json {
 }
 
 function inPart(schema: Json): Json {
-  const { required: _, ...part } = schema;
+  const { required: _required, minProperties: _least, maxProperties: _most, ...part } = schema;
   const { properties: keys, anyOf, additionalProperties: others } = part as { [key: string]: unknown };
   return {
     ...part,

@@ -9,6 +9,8 @@ export interface About {
   readonly title: string;
   readonly description: string;
   readonly examples: readonly (string | number)[];
+  /** What the key takes where that is a quantity; `text` where a bare number is never understood. */
+  readonly takes?: QuantitySpec | 'text';
 }
 
 /** Writes down what a schema says of itself. (`.meta()` would copy it: half of the time it takes to start.) */
@@ -46,7 +48,7 @@ export function quantity(spec: QuantitySpec, about: About) {
       throw error instanceof SimError ? withOwnExample(error, input, about) : error;
     }
   };
-  return leaf<Quantity>(read, ({ text }) => text, about);
+  return leaf<Quantity>(read, ({ text }) => text, { ...about, takes: spec });
 }
 
 /** The reader offers units by dimension; a key knows better which is usual: an ocean is deep in m, not in au. */
@@ -64,7 +66,7 @@ export function instant(about: About) {
   return leaf<Instant>(
     (input) => parseInstant(String(input)),
     ({ text }) => text,
-    about,
+    { ...about, takes: 'text' },
   );
 }
 

@@ -1,9 +1,18 @@
 /** Asks the schema about a key: does it exist, what is it called, which keys stand beside it. */
 import * as z from 'zod';
+import type { QuantitySpec } from '../../quantity/index.ts';
 import type { About } from './leaf.ts';
 import { caseSchema, headSchema } from './scenario.ts';
 
 const fileSchema = caseSchema.extend(headSchema.shape);
+
+/** In the order of a file. `cases` holds whole scenarios in part, so that no schema declares it; `$schema` is for editors. */
+const topKeys = topOrder([...Object.keys(headSchema.shape), ...Object.keys(caseSchema.shape), 'cases']);
+
+function topOrder(keys: readonly string[]): readonly string[] {
+  const order = ['title', 'notes', 'model', 'star', 'orbit', 'planet', 'cases', 'windows', 'solve'];
+  return [...order, ...keys.filter((key) => !order.includes(key) && key !== '$schema')];
+}
 
 /** The sections whose keys are fixed. */
 const sections = ['star', 'orbit', 'planet', 'solve'] as const;
@@ -25,8 +34,46 @@ export function isKnownKey(path: readonly string[]): boolean {
 
 /** Keys that may stand in a section, in the order in which they are declared. */
 export function keysIn(path: readonly string[]): readonly string[] {
-  const found = path.length ? schemaAt(path) : fileSchema;
+  if (!path.length) return topKeys;
+  const found = schemaAt(path);
   return found ? objectsIn(found).flatMap((object) => Object.keys(object.shape)) : [];
+}
+
+/** How papers write a key: what a user most likely means who types the symbol. */
+const symbols: Readonly<Record<string, Readonly<Record<string, string>>>> = {
+  star: {
+    L: 'luminosity',
+    lum: 'luminosity',
+    T: 'temperature',
+    Teff: 'temperature',
+    R: 'radius',
+    M: 'mass',
+    rho: 'density',
+  },
+  orbit: {
+    a: 'semiMajorAxis',
+    sma: 'semiMajorAxis',
+    e: 'eccentricity',
+    ecc: 'eccentricity',
+    P: 'period',
+    i: 'inclination',
+    inc: 'inclination',
+    w: 'argumentOfPeriapsis',
+    omega: 'argumentOfPeriapsis',
+    S: 'instellation',
+    aR: 'scaledSemiMajorAxis',
+    T0: 'transitTime',
+    Tc: 'transitTime',
+    Tp: 'periapsisTime',
+    Tperi: 'periapsisTime',
+  },
+  planet: { A: 'bondAlbedo', R: 'radius', M: 'mass', f: 'absorbingFraction' },
+};
+
+/** The key of a section that a symbol stands for; null for a word that is no symbol. */
+export function keyOfSymbol(path: readonly string[], symbol: string): string | null {
+  const known = path.length === 1 ? symbols[path[0]!] : undefined;
+  return known && Object.hasOwn(known, symbol) ? known[symbol]! : null;
 }
 
 /** The section in which a key belongs that stands in the wrong one. */
@@ -34,7 +81,21 @@ export function sectionOf(key: string): string | null {
   return sections.find((section) => keysIn([section]).includes(key)) ?? null;
 }
 
+/** What a key takes where it may be one number; null for words, counts, dates, tables and sections. */
+export function quantityAt(path: readonly string[]): QuantitySpec | null {
+  const found = schemaAt(path);
+  return found && takenBy(found);
+}
+
 type Schema = z.core.$ZodType;
+
+function takenBy(schema: Schema): QuantitySpec | null {
+  const bare = unwrap(schema);
+  const takes = (z.globalRegistry.get(bare) as About | undefined)?.takes;
+  if (takes !== undefined) return takes === 'text' ? null : takes;
+  if (!(bare instanceof z.ZodUnion)) return null;
+  return bare._zod.def.options.map(takenBy).find((spec) => spec !== null) ?? null;
+}
 
 function schemaAt(path: readonly string[]): Schema | null {
   let here: Schema | null = fileSchema;

@@ -75,5 +75,3 @@ export const orbitSchema = z
     ).optional(),
   })
   .meta({ title: 'Orbit', description: 'Where the planet is' });
-
-export type OrbitKeys = z.output<typeof orbitSchema>;

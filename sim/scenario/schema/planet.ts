@@ -1,6 +1,7 @@
 import * as z from 'zod';
 import { SimError } from '../../error.ts';
 import { nearest, parseQuantity, type Quantity } from '../../quantity/index.ts';
+import { globeShape } from './globe.ts';
 import { heatStoreSchema } from './heatStore.ts';
 import { leaf, quantity } from './leaf.ts';
 import { withModelKeys } from './modelKeys.ts';
@@ -16,6 +17,7 @@ const rotationPeriod = leaf<RotationPeriod>(readRotation, showRotation, {
   title: 'Rotation period',
   description: 'Sidereal; a time, synchronous, pseudoSynchronous, or a resonance such as 3:2 (turns : orbits)',
   examples: ['26 h', 'synchronous', 'pseudoSynchronous', '3:2'],
+  takes: 'text',
 });
 
 function readRotation(input: string | number): RotationPeriod {
@@ -74,6 +76,7 @@ const commonKeys = z.strictObject({
       examples: ['250 deg'],
     },
   ).optional(),
+  ...globeShape,
 });
 
 export const planetSchema = withModelKeys(commonKeys, 'planet').meta({

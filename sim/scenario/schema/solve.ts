@@ -55,5 +55,3 @@ export const solveSchema = withModelKeys(commonKeys, 'solve').meta({
   title: 'Solve',
   description: 'How it is computed',
 });
-
-export type SolveKeys = z.output<typeof solveSchema>;

@@ -37,5 +37,3 @@ export const starSchema = z
     ).optional(),
   })
   .meta({ title: 'Star', description: 'What shines' });
-
-export type StarKeys = z.output<typeof starSchema>;

@@ -8,6 +8,41 @@ const albedo = (title: string, description: string, example: number) =>
 const meltTemperature = (title: string, description: string, example: string) =>
   quantity({ dimension: 'temperature', positive: true }, { title, description, examples: [example] });
 
+/** One emission law. */
+export const emissionSchema = z
+  .strictObject({
+    opticalDepth: quantity(
+      { dimension: 'number', min: 0 },
+      {
+        title: 'Infrared optical depth',
+        description: 'Grey atmosphere over the surface (Eddington): σT⁴/(1 + ¾τ)',
+        examples: [0.83],
+      },
+    ).optional(),
+    linear: z
+      .strictObject({
+        a: quantity(
+          { dimension: 'flux', positive: true },
+          { title: 'Emitted at 0 °C', description: 'A of A + B T, T in °C', examples: ['203.3 W/m2'] },
+        ),
+        b: quantity(
+          { dimension: 'heatTransferCoefficient', positive: true },
+          { title: 'Slope of emission', description: 'B of A + B T', examples: ['2.09 W/m2/K'] },
+        ),
+      })
+      .meta({
+        title: 'Linear emission',
+        description: 'A + B T with T in °C, as it is published; meant for −60 to +50 °C',
+        examples: ['{ a: 203.3 W/m2, b: 2.09 W/m2/K }'],
+      })
+      .optional(),
+  })
+  .meta({
+    title: 'Emission law',
+    description: 'What the planet sends to space: one of opticalDepth and linear',
+    examples: ['{ opticalDepth: 0.83 }', '{ linear: { a: 203.3 W/m2, b: 2.09 W/m2/K } }'],
+  });
+
 export const surfaceShape = {
   bondAlbedo: albedo(
     'Bond albedo',
@@ -39,38 +74,5 @@ export const surfaceShape = {
     { dimension: 'number', above: 0, max: 1 },
     { title: 'Emissivity', description: 'Of a grey surface that sees space: ε σ T⁴', examples: [1] },
   ).optional(),
-  emission: z
-    .strictObject({
-      opticalDepth: quantity(
-        { dimension: 'number', min: 0 },
-        {
-          title: 'Infrared optical depth',
-          description: 'Grey atmosphere over the surface (Eddington): σT⁴/(1 + ¾τ)',
-          examples: [0.83],
-        },
-      ).optional(),
-      linear: z
-        .strictObject({
-          a: quantity(
-            { dimension: 'flux', positive: true },
-            { title: 'Emitted at 0 °C', description: 'A of A + B T, T in °C', examples: ['203.3 W/m2'] },
-          ),
-          b: quantity(
-            { dimension: 'heatTransferCoefficient', positive: true },
-            { title: 'Slope of emission', description: 'B of A + B T', examples: ['2.09 W/m2/K'] },
-          ),
-        })
-        .meta({
-          title: 'Linear emission',
-          description: 'A + B T with T in °C, as it is published; meant for −60 to +50 °C',
-          examples: ['{ a: 203.3 W/m2, b: 2.09 W/m2/K }'],
-        })
-        .optional(),
-    })
-    .meta({
-      title: 'Emission law',
-      description: 'What the planet sends to space: one of opticalDepth and linear',
-      examples: ['{ opticalDepth: 0.83 }', '{ linear: { a: 203.3 W/m2, b: 2.09 W/m2/K } }'],
-    })
-    .optional(),
+  emission: emissionSchema.optional(),
 };

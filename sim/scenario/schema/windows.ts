@@ -15,6 +15,7 @@ const range = leaf<RangeWindow>(readRange, ({ text }) => text, {
   title: 'Range',
   description: 'Two temperatures or two fluxes',
   examples: ['273.15 K to 373.15 K', '0.32 to 1.1 S0'],
+  takes: 'text',
 });
 
 const shape = 'Write two temperatures or two fluxes, e.g. 273.15 K to 373.15 K';

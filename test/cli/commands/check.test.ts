@@ -1,5 +1,5 @@
 /** `check`: what the scenario says, what follows from it, what a run would do. */
-import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, describe, expect, test } from 'vitest';
@@ -61,21 +61,19 @@ Inputs
   star.radius                               0.924 Rsun
   star.mass                                 0.85 Msun
   orbit.semiMajorAxis                       0.48 au
-  orbit.eccentricity                        0.62 ± 0.03           run uses 0.62
+  orbit.eccentricity                        0.62 ± 0.03      run uses 0.62
   orbit.periapsisTime                       2026-03-04T05:00Z
   planet.obliquity                          23 deg
   planet.bondAlbedo                         0.3
-  planet.mass                               0 kg                  default
-  planet.emissivity                         1                     default
-  planet.absorbingFraction                  0.25                  default
-  planet.internalHeat                       0 W/m2                default
+  planet.emissivity                         1                default
+  planet.absorbingFraction                  0.25             default
+  planet.internalHeat                       0 W/m2           default
   windows.liquid water                      273.15 K to 373.15 K
-  model                                     lumped                default
-  solve.tolerance                           1e-6                  default
-  solve.start                               periodic              default
-  solve.samples                             720                   default
-  solve.spacing                             balancedAnomaly       default
-  solve.seed                                1                     default
+  model                                     lumped           default
+  solve.tolerance                           1e-6             default
+  solve.start                               periodic         default
+  solve.samples                             720              default
+  solve.spacing                             balancedAnomaly  default
   sea
     planet.heatStore.mixedLayer             20 m
   rock
@@ -102,16 +100,36 @@ What follows from them
     Heat capacity                            2.0939e6 J/m2/K
 
 Unused
-  planet.obliquity
+  star.temperature, star.radius, planet.obliquity
 
-Warnings
+Remarks
   Luminosity: luminosity 0.52 Lsun is used; 0.52038 Lsun (from temperature 5100 K and radius 0.924
-  Rsun) is 0.073 % off.`);
+  Rsun) is 0.073 % off.
+
+Notes
+  Spreads of inputs are not propagated by run: every input is used at its centre.`);
   });
 
   test.each([40, 60, 80, 120])('fits %i columns', (columns) => {
     for (const line of describeText(eventful, columns).split('\n'))
       expect(textWidth(line)).toBeLessThanOrEqual(columns);
+  });
+
+  test('in a narrow page long texts and their remarks keep their column', () => {
+    const said = describeText(
+      edited(
+        ['0.85 Msun', '0.85 +0.02 -0.03 Msun'],
+        ['{ mixedLayer: 20 m }', '{ heatCapacity: 1e5 to 1e9 J/m2/K log }'],
+      ),
+      72,
+    ).split('\n');
+    const at = said.findIndex((line) => line.includes('0.85 +0.02 -0.03 Msun'));
+    expect(said[at + 1]!.trim()).toBe('run uses 0.85 Msun');
+    expect(said[at + 1]!.indexOf('run')).toBe(said[at]!.indexOf('0.85'));
+    const defaults = said.filter((line) => line.endsWith('  default')).map((line) => line.indexOf('  default'));
+    expect(defaults.length).toBeGreaterThan(5);
+    expect(new Set(defaults).size).toBe(1);
+    expect(said.filter((line) => line.includes('run uses 1e7 J/m2/K'))).toHaveLength(1);
   });
 
   test('plain letters for terminals without Unicode, and nothing that steers a terminal', () => {
@@ -157,6 +175,17 @@ describe('new', () => {
       'scenario.yaml: the file is there already. Name another file, or remove it first.',
     );
     expect(readFileSync(join(folder, 'scenario.yaml'), 'utf8')).toBe(written);
+  });
+
+  test('a JSON file is refused: it could not hold the comments', async () => {
+    await expect(newScenario('mine.json', testIo())).rejects.toThrow(
+      'mine.json: the starter explains itself in comments, which JSON has not. Name it mine.yaml: run reads both.',
+    );
+    expect(existsSync(join(folder, 'mine.json'))).toBe(false);
+  });
+
+  test('the starter writes nothing that stays unused', () => {
+    expect(describeText(starterScenario())).not.toContain('Unused');
   });
 
   test('a folder that is not there', async () => {

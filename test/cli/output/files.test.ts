@@ -65,7 +65,7 @@ test('CSV fields are quoted where they must be', () => {
 test('summary.json: the shape of the contract', () => {
   const result = fixtureResult([{ name: 'bare rock', lagOrbits: null, warnings: ['careful'] }]);
   const summary = JSON.parse(summaryText(result));
-  expect(Object.keys(summary)).toEqual(['program', 'scenario', 'cases']);
+  expect(Object.keys(summary)).toEqual(['program', 'scenario', 'cases', 'notes']);
   expect(summary.program).toEqual({ name: 'perilag', version: '9.8.7' });
   expect(summary.scenario).toEqual({
     title: 'Corvane b under three ground assumptions',

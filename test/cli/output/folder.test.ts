@@ -1,3 +1,4 @@
+import { existsSync } from 'node:fs';
 import { mkdir, mkdtemp, readdir, readFile, rm, writeFile } from 'node:fs/promises';
 import { hostname, tmpdir } from 'node:os';
 import { join } from 'node:path';
@@ -39,6 +40,28 @@ describe('writeFolder', () => {
     await expect(writeFolder(file, files)).rejects.toThrow(`${file}: a file stands where the output folder should be.`);
     await expect(writeFolder(join(file, 'sub'), files)).rejects.toThrow('a part of this path is a file, not a folder');
     expect(await readFile(file, 'utf8')).toBe('precious');
+  });
+
+  test.skipIf(!existsSync('/proc/self'))(
+    'where the system lets no folder be made: an error, and no endless wait',
+    async () => {
+      await expect(writeFolder('/proc/perilag-test', files)).rejects.toThrow('the output folder cannot be made here');
+      await expect(writeFolder('/proc/perilag-test/deep/er', files)).rejects.toThrow(SimError);
+    },
+  );
+
+  test('folders made on the way to one that cannot be made are removed again', async () => {
+    const long = join(home, 'x', 'y', 'z'.repeat(300));
+    await expect(writeFolder(long, files)).rejects.toThrow('this path is too long');
+    const tooLong = writeFolder(join(home, 'x', 'n'.repeat(200), 'z'.repeat(300)), files);
+    await expect(tooLong).rejects.toThrow('this path is too long');
+    expect(await readdir(home)).toEqual([]);
+  });
+
+  test('two runs that make the same folders at once both finish', async () => {
+    const folder = (name: string) => join(home, 'a', 'b', 'c', name);
+    await Promise.all(['one', 'two', 'three'].map((name) => writeFolder(folder(name), files)));
+    expect((await readdir(join(home, 'a', 'b', 'c'))).sort()).toEqual(['one', 'three', 'two']);
   });
 
   test('a folder where a file should go is found before anything is replaced', async () => {

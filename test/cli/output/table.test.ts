@@ -128,6 +128,8 @@ describe('table', () => {
     expect(coloured({ NO_COLOR: '1' }, true)).toBe(false);
     expect(coloured({ FORCE_COLOR: '1' }, false)).toBe(true);
     expect(coloured({ FORCE_COLOR: '0' }, true)).toBe(false);
+    expect(coloured({ FORCE_COLOR: '1', TERM: 'dumb' }, true)).toBe(false);
+    expect(coloured({ TERM: 'dumb' }, true)).toBe(false);
     expect(coloured({ TERM: 'dumb' }, true)).toBe(false);
   });
 

@@ -23,5 +23,6 @@ test('hanging indents what follows, and puts a long head above', () => {
 
 test('what could steer a terminal is replaced; ASCII spells what it can', () => {
   expect(printable('a\u001b[2Jb\u0007\u009bc\nd')).toBe('a?[2Jb??c\nd');
+  expect(printable('a\u202eb\u2066c👩\u200d🚀')).toBe('a?b?c👩\u200d🚀'); // direction marks; the joiner of an emoji stays
   expect(toAscii('naïve — 3 ± 0.1 ≤ µ日')).toBe('naive - 3 +/- 0.1 <= u?');
 });

@@ -1,7 +1,7 @@
 import { Buffer } from 'node:buffer';
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { fromPortable, toPortable } from '../../../sim/dataset/portable.ts';
+import { fromPortable, fromPortableLazily, longestExact, toPortable } from '../../../sim/dataset/portable.ts';
 
 const finite = fc.double({ noNaN: true, noDefaultInfinity: true });
 const throughJson = (value: unknown) => fromPortable(JSON.parse(JSON.stringify(toPortable(value))));
@@ -61,5 +61,47 @@ describe('portable', () => {
     expect(() => toPortable({ law: () => 0 })).toThrow('a function cannot be stored');
     expect(() => toPortable({ variables: { f8: 'text' } })).toThrow('would be read back as numbers');
     expect(() => fromPortable({ f8: 'AAAA' })).toThrow('cut short');
+  });
+});
+
+test('long fields go in single precision', () => {
+  const field = Float64Array.from({ length: longestExact + 1 }, (_, i) => 250 + Math.sin(i));
+  const stored = toPortable({ field }) as { field: { f4: string } };
+  expect(Object.keys(stored.field)).toEqual(['f4']);
+  const { field: read } = fromPortable<{ field: Float64Array }>(JSON.parse(JSON.stringify(stored)));
+  expect(read).toHaveLength(field.length);
+  // Half a unit in the last of 24 binary digits.
+  for (const [i, value] of field.entries()) expect(Math.abs(read[i] / value - 1)).toBeLessThan(6e-8);
+});
+
+describe('decoded as it is read', () => {
+  const long = Float64Array.from({ length: longestExact + 1 }, (_, at) => at);
+  const stored = toPortable({
+    name: 'a',
+    long,
+    fields: [{ data: Float64Array.of(1, 2, 3) }],
+    last: Float64Array.of(4),
+  });
+
+  test('is the same data', () => {
+    expect(fromPortableLazily(stored)).toEqual(fromPortable(stored));
+  });
+
+  test('gives one and the same array however often it is read', () => {
+    const { last } = fromPortableLazily<{ last: Float64Array }>(stored);
+    const holder = fromPortableLazily<{ last: Float64Array }>(stored);
+    expect(last).toEqual(Float64Array.of(4));
+    expect(holder.last).toBe(holder.last);
+  });
+
+  test('text that was cut short is refused at once, whatever its length', () => {
+    const { f8 } = toPortable(Float64Array.of(1, 2, 3)) as { f8: string };
+    for (let length = 1; length < f8.length; length++) {
+      expect(() => fromPortableLazily({ data: { f8: f8.slice(0, length) } })).toThrow('cut short');
+    }
+  });
+
+  test('survives a message to a worker as plain data', () => {
+    expect(structuredClone(fromPortableLazily(stored))).toEqual(fromPortable(stored));
   });
 });

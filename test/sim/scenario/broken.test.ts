@@ -126,12 +126,22 @@ const table: readonly Broken[] = [
   {
     name: 'misspelt unit',
     text: edited(['0.48 au', '0.48 aus']),
-    says: ['p.yaml:6:18: orbit.semiMajorAxis: `aus` is not a unit. Did you mean `au`.'],
+    says: ['p.yaml:6:18: orbit.semiMajorAxis: `aus` is not a unit. Did you mean `au`?'],
   },
   {
     name: 'case unit',
-    text: edited(['Lsun', 'lsun']),
-    says: ['p.yaml:3:15: star.luminosity: `lsun` is not a unit. Did you mean `Lsun`.'],
+    text: edited(['20 m', '20 M']),
+    says: ['p.yaml:10:28: planet.heatStore.mixedLayer: `M` is not a unit. Did you mean `m`?'],
+  },
+  {
+    name: 'parsec',
+    text: edited(['0.48 au', '0.48 pc']),
+    says: ['p.yaml:6:18: orbit.semiMajorAxis: `pc` is not a unit. Use `au` or `km` or `m`.'],
+  },
+  {
+    name: 'dex',
+    text: edited(['0.62', '0.62 dex']),
+    says: ['p.yaml:7:17: orbit.eccentricity: `dex` is not a unit. Leave the unit out.'],
   },
   {
     name: 'negative',
@@ -235,14 +245,59 @@ const table: readonly Broken[] = [
     says: ['p.yaml:7:17: orbit.eccentricity: `< 0.7` does not say how sure it is. Write a limit as in `< 0.12 (95%)`.'],
   },
   {
+    name: 'symbols for keys',
+    text: edited(['semiMajorAxis', 'a'], ['eccentricity', 'e'], ['luminosity', 'L']),
+    says: [
+      'p.yaml:3:3: star.L: `L` is not a key of star. Did you mean `luminosity`?',
+      'p.yaml:6:3: orbit.a: `a` is not a key of orbit. Did you mean `semiMajorAxis`?',
+      'p.yaml:7:3: orbit.e: `e` is not a key of orbit. Did you mean `eccentricity`?',
+    ],
+  },
+  {
+    name: 'case for cases',
+    text: `${sound}case:\n  wet: {}\n`,
+    says: ['p.yaml:11:1: case: `case` is not a key of a scenario. Did you mean `cases`?'],
+  },
+  {
+    name: 'Cases for cases',
+    text: `${sound}Cases:\n  wet: {}\n`,
+    says: ['p.yaml:11:1: Cases: `Cases` is not a key of a scenario. Did you mean `cases`?'],
+  },
+  {
+    name: 'cases in a section',
+    text: edited(['  bondAlbedo', '  cases: {}\n  bondAlbedo']),
+    says: ['p.yaml:9:3: planet.cases: `cases` is not a key of planet. It belongs at the top of the file.'],
+  },
+  {
+    name: 'a day as the cycle of ground',
+    text: edited(['{ mixedLayer: 20 m }', '{ ground: { thermalInertia: 9 tiu, cycle: day } }']),
+    says: [
+      "p.yaml:10:56: planet.heatStore.ground.cycle: `day` does not say whose day. Write rotation for the planet's own day (it needs planet.rotationPeriod), or a time, e.g. 26 h.",
+    ],
+  },
+  {
+    name: 'a year as the cycle of ground',
+    text: edited(['{ mixedLayer: 20 m }', '{ ground: { thermalInertia: 9 tiu, cycle: year } }']),
+    says: [
+      "p.yaml:10:56: planet.heatStore.ground.cycle: `year` is not known here. Write orbit for the planet's own year, or a time, e.g. 130 d.",
+    ],
+  },
+  {
+    name: 'habitable limits the wrong way round',
+    text: `${sound}windows: { hz: { habitable: [maximumGreenhouse, runawayGreenhouse] } }\n`,
+    says: [
+      'p.yaml:11:29: windows.hz.habitable: maximumGreenhouse lies farther out than runawayGreenhouse. Write the inner limit first: [runawayGreenhouse, maximumGreenhouse].',
+    ],
+  },
+  {
     name: 'misspelt key',
     text: edited(['eccentricity', 'eccentricty']),
-    says: ['p.yaml:7:3: orbit.eccentricty: `eccentricty` is not a key of orbit. Did you mean `eccentricity`.'],
+    says: ['p.yaml:7:3: orbit.eccentricty: `eccentricty` is not a key of orbit. Did you mean `eccentricity`?'],
   },
   {
     name: 'misspelt section',
     text: edited(['planet:', 'plannet:']),
-    says: ['p.yaml:8:1: plannet: `plannet` is not a key of a scenario. Did you mean `planet`.'],
+    says: ['p.yaml:8:1: plannet: `plannet` is not a key of a scenario. Did you mean `planet`?'],
   },
   {
     name: 'wrong section',
@@ -256,7 +311,7 @@ const table: readonly Broken[] = [
     name: 'unknown key',
     text: edited(['title: Test', 'colour: red']),
     says: [
-      'p.yaml:1:1: colour: `colour` is not a key of a scenario. Keys here are `model`, `star`, `orbit`, `planet`, `windows`, `solve`, `$schema`, `title`, `notes`.',
+      'p.yaml:1:1: colour: `colour` is not a key of a scenario. Keys here are `title`, `notes`, `model`, `star`, `orbit`, `planet`, `cases`, `windows`, `solve`.',
     ],
   },
   {
@@ -323,7 +378,7 @@ const table: readonly Broken[] = [
   {
     name: 'density misspelt unit',
     text: edited(['mass: 0.85 Msun', 'density: 1 g/ccm']),
-    says: ['p.yaml:4:12: star.density: `ccm` is not a unit. Did you mean `cm`.'],
+    says: ['p.yaml:4:12: star.density: `ccm` is not a unit. Did you mean `cm`?'],
   },
   {
     name: 'no orbit',
@@ -524,7 +579,7 @@ const table: readonly Broken[] = [
   {
     name: 'ramp typo',
     text: edited(['bondAlbedo: 0.3', 'albedo: { warm: 0.3, icy: 0.6, from: 258 K, to: 273 K }']),
-    says: ['p.yaml:9:24: planet.albedo.icy: `icy` is not a key of planet.albedo. Did you mean `ice`.'],
+    says: ['p.yaml:9:24: planet.albedo.icy: `icy` is not a key of planet.albedo. Did you mean `ice`?'],
   },
   {
     name: 'albedo number',
@@ -609,7 +664,7 @@ const table: readonly Broken[] = [
     name: 'form typo',
     text: edited(['{ mixedLayer: 20 m }', '{ mixedLayr: 20 m }']),
     says: [
-      'p.yaml:10:16: planet.heatStore.mixedLayr: `mixedLayr` is not a key of planet.heatStore. Did you mean `mixedLayer`.',
+      'p.yaml:10:16: planet.heatStore.mixedLayr: `mixedLayr` is not a key of planet.heatStore. Did you mean `mixedLayer`?',
     ],
   },
   {
@@ -644,7 +699,7 @@ const table: readonly Broken[] = [
   {
     name: 'cycle typo',
     text: edited(['{ mixedLayer: 20 m }', '{ ground: { thermalInertia: 2200 tiu, cycle: orbital } }']),
-    says: ['p.yaml:10:59: planet.heatStore.ground.cycle: `orbital` is not known here. Did you mean `orbit`.'],
+    says: ['p.yaml:10:59: planet.heatStore.ground.cycle: `orbital` is not known here. Did you mean `orbit`?'],
   },
   {
     name: 'list item bad',
@@ -663,7 +718,7 @@ const table: readonly Broken[] = [
   {
     name: 'rotation typo',
     text: edited(['  heatStore', '  rotationPeriod: synchronus\n  heatStore']),
-    says: ['p.yaml:10:19: planet.rotationPeriod: `synchronus` is not known here. Did you mean `synchronous`.'],
+    says: ['p.yaml:10:19: planet.rotationPeriod: `synchronus` is not known here. Did you mean `synchronous`?'],
   },
   {
     name: 'rotation 3:0',
@@ -707,7 +762,7 @@ const table: readonly Broken[] = [
   {
     name: 'window unit typo',
     text: `${sound}windows: { warm: 300 k to 400 k }\n`,
-    says: ['p.yaml:11:18: windows.warm: `k` is not a unit. Did you mean `K`.'],
+    says: ['p.yaml:11:18: windows.warm: `k` is not a unit. Did you mean `K`?'],
   },
   {
     name: 'window mixed',
@@ -727,7 +782,7 @@ const table: readonly Broken[] = [
     name: 'window limit typo',
     text: `${sound}windows: { warm: { habitable: [runawayGrenhouse, maximumGreenhouse] } }\n`,
     says: [
-      'p.yaml:11:32: windows.warm.habitable.0: `runawayGrenhouse` is not known here. Did you mean `runawayGreenhouse`.',
+      'p.yaml:11:32: windows.warm.habitable.0: `runawayGrenhouse` is not known here. Did you mean `runawayGreenhouse`?',
     ],
   },
   {
@@ -746,7 +801,7 @@ const table: readonly Broken[] = [
     name: 'window key',
     text: `${sound}windows: { warm: { inhabitable: [earlyMars, earlyMars] } }\n`,
     says: [
-      'p.yaml:11:20: windows.warm.inhabitable: `inhabitable` is not a key of windows.warm. Did you mean `habitable`.',
+      'p.yaml:11:20: windows.warm.inhabitable: `inhabitable` is not a key of windows.warm. Did you mean `habitable`?',
     ],
   },
   {
@@ -767,14 +822,14 @@ const table: readonly Broken[] = [
     says: ['p.yaml:11:12: windows: the name is empty. Name it with letters and digits.'],
   },
   {
-    name: 'model zonal',
-    text: `${sound}model: zonal\n`,
-    says: ['p.yaml:11:8: model: no model `zonal` is built. Write `lumped`.'],
+    name: 'model column',
+    text: `${sound}model: column\n`,
+    says: ['p.yaml:11:8: model: no model `column` is built. Write `lumped` or `zonal`.'],
   },
   {
     name: 'model typo',
     text: `${sound}model: lumpd\n`,
-    says: ['p.yaml:11:8: model: no model `lumpd` is built. Write `lumped`.'],
+    says: ['p.yaml:11:8: model: no model `lumpd` is built. Write `lumped` or `zonal`.'],
   },
   {
     name: 'tolerance',
@@ -804,12 +859,12 @@ const table: readonly Broken[] = [
   {
     name: 'spacing',
     text: `${sound}solve: { spacing: tme }\n`,
-    says: ['p.yaml:11:19: solve.spacing: `tme` is not known here. Did you mean `time`.'],
+    says: ['p.yaml:11:19: solve.spacing: `tme` is not known here. Did you mean `time`?'],
   },
   {
     name: 'start word',
     text: `${sound}solve: { start: periodik }\n`,
-    says: ['p.yaml:11:17: solve.start: `periodik` is not known here. Did you mean `periodic`.'],
+    says: ['p.yaml:11:17: solve.start: `periodik` is not known here. Did you mean `periodic`?'],
   },
   {
     name: 'start incomplete',
@@ -826,12 +881,12 @@ const table: readonly Broken[] = [
   {
     name: 'start key',
     text: `${sound}solve: { start: { temperature: 250 K, orbit: 20 } }\n`,
-    says: ['p.yaml:11:39: solve.start.orbit: `orbit` is not a key of solve.start. Did you mean `orbits`.'],
+    says: ['p.yaml:11:39: solve.start.orbit: `orbit` is not a key of solve.start. Did you mean `orbits`?'],
   },
   {
     name: 'solve key',
     text: `${sound}solve: { tolerence: 1e-6 }\n`,
-    says: ['p.yaml:11:10: solve.tolerence: `tolerence` is not a key of solve. Did you mean `tolerance`.'],
+    says: ['p.yaml:11:10: solve.tolerence: `tolerence` is not a key of solve. Did you mean `tolerance`?'],
   },
   {
     name: 'notes as a list',
@@ -876,7 +931,7 @@ const table: readonly Broken[] = [
   {
     name: 'case typo',
     text: `${sound}cases:\n  wet: { planet: { heatStor: { mixedLayer: 9 m } } }\n`,
-    says: ['p.yaml:12:20: cases.wet.planet.heatStor: `heatStor` is not a key of planet. Did you mean `heatStore`.'],
+    says: ['p.yaml:12:20: cases.wet.planet.heatStor: `heatStor` is not a key of planet. Did you mean `heatStore`?'],
   },
   {
     name: 'case bad',
@@ -894,7 +949,7 @@ const table: readonly Broken[] = [
     name: 'case null unknown',
     text: `${sound}cases:\n  wet: { planet: { bondAlbdo: null } }\n`,
     says: [
-      'p.yaml:12:20: cases.wet.planet.bondAlbdo: `bondAlbdo: null` removes a key that is unknown. Did you mean `bondAlbedo`.',
+      'p.yaml:12:20: cases.wet.planet.bondAlbdo: `bondAlbdo: null` removes a key that is unknown. Did you mean `bondAlbedo`?',
     ],
   },
   {
@@ -928,13 +983,13 @@ const table: readonly Broken[] = [
     text: 'star:\n  luminosity: 0.52\n  mas: 0.85 Msun\norbit:\n  semiMajorAxis: 0.48 lightyears\n  eccentricity: 1.2\n  periapsisTime: soon\nplanet:\n  bondAlbedo: -0.3\n  heatStore: { ocean: 20 m }\nmodl: lumped\n',
     says: [
       'p.yaml:2:15: star.luminosity: `0.52` has no unit. Write e.g. `0.52 Lsun`.',
-      'p.yaml:3:3: star.mas: `mas` is not a key of star. Did you mean `mass`.',
+      'p.yaml:3:3: star.mas: `mas` is not a key of star. Did you mean `mass`?',
       'p.yaml:5:18: orbit.semiMajorAxis: `lightyears` is not a unit. Use `au` or `km` or `m`.',
       'p.yaml:6:17: orbit.eccentricity: `1.2` is out of bounds. Keep it at least 0 and below 1.',
       'p.yaml:7:18: orbit.periapsisTime: `soon` is not a date. Write e.g. `2026-03-04T05:00Z` or `2461103.71 TDB`.',
       'p.yaml:9:15: planet.bondAlbedo: `-0.3` is out of bounds. Keep it at least 0 and below 1.',
       'p.yaml:10:16: planet.heatStore.ocean: `ocean` is not a key of planet.heatStore. Keys here are `heatCapacity`, `mixedLayer`, `atmosphere`, `ground`.',
-      'p.yaml:11:1: modl: `modl` is not a key of a scenario. Did you mean `model`.',
+      'p.yaml:11:1: modl: `modl` is not a key of a scenario. Did you mean `model`?',
     ],
   },
   {
@@ -952,7 +1007,7 @@ const table: readonly Broken[] = [
   {
     name: 'a misspelt mass is one error, not two',
     text: edited(['  mass:', '  mas:']),
-    says: ['p.yaml:4:3: star.mas: `mas` is not a key of star. Did you mean `mass`.'],
+    says: ['p.yaml:4:3: star.mas: `mas` is not a key of star. Did you mean `mass`?'],
   },
   {
     name: 'an error in the scenario is told once, though three cases have it, and though all replace the key',

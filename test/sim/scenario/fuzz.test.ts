@@ -1,5 +1,6 @@
 /** Damaged scenarios: each reads or is refused in plain words; never another exception, never a NaN. */
 import { expect, test } from 'vitest';
+import { richGlobe } from './globes.ts';
 import { mutated, rich, seeded } from './mutate.ts';
 import { outcomeOf } from './outcome.ts';
 import { sound } from './sound.ts';
@@ -16,4 +17,5 @@ test('1,500 damaged scenarios read, or are refused in plain words', () => {
 test('the texts that are damaged read before', () => {
   expect(outcomeOf(sound)).toBe('reads');
   expect(outcomeOf(rich)).toBe('reads');
+  expect(outcomeOf(richGlobe)).toBe('reads');
 });

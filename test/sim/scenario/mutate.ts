@@ -1,4 +1,5 @@
 /** Seeded damage to scenario texts, of the kinds that people and editors do. */
+import { richGlobe } from './globes.ts';
 import { sound } from './sound.ts';
 
 /** Many keys of the contract in few lines, so that most damage hits something. */
@@ -146,7 +147,7 @@ export function seeded(seed: number): () => number {
 /** A text with one to four damages. */
 export function mutated(random: () => number): string {
   const pick = <T>(items: readonly T[]): T => items[Math.floor(random() * items.length)]!;
-  let text = pick([sound, rich, rich]);
+  let text = pick([sound, rich, richGlobe]);
   // Often one or two, seldom many: what is half wrong finds more faults than what is all wrong.
   const times = 1 + Math.floor(random() ** 3 * 5);
   for (let i = 0; i < times; i++) text = (random() < 0.35 ? nudgeNumber : pick(damages))(text, random, pick);

@@ -33,13 +33,37 @@ test.each([
   ['an unknown key', 'plannet: {}'],
   ['a key in the wrong section', 'star: { bondAlbedo: 0.3 }'],
   ['a section where a value belongs', 'orbit: { eccentricity: { mean: 0.1 } }'],
-  ['a model that is not built', 'model: zonal'],
+  ['a model that is not built', 'model: column'],
   ['a limit that is not published', 'windows: { hz: { habitable: [venus, mars] } }'],
   ['an unknown key in a case', 'cases: { wet: { planet: { bondAlbdo: 0.1 } } }'],
   ['a null outside cases', 'planet: { mass: null }'],
   ['no case', 'cases: {}'],
+  ['a length without its unit', 'orbit: { semiMajorAxis: 0.48 }'],
+  ['a length without its unit, as text', "orbit: { semiMajorAxis: '0.48' }"],
+  ['a range without a unit', 'planet: { heatStore: { mixedLayer: 20 to 30 } }'],
+  ['a date as a bare number', 'orbit: { periapsisTime: 2461103.71 }'],
+  ['two forms in one heat store', 'planet: { heatStore: { mixedLayer: 20 m, heatCapacity: 4e7 J/m2/K } }'],
+  ['an empty heat store', 'planet: { heatStore: {} }'],
+  ['two emission laws', 'planet: { emission: { opticalDepth: 1, linear: { a: 203.3 W/m2, b: 2.09 W/m2/K } } }'],
 ])('the JSON Schema refuses %s', (_, text) => {
   expect(accepts(text)).toBe(false);
+});
+
+test('a pure number may be a number or text; a quantity says its units', () => {
+  expect(accepts('orbit: { eccentricity: 0.62 }')).toBe(true);
+  expect(accepts('orbit: { eccentricity: 0.62 ± 0.03 }')).toBe(true);
+  expect(
+    accepts('planet: { absorbingFraction: 1/4, heatStore: [{ mixedLayer: 20 m }, { heatCapacity: 4e7 J/m2/K }] }'),
+  ).toBe(true);
+  const { properties } = scenarioJsonSchema() as { properties: Record<string, { properties: Record<string, object> }> };
+  expect(properties.star!.properties.mass).toMatchObject({
+    type: 'string',
+    description: expect.stringMatching(/Units: Mearth, Msun, kg/),
+  });
+});
+
+test('in a case, one form of heat store may remove another', () => {
+  expect(accepts('cases: { wet: { planet: { heatStore: { mixedLayer: 20 m, heatCapacity: null } } } }')).toBe(true);
 });
 
 test('in cases, parts of a section and nulls are welcome', () => {

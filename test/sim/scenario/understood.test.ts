@@ -24,7 +24,6 @@ planet:
   bondAlbedo: 0.3
   heatStore:
     mixedLayer: 20 m
-  mass: 0 kg # default
   emissivity: 1 # default
   absorbingFraction: 0.25 # default
   internalHeat: 0 W/m2 # default
@@ -34,7 +33,6 @@ solve:
   start: periodic # default
   samples: 720 # default
   spacing: balancedAnomaly # default
-  seed: 1 # default
 `);
 });
 

@@ -2,6 +2,7 @@ import { describe, expect, test } from 'vitest';
 import { toPortable } from '../../../sim/dataset/portable.ts';
 import { PageError, readResult } from '../../../viewer/report/readResult.ts';
 import { plainRun } from '../fixture.ts';
+import { zonalRun } from '../zonalFixture.ts';
 
 const written = (result: unknown): string => JSON.stringify(toPortable({ result }));
 
@@ -30,5 +31,20 @@ describe('the data that a page carries', () => {
     const states = [{ ...run.cases[0]!.states[0]!, dataset: { variables: short } }];
     const damaged = { ...run, cases: [{ ...run.cases[0]!, states }] };
     expect(() => readResult(written(damaged))).toThrow('numbers of “bare rock” are missing');
+  });
+
+  test('fields come back number for number, and a field without its rows is damage', () => {
+    const run = zonalRun({ bands: 6, samples: 30 });
+    expect(readResult(written(run))).toEqual(run);
+    const { variables } = run.cases[0]!.states[0]!.dataset;
+    const short = { ...variables, bandIceFraction: { ...variables.bandIceFraction!, data: new Float64Array(30) } };
+    const states = [{ ...run.cases[0]!.states[0]!, dataset: { variables: short } }];
+    const damaged = { ...run, cases: [{ ...run.cases[0]!, states }] };
+    expect(() => readResult(written(damaged))).toThrow('numbers of “tilted sea” are missing');
+  });
+
+  test('letters that are no base64 are damage too', () => {
+    const broken = written(plainRun()).replace(/("temperature":\{"data":\{"f8":")..../, '$1!!!!');
+    expect(() => readResult(broken)).toThrow('numbers of “bare rock” are missing');
   });
 });

@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
-import { type Cell, caseTable, steadyIsShared } from '../../../viewer/words/caseTable.ts';
+import { caseTable, steadyIsShared } from '../../../viewer/words/caseTable.ts';
+import type { Cell } from '../../../viewer/words/cells.ts';
 import { columnsOf } from '../../../viewer/words/columns.ts';
 import { plainRun, withFindings } from '../fixture.ts';
 
@@ -24,6 +25,32 @@ describe('table of cases', () => {
       'Share of time in “like ours” (instantaneous)',
     ]);
     expect(rows.every(({ cells }) => cells.length === 3)).toBe(true);
+  });
+
+  test('a case with ground shows the half-space beside the one store; the others a dash', () => {
+    const run = plainRun();
+    const ground = (name: string, value: number, unit: string) => ({
+      key: `planet.heatStore.0.ground.${name}`,
+      value,
+      unit,
+      label: name,
+    });
+    const derived = [
+      ground('halfSpaceDamping', 0.848, '1'),
+      ground('lumpedDamping', 0.986, '1'),
+      ground('halfSpaceLag', 4.18 * 86_400, 's'),
+      ground('lumpedLag', 4.87 * 86_400, 's'),
+    ];
+    const rows = rowsOf({
+      ...run,
+      cases: run.cases.map((one, index) => (index === 1 ? { ...one, derived: [...one.derived, ...derived] } : one)),
+    }).filter(({ label }) => label.includes('small swing'));
+    expect(rows.map(({ label, cells }) => [label, ...cells.map(({ text }) => plain(text))])).toEqual([
+      ['Damping of a small swing, half-space ground', '—', '0.848', '—'],
+      ['Damping of a small swing, this one lumped store', '—', '0.986', '—'],
+      ['Lag of a small swing, half-space ground', '—', '4.18 d', '—'],
+      ['Lag of a small swing, this one lumped store', '—', '4.87 d', '—'],
+    ]);
   });
 
   test('temperatures stand beside their steady value', () => {

@@ -30,6 +30,14 @@ test('inputLists: the user’s own text, SI beside it, defaults marked', () => {
   expect(cell('planet.emissivity').isDefault).toBe(true);
 });
 
+test('inputLists: a date that was typed on another clock stands beside it in UTC', () => {
+  const [first] = cases;
+  // 2000-01-02T12:00 TDB is 64.18 s ahead of UTC: 32.184 s and 32 leap seconds.
+  const date = { ...first!.inputs[0]!, key: 'orbit.transitTime', text: '2451546 TDB', value: 86_400, unit: 's' };
+  const { shared } = inputLists([{ ...first!, inputs: [{ ...date, since: 'J2000.0 TDB' }] }]);
+  expect(shared[0]!.cells[0]!.si).toBe('2000-01-02 11:58 UTC');
+});
+
 test('inputLists: an input that only one case has differs', () => {
   const [first, ...others] = cases;
   const extra = { ...first!.inputs[0]!, key: 'planet.heatStore.mixedLayer', text: '20 m' };

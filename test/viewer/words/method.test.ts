@@ -51,6 +51,6 @@ describe('how it was computed', () => {
   });
 
   test('the cautions name what the numbers must not be used for', () => {
-    expect(cautions.join(' ')).toMatch(/clouds.*chemistry.*qualifying hardware.*safety.*observatory/s);
+    expect(cautions(plainRun()).join(' ')).toMatch(/clouds.*chemistry.*qualifying hardware.*safety.*observatory/s);
   });
 });

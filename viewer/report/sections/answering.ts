@@ -1,4 +1,4 @@
-/** The answer first, then what stands against it: warnings and accounts that were not kept. */
+/** The answer first, then what stands against it: accounts that were not kept, warnings, notes on the run. */
 import type { RunResult } from '../../../sim/run.ts';
 import { answer } from '../../words/answer.ts';
 import { type Column, columnName } from '../../words/columns.ts';
@@ -28,12 +28,22 @@ function notices(result: RunResult): HTMLElement[] {
     .map(({ name }) =>
       notice('Not within tolerance', name, 'see the accounts below, and do not rely on these numbers.'),
     );
-  const warnings = grouped(result).map(([text, names]) => notice('Caution', names, text));
-  return [...failures, ...warnings];
+  const warnings = cautionNotices(result.cases);
+  const notes = result.notes.map((text) => notice('Note', null, text));
+  return [...failures, ...warnings, ...notes];
+}
+
+interface Warned {
+  readonly name: string;
+  readonly warnings: readonly string[];
+}
+
+export function cautionNotices(cases: readonly Warned[]): HTMLElement[] {
+  return grouped(cases).map(([text, names]) => notice('Caution', names, text));
 }
 
 /** A warning that several cases share is said once; one that all share needs no names. */
-function grouped({ cases }: RunResult): [string, string | null][] {
+function grouped(cases: readonly Warned[]): [string, string | null][] {
   const texts = [...new Set(cases.flatMap(({ warnings }) => warnings))];
   return texts.map((text) => {
     const names = cases.filter(({ warnings }) => warnings.includes(text)).map(({ name }) => name);

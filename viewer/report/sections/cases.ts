@@ -1,8 +1,10 @@
 /** Table 1: the cases beside the steady value. */
 
 import type { CaseResult } from '../../../sim/run.ts';
-import { type Cell, caseTable, steadyIsShared, type TableRow } from '../../words/caseTable.ts';
+import { caseTable, steadyIsShared } from '../../words/caseTable.ts';
+import type { Cell, TableRow } from '../../words/cells.ts';
 import type { Column } from '../../words/columns.ts';
+import { hasLatitude } from '../../words/latitude.ts';
 import { fixed, nbsp } from '../../words/number.ts';
 import { columnHead } from '../columnHead.ts';
 import { dataTable } from '../dataTable.ts';
@@ -11,12 +13,15 @@ import { type Child, element } from '../element.ts';
 export function casesSection(cases: readonly CaseResult[], columns: readonly Column[]): HTMLElement {
   const rows = caseTable(columns);
   const shared = steadyIsShared(rows);
+  const steadyMeaning = columns.some(hasLatitude)
+    ? 'the temperature that would emit at once what the area absorbs and what comes from inside'
+    : 'what a surface without heat store would have';
   const table = dataTable({
     caption: [
       element('b', {}, 'Table 1. '),
       shared
-        ? 'The cases beside the steady value, which is what a surface without heat store would have.'
-        : 'The cases; “steady” is what a surface without heat store would have.',
+        ? `The cases beside the steady value, which is ${steadyMeaning}.`
+        : `The cases; “steady” is ${steadyMeaning}.`,
     ],
     label: 'The cases beside the steady value',
     corner: 'Quantity',
@@ -32,10 +37,11 @@ export function casesSection(cases: readonly CaseResult[], columns: readonly Col
   return element('section', { class: 'grid' }, element('h2', {}, 'The cases'), table, notes(cases, rows));
 }
 
-function content({ text, reason, steady }: Cell, showSteady: boolean): Child[] {
+function content({ text, reason, steady, detail }: Cell, showSteady: boolean): Child[] {
   return [
     text,
     showSteady && steady !== undefined ? element('small', {}, `steady ${steady}`) : null,
+    detail === undefined ? null : element('small', { class: 'detail' }, detail),
     reason === undefined ? null : element('small', { class: 'reason' }, reason),
   ];
 }
@@ -48,6 +54,7 @@ function notes(cases: readonly CaseResult[], rows: readonly TableRow[]): HTMLEle
     {},
     element('p', {}, 'Damping 1 follows the star at once; near 0 the temperature hardly moves.'),
     element('p', {}, 'A radiative time constant well below the period follows; well above it, remembers.'),
+    ...groundNote(rows),
     ...steadyByFraction(cases),
     element(
       'p',
@@ -55,6 +62,13 @@ function notes(cases: readonly CaseResult[], rows: readonly TableRow[]): HTMLEle
       `± is the numerical error, shown where it reaches the last digit${hasError ? '' : '; here it nowhere does'}. How well the inputs are known is another matter.`,
     ),
   );
+}
+
+function groundNote(rows: readonly TableRow[]): HTMLElement[] {
+  if (!rows.some(({ label }) => label.includes('half-space'))) return [];
+  const text =
+    'Ground is computed as one lumped store; real ground conducts into a half-space. The rows on a small swing show how far the two are apart; under strong swings the peaks can differ by many kelvin.';
+  return [element('p', {}, text)];
 }
 
 /** The textbook's number for other ways to spread the heat, where it is the same for all cases. */

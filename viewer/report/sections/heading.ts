@@ -17,7 +17,7 @@ export function heading(result: RunResult, columns: readonly Column[]): HTMLElem
   );
 }
 
-function paragraphs(notes: string): HTMLElement[] {
+export function paragraphs(notes: string): HTMLElement[] {
   return notes
     .split(/\n\s*\n/)
     .filter((text) => text.trim() !== '')

@@ -4,11 +4,15 @@ import { cautions, methodSteps, type Step } from '../../words/method.ts';
 import { type Child, element } from '../element.ts';
 
 export function methodSection(result: RunResult): HTMLElement {
+  return stepsSection(methodSteps(result));
+}
+
+export function stepsSection(steps: readonly Step[]): HTMLElement {
   return element(
     'section',
     { class: 'grid' },
     element('h2', {}, 'How it was computed'),
-    element('ol', { class: 'steps' }, ...methodSteps(result).map(step)),
+    element('ol', { class: 'steps' }, ...steps.map(step)),
   );
 }
 
@@ -31,16 +35,26 @@ function mathematics(equation: string): Child[] {
   });
 }
 
-export function cautionsSection(): HTMLElement {
+export function cautionsSection(result: RunResult): HTMLElement {
+  return cautionsList(cautions(result));
+}
+
+export function cautionsList(texts: readonly string[]): HTMLElement {
   return element(
     'section',
     { class: 'grid' },
     element('h2', {}, 'What the numbers are not'),
-    element('ul', { class: 'cautions' }, ...cautions.map((text) => element('li', {}, text))),
+    element('ul', { class: 'cautions' }, ...texts.map((text) => element('li', {}, text))),
   );
 }
 
-export function footer({ program, scenario }: RunResult): HTMLElement {
+/** What made the page, from what. */
+interface Origin {
+  readonly program: { readonly name: string; readonly version: string };
+  readonly scenario: { readonly file: string; readonly sha256: string };
+}
+
+export function footer({ program, scenario }: Origin): HTMLElement {
   return element(
     'footer',
     {},

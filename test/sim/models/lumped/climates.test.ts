@@ -1,9 +1,9 @@
 import { describe, expect, test } from 'vitest';
 import { stefanBoltzmann } from '../../../../sim/constants.ts';
+import { netHeating } from '../../../../sim/findings/steadyState.ts';
 import { instellationAtAxis } from '../../../../sim/models/lumped/problem.ts';
-import { netHeating } from '../../../../sim/models/steadyState.ts';
 import { rampAlbedo } from '../../../../sim/surface/albedo/ramp.ts';
-import { column, finding, solve, state, world } from './worlds.ts';
+import { column, finding, largestDifference, solve, state, world } from './worlds.ts';
 
 const ramp = rampAlbedo({ warm: 0.3, ice: 0.62, from: 255, to: 268 });
 
@@ -103,5 +103,52 @@ test('a ramp that no state reaches changes nothing', () => {
   expect(withRamp.states).toHaveLength(1);
   for (const name of ['temperatureMax', 'temperatureMin', 'temperatureMean', 'damping']) {
     expect(finding(withRamp.states[0], name) / finding(without, name)).toBeCloseTo(1, 7);
+  }
+});
+
+// The steady value jumps between ice and open water where the state passes from the reach of one balance to that of another.
+// Reference: the same rule on 100000 equal times, whose error is one row per jump: 50 K × 2 / 100000.
+test('the mean steady temperature of a world that changes branch', () => {
+  const of = world({ e: 0.2, heatCapacity: 2e8, albedo: rampAlbedo({ warm: 0.3, ice: 0.62, from: 250, to: 280 }) });
+  const options = { samples: 100_000, spacing: 'time' } as const;
+  for (const found of solve(of, options).states) {
+    const steady = column(found, 'steadyTemperature');
+    const mean = steady.reduce((sum, value) => sum + value, 0) / steady.length;
+    expect(Math.abs(finding(found, 'steadyTemperatureMean') - mean)).toBeLessThan(1e-3);
+    expect(finding(found, 'steadyTemperatureMax')).toBeGreaterThanOrEqual(
+      steady.reduce((a, b) => Math.max(a, b)) - 1e-6,
+    );
+  }
+});
+
+test('a fast planet at its hottest, just under the upper bound of the search, is not overlooked', () => {
+  const albedo = rampAlbedo({ warm: 0.3, ice: 0.5, from: 30, to: 40 });
+  const fast = world({ e: 0.7566724631353281, heatCapacity: 4682.707871901694, axisAu: 1.10405512615107, albedo });
+  const { states } = solve(fast, { samples: 16 });
+  expect(states.map(({ label }) => label)).toEqual(['only']);
+  expect(finding(states[0], 'temperatureMax') / finding(states[0], 'steadyTemperatureMax')).toBeCloseTo(1, 3);
+});
+
+test('a maximum that comes at periapsis to within its error lags by nothing, not by a whole orbit', () => {
+  const albedo = rampAlbedo({ warm: 0.3, ice: 0.5, from: 30, to: 40 });
+  const fast = world({ e: 0.9998857052774277, heatCapacity: 6939.208260862458, axisAu: 0.11790674128235094, albedo });
+  expect(finding(state(fast, { tolerance: 7.5e-5, samples: 16 }), 'lagOfMaxOrbits')).toBeLessThan(1e-3);
+});
+
+// The step across a break of the ramp ends where the break is: both sides of it must be refined, and the estimate must see both.
+test('the estimate holds across the ends of a ramp', () => {
+  for (const [from, to] of [
+    [240, 280],
+    [240, 243],
+    [262, 262],
+  ] as const) {
+    const of = world({ e: 0.4, heatCapacity: 1e6, albedo: rampAlbedo({ warm: 0.3, ice: 0.6, from, to }) });
+    const exact = state(of, { tolerance: 1e-11 });
+    for (const tolerance of [1e-4, 1e-6, 1e-8]) {
+      const found = state(of, { tolerance });
+      const error = largestDifference(found, exact);
+      expect(error).toBeLessThan(tolerance);
+      expect(error).toBeLessThan(1.2 * found.errorEstimate + 1e-11);
+    }
   }
 });

@@ -138,3 +138,17 @@ test('a planet that nothing heats is refused', () => {
   const cold = { ...of, surface: { ...of.surface, albedo: { ...constantAlbedo(0.5), warm: 1 } } };
   expect(() => solve(cold)).toThrow(SimError);
 });
+
+test('fastest changes are roots of the change of heating, also near the ends of a piece', () => {
+  for (let i = 0; i < 12; i++) {
+    const each = world({ e: 0.08 + 0.07 * i, kappa: 10 ** (-3 + 0.45 * i) });
+    const dense = state(each, { tolerance: 1e-9, samples: 20_000 });
+    const heating = column(dense, 'absorbed').map((absorbed, k) => absorbed - column(dense, 'emitted')[k]);
+    const { heatCapacity } = each.surface;
+    // A sample misses the extreme by the square of its distance, (2π/20000)² of the rate.
+    const warming = heating.reduce((most, value) => Math.max(most, value)) / heatCapacity;
+    const cooling = heating.reduce((least, value) => Math.min(least, value)) / heatCapacity;
+    expect(Math.abs(finding(dense, 'fastestWarming') / warming - 1)).toBeLessThan(1e-6);
+    expect(Math.abs(finding(dense, 'fastestCooling') / cooling - 1)).toBeLessThan(1e-6);
+  }
+});

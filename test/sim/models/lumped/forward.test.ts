@@ -1,10 +1,10 @@
 import { expect, test } from 'vitest';
 import { SimError } from '../../../../sim/error.ts';
+import { steadyAtAlbedo } from '../../../../sim/findings/steadyState.ts';
 import { instellationAtAxis } from '../../../../sim/models/lumped/problem.ts';
-import { steadyAtAlbedo } from '../../../../sim/models/steadyState.ts';
 import { constantAlbedo } from '../../../../sim/surface/albedo/constant.ts';
 import { linearEmission } from '../../../../sim/surface/emission/linear.ts';
-import { column, finding, solve, state, world } from './worlds.ts';
+import { column, finding, largestDifference, solve, state, world } from './worlds.ts';
 
 // Linear emission on a circular orbit relaxes exponentially: T = T_s + (T₀ − T_s) exp(−B t/C), exactly.
 test.each([1e-4, 1e-6, 1e-9])('linear relaxation keeps the tolerance %f', (tolerance) => {
@@ -72,9 +72,37 @@ test('findings of a run speak of the run', () => {
   expect(cooling.dataset.variables.time.longName).toBe('Time after the start');
 });
 
+test('a run that ends while it warms claims no maximum, lag or damping', () => {
+  const of = world({ e: 0.1, heatCapacity: 4e9 });
+  const { states, warnings } = solve(of, { start: { temperature: 100, orbits: 6, at: 0 } });
+  for (const name of ['timeOfMax', 'lagOfMax', 'lagOfMaxOrbits', 'damping']) {
+    const found = states[0].findings.find((candidate) => candidate.name === name)!;
+    expect(found.value).toBeNull();
+    expect(found.reason).toMatch(/the run ends before|the end of the run|not periodic/);
+  }
+  expect(warnings.join()).toMatch(/has not settled: its last orbit ends .* K warmer/);
+});
+
 test('a run that cannot end says so', () => {
   const of = world({ e: 0.5, heatCapacity: 2e8 });
   const endless = () => solve(of, { start: { temperature: 400, orbits: 1e9, at: 0 }, samples: 1e-6 });
   expect(endless).toThrow(SimError);
   expect(endless).toThrow(/need more than 8000000 steps/);
+});
+
+// Slopes of the curve are the rates at the new ends: the rates one Newton change earlier left 1e-9 between the nodes.
+test('a stiff run keeps a tolerance of 1e-10', () => {
+  const of = world({ e: 0.2, axisAu: 0.9, heatCapacity: 1e3 });
+  const start = { temperature: 900, orbits: 1.7, at: 2 };
+  const found = state(of, { tolerance: 1e-10, start });
+  const finer = state(of, { tolerance: 1e-11, start });
+  expect(found.converged).toBe(true);
+  expect(largestDifference(found, finer)).toBeLessThan(1e-10);
+});
+
+test('a start so cold that a linear law emits less than nothing has no emission temperature, and says why', () => {
+  const of = world({ e: 0.2, heatCapacity: 2e8, emission: linearEmission({ a: 203.3, b: 2.09 }) });
+  const found = state(of, { start: { temperature: 100, orbits: 1, at: 0 }, samples: 36 });
+  const emission = found.findings.find(({ name }) => name === 'emissionTemperatureMean');
+  expect(emission).toMatchObject({ value: null, reason: expect.stringContaining('below zero') });
 });

@@ -1,0 +1,102 @@
+/** `perilag trace`: the climates of each case as one input changes, as a table and as files. */
+import { basename, extname, join, resolve } from 'node:path';
+import { SimError } from '../../sim/error.ts';
+import { type Along, type CaseAlong, casesAlong, readAlong } from '../../sim/scenario/along.ts';
+import { reportedAlong, traceAlong } from '../../sim/studies/traceAlong.ts';
+import type { TraceReport, TraceReportCase } from '../../sim/studies/traceReport.ts';
+import { exitCode } from '../exit.ts';
+import type { Io } from '../io.ts';
+import { writeFolder } from '../output/folder.ts';
+import { jsonText } from '../output/json.ts';
+import { pagePieces } from '../output/report.ts';
+import { scenarioYamlText } from '../output/scenarioYaml.ts';
+import { terminalOf } from '../output/terminal.ts';
+import { hanging, printable } from '../output/text.ts';
+import { traceCsvText, traceSummary } from '../output/traceFiles.ts';
+import { traceLines } from '../output/traceTable.ts';
+import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
+import { onlyCases } from './only.ts';
+import type { Program } from './run.ts';
+
+export interface TraceCommandOptions {
+  readonly along: string;
+  readonly out?: string;
+  readonly only?: readonly string[];
+  readonly json?: boolean;
+  readonly quiet?: boolean;
+}
+
+/** Gives the exit code. Errors: SimError and ScenarioError for the input's faults. */
+export async function trace(file: string, options: TraceCommandOptions, program: Program, io: Io): Promise<number> {
+  const along = readAlong(options.along);
+  const [item] = onlyCases([readScenarioFile(file, io.cwd)], options.only ?? []);
+  const folder = outputFolder(file, options.out);
+  const names = item!.scenario.cases.map(({ name }) => name);
+  const cases = casesAlong(item!.text, file, along, names);
+  const report = reportOf(
+    item!,
+    along,
+    cases.map((one) => follow(one, along, options, io)),
+    program,
+  );
+  await writeFolder(resolve(io.cwd, folder), filesOf(report, item!, io));
+  show(report, folder, options, io);
+  return tellUnfinished(report, io) ? exitCode.notWithinTolerance : exitCode.done;
+}
+
+function outputFolder(file: string, out: string | undefined): string {
+  if (out?.trim() === '')
+    throw new SimError('-o', 'the folder has no name', 'Name one, e.g. `-o results`, or leave -o out');
+  return out ?? join('out', basename(file, extname(file)), 'trace');
+}
+
+function follow(one: CaseAlong, along: Along, { quiet }: TraceCommandOptions, io: Io): TraceReportCase {
+  const tell = (text: string) => {
+    if (io.isTTY && !quiet) io.stderr.write(`${printable(`${one.name}: ${text}`)}\n`);
+  };
+  tell('following its climates');
+  return traceAlong(one, along, (branch: number, points: number) => tell(`branch ${branch}, ${points} points`));
+}
+
+function reportOf(
+  { scenario, file, sha256 }: ScenarioFile,
+  along: Along,
+  cases: readonly TraceReportCase[],
+  { version }: Program,
+): TraceReport {
+  const { title, notes } = scenario;
+  return {
+    program: { name: 'perilag', version },
+    scenario: { title, notes, file, sha256 },
+    along: reportedAlong(along),
+    cases,
+  };
+}
+
+/** The report is the last: it is what the others stand beside. */
+function filesOf(report: TraceReport, { scenario }: ScenarioFile, { reportTemplate }: Io) {
+  return [
+    { name: 'summary.json', pieces: [`${jsonText(traceSummary(report))}\n`] },
+    { name: 'trace.csv', pieces: [traceCsvText(report)] },
+    { name: 'scenario.yaml', pieces: [scenarioYamlText(scenario)] },
+    { name: 'report.html', pieces: pagePieces({ trace: report }, reportTemplate) },
+  ];
+}
+
+function show(report: TraceReport, folder: string, { json, quiet }: TraceCommandOptions, io: Io): void {
+  if (json) io.stdout.write(`${jsonText(traceSummary(report))}\n`);
+  if (quiet) return;
+  const terminal = terminalOf(io);
+  if (!json) io.stdout.write(`${traceLines(report, terminal).join('\n')}\n`);
+  const files = hanging('files   ', 'summary.json, trace.csv, scenario.yaml beside it', terminal.width);
+  // The path stays in one piece, to be copied.
+  io.stderr.write(`report  ${terminal.say(join(folder, 'report.html'))}\n${files.join('\n')}\n`);
+}
+
+/** Says which cases could not be followed to the ends of the range; true when there are some. */
+function tellUnfinished({ cases }: TraceReport, io: Io): boolean {
+  const unfinished = cases.filter(({ branches }) => branches.some(({ ended }) => ended !== 'left'));
+  const names = unfinished.map(({ name }) => name);
+  if (names.length > 0) io.stderr.write(`not followed to the end: ${printable(names.join(', '))}\n`);
+  return names.length > 0;
+}

@@ -1,0 +1,122 @@
+/** `model: zonal`: temperature by latitude through the year. */
+import { SimError } from '../../error.ts';
+import { steadyAtAlbedo } from '../../findings/steadyState.ts';
+import type { Kelvin } from '../../si.ts';
+import type { Globe, SolveOptions, Window, World } from '../../world.ts';
+import type { Model, Solution, State } from '../model.ts';
+import { areaMeanOf } from './areaMeans.ts';
+import { zonalDataset } from './dataset.ts';
+import { zonalEnergyBalance } from './energy.ts';
+import { zonalFindings } from './findings.ts';
+import { settleZonal, type ZonalState, zonalGrid } from './states.ts';
+import { zonalWarnings } from './warnings.ts';
+import { zonalYear } from './year.ts';
+
+/** Two starts that end closer than this everywhere are one state. */
+const sameState: Kelvin = 0.02;
+
+export function zonalModel(): Model {
+  return {
+    name: 'zonal',
+    asks: { absorbingFraction: false, globe: true, start: false },
+    keys: {},
+    solve(world, options, windows) {
+      const globe = world.globe ?? null;
+      if (globe === null)
+        throw new SimError('planet', 'the zonal model needs a globe', 'Give obliquity, rotationPeriod and bands');
+      if (options.start !== 'periodic') {
+        throw new SimError(
+          'solve.start',
+          'the zonal model finds periodic states only',
+          'Remove solve.start or use model: lumped',
+        );
+      }
+      return solvePeriodic(world, globe, options, windows);
+    },
+  };
+}
+
+function solvePeriodic(world: World, globe: Globe, options: SolveOptions, windows: readonly Window[]): Solution {
+  const found = periodicStates(world, globe, globe.bands, options.tolerance);
+  const halved = periodicStates(world, globe, Math.max(9, Math.floor(globe.bands / 2)), options.tolerance);
+  const years = found.map((state) => zonalYear(world, globe, state));
+  const states = found.map((state, index): State => {
+    const year = years[index];
+    const dataset = zonalDataset(year, options);
+    const margin = state.logMultiplier / state.frozenLogMultiplier;
+    const bandError = bandErrorOf(state, halved[Math.min(index, halved.length - 1)]);
+    return {
+      label: found.length === 1 ? 'only' : index === 0 ? 'warm' : 'cold',
+      stable: state.logMultiplier < 0,
+      multiplier: Math.exp(state.logMultiplier),
+      stabilityMargin: margin,
+      errorEstimate: state.errorEstimate,
+      converged: state.converged,
+      dataset,
+      findings: zonalFindings(year, dataset, windows, { margin, errorEstimate: state.errorEstimate, bandError }),
+      energyBalance: zonalEnergyBalance(year),
+    };
+  });
+  return {
+    states,
+    warnings: [
+      ...zonalWarnings(world, globe, years),
+      ...spatialWarnings(found, halved),
+      ...(found.length > 1
+        ? [
+            'This orbit allows a warm and a cold climate; the findings are those of the warm one. Which of them a planet is in depends on its past.',
+          ]
+        : []),
+    ],
+    iterations: found.reduce((sum, { yearEquivalents }) => sum + yearEquivalents, 0),
+  };
+}
+
+/** From a hot and a cold start; one state where both end alike, or where nothing depends on ice. */
+export function periodicStates(world: World, globe: Globe, bands: number, tolerance: number): ZonalState[] {
+  const grid = zonalGrid(world, globe, bands);
+  const start = (temperature: Kelvin) => new Float64Array(bands).fill(temperature);
+  const { surface } = world;
+  const flux = world.star.luminosity / (4 * Math.PI * world.orbit.semiMajorAxis ** 2);
+  const quarter = { ...surface, absorbingFraction: 0.25 };
+  const mean = 1 / Math.sqrt(1 - world.orbit.eccentricity ** 2);
+  const hot = steadyAtAlbedo(quarter, flux * mean, Math.min(surface.albedo.warm, surface.albedo.ice)) + 50;
+  const warm = settleZonal(grid, start(hot), tolerance);
+  if (surface.albedo.ramp === null && globe.frozenHeatCapacity === null) return [warm];
+  const icy = steadyAtAlbedo(quarter, flux * mean, Math.max(surface.albedo.warm, surface.albedo.ice));
+  const cold = settleZonal(
+    grid,
+    start(Math.max(30, Math.min(icy, (surface.albedo.ramp?.from ?? icy) - 10) - 20)),
+    tolerance,
+  );
+  return apart(warm, cold) > sameState ? [warm, cold] : [warm];
+}
+
+function apart(a: ZonalState, b: ZonalState): Kelvin {
+  const size = a.system.size;
+  let largest = 0;
+  for (let i = 0; i < size; i++) largest = Math.max(largest, Math.abs(a.history.value[i] - b.history.value[i]));
+  return largest;
+}
+
+/** Richardson: half the bands are off by three times what the whole number is, at second order. Year means of the area mean. */
+function bandErrorOf(fine: ZonalState, coarse: ZonalState): Kelvin {
+  return Math.abs(areaMean(fine) - areaMean(coarse)) / 3;
+}
+
+function areaMean({ history, system }: ZonalState): Kelvin {
+  const { size, mesh } = system;
+  let sum = 0;
+  for (let step = 0; step < mesh.steps; step++) {
+    const rows = [step, step + 1].map((row) => history.value.subarray(row * size, (row + 1) * size));
+    for (const row of rows) sum += (mesh.width[step] / 2) * areaMeanOf(system.physics, row);
+  }
+  return sum / mesh.time[mesh.steps];
+}
+
+function spatialWarnings(found: readonly ZonalState[], halved: readonly ZonalState[]): string[] {
+  if (found.length === halved.length) return [];
+  return [
+    `With half the bands ${halved.length} periodic state${halved.length > 1 ? 's are' : ' is'} found instead of ${found.length}: the number of climates is not settled at this resolution; raise planet.bands.`,
+  ];
+}

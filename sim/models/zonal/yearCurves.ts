@@ -1,0 +1,82 @@
+/** A settled year as curves in time, one a band: quintic Hermite from T, T′ = f and T″ = J f + ∂f/∂t at the step ends. */
+
+import { banded, multiplyBanded } from '../../solve/banded.ts';
+import type { Curve } from '../../solve/curve.ts';
+import type { StageHistory } from '../../solve/rodas4.ts';
+import type { YearMesh } from './mesh.ts';
+import type { ZonalSystem } from './system.ts';
+
+export interface YearCurves {
+  /** Means over each band's surfaces, south to north; positions are seconds after periapsis, 0 … period. */
+  readonly bands: readonly Curve[];
+  readonly sea: readonly Curve[];
+  /** Null where the world has no land. */
+  readonly land: readonly Curve[] | null;
+  /** Mean over the globe. */
+  readonly mean: Curve;
+}
+
+export function yearCurves(system: ZonalSystem, history: StageHistory): YearCurves {
+  const { mesh, physics } = system;
+  const second = secondDerivatives(system, history);
+  const surfaces = physics.land === null ? 1 : 2;
+  const curvesOf = (surface: number) =>
+    Array.from({ length: physics.bands.count }, (_, band) => {
+      return curveOf(mesh, system.size, band * surfaces + surface, history, second);
+    });
+  const sea = curvesOf(0);
+  const land = physics.land === null ? null : curvesOf(1);
+  const fraction = physics.land?.fraction;
+  const bands =
+    land === null || fraction === undefined
+      ? sea
+      : sea.map((curve, i) => weightedSum([curve, land[i]], [1 - fraction[i], fraction[i]]));
+  return { bands, sea, land, mean: weightedSum(bands, new Array(bands.length).fill(1 / bands.length)) };
+}
+
+function curveOf(mesh: YearMesh, size: number, column: number, history: StageHistory, second: Float64Array): Curve {
+  const { steps, time } = mesh;
+  const curve = emptyCurve(time, steps);
+  for (let end = 0; end < 2 * steps; end++) {
+    const entry = ((end + 1) >> 1) * size + column;
+    curve.value[end] = history.value[entry];
+    curve.slope[end] = history.rate[entry];
+    curve.curvature[end] = second[entry];
+  }
+  return curve;
+}
+
+function emptyCurve(position: Float64Array, pieces: number): Curve {
+  const column = () => new Float64Array(2 * pieces);
+  return { position, value: column(), slope: column(), curvature: column() };
+}
+
+/** Curves on one mesh, combined. */
+function weightedSum(curves: readonly Curve[], weights: readonly number[]): Curve {
+  const sum = emptyCurve(curves[0].position, curves[0].position.length - 1);
+  for (const part of ['value', 'slope', 'curvature'] as const) {
+    const into = sum[part];
+    for (const [k, curve] of curves.entries())
+      for (let i = 0; i < into.length; i++) into[i] += weights[k] * curve[part][i];
+  }
+  return sum;
+}
+
+/** T″ at every step end; the last is the first, the year being closed. */
+function secondDerivatives(system: ZonalSystem, history: StageHistory): Float64Array {
+  const { size, mesh } = system;
+  const second = new Float64Array((mesh.steps + 1) * size);
+  const jacobian = banded(size, system.width);
+  const drift = new Float64Array(size);
+  for (let step = 0; step <= mesh.steps; step++) {
+    const wrapped = step % mesh.steps;
+    const y = history.value.subarray(step * size, (step + 1) * size);
+    const rate = history.rate.subarray(step * size, (step + 1) * size);
+    system.jacobianInto(wrapped, y, jacobian);
+    system.driftInto(wrapped, y, drift);
+    const row = second.subarray(step * size, (step + 1) * size);
+    multiplyBanded(jacobian, rate, row);
+    for (let i = 0; i < size; i++) row[i] += drift[i];
+  }
+  return second;
+}

@@ -1,0 +1,34 @@
+/** One case of a scenario traced along an input, as it is reported. A log range is followed in the logarithm of the input. */
+import { inUnit } from '../quantity/index.ts';
+import type { Along, CaseAlong } from '../scenario/along.ts';
+import { type TraceOptions, traceClimates } from './trace.ts';
+import type { TraceReport, TraceReportCase } from './traceReport.ts';
+
+/** The range with its ends in the user's unit. */
+export function reportedAlong({ key, label, unit, from, to, log }: Along): TraceReport['along'] {
+  return { key, label, unit, from: inUnit(from, unit), to: inUnit(to, unit), log };
+}
+
+/** Errors: SimError where the scenario is not sound at a value inside the range. */
+export function traceAlong(one: CaseAlong, along: Along, progress?: TraceOptions['progress']): TraceReportCase {
+  const { name, model, tolerance, warnings } = one;
+  const { from, to, unit, log } = along;
+  const range = log ? { from: Math.log(from), to: Math.log(to) } : { from, to };
+  const valueAt = (place: number) => {
+    if (place <= range.from) return from; // exactly: exp undoes log but for a rounding
+    if (place >= range.to) return to;
+    return log ? Math.exp(place) : place;
+  };
+  const options = { ...range, tolerance, ...(progress ? { progress } : {}) };
+  const result = traceClimates(model, (place) => one.worldAt(valueAt(place)), options);
+  const shown = (place: number) => inUnit(valueAt(place), unit);
+  return {
+    name,
+    model,
+    branches: result.branches.map(({ ended, points }) => {
+      return { ended, points: points.map((point) => ({ ...point, value: shown(point.value) })) };
+    }),
+    folds: result.folds.map(shown),
+    warnings: [...warnings, ...result.warnings],
+  };
+}

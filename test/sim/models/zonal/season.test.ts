@@ -1,0 +1,142 @@
+import { describe, expect, test } from 'vitest';
+import { lumpedModel } from '../../../../sim/models/lumped/index.ts';
+import type { State } from '../../../../sim/models/model.ts';
+import { zonalModel } from '../../../../sim/models/zonal/index.ts';
+import { rampAlbedo } from '../../../../sim/surface/albedo/ramp.ts';
+import { greyBody } from '../../../../sim/surface/emission/greyBody.ts';
+import { linearEmission } from '../../../../sim/surface/emission/linear.ts';
+import type { SolveOptions, Window } from '../../../../sim/world.ts';
+import { finding } from '../lumped/worlds.ts';
+import { degrees, zonalWorld } from './worlds.ts';
+
+const model = zonalModel();
+const options: SolveOptions = { tolerance: 1e-6, start: 'periodic', samples: 180, spacing: 'balancedAnomaly' };
+const windows: Window[] = [{ name: 'liquid', of: 'temperature', from: 273.15, to: 373.15 }];
+
+function solve(world: ReturnType<typeof zonalWorld>, changed: Partial<SolveOptions> = {}) {
+  return model.solve(world, { ...options, ...changed }, windows);
+}
+
+const field = (of: State, name: string) => of.dataset.variables[name];
+
+test('endless transport gives the lumped model', () => {
+  const world = zonalWorld({ e: 0.4, heatCapacity: 5e7, emission: greyBody(1), globe: { heatTransport: 1e6 } });
+  const [zonal] = solve(world, { tolerance: 1e-8 }).states;
+  const [lumped] = lumpedModel().solve(world, { ...options, tolerance: 1e-8 }, []).states;
+  // A contrast of order Q/D = 3e-4 K is left.
+  for (const name of ['temperatureMax', 'temperatureMin', 'temperatureMean']) {
+    expect(finding(zonal, name)).toBeCloseTo(finding(lumped, name), 3);
+  }
+  expect(finding(zonal, 'lagOfMaxOrbits')).toBeCloseTo(finding(lumped, 'lagOfMaxOrbits'), 4);
+});
+
+test('the energy account closes to 1e-9 when solved at 1e-10', () => {
+  const worlds = [
+    zonalWorld({ e: 0.3, heatCapacity: 2e8 }),
+    zonalWorld({ e: 0.1, heatCapacity: 5e7, emission: greyBody(1), globe: { obliquity: 90 * degrees } }),
+  ];
+  for (const world of worlds) {
+    const [found] = solve(world, { tolerance: 1e-10 }).states;
+    expect(found.converged).toBe(true);
+    expect(found.energyBalance.relativeDifference).toBeLessThan(1e-9);
+  }
+});
+
+test('transport moves heat and makes none', () => {
+  const [found] = solve(zonalWorld({ e: 0.2 })).states;
+  const convergence = field(found, 'bandConvergence');
+  const [rows, bands] = convergence.shape;
+  for (let row = 0; row < rows; row++) {
+    const sum = convergence.data.subarray(row * bands, (row + 1) * bands).reduce((a, b) => a + b, 0);
+    expect(Math.abs(sum / bands)).toBeLessThan(1e-9); // W/m²; rounding of fluxes of 1e2 W/m²
+  }
+});
+
+test('at an obliquity of 90° the poles are hotter than the equator in the annual mean, at 0° colder', () => {
+  const contrast = (obliquity: number) => {
+    const world = zonalWorld({ heatCapacity: 2e8, emission: greyBody(1), globe: { obliquity: obliquity * degrees } });
+    return finding(solve(world).states[0], 'contrast');
+  };
+  expect(contrast(90)).toBeLessThan(-5);
+  expect(contrast(0)).toBeGreaterThan(20);
+  // Pole and equator receive the same over the year at 53.896° (OEIS A381254); a linear world's contrast changes sign near it.
+  expect(contrast(50) > contrast(58)).toBe(true);
+});
+
+test('north and south mirror each other when the orbit is circular', () => {
+  const [found] = solve(zonalWorld({ heatCapacity: 5e7 }), { tolerance: 1e-8 }).states;
+  const { data, shape } = field(found, 'bandTemperature');
+  const [rows, bands] = shape;
+  // Half a year later the hemispheres have changed places.
+  for (let row = 0; row < rows / 2; row++) {
+    for (let i = 0; i < bands; i++) {
+      const later = data[(row + rows / 2) * bands + (bands - 1 - i)];
+      expect(Math.abs(data[row * bands + i] / later - 1)).toBeLessThan(1e-7);
+    }
+  }
+  expect(finding(found, 'lagAt45North')).toBeCloseTo(finding(found, 'lagAt45South'), -4);
+});
+
+test('steps: the time error is within the tolerance of a much finer year', () => {
+  const world = zonalWorld({ e: 0.3, heatCapacity: 2e7, globe: { solarLongitudeOfPeriapsis: 250 * degrees } });
+  const exact = solve(world, { tolerance: 1e-10 }).states[0];
+  for (const tolerance of [1e-4, 1e-6, 1e-8]) {
+    const found = solve(world, { tolerance }).states[0];
+    const reference = field(exact, 'bandTemperature').data;
+    const error = field(found, 'bandTemperature').data.reduce(
+      (largest, value, i) => Math.max(largest, Math.abs(value / reference[i] - 1)),
+      0,
+    );
+    expect(error).toBeLessThan(tolerance);
+    expect(error).toBeLessThan(found.errorEstimate + 1e-10);
+  }
+});
+
+describe('ice and albedo', () => {
+  const albedo = rampAlbedo({ warm: 0.32, ice: 0.62, from: 258, to: 268 });
+  const emission = linearEmission({ a: 203.3, b: 2.09 });
+  const world = zonalWorld({ e: 0.1, heatCapacity: 2.1e8, albedo, emission, globe: { heatTransport: 0.65 } });
+  const { states, warnings } = solve(world);
+
+  test('a warm and a cold climate on one orbit', () => {
+    expect(states.map(({ label, stable }) => [label, stable])).toEqual([
+      ['warm', true],
+      ['cold', true],
+    ]);
+    expect(warnings.join()).toContain('a warm and a cold climate');
+    expect(finding(states[1], 'iceFractionMean')).toBeCloseTo(1, 6);
+    expect(finding(states[1], 'iceEdgeNorthMin')).toBeCloseTo(0, 6);
+  });
+
+  test('ice pulls the margin below one, and the frozen globe has none of it', () => {
+    expect(states[0].stabilityMargin).toBeLessThan(1);
+    expect(states[0].stabilityMargin).toBeGreaterThan(0);
+    expect(states[1].stabilityMargin).toBeCloseTo(1, 6);
+  });
+
+  test('the multiplier is what a small push does after a year', () => {
+    // Waiting is the independent method: the slowest mode of the frozen, linear globe is exp(−B P/C).
+    expect(Math.log(states[1].multiplier!)).toBeCloseTo((-2.09 * world.orbit.period) / 2.1e8, 4);
+  });
+});
+
+test.each([1e5, 2.1e8, 1e12])('every depth of store settles in a few years: C = %f', (heatCapacity) => {
+  const { iterations, states } = solve(zonalWorld({ e: 0.3, heatCapacity }));
+  expect(states[0].converged).toBe(true);
+  expect(iterations).toBeLessThan(12);
+});
+
+test('a short orbit over a deep ocean settles as quickly', () => {
+  const { iterations, states } = solve(zonalWorld({ e: 0.1, periodDays: 11, heatCapacity: 2.05e8 }));
+  expect(states[0].converged).toBe(true);
+  expect(iterations).toBeLessThan(12);
+});
+
+test('nothing in a finding or a row is ever not a number', () => {
+  for (const world of [zonalWorld(), zonalWorld({ e: 0.8, heatCapacity: 1e6, emission: greyBody(1) })]) {
+    for (const { findings, dataset } of solve(world).states) {
+      for (const { value } of findings) expect(value === null || Number.isFinite(value)).toBe(true);
+      for (const { data } of Object.values(dataset.variables)) expect(data.every(Number.isFinite)).toBe(true);
+    }
+  }
+});

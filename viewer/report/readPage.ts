@@ -1,0 +1,45 @@
+/** What the page carries: a run, or the trace of climates as one input changes. Pure. */
+import type { RunResult } from '../../sim/run.ts';
+import type { TraceReport } from '../../sim/studies/traceReport.ts';
+import { checkedRun, damaged, parsed } from './readResult.ts';
+
+export type Carried =
+  | { readonly result: RunResult; readonly trace: null }
+  | { readonly trace: TraceReport; readonly result: null };
+
+/** Errors: PageError when the block holds nothing that this page can show. */
+export function readPage(text: string): Carried {
+  const { trace, result } = parsed(text);
+  return trace === undefined
+    ? { result: checkedRun(result), trace: null }
+    : { trace: checkedTrace(trace), result: null };
+}
+
+function checkedTrace(value: unknown): TraceReport {
+  if (!isTrace(value)) throw damaged('the data are not a trace');
+  for (const { name, branches } of value.cases) {
+    if (!branches.every(({ points }) => points.every(isWhole))) throw damaged(`numbers of “${name}” are missing`);
+  }
+  return value;
+}
+
+function isTrace(value: unknown): value is TraceReport {
+  const trace = value as Partial<TraceReport> | null;
+  if (typeof trace !== 'object' || trace === null) return false;
+  const { along, cases, scenario, program } = trace;
+  if (typeof scenario?.file !== 'string' || typeof program?.name !== 'string') return false;
+  if (typeof along?.label !== 'string' || typeof along.unit !== 'string') return false;
+  if (!(along.to > along.from) || (along.log && !(along.from > 0))) return false;
+  return Array.isArray(cases) && cases.length > 0 && cases.every(isCase);
+}
+
+function isCase(one: Partial<TraceReport['cases'][number]> | null): boolean {
+  const { name, branches, warnings } = one ?? {};
+  if (typeof name !== 'string' || !Array.isArray(warnings) || !Array.isArray(branches)) return false;
+  return branches.every((branch) => Array.isArray(branch?.points));
+}
+
+function isWhole(point: TraceReport['cases'][number]['branches'][number]['points'][number]): boolean {
+  const { value, temperatureMean, temperatureMax, temperatureMin, iceFraction } = point;
+  return [value, temperatureMean, temperatureMax, temperatureMin, iceFraction].every(Number.isFinite);
+}
