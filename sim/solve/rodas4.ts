@@ -115,10 +115,10 @@ function takeStep(
   if (!factorBanded(matrix)) return false;
   for (let stage = 0; stage < stages.length; stage++) {
     const u = stages[stage];
-    combineInto(y, stages, shift[stage], 1, trial);
+    addStages(y, stages, shift[stage], 1, trial);
     system.rateInto(step, stage, trial, u);
     if (stage === 0 && history !== null) history.rate.set(u, step * size);
-    addMix(u, stages, mix[stage], 1 / h);
+    addStages(u, stages, mix[stage], 1 / h, u);
     const factor = timeFactors[stage] * h;
     if (factor !== 0) for (let i = 0; i < size; i++) u[i] += factor * drift[i];
     solveBanded(matrix, u);
@@ -128,26 +128,36 @@ function takeStep(
   return true;
 }
 
-/** out = y + Σ_j weights[j] u_j. */
-function combineInto(
+/** out = y + factor Σ_j weights[j] u_j, over the first stages; at most five, in one pass. */
+function addStages(
   y: Float64Array,
   stages: readonly Float64Array[],
   weights: readonly number[],
   factor: number,
   out: Float64Array,
 ): void {
-  out.set(y);
-  for (let j = 0; j < weights.length; j++) {
-    const u = stages[j];
-    const weight = factor * weights[j];
-    for (let i = 0; i < out.length; i++) out[i] += weight * u[i];
-  }
-}
-
-function addMix(u: Float64Array, stages: readonly Float64Array[], weights: readonly number[], factor: number): void {
-  for (let j = 0; j < weights.length; j++) {
-    const other = stages[j];
-    const weight = factor * weights[j];
-    for (let i = 0; i < u.length; i++) u[i] += weight * other[i];
+  const [u0, u1, u2, u3, u4] = stages;
+  const [w0 = 0, w1 = 0, w2 = 0, w3 = 0, w4 = 0] = weights.map((weight) => factor * weight);
+  const size = out.length;
+  switch (weights.length) {
+    case 0:
+      if (out !== y) out.set(y);
+      break;
+    case 1:
+      for (let i = 0; i < size; i++) out[i] = y[i] + w0 * u0[i];
+      break;
+    case 2:
+      for (let i = 0; i < size; i++) out[i] = y[i] + w0 * u0[i] + w1 * u1[i];
+      break;
+    case 3:
+      for (let i = 0; i < size; i++) out[i] = y[i] + w0 * u0[i] + w1 * u1[i] + w2 * u2[i];
+      break;
+    case 4:
+      for (let i = 0; i < size; i++) out[i] = y[i] + w0 * u0[i] + w1 * u1[i] + w2 * u2[i] + w3 * u3[i];
+      break;
+    default:
+      for (let i = 0; i < size; i++) {
+        out[i] = y[i] + w0 * u0[i] + w1 * u1[i] + w2 * u2[i] + w3 * u3[i] + w4 * u4[i];
+      }
   }
 }

@@ -11,11 +11,15 @@ import { lumpedModel } from '../../sim/models/lumped/index.ts';
 import { plainSolver } from '../../sim/models/lumped/plain.ts';
 import { smoothSolver } from '../../sim/models/lumped/smooth.ts';
 import type { Trajectory } from '../../sim/models/lumped/trajectory.ts';
+import { settleZonal, zonalGrid } from '../../sim/models/zonal/states.ts';
 import { balancedFromMean } from '../../sim/orbit/balanced.ts';
 import { curveValuesInto } from '../../sim/solve/curve.ts';
+import { rampAlbedo } from '../../sim/surface/albedo/ramp.ts';
+import { linearEmission } from '../../sim/surface/emission/linear.ts';
 import { world } from '../sim/models/lumped/worlds.ts';
+import { degrees, zonalWorld } from '../sim/models/zonal/worlds.ts';
 import { toolPath } from '../support/require.ts';
-import { compiledQuartic, scipySpinUp } from './outside.ts';
+import { compiledQuartic, scipySpinUp, scipyZonal } from './outside.ts';
 import { plainSpinUp } from './plainSpinUp.ts';
 import { geometricMean, median, medianMicroseconds } from './timing.ts';
 
@@ -33,6 +37,7 @@ const print = (line: string) => process.stdout.write(`${line}\n`);
 onePeriodicCase();
 costOverHeatCapacity();
 wholeModel();
+zonal();
 wholeProcess();
 
 function sampled(trajectory: Trajectory): void {
@@ -162,6 +167,28 @@ function wholeModel(): void {
   );
 }
 
+function zonal(): void {
+  print('\nZonal year, ice–albedo ramp, time error within 1e-3 K, meshes and stability included');
+  for (const bands of [90, 360]) {
+    const of = zonalWorld({
+      q: 340,
+      e: 0.3,
+      heatCapacity: 2.1e8,
+      emission: linearEmission({ a: 203.3, b: 2.09 }),
+      albedo: rampAlbedo({ warm: 0.32, ice: 0.62, from: 258, to: 268 }),
+      globe: { bands, obliquity: 23.4 * degrees, solarLongitudeOfPeriapsis: 250 * degrees, heatTransport: 0.65 },
+    });
+    const grid = () => zonalGrid(of, of.globe, bands);
+    const start = Float64Array.from(grid().physics.bands.sine, (x) => 303 - 45 * x * x);
+    const ours = medianMicroseconds(() => void settleZonal(grid(), start, 3.4e-6), 3);
+    const scipy = scipyZonal(bands, 1e-6);
+    const ratio = scipy === null ? '-' : ((scipy.milliseconds * 1e3) / ours).toFixed(0);
+    print(
+      `  ${bands} bands: ours ${(ours / 1e3).toFixed(1)} ms, scipy LSODA spin-up / ours: ${ratio} (${scipy?.years ?? '-'} years)`,
+    );
+  }
+}
+
 function wholeProcess(): void {
   const python = toolPath('scipy');
   const wall = (command: string, words: readonly string[]): number => {
@@ -172,13 +199,18 @@ function wholeProcess(): void {
   };
   const run = () =>
     wall('node', ['dist/perilag.mjs', 'run', 'configs/three-inertias.yaml', '-o', 'out/bench', '--quiet']);
+  const fields = () =>
+    wall('node', ['dist/perilag.mjs', 'run', 'configs/tipped-over.yaml', '-o', 'out/bench-zonal', '--quiet']);
   const load = () => (python === null ? Number.NaN : wall(python, ['-c', 'import scipy.integrate']));
   const node = () => wall('node', ['-e', '0']);
-  for (const start of [run, load, node]) start();
-  const pairs = Array.from({ length: 21 }, () => ({ run: run(), load: load(), node: node() }));
+  for (const start of [run, load, node, fields]) start();
+  const pairs = Array.from({ length: 21 }, () => ({ run: run(), load: load(), node: node(), fields: fields() }));
   print('\nWhole process, three cases, all files (wall time, 21 rounds in turn)');
   print(
     `  perilag run / python3 -c "import scipy.integrate": ${median(pairs.map((pair) => pair.run / pair.load)).toFixed(2)}`,
+  );
+  print(
+    `  zonal example with fields.nc / the same import: ${median(pairs.map((pair) => pair.fields / pair.load)).toFixed(2)}`,
   );
   print(`  perilag run / node -e 0: ${median(pairs.map((pair) => pair.run / pair.node)).toFixed(2)}`);
 }

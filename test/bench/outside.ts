@@ -25,6 +25,14 @@ export function scipySpinUp(eccentricity: number, kappa: number): SpinUp | null 
   return JSON.parse(printed.toString());
 }
 
+/** CPU milliseconds and years of the zonal spin-up. */
+export function scipyZonal(bands: number, rtol: number): { milliseconds: number; years: number } | null {
+  const python = toolPath('scipy');
+  if (python === null) return null;
+  const words = [here('zonalSpinup.py'), String(bands), String(rtol)];
+  return JSON.parse(execFileSync(python, words, { stdio: ['ignore', 'pipe', 'ignore'] }).toString());
+}
+
 /** Compiles quartic.cpp; returns a function that times one case in microseconds. */
 export function compiledQuartic(): { time(eccentricity: number, kappa: number): number; remove(): void } | null {
   if (spawnSync('g++', ['--version']).status !== 0) return null;

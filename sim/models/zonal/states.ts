@@ -51,6 +51,8 @@ export function zonalGrid(world: World, globe: Globe, bandCount: number): ZonalG
 
 const coarseSteps = 32;
 const largestStep = 4;
+/** A last change, K, that the history of a year need not show. */
+const negligible = 1e-5;
 const maximumYears = 300;
 /** Rodas4 gains 2⁴ by halving its steps; 6 leaves room for the kinks of polar night. */
 const safety = 6;
@@ -60,7 +62,8 @@ export function settleZonal(grid: ZonalGrid, bandStart: Float64Array, tolerance:
   const start = onSurfaces(grid.physics, bandStart);
   let years = 0;
   let steps = coarseSteps;
-  const deep = yearOverMemory(grid) < 0.3;
+  // A year that hardly moves the world: the annual balance is all but its state.
+  const deep = yearOverMemory(grid) < 1;
   let y = deep ? relaxToAnnualBalance(grid.physics, grid.mesh(steps), start) : start;
   let rough = settleOn(grid, steps, y, 1e-2, deep ? 4 : 1);
   years += rough.settled.years * steps;
@@ -106,9 +109,8 @@ function settleOn(grid: ZonalGrid, steps: number, start: Float64Array, tolerance
   const system = zonalSystem(grid.physics, mesh);
   const map = yearMap(system);
   const settled = settlePeriodic(map, start, { tolerance, largestStep, firstStep, maximumYears });
-  // The history belongs to the state before its last change: march the final state once more.
-  const end = settled.state.slice();
-  map.year(end);
+  // The history belongs to the state before its last change: where that matters, march the final state once more.
+  if (settled.lastChange > negligible) map.year(settled.state.slice());
   return { system, map, settled };
 }
 

@@ -68,6 +68,10 @@ export function warmShare(ramp: { readonly from: Kelvin; readonly to: Kelvin } |
     const u = (t - from) / width;
     return width * u * u * u * (1 - u / 2);
   }
+  /** A whole band on one side of the ramp: nothing to average. */
+  function allBeyond(low: Kelvin, middle: Kelvin, high: Kelvin): boolean {
+    return (low >= to && middle >= to && high >= to) || (low <= from && middle <= from && high <= from);
+  }
   function mean(a: Kelvin, b: Kelvin): number {
     const step = b - a;
     return Math.abs(step) < narrow ? weight((a + b) / 2) : (primitive(b) - primitive(a)) / step;
@@ -80,8 +84,7 @@ export function warmShare(ramp: { readonly from: Kelvin; readonly to: Kelvin } |
         const t = temperature[i];
         const low = i > 0 ? (temperature[i - 1] + t) / 2 : 1.5 * t - temperature[1] / 2;
         const high = i < last ? (t + temperature[i + 1]) / 2 : 1.5 * t - temperature[last - 1] / 2;
-        const plain = (low >= to && t >= to && high >= to) || (low <= from && t <= from && high <= from);
-        share[i] = plain ? weight(t) : (mean(low, t) + mean(t, high)) / 2;
+        share[i] = allBeyond(low, t, high) ? weight(t) : (mean(low, t) + mean(t, high)) / 2;
       }
     },
     slopesInto(temperature, share, below, here, above) {
@@ -90,6 +93,13 @@ export function warmShare(ramp: { readonly from: Kelvin; readonly to: Kelvin } |
         const t = temperature[i];
         const low = i > 0 ? (temperature[i - 1] + t) / 2 : 1.5 * t - temperature[1] / 2;
         const high = i < last ? (t + temperature[i + 1]) / 2 : 1.5 * t - temperature[last - 1] / 2;
+        if (allBeyond(low, t, high)) {
+          share[i] = weight(t);
+          below[i] = 0;
+          here[i] = 0;
+          above[i] = 0;
+          continue;
+        }
         const left = mean(low, t);
         const right = mean(t, high);
         share[i] = (left + right) / 2;
