@@ -56,6 +56,18 @@ describe.each(names)('%s', (name) => {
     }
   });
 
+  // Solved at 1e-10 both accounts must close to 1e-9; years by latitude have a test of their own with fewer bands.
+  const lumped = scenario.cases.filter(({ model }) => model === 'lumped');
+  if (lumped.length > 0) {
+    test('solved at 1e-10, the accounts close to 1e-9', () => {
+      for (const item of lumped) {
+        const { checks } = runCase({ ...item, options: { ...item.options, tolerance: 1e-10 } });
+        expect(checks.energyBalance.relativeDifference, item.name).toBeLessThan(1e-9);
+        expect(checks.orbitMeanInstellation.relativeDifference, item.name).toBeLessThan(1e-12);
+      }
+    });
+  }
+
   test('has no window that cannot be had', () => {
     expect(scenario.cases.flatMap(({ windows }) => windows.filter(({ unavailable }) => unavailable))).toEqual([]);
   });
