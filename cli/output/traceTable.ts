@@ -24,12 +24,18 @@ function caseLines(item: TraceReportCase, along: TraceReport['along'], terminal:
   const name = wrap(terminal.say(`${item.name} (${item.model})`), terminal.width);
   return [
     ...name.map((line) => terminal.paint('bold', line)),
-    ...(ends.length > 0 ? endLines(ends, along, terminal) : ['no climate ends in this range']),
+    ...(ends.length > 0 ? endLines(ends, along, terminal) : [noEnds(item)]),
     ...severalLines(item, along, terminal),
     '',
     ...tracePlotLines(item, along, terminal),
     ...item.warnings.flatMap((text) => hanging('warning   ', terminal.say(text), terminal.width)),
   ];
+}
+
+/** A branch that could not be followed to the end says nothing of what lies beyond. */
+function noEnds({ branches }: TraceReportCase): string {
+  const whole = branches.every(({ ended }) => ended === 'left');
+  return whole ? 'no climate ends in this range' : 'no end found as far as the branches could be followed';
 }
 
 function endLines(ends: readonly ClimateEnd[], { key, unit }: TraceReport['along'], terminal: Terminal): string[] {

@@ -158,15 +158,10 @@ function ofOneSign(vector: Float64Array): boolean {
 }
 
 function logByPowers(tangent: Tangent): number {
-  let v: Float64Array = new Float64Array(tangent.meanJacobian.size).fill(1);
-  v = normalised(v);
+  const v = new Float64Array(tangent.meanJacobian.size).fill(1);
   let log = Number.NaN;
   for (let trial = 0; trial < 60; trial++) {
-    const end = tangent.apply(v);
-    let square = 0;
-    for (const value of end) square += value * value;
-    const next = Math.log(square) / 2;
-    v = normalised(end);
+    const next = tangent.grow(v);
     const settled = Math.abs(next - log) <= 1e-7 * Math.abs(next);
     log = next;
     if (settled) break;

@@ -13,6 +13,8 @@ const gamma = 1 - Math.SQRT1_2;
 export interface Tangent {
   /** M v: the difference after the period. */
   apply(v: Float64Array): Float64Array;
+  /** Turns v into M v of length 1 and gives ln |M v|/|v|: also where M v itself would vanish to rounding. */
+  grow(v: Float64Array): number;
   /** Time mean of the Jacobian, not factored. */
   readonly meanJacobian: Banded;
   readonly period: number;
@@ -49,21 +51,40 @@ export function tangentOf(
     factors.push(matrix);
     start = end;
   }
+  const once = new Float64Array(size);
+  const stepInto = (factor: Banded, v: Float64Array): void => {
+    once.set(v);
+    solveBanded(factor, once);
+    for (let i = 0; i < size; i++) v[i] = (1 + Math.SQRT2) * once[i] - Math.SQRT2 * v[i];
+    solveBanded(factor, v);
+  };
   return {
     meanJacobian,
     period,
     apply(v) {
       const out = v.slice();
-      const once = new Float64Array(size);
-      for (const factor of factors) {
-        once.set(out);
-        solveBanded(factor, once);
-        for (let i = 0; i < size; i++) out[i] = (1 + Math.SQRT2) * once[i] - Math.SQRT2 * out[i];
-        solveBanded(factor, out);
-      }
+      for (const factor of factors) stepInto(factor, out);
       return out;
     },
+    grow(v) {
+      unit(v);
+      let log = 0;
+      for (const factor of factors) {
+        stepInto(factor, v);
+        log += Math.log(unit(v));
+      }
+      return log;
+    },
   };
+}
+
+/** Scales v to length 1; gives the length that it had. */
+function unit(v: Float64Array): number {
+  let square = 0;
+  for (const value of v) square += value * value;
+  const length = Math.sqrt(square);
+  for (let i = 0; i < v.length; i++) v[i] /= length;
+  return length;
 }
 
 function jacobianRow(jacobianAt: JacobianAt, size: number, width: number, step: number, history: StageHistory): Banded {

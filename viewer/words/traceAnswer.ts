@@ -38,7 +38,12 @@ function howMany(choosing: number, all: number): string {
 /** What happens at each fold, for those who cannot see the figure. */
 export function endsText(oneCase: TraceCase, along: Along): string {
   const ends = climateEnds(oneCase, along);
-  if (ends.length === 0) return 'no climate ends at a fold within the range.';
+  if (ends.length === 0) {
+    const whole = oneCase.branches.every(({ ended }) => ended === 'left');
+    return whole
+      ? 'no climate ends at a fold within the range.'
+      : 'no end was found as far as the branches could be followed.';
+  }
   return `${ends.map((end) => endText(end, along)).join('; ')}.`;
 }
 

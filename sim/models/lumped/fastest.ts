@@ -48,6 +48,13 @@ function fastest(
   const { heatCapacity } = world.surface;
   const value = netHeating(world.surface, flux, temperature) / heatCapacity;
   const shifted = netHeating(world.surface, flux, temperature * (1 + errorEstimate)) / heatCapacity;
+  if (sign * value <= 0) {
+    const reason = `the temperature only ${sign === 1 ? 'falls' : 'rises'}`;
+    return [
+      { ...rate, value: null, reason },
+      { ...time, value: null, reason },
+    ];
+  }
   return [
     { ...rate, value, plusMinus: Math.abs(shifted - value) },
     { ...time, value: timeAt(trajectory, clock, s) },

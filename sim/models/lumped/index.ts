@@ -36,11 +36,11 @@ export function lumpedModel(): Model {
   function solvePeriodic(world: World, options: SolveOptions, windows: readonly Window[]): Solution {
     const clock = orbitClock(world);
     const { all, unresolved } = periodicTrajectories(world, options.tolerance);
-    if (all.length === 0) {
+    if (all.length === 0 || all.some(({ errorEstimate }) => !Number.isFinite(errorEstimate))) {
       throw new SimError(
         'solve',
-        'no periodic state was found',
-        'Try solve.start with a temperature, or a wider albedo ramp',
+        'no periodic state could be computed',
+        'Look for a number that is far out of proportion, or run forward with solve.start',
       );
     }
     const states = all.map((trajectory, index) => ({

@@ -68,7 +68,15 @@ function orbitMap(world: World): YearMap {
       const { logMultiplier } = last;
       const meanJacobian = banded(1, 1);
       meanJacobian.diagonals[1][0] = logMultiplier;
-      return { apply: (v) => v.map((value) => Math.exp(logMultiplier) * value), meanJacobian, period: 1 };
+      return {
+        apply: (v) => v.map((value) => Math.exp(logMultiplier) * value),
+        grow: (v) => {
+          v.fill(1);
+          return logMultiplier;
+        },
+        meanJacobian,
+        period: 1,
+      };
     },
   };
 }

@@ -3,9 +3,14 @@ import type { Kelvin } from '../../si.ts';
 import { globalMean } from './bands.ts';
 import type { ZonalPhysics } from './physics.ts';
 
-export function areaMeanOf({ land, bands }: ZonalPhysics, row: Float64Array): Kelvin {
-  if (land === null) return globalMean(row);
-  return globalMean(bands.sine.map((_, i) => (1 - land.fraction[i]) * row[2 * i] + land.fraction[i] * row[2 * i + 1]));
+export function areaMeanOf(physics: ZonalPhysics, row: Float64Array): Kelvin {
+  return globalMean(bandMeansOf(physics, row));
+}
+
+/** Over the surfaces of each band. */
+export function bandMeansOf({ land, bands }: ZonalPhysics, row: Float64Array): Float64Array {
+  if (land === null) return row;
+  return bands.sine.map((_, i) => (1 - land.fraction[i]) * row[2 * i] + land.fraction[i] * row[2 * i + 1]);
 }
 
 export function iceFractionOf({ land, bands, warm }: ZonalPhysics, row: Float64Array): number {

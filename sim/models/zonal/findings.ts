@@ -13,10 +13,12 @@ import { lagFindings, localLags } from './lags.ts';
 import type { ZonalYear } from './year.ts';
 
 export interface ZonalStability {
-  readonly margin: number;
+  /** Null where the steps of a year are too long for the linearised year of so small a store. */
+  readonly margin: number | null;
   readonly errorEstimate: number;
-  /** Richardson estimate of the error of the bands, K. */
+  /** What the bands leave of error: Richardson's estimate for the area mean, and that of local extremes. */
   readonly bandError: Kelvin;
+  readonly localError: Kelvin;
 }
 
 export function zonalFindings(
@@ -65,18 +67,39 @@ export function zonalFindings(
           label: 'Damping (swing over steady swing)',
           reason: 'the absorbed starlight does not vary over the year',
         },
-    kelvin(
-      'emissionTemperatureMean',
-      'Mean emission temperature',
-      dataset.variables.emitted.data.reduce((sum, value, i) => sum + weight[i] * (value / stefanBoltzmann) ** 0.25, 0),
-    ),
-    ...localExtremes(year, error),
+    emissionTemperature(dataset, kelvin),
+    ...localExtremes(year, (value) => stability.errorEstimate * value + stability.localError),
     ...profileFindings(year),
     ...iceFindings(year, dataset),
     ...localLags(year),
-    { name: 'stabilityMargin', value: stability.margin, unit: '1', label: 'Stability margin' },
+    marginFinding(stability.margin),
     ...windows.flatMap((window) => windowFindings(year, window)),
   ];
+}
+
+function emissionTemperature(
+  { variables }: Dataset,
+  kelvin: (name: string, label: string, value: Kelvin) => Finding,
+): Finding {
+  const weight = variables.weight.data;
+  const found = kelvin(
+    'emissionTemperatureMean',
+    'Mean emission temperature',
+    variables.emitted.data.reduce((sum, value, i) => sum + weight[i] * (value / stefanBoltzmann) ** 0.25, 0),
+  );
+  if (Number.isFinite(found.value)) return found;
+  const { name, unit, label } = found;
+  return { name, unit, label, value: null, reason: 'the emission law falls below zero at the lowest temperatures' };
+}
+
+function marginFinding(margin: number | null): Finding {
+  const base = { name: 'stabilityMargin', unit: '1', label: 'Stability margin' };
+  if (margin !== null) return { ...base, value: margin };
+  return {
+    ...base,
+    value: null,
+    reason: 'the store forgets within a step of the year: its multiplier is not resolved',
+  };
 }
 
 const degrees = 180 / Math.PI;
@@ -87,6 +110,7 @@ function latitudeDeg(year: ZonalYear, band: number): number {
 
 function localExtremes(year: ZonalYear, error: (value: Kelvin) => Kelvin): Finding[] {
   const found = year.curves.bands.map(extremes);
+  const of = year.physics.land === null ? '' : ', mean of land and sea';
   let hot = 0;
   let cold = 0;
   for (let i = 1; i < found.length; i++) {
@@ -100,7 +124,7 @@ function localExtremes(year: ZonalYear, error: (value: Kelvin) => Kelvin): Findi
         name: `${kind}Temperature`,
         value: point.value,
         unit: 'K',
-        label: `${title} local temperature`,
+        label: `${title} local temperature${of}`,
         plusMinus: error(point.value),
       },
       { name: `${kind}Latitude`, value: latitudeDeg(year, band), unit: 'deg', label: `${title} latitude` },

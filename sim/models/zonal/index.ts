@@ -4,7 +4,7 @@ import { steadyAtAlbedo } from '../../findings/steadyState.ts';
 import type { Kelvin } from '../../si.ts';
 import type { Globe, SolveOptions, Window, World } from '../../world.ts';
 import type { Model, Solution, State } from '../model.ts';
-import { areaMeanOf } from './areaMeans.ts';
+import { areaMeanOf, bandMeansOf } from './areaMeans.ts';
 import { zonalDataset } from './dataset.ts';
 import { zonalEnergyBalance } from './energy.ts';
 import { zonalFindings } from './findings.ts';
@@ -38,13 +38,21 @@ export function zonalModel(): Model {
 
 function solvePeriodic(world: World, globe: Globe, options: SolveOptions, windows: readonly Window[]): Solution {
   const found = periodicStates(world, globe, globe.bands, options.tolerance);
+  found.forEach(requirePhysical);
   const halved = periodicStates(world, globe, Math.max(9, Math.floor(globe.bands / 2)), options.tolerance);
   const years = found.map((state) => zonalYear(world, globe, state));
+  const hasIceFeedback = world.surface.albedo.ramp !== null || globe.frozenHeatCapacity !== null;
   const states = found.map((state, index): State => {
     const year = years[index];
     const dataset = zonalDataset(year, options);
-    const margin = state.logMultiplier / state.frozenLogMultiplier;
-    const bandError = bandErrorOf(state, halved[Math.min(index, halved.length - 1)]);
+    const margin = marginOf(state, hasIceFeedback);
+    const coarse = halved[Math.min(index, halved.length - 1)];
+    const stability = {
+      margin,
+      errorEstimate: state.errorEstimate,
+      bandError: bandErrorOf(state, coarse),
+      localError: localErrorOf(state, coarse),
+    };
     return {
       label: found.length === 1 ? 'only' : index === 0 ? 'warm' : 'cold',
       stable: state.logMultiplier < 0,
@@ -53,7 +61,7 @@ function solvePeriodic(world: World, globe: Globe, options: SolveOptions, window
       errorEstimate: state.errorEstimate,
       converged: state.converged,
       dataset,
-      findings: zonalFindings(year, dataset, windows, { margin, errorEstimate: state.errorEstimate, bandError }),
+      findings: zonalFindings(year, dataset, windows, stability),
       energyBalance: zonalEnergyBalance(year),
     };
   });
@@ -70,6 +78,17 @@ function solvePeriodic(world: World, globe: Globe, options: SolveOptions, window
     ],
     iterations: found.reduce((sum, { yearEquivalents }) => sum + yearEquivalents, 0),
   };
+}
+
+/** Where even the finest steps lose a fast band, what is left is no temperature, and no result. */
+function requirePhysical({ history, errorEstimate, logMultiplier, frozenLogMultiplier }: ZonalState): void {
+  const isPhysical = history.value.every((value) => value > 0 && Number.isFinite(value));
+  if (isPhysical && [errorEstimate, logMultiplier, frozenLogMultiplier].every(Number.isFinite)) return;
+  throw new SimError(
+    'planet.heatStore',
+    'the year of this planet cannot be computed: somewhere it heats or cools faster than its shortest time step',
+    'Give a larger heat store, a wider albedo ramp (from, to) or more heatTransport',
+  );
 }
 
 /** From a hot and a cold start; one state where both end alike, or where nothing depends on ice. */
@@ -92,6 +111,12 @@ export function periodicStates(world: World, globe: Globe, bands: number, tolera
   return apart(warm, cold) > sameState ? [warm, cold] : [warm];
 }
 
+/** The linearised year is second order in λh: beyond |λ|h ≈ ½ its ln μ is no measure, though its sign is. */
+function marginOf({ logMultiplier, frozenLogMultiplier, system }: ZonalState, hasIceFeedback: boolean): number | null {
+  const isResolved = !hasIceFeedback || Math.abs(frozenLogMultiplier) / system.mesh.steps < 0.5;
+  return isResolved ? logMultiplier / frozenLogMultiplier : null;
+}
+
 function apart(a: ZonalState, b: ZonalState): Kelvin {
   const size = a.system.size;
   let largest = 0;
@@ -102,6 +127,24 @@ function apart(a: ZonalState, b: ZonalState): Kelvin {
 /** Richardson: half the bands are off by three times what the whole number is, at second order. Year means of the area mean. */
 function bandErrorOf(fine: ZonalState, coarse: ZonalState): Kelvin {
   return Math.abs(areaMean(fine) - areaMean(coarse)) / 3;
+}
+
+/** Of the extremes in place and time: a wider band hides more of the pole in it, so that these gain by the first order only. */
+function localErrorOf(fine: ZonalState, coarse: ZonalState): Kelvin {
+  const [a, b] = [localRange(fine), localRange(coarse)];
+  return Math.max(Math.abs(a.highest - b.highest), Math.abs(a.lowest - b.lowest));
+}
+
+function localRange({ history, system }: ZonalState): { readonly highest: Kelvin; readonly lowest: Kelvin } {
+  let highest = Number.NEGATIVE_INFINITY;
+  let lowest = Number.POSITIVE_INFINITY;
+  for (let start = 0; start < history.value.length; start += system.size) {
+    for (const value of bandMeansOf(system.physics, history.value.subarray(start, start + system.size))) {
+      highest = Math.max(highest, value);
+      lowest = Math.min(lowest, value);
+    }
+  }
+  return { highest, lowest };
 }
 
 function areaMean({ history, system }: ZonalState): Kelvin {

@@ -7,6 +7,9 @@ import type { ZonalSystem } from './system.ts';
 
 const width = 3;
 
+/** W m⁻² K⁻¹, also where land and sea are kept apart: a surface that is not there has no climate of its own to add. */
+const followingExchange = 1;
+
 export function landAndSea(physics: ZonalPhysics, land: LandPhysics, mesh: YearMesh): ZonalSystem {
   const { bands, conductance, warm, iceAlbedo, warmAlbedo, world } = physics;
   const { emission, internalHeat } = world.surface;
@@ -33,7 +36,8 @@ export function landAndSea(physics: ZonalPhysics, land: LandPhysics, mesh: YearM
    */
   const exchangeOf = (surface: Surface, i: number) => {
     const f = surface.share[i];
-    return f === 1 ? 0 : land.exchange / Math.max(f, leastLand);
+    if (f === 1) return 0;
+    return f === 0 ? Math.max(land.exchange, followingExchange) / leastLand : land.exchange / f;
   };
 
   function split(y: Float64Array): void {

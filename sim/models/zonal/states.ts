@@ -50,10 +50,14 @@ export function zonalGrid(world: World, globe: Globe, bandCount: number): ZonalG
 }
 
 const coarseSteps = 32;
+/** Of the mesh on which a start is followed, and of any. */
+const finestStart = 2048;
+const finestSteps = 8192;
 const largestStep = 4;
 /** A last change, K, that the history of a year need not show. */
 const negligible = 1e-5;
-const maximumYears = 300;
+/** Years on one mesh: fewer on a finer one, so that a world that cannot settle is given up in bounded time. */
+const maximumYears = (steps: number) => Math.min(300, Math.max(12, Math.ceil(20_000 / steps)));
 /** Rodas4 gains 2⁴ by halving its steps; 6 leaves room for the kinks of polar night. */
 const safety = 6;
 
@@ -64,24 +68,26 @@ export function settleZonal(grid: ZonalGrid, bandStart: Float64Array, tolerance:
   let steps = coarseSteps;
   // A year that hardly moves the world: the annual balance is all but its state.
   const deep = yearOverMemory(grid) < 1;
-  let y = deep ? relaxToAnnualBalance(grid.physics, grid.mesh(steps), start) : start;
-  let rough = settleOn(grid, steps, y, 1e-2, deep ? 4 : 1);
-  years += rough.settled.years * steps;
-  y = rough.settled.state;
-  steps *= 2;
-  let previous = rough;
+  const first = deep ? relaxToAnnualBalance(grid.physics, grid.mesh(steps), start) : start;
+  const firstStep = deep ? 4 : 1;
+  // Steps too coarse for the fastest bands may lose their way: then the way from the start is tried again on finer ones.
+  let previous = settleOn(grid, steps, first, 1e-2, firstStep);
+  while (!previous.settled.converged && 2 * steps <= finestStart) {
+    years += previous.settled.years * steps;
+    steps *= 2;
+    previous = settleOn(grid, steps, first, 1e-2, firstStep);
+  }
+  years += previous.settled.years * steps;
   for (;;) {
-    const fine = settleOn(grid, steps, y, 0.02 * tolerance * 250, Number.POSITIVE_INFINITY);
+    steps *= 2;
+    const fine = settleOn(grid, steps, previous.settled.state, 0.02 * tolerance * 250, Number.POSITIVE_INFINITY);
     years += fine.settled.years * steps;
     const difference = largestDifference(previous, fine);
     const converged = fine.settled.converged && difference < safety * tolerance;
-    if (converged || 2 * steps > 8192 || !fine.settled.converged) {
+    if (converged || 2 * steps > finestSteps || !fine.settled.converged) {
       return finished(fine, difference / safety, converged, years / steps);
     }
     previous = fine;
-    y = fine.settled.state;
-    steps *= 2;
-    rough = previous;
   }
 }
 
@@ -108,7 +114,12 @@ function settleOn(grid: ZonalGrid, steps: number, start: Float64Array, tolerance
   const mesh = grid.mesh(steps);
   const system = zonalSystem(grid.physics, mesh);
   const map = yearMap(system);
-  const settled = settlePeriodic(map, start, { tolerance, largestStep, firstStep, maximumYears });
+  const settled = settlePeriodic(map, start, {
+    tolerance,
+    largestStep,
+    firstStep,
+    maximumYears: maximumYears(steps),
+  });
   // The history belongs to the state before its last change: where that matters, march the final state once more.
   if (settled.lastChange > negligible) map.year(settled.state.slice());
   return { system, map, settled };

@@ -1,5 +1,6 @@
 /** What a reader of a zonal result must know before using it. */
 import { zeroCelsius } from '../../constants.ts';
+import type { Curve } from '../../solve/curve.ts';
 import { extremes } from '../../solve/features.ts';
 import type { Globe, World } from '../../world.ts';
 import type { ZonalYear } from './year.ts';
@@ -47,7 +48,7 @@ function albedoWarnings(globe: Globe): string[] {
 function emissionWarnings(world: World, years: readonly ZonalYear[]): string[] {
   const { validity } = world.surface.emission;
   if (validity === null) return [];
-  const found = years.flatMap((year) => year.curves.bands.map(extremes));
+  const found = years.flatMap(surfaceCurves).map(extremes);
   const lowest = Math.min(...found.map(({ lowest: point }) => point.value));
   const highest = Math.max(...found.map(({ highest: point }) => point.value));
   if (lowest >= validity.from && highest <= validity.to) return [];
@@ -55,4 +56,11 @@ function emissionWarnings(world: World, years: readonly ZonalYear[]): string[] {
   return [
     `Local temperatures run from ${celsius(lowest)} to ${celsius(highest)} °C, beyond the ${celsius(validity.from)} to ${celsius(validity.to)} °C for which the emission law is published.`,
   ];
+}
+
+/** Of every surface that is there. */
+function surfaceCurves({ curves: { sea, land }, physics }: ZonalYear): Curve[] {
+  const fraction = physics.land?.fraction;
+  if (land === null || fraction === undefined) return [...sea];
+  return [...sea.filter((_, i) => fraction[i] < 1), ...land.filter((_, i) => fraction[i] > 0)];
 }

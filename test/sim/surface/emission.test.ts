@@ -105,3 +105,9 @@ test('errors', () => {
   }
   expect(() => linearEmission({ a: 300, b: 1 })).toThrow('at absolute zero');
 });
+
+test('below 0 K a grey law falls on: a trial that strays there is drawn back', () => {
+  const law = greyBody(1);
+  expect(law.at(-50)).toBe(-law.at(50));
+  expect(law.slopeAt(-50)).toBe(law.slopeAt(50));
+});

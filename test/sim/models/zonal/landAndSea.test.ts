@@ -112,3 +112,19 @@ test('the account closes for a sea whose store changes with its ice', () => {
     }
   }
 });
+
+test('what fills no part of a band has no climate of its own, also without exchange', () => {
+  // A hemisphere each, no band with both: the exchange between them says nothing.
+  const world = (exchange: number) => {
+    const halves: Land = { fraction: { sineLatitude: [-0.01, 0.01], value: [0, 1] }, heatCapacity: 4e7, exchange };
+    const albedo = rampAlbedo({ warm: 0.3, ice: 0.62, from: 258, to: 273 });
+    return zonalWorld({ q: 390, heatCapacity: 1.2e8, albedo, globe: { bands: 18, heatTransport: 3, land: halves } });
+  };
+  const [apart, together] = [0, 100].map((exchange) => solve(world(exchange)));
+  expect(apart.length).toBe(together.length);
+  for (const [i, state] of apart.entries()) {
+    // followers lag by C/(ν/leastLand) s, some 1e5 s at 1 W/m2/K, and their ice edge reaches half a band over the coast
+    expect(largestDifference(temperature(state), temperature(together[i]))).toBeLessThan(0.05);
+    expect(Math.log(state.multiplier!)).toBeCloseTo(Math.log(together[i].multiplier!), 2);
+  }
+});

@@ -140,3 +140,32 @@ test('nothing in a finding or a row is ever not a number', () => {
     }
   }
 });
+
+test('the ± of a local extreme covers what twice the bands find', () => {
+  const [coarse] = solve(zonalWorld({ globe: { bands: 20 } })).states;
+  const [fine] = solve(zonalWorld({ globe: { bands: 40 } })).states;
+  for (const name of ['hottestTemperature', 'coldestTemperature']) {
+    const plusMinus = coarse.findings.find((one) => one.name === name)?.plusMinus ?? 0;
+    expect(Math.abs(finding(coarse, name) - finding(fine, name))).toBeLessThan(plusMinus);
+    expect(plusMinus).toBeLessThan(10);
+  }
+});
+
+describe('a store so small that polar night cools within hours', () => {
+  const globe = { bands: 18, heatTransport: 0.1, obliquity: 90 * degrees };
+  const fast = zonalWorld({ e: 0.1, heatCapacity: 1e4, emission: greyBody(1), globe });
+
+  test('is followed on finer steps where the first lose their way', () => {
+    const [only] = solve(fast, { tolerance: 1e-4 }).states;
+    expect(only.converged).toBe(true);
+    expect(only.energyBalance.relativeDifference).toBeLessThan(1e-3);
+    // Without feedback of ice the margin is one, also where the multiplier is below the smallest number.
+    expect(only.stabilityMargin).toBeCloseTo(1, 9);
+  });
+
+  test('is refused, not told as a number, where no step is fine enough', () => {
+    const albedo = rampAlbedo({ warm: 0.3, ice: 0.62, from: 258, to: 259 });
+    const steep = zonalWorld({ e: 0.6, heatCapacity: 1e3, emission: greyBody(1), albedo, globe });
+    expect(() => solve(steep, { tolerance: 1e-4 })).toThrow(/faster than its shortest time step/);
+  });
+});
