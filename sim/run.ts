@@ -4,6 +4,7 @@ import { orbitMeanByQuadrature, orbitMeanClosedForm } from './findings/orbitMean
 import { textbookTemperature } from './findings/world.ts';
 import { models } from './models/index.ts';
 import type { State } from './models/model.ts';
+import { type Identity, type Origin, originOf } from './origin.ts';
 import { spreadNotes } from './scenario/spreads.ts';
 import type { CaseInput, Derived, Scenario, ScenarioCase } from './scenario/types.ts';
 import type { Window, World } from './world.ts';
@@ -43,28 +44,16 @@ export interface CaseResult {
   readonly passed: boolean;
 }
 
-export interface RunResult {
-  readonly program: { readonly name: 'perilag'; readonly version: string };
-  readonly scenario: {
-    readonly title: string | null;
-    readonly notes: string | null;
-    readonly file: string;
-    readonly sha256: string;
-  };
+export interface RunResult extends Origin {
   readonly cases: readonly CaseResult[];
   /** Of the run as a whole: that spreads are not propagated, and which centres are used instead. */
   readonly notes: readonly string[];
 }
 
 /** Runs every case, in order. `identity` is what only the caller knows. */
-export function runScenario(
-  scenario: Scenario,
-  identity: { readonly sha256: string; readonly version: string },
-): RunResult {
-  const { title, notes, file } = scenario;
+export function runScenario(scenario: Scenario, identity: Identity): RunResult {
   return {
-    program: { name: 'perilag', version: identity.version },
-    scenario: { title, notes, file, sha256: identity.sha256 },
+    ...originOf(scenario, identity),
     cases: scenario.cases.map(runCase),
     notes: spreadNotes(scenario.cases),
   };

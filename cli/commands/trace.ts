@@ -1,6 +1,7 @@
 /** `perilag trace`: the climates of each case as one input changes, as a table and as files. */
 import { basename, extname, join, resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
+import { originOf } from '../../sim/origin.ts';
 import { type Along, type CaseAlong, casesAlong, readAlong } from '../../sim/scenario/along.ts';
 import { reportedAlong, traceAlong } from '../../sim/studies/traceAlong.ts';
 import type { TraceReport, TraceReportCase } from '../../sim/studies/traceReport.ts';
@@ -64,13 +65,7 @@ function reportOf(
   cases: readonly TraceReportCase[],
   { version }: Program,
 ): TraceReport {
-  const { title, notes } = scenario;
-  return {
-    program: { name: 'perilag', version },
-    scenario: { title, notes, file, sha256 },
-    along: reportedAlong(along),
-    cases,
-  };
+  return { ...originOf({ ...scenario, file }, { sha256, version }), along: reportedAlong(along), cases };
 }
 
 /** The report is the last: it is what the others stand beside. */

@@ -1,4 +1,5 @@
 /** What `trace` hands to files, terminal and page: plain data, the input in the unit in which it was typed. */
+import type { Origin } from '../origin.ts';
 import type { Kelvin } from '../si.ts';
 import type { TraceBranch } from './trace.ts';
 
@@ -29,14 +30,7 @@ export interface TraceReportCase {
   readonly warnings: readonly string[];
 }
 
-export interface TraceReport {
-  readonly program: { readonly name: 'perilag'; readonly version: string };
-  readonly scenario: {
-    readonly title: string | null;
-    readonly notes: string | null;
-    readonly file: string;
-    readonly sha256: string;
-  };
+export interface TraceReport extends Origin {
   readonly along: {
     readonly key: string;
     readonly label: string;

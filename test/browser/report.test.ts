@@ -1,13 +1,11 @@
-import { mkdtemp, readFile, rm, writeFile } from 'node:fs/promises';
+import { readFile } from 'node:fs/promises';
 import { createRequire } from 'node:module';
-import { tmpdir } from 'node:os';
-import { join } from 'node:path';
-import type { Browser, BrowserContextOptions, Locator, Page } from 'playwright-core';
-import { afterAll, afterEach, beforeAll, describe, expect, test } from 'vitest';
-import type { RunResult } from '../../sim/run.ts';
+import type { BrowserContextOptions, Locator, Page } from 'playwright-core';
+import { describe, expect, test } from 'vitest';
 import { requireTool } from '../support/require.ts';
 import { type PlainCase, plainRun, temperateWindow } from '../viewer/fixture.ts';
-import { builtPage, chromiumPath, drawn, launch, type OpenReport, openFile, reportFile } from './page.ts';
+import { builtPage, chromiumPath } from './page.ts';
+import { reportBench } from './reportBench.ts';
 
 const hasBrowser = chromiumPath() !== null || requireTool('chromium');
 const axePath = createRequire(import.meta.url).resolve('axe-core/axe.min.js');
@@ -21,41 +19,7 @@ interface Drawn {
 }
 
 describe.skipIf(!hasBrowser)('the report in Chromium', () => {
-  let browser: Browser;
-  let folder: string;
-  let open: OpenReport | null = null;
-  let files = 0;
-
-  beforeAll(async () => {
-    browser = await launch();
-    folder = await mkdtemp(join(tmpdir(), 'perilag-report-'));
-  });
-
-  afterAll(async () => {
-    await browser.close();
-    await rm(folder, { recursive: true, force: true });
-  });
-
-  /** Whatever a test looked at: the page must have kept quiet. */
-  afterEach(async () => {
-    const complaints = await open?.complaints();
-    await open?.close();
-    open = null;
-    expect(complaints ?? []).toEqual([]);
-  });
-
-  async function openReport(result: RunResult, options: BrowserContextOptions = {}): Promise<Page> {
-    open = await openFile(browser, await reportFile(folder, `report-${files++}`, result), options);
-    await drawn(open.page);
-    return open.page;
-  }
-
-  async function openText(html: string): Promise<Page> {
-    const path = join(folder, `page-${files++}.html`);
-    await writeFile(path, html);
-    open = await openFile(browser, path);
-    return open.page;
-  }
+  const { openReport, openText } = reportBench();
 
   test('opens from disk and draws every line with the run’s own numbers', async () => {
     const run = plainRun();

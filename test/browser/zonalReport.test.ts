@@ -1,14 +1,12 @@
-import { mkdtemp, readFile, rm } from 'node:fs/promises';
+import { readFile } from 'node:fs/promises';
 import { createRequire } from 'node:module';
-import { tmpdir } from 'node:os';
-import { join } from 'node:path';
-import type { Browser, BrowserContextOptions, Page } from 'playwright-core';
-import { afterAll, afterEach, beforeAll, describe, expect, test } from 'vitest';
-import type { RunResult } from '../../sim/run.ts';
+import type { BrowserContextOptions, Page } from 'playwright-core';
+import { describe, expect, test } from 'vitest';
 import { requireTool } from '../support/require.ts';
 import { temperateWindow } from '../viewer/fixture.ts';
 import { zonalRun } from '../viewer/zonalFixture.ts';
-import { chromiumPath, drawn, launch, type OpenReport, openFile, reportFile } from './page.ts';
+import { chromiumPath } from './page.ts';
+import { reportBench } from './reportBench.ts';
 
 const hasBrowser = chromiumPath() !== null || requireTool('chromium');
 const axePath = createRequire(import.meta.url).resolve('axe-core/axe.min.js');
@@ -25,34 +23,7 @@ interface Drawn {
 }
 
 describe.skipIf(!hasBrowser)('the report of a run with latitudes in Chromium', () => {
-  let browser: Browser;
-  let folder: string;
-  let open: OpenReport | null = null;
-  let files = 0;
-
-  beforeAll(async () => {
-    browser = await launch();
-    folder = await mkdtemp(join(tmpdir(), 'perilag-zonal-'));
-  });
-
-  afterAll(async () => {
-    await browser.close();
-    await rm(folder, { recursive: true, force: true });
-  });
-
-  /** Whatever a test looked at: the page must have kept quiet. */
-  afterEach(async () => {
-    const complaints = await open?.complaints();
-    await open?.close();
-    open = null;
-    expect(complaints ?? []).toEqual([]);
-  });
-
-  async function openReport(result: RunResult, options: BrowserContextOptions = {}): Promise<Page> {
-    open = await openFile(browser, await reportFile(folder, `report-${files++}`, result), options);
-    await drawn(open.page);
-    return open.page;
-  }
+  const { openReport } = reportBench();
 
   const titles = (page: Page): Promise<string[]> =>
     page.locator('.chart figcaption b').evaluateAll((heads) => heads.map((head) => head.textContent!.trim()));

@@ -1,5 +1,6 @@
 /** Maxima of rows that go round an orbit. Pure. */
 import type { Seconds } from '../../sim/si.ts';
+import { topOfParabola } from '../../sim/solve/parabola.ts';
 
 export interface Rows {
   readonly time: Float64Array;
@@ -15,7 +16,7 @@ export function peakTimes(rows: Rows): Seconds[] {
   for (let row = 0; row < count; row++) {
     const before = rows.at((row + count - 1) % count) - rows.at(row);
     const after = rows.at((row + 1) % count) - rows.at(row);
-    if (before < 0 && after <= 0) found.push(wrapped(time[row]! + topOfParabola(rows, row, before, after), period));
+    if (before < 0 && after <= 0) found.push(wrapped(time[row]! + topAt(rows, row, before, after), period));
   }
   return found;
 }
@@ -32,7 +33,7 @@ export function highestPeak(rows: Rows): Seconds | null {
   if (!(rows.at(best) > rows.at(least))) return null;
   const before = rows.at((best + count - 1) % count) - rows.at(best);
   const after = rows.at((best + 1) % count) - rows.at(best);
-  return wrapped(rows.time[best]! + topOfParabola(rows, best, before, after), rows.period);
+  return wrapped(rows.time[best]! + topAt(rows, best, before, after), rows.period);
 }
 
 /** Time since the nearest of `times` before `moment`, going round. A lead by rounding is no lag of a whole orbit. */
@@ -43,13 +44,11 @@ export function timeSince(times: readonly Seconds[], moment: Seconds, period: Se
 }
 
 /** From its row; within the neighbours. `before` and `after` are their values less its own. */
-function topOfParabola({ time, period }: Rows, row: number, before: number, after: number): Seconds {
+function topAt({ time, period }: Rows, row: number, before: number, after: number): Seconds {
   const count = time.length;
   const left = wrapped(time[row]! - time[(row + count - 1) % count]!, period);
   const right = wrapped(time[(row + 1) % count]! - time[row]!, period);
-  const fall = right * before + left * after;
-  if (fall === 0) return 0;
-  return Math.min(right, Math.max(-left, (right * right * before - left * left * after) / (2 * fall)));
+  return topOfParabola(left, right, before, after);
 }
 
 function wrapped(time: Seconds, period: Seconds): Seconds {

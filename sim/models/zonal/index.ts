@@ -1,6 +1,8 @@
 /** `model: zonal`: temperature by latitude through the year. */
+
 import { SimError } from '../../error.ts';
 import { steadyAtAlbedo } from '../../findings/steadyState.ts';
+import { instellation } from '../../instellation/instellation.ts';
 import type { Kelvin } from '../../si.ts';
 import type { Globe, SolveOptions, Window, World } from '../../world.ts';
 import type { Model, Solution, State } from '../model.ts';
@@ -96,7 +98,7 @@ export function periodicStates(world: World, globe: Globe, bands: number, tolera
   const grid = zonalGrid(world, globe, bands);
   const start = (temperature: Kelvin) => new Float64Array(bands).fill(temperature);
   const { surface } = world;
-  const flux = world.star.luminosity / (4 * Math.PI * world.orbit.semiMajorAxis ** 2);
+  const flux = instellation(world.star.luminosity, world.orbit.semiMajorAxis);
   const quarter = { ...surface, absorbingFraction: 0.25 };
   const mean = 1 / Math.sqrt(1 - world.orbit.eccentricity ** 2);
   const hot = steadyAtAlbedo(quarter, flux * mean, Math.min(surface.albedo.warm, surface.albedo.ice)) + 50;

@@ -1,8 +1,10 @@
 /** How late the temperature follows: the area mean behind its steady value, and single latitudes behind their own insolation. */
+
 import type { Dataset } from '../../dataset/dataset.ts';
 import type { Finding } from '../../findings/finding.ts';
 import type { Seconds } from '../../si.ts';
 import { extremes } from '../../solve/features.ts';
+import { topOfParabola } from '../../solve/parabola.ts';
 import type { ZonalYear } from './year.ts';
 
 /** An error of the time above this share of the year leaves a lag undefined. */
@@ -120,17 +122,9 @@ export function localMaxima(values: Float64Array, times: Float64Array, period: S
     if (!(values[i] > before && values[i] >= after)) continue;
     const left = times[i] - (i > 0 ? times[i - 1] : times[count - 1] - period);
     const right = (i + 1 < count ? times[i + 1] : times[0] + period) - times[i];
-    found.push(times[i] + parabolaTop(left, right, before - values[i], after - values[i]));
+    found.push(times[i] + topOfParabola(left, right, before - values[i], after - values[i]));
   }
   return found;
-}
-
-/** Offset of the vertex of the parabola through (−left, a), (0, 0), (right, b). */
-function parabolaTop(left: number, right: number, a: number, b: number): number {
-  const denominator = right * a + left * b;
-  if (denominator === 0) return 0;
-  const offset = (right * right * a - left * left * b) / (2 * denominator);
-  return Math.min(right, Math.max(-left, offset));
 }
 
 /** Time since the nearest of `times` before `moment`, going round the year; null when there is none. */

@@ -1,6 +1,7 @@
 /** Periodic states of a zonal world from a warm and a cold start. */
 
 import { steadyAtAlbedo } from '../../findings/steadyState.ts';
+import { instellation } from '../../instellation/instellation.ts';
 import { logDominantMultiplier, settlePeriodic, type YearMap } from '../../solve/periodicMap.ts';
 import { marchRodas4, type StageHistory, stageHistory, stageWork } from '../../solve/rodas4.ts';
 import { tangentOf } from '../../solve/tangent.ts';
@@ -99,7 +100,7 @@ function onSurfaces({ land }: ZonalPhysics, bands: Float64Array): Float64Array {
 /** P (dE/dT)/C at the orbit-mean steady temperature: how much of its memory a world loses in a year. */
 function yearOverMemory({ world }: ZonalGrid): number {
   const { surface, orbit } = world;
-  const flux = world.star.luminosity / (4 * Math.PI * orbit.semiMajorAxis ** 2);
+  const flux = instellation(world.star.luminosity, orbit.semiMajorAxis);
   const temperature = steadyAtAlbedo(surface, flux, surface.albedo.warm);
   return (orbit.period * surface.emission.slopeAt(temperature)) / surface.heatCapacity;
 }

@@ -1,5 +1,7 @@
 /** Orbit keys → the orbit of a World, and what follows from it. */
+
 import { metresPerAu } from '../../constants.ts';
+import { instellation } from '../../instellation/instellation.ts';
 import { orbitMeanInverseSquare } from '../../orbit/averages.ts';
 import type { Orbit } from '../../world.ts';
 import { buildPeriapsisTime } from './epoch.ts';
@@ -41,13 +43,12 @@ function deriveOrbit(given: Given, star: StarParts, { eccentricity }: Shape, { s
   given.derive('orbit.apoapsisDistance', far, 'm', 'Distance at apoapsis');
   if (!star.luminosity) return;
   const luminosity = star.luminosity.value;
-  const instellation = (distance: number) => luminosity / (4 * Math.PI * distance * distance);
-  const atAxis = instellation(semiMajorAxis);
+  const atAxis = instellation(luminosity, semiMajorAxis);
   given.derive('orbit.instellation', atAxis, 'W/m2', 'Instellation at distance a');
   const mean = atAxis * orbitMeanInverseSquare(eccentricity);
   given.derive('orbit.orbitMeanInstellation', mean, 'W/m2', 'Orbit-mean instellation');
-  given.derive('orbit.periapsisInstellation', instellation(near), 'W/m2', 'Instellation at periapsis');
-  given.derive('orbit.apoapsisInstellation', instellation(far), 'W/m2', 'Instellation at apoapsis');
+  given.derive('orbit.periapsisInstellation', instellation(luminosity, near), 'W/m2', 'Instellation at periapsis');
+  given.derive('orbit.apoapsisInstellation', instellation(luminosity, far), 'W/m2', 'Instellation at apoapsis');
 }
 
 /** Wider, passing stars would have taken the planet away. */

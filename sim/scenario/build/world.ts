@@ -1,5 +1,7 @@
 /** The keys of one case → a World, how to solve it, and what to tell about it. */
+
 import { stefanBoltzmann } from '../../constants.ts';
+import { instellation } from '../../instellation/instellation.ts';
 import { models } from '../../models/index.ts';
 import type { ModelAsks } from '../../models/model.ts';
 import { orbitMeanInverseSquare } from '../../orbit/averages.ts';
@@ -82,7 +84,7 @@ function finishSurface(skin: Skin, heatCapacity: number | null): Surface | null 
 function radiativeSlope(star: StarParts, orbit: Orbit, skin: Skin): number | null {
   const { albedo, emission, absorbingFraction, internalHeat } = skin;
   if (!star.luminosity || !albedo || !emission || absorbingFraction === null || internalHeat === null) return null;
-  const atAxis = star.luminosity.value / (4 * Math.PI * orbit.semiMajorAxis ** 2);
+  const atAxis = instellation(star.luminosity.value, orbit.semiMajorAxis);
   const absorbed = absorbingFraction * (1 - albedo.warm) * atAxis * orbitMeanInverseSquare(orbit.eccentricity);
   const slope = emission.slopeAt(emission.inverse(absorbed + internalHeat));
   return slope > 0 && Number.isFinite(slope) ? slope : null;
@@ -105,7 +107,7 @@ function isUsable({ star, orbit, surface, globe }: World, given: Desk): boolean 
     'star.mass': star.mass,
     'orbit.semiMajorAxis': orbit.semiMajorAxis,
     'orbit.period': orbit.period,
-    'orbit.instellation': star.luminosity / (4 * Math.PI * orbit.semiMajorAxis ** 2),
+    'orbit.instellation': instellation(star.luminosity, orbit.semiMajorAxis),
     'planet.heatStore': surface.heatCapacity,
     'planet.landHeatStore': globe?.land?.heatCapacity ?? null,
     'planet.frozenHeatStore': globe?.frozenHeatCapacity ?? null,

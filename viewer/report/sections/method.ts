@@ -1,4 +1,5 @@
 /** How it was computed, and what the numbers are not. */
+import type { Origin } from '../../../sim/origin.ts';
 import type { RunResult } from '../../../sim/run.ts';
 import { cautions, methodSteps, type Step } from '../../words/method.ts';
 import { type Child, element } from '../element.ts';
@@ -46,12 +47,6 @@ export function cautionsList(texts: readonly string[]): HTMLElement {
     element('h2', {}, 'What the numbers are not'),
     element('ul', { class: 'cautions' }, ...texts.map((text) => element('li', {}, text))),
   );
-}
-
-/** What made the page, from what. */
-interface Origin {
-  readonly program: { readonly name: string; readonly version: string };
-  readonly scenario: { readonly file: string; readonly sha256: string };
 }
 
 export function footer({ program, scenario }: Origin): HTMLElement {
