@@ -1,6 +1,7 @@
 /**
  * Band matrices: factor once, solve many times. No pivoting: for the diagonally dominant matrices of implicit steps.
- * Width 1 is the Thomas algorithm; wider ones are plain band elimination (Golub & Van Loan 2013, §4.3).
+ * Width 1 is eliminated from both ends (twisted factorisation: Parlett & Dhillon 1997, Linear Algebra Appl. 267, 247); wider ones
+ * are plain band elimination (Golub & Van Loan 2013, §4.3).
  */
 export interface Banded {
   readonly size: number;
@@ -11,13 +12,12 @@ export interface Banded {
 }
 
 export function banded(size: number, width: number): Banded {
-  return { size, width, diagonals: Array.from({ length: 2 * width + 1 }, () => new Float64Array(size)) };
+  const store = new Float64Array((2 * width + 1) * size); // side by side: one allocation, and near in memory
+  const diagonals = Array.from({ length: 2 * width + 1 }, (_, k) => store.subarray(k * size, (k + 1) * size));
+  return { size, width, diagonals };
 }
 
-/**
- * Overwrites a matrix by its factors: the main diagonal by reciprocal pivots, the lower ones by multipliers, the upper ones by
- * the eliminated rows. Returns false when a pivot vanishes or is not finite.
- */
+/** Overwrites a matrix by its factors, for `solveBanded`. Returns false when a pivot vanishes or is not finite. */
 export function factorBanded(matrix: Banded): boolean {
   return matrix.width === 1 ? factorTridiagonal(matrix) : factorWide(matrix);
 }
@@ -28,29 +28,67 @@ export function solveBanded(matrix: Banded, b: Float64Array): void {
   else solveWide(matrix, b);
 }
 
+/**
+ * From both ends to the middle (twisted factorisation): the two halves do not wait for each other, and a processor takes them
+ * side by side. Rows above the middle hold what a top-down elimination leaves, rows below it what a bottom-up one does.
+ */
 function factorTridiagonal({ size, diagonals: [lower, diagonal, upper] }: Banded): boolean {
-  let eliminated = 0;
-  for (let i = 0; i < size; i++) {
-    const pivot = 1 / (diagonal[i] - lower[i] * eliminated);
+  const middle = size >> 1;
+  let above = 0;
+  for (let i = 0; i < middle; i++) {
+    const pivot = 1 / (diagonal[i] - lower[i] * above);
     if (!Number.isFinite(pivot)) return false;
     diagonal[i] = pivot;
     lower[i] *= pivot;
-    eliminated = upper[i] * pivot;
-    upper[i] = eliminated;
+    above = upper[i] * pivot;
+    upper[i] = above;
   }
-  return true;
+  let below = 0;
+  for (let i = size - 1; i > middle; i--) {
+    const pivot = 1 / (diagonal[i] - upper[i] * below);
+    if (!Number.isFinite(pivot)) return false;
+    diagonal[i] = pivot;
+    upper[i] *= pivot;
+    below = lower[i] * pivot;
+    lower[i] = below;
+  }
+  const pivot = 1 / (diagonal[middle] - lower[middle] * above - upper[middle] * below);
+  diagonal[middle] = pivot;
+  lower[middle] *= pivot;
+  upper[middle] *= pivot;
+  return Number.isFinite(pivot);
 }
 
 function solveTridiagonal({ size, diagonals: [lower, diagonal, upper] }: Banded, b: Float64Array): void {
-  let carried = 0;
-  for (let i = 0; i < size; i++) {
-    carried = b[i] * diagonal[i] - lower[i] * carried;
-    b[i] = carried;
+  const middle = size >> 1;
+  const last = size - 1;
+  const pairs = last - middle;
+  let fromAbove = 0;
+  let fromBelow = 0;
+  for (let i = 0; i < pairs; i++) {
+    const j = last - i;
+    fromAbove = b[i] * diagonal[i] - lower[i] * fromAbove;
+    fromBelow = b[j] * diagonal[j] - upper[j] * fromBelow;
+    b[i] = fromAbove;
+    b[j] = fromBelow;
   }
-  for (let i = size - 2; i >= 0; i--) {
-    carried = b[i] - upper[i] * carried;
-    b[i] = carried;
+  if (pairs < middle) {
+    // An even size has one row more above the middle.
+    fromAbove = b[pairs] * diagonal[pairs] - lower[pairs] * fromAbove;
+    b[pairs] = fromAbove;
   }
+  let up = b[middle] * diagonal[middle] - lower[middle] * fromAbove - upper[middle] * fromBelow;
+  let down = up;
+  b[middle] = up;
+  for (let k = 1; k <= pairs; k++) {
+    const i = middle - k;
+    const j = middle + k;
+    up = b[i] - upper[i] * up;
+    down = b[j] - lower[j] * down;
+    b[i] = up;
+    b[j] = down;
+  }
+  if (pairs < middle) b[0] -= upper[0] * up;
 }
 
 function factorWide({ size, width, diagonals }: Banded): boolean {

@@ -8,17 +8,18 @@
  */
 
 import { type Banded, factorBanded, solveBanded } from './banded.ts';
+import { leftmostEigenvalue } from './davidson.ts';
 import { gmres } from './gmres.ts';
 import type { StageHistory } from './rodas4.ts';
 import type { Tangent } from './tangent.ts';
 
-export interface YearMap {
+export interface YearMap<T extends Tangent = Tangent> {
   readonly size: number;
   /** One period in place; false when it fails. Leaves its history behind. */
   year(y: Float64Array): boolean;
   readonly history: StageHistory;
-  /** Along the last history. */
-  tangent(): Tangent | null;
+  /** Along the last history; valid until the next one is taken. */
+  tangent(): T | null;
 }
 
 export interface SettleOptions {
@@ -29,15 +30,21 @@ export interface SettleOptions {
   /** First pseudo-step, in years; Infinity starts with Newton. */
   readonly firstStep: number;
   readonly maximumYears: number;
+  /** What a full Newton step is known to leave of an error, from a coarser mesh; 1 where nothing is known. */
+  readonly contraction: number;
 }
 
-export interface Settled {
+export interface Settled<T extends Tangent = Tangent> {
   readonly state: Float64Array;
   readonly converged: boolean;
   /** Marches taken. */
   readonly years: number;
-  /** Largest change that the last Newton step made or would make. */
-  readonly lastChange: number;
+  /** The last change, Newton's where `converged`: the map's history is that of the state before it. */
+  readonly change: Float64Array;
+  /** Along that history; null where it failed. */
+  readonly tangent: T | null;
+  /** The last move over the one before; as asked where there was but one. */
+  readonly contraction: number;
 }
 
 /** Pseudo-steps in years: from here on a step is Newton's, and the longest that are taken. */
@@ -45,32 +52,50 @@ const fullNewton = 1e7;
 const longestStep = 1e12;
 const vectorLimit = 40;
 
-export function settlePeriodic(map: YearMap, start: Float64Array, options: SettleOptions): Settled {
+/** Newton is not trusted to gain more than this, nor to gain all that it gained before. */
+const bestContraction = 1e-3;
+const doubt = 10;
+
+export function settlePeriodic<T extends Tangent>(
+  map: YearMap<T>,
+  start: Float64Array,
+  options: SettleOptions,
+): Settled<T> {
+  const { tolerance, maximumYears } = options;
   const y = start.slice();
   const end = new Float64Array(map.size);
   let step = options.firstStep;
   let previousResidual = Number.POSITIVE_INFINITY;
-  let lastChange = Number.POSITIVE_INFINITY;
-  for (let years = 1; years <= options.maximumYears; years++) {
+  let previousMove = Number.POSITIVE_INFINITY;
+  let { contraction } = options;
+  let change: Float64Array = new Float64Array(map.size);
+  for (let years = 1; years <= maximumYears; years++) {
     end.set(y);
-    if (!map.year(end)) return { state: y, converged: false, years, lastChange };
+    const tangent = map.year(end) ? map.tangent() : null;
+    if (tangent === null) return { state: y, converged: false, years, change, tangent, contraction };
     const residual = end.map((value, i) => value - y[i]);
     const size = largest(residual);
-    const tangent = map.tangent();
-    if (tangent === null) return { state: y, converged: false, years, lastChange };
     // A residual that grows under long steps means that the way led uphill: back to short ones. A small one is left to Newton.
-    if (size <= options.tolerance) step = Number.POSITIVE_INFINITY;
+    if (size <= tolerance) step = Number.POSITIVE_INFINITY;
     else if (size > 1.5 * previousResidual) step = Math.min(step, 1);
     previousResidual = size;
     const move = implicitStep(tangent, residual, step, options.largestStep);
-    for (let i = 0; i < y.length; i++) y[i] += move.change[i];
-    lastChange = move.largest;
-    if (move.step >= fullNewton && move.largest <= options.tolerance) {
-      return { state: y, converged: true, years, lastChange };
-    }
-    step = move.largest < 0.5 * options.largestStep ? Math.min(longestStep, move.step * 8) : move.step;
+    change = move.change;
+    for (let i = 0; i < y.length; i++) y[i] += change[i];
+    const isFull = move.step >= fullNewton;
+    // A step that was not quite Newton's leaves more: its ratio errs on the safe side.
+    if (previousMove < Number.POSITIVE_INFINITY) contraction = move.largest / previousMove;
+    previousMove = move.largest;
+    const left = move.largest * Math.min(1, doubt * Math.max(bestContraction, contraction));
+    if (isFull && left <= tolerance) return { state: y, converged: true, years, change, tangent, contraction };
+    step = Math.min(longestStep, move.step * growth(move.largest / options.largestStep));
   }
-  return { state: y, converged: false, years: options.maximumYears, lastChange };
+  return { state: y, converged: false, years: maximumYears, change, tangent: null, contraction };
+}
+
+/** How much longer the next step may be after one that moved by this share of the most. */
+function growth(share: number): number {
+  return share < 0.25 ? 32 : share < 0.5 ? 8 : 1;
 }
 
 /** The longest implicit step, up to `step`, that moves no value by more than `most`; a plain year where none does. */
@@ -114,40 +139,24 @@ export function meanYearPreconditioner(tangent: Tangent, shift: number): (v: Flo
 }
 
 /**
- * ln of the dominant multiplier μ of a linearised year. The map preserves order, so that its dominant vector is the one of a
- * single sign: inverse iteration on 1 − M, which knows 1 − μ to full precision, is shifted until it finds that one; fast
- * systems, whose μ is small, take power iteration on its logarithm.
+ * ln of the dominant multiplier μ of a linearised year, by the gap 1 − μ, which is known to full precision also where μ is all but
+ * 1. The map preserves order, so that its dominant vector is the one of a single sign: where another is found, the search starts
+ * again from further down. Fast systems, whose μ is small, take power iteration on its logarithm.
  */
 export function logDominantMultiplier(tangent: Tangent): number {
-  let shift = 0;
+  const { size } = tangent.meanJacobian;
+  const gapOf = (v: Float64Array): Float64Array => {
+    const end = tangent.apply(v);
+    for (let i = 0; i < size; i++) end[i] = v[i] - end[i];
+    return end;
+  };
+  let shift = 1e-9;
   for (let trial = 0; trial < 8; trial++) {
-    const { gap, vector, settled } = nearestGap(tangent, shift);
-    if (settled && ofOneSign(vector)) return gap < 0.5 ? Math.log1p(-gap) : logByPowers(tangent);
-    // The dominant gap lies below: look from further down.
-    shift = shift === 0 ? Math.max(1e-6, 1.5 * Math.abs(gap)) : 3 * shift;
+    const { value, vector, settled } = leftmostEigenvalue(size, gapOf, meanYearPreconditioner(tangent, shift));
+    if (settled && ofOneSign(vector)) return value < 0.5 ? Math.log1p(-value) : logByPowers(tangent, vector);
+    shift = trial === 0 ? Math.max(1e-6, 1.5 * Math.abs(value)) : 3 * shift;
   }
-  return logByPowers(tangent);
-}
-
-/** Eigenvalue of 1 − M nearest to −shift, by inverse iteration. */
-function nearestGap(tangent: Tangent, shift: number) {
-  let vector = normalised(new Float64Array(tangent.meanJacobian.size).fill(1));
-  let gap = Number.NaN;
-  let settled = false;
-  for (let trial = 0; trial < 40 && !settled; trial++) {
-    const z = shiftedSolve(tangent, vector, shift, 1e-6);
-    let along = 0;
-    let square = 0;
-    for (let i = 0; i < z.length; i++) {
-      along += vector[i] * z[i];
-      square += z[i] * z[i];
-    }
-    const next = along / square - shift;
-    vector = normalised(z);
-    settled = Math.abs(next - gap) <= 1e-7 * (Math.abs(next) + shift);
-    gap = next;
-  }
-  return { gap, vector, settled };
+  return logByPowers(tangent, new Float64Array(size).fill(1));
 }
 
 /** Up to what iteration leaves of other vectors. */
@@ -157,8 +166,8 @@ function ofOneSign(vector: Float64Array): boolean {
   return Math.min(most, -least) < 1e-3 * Math.max(most, -least);
 }
 
-function logByPowers(tangent: Tangent): number {
-  const v = new Float64Array(tangent.meanJacobian.size).fill(1);
+function logByPowers(tangent: Tangent, start: Float64Array): number {
+  const v = start.slice();
   let log = Number.NaN;
   for (let trial = 0; trial < 60; trial++) {
     const next = tangent.grow(v);
@@ -167,13 +176,6 @@ function logByPowers(tangent: Tangent): number {
     if (settled) break;
   }
   return log;
-}
-
-function normalised(v: Float64Array): Float64Array {
-  let square = 0;
-  for (const value of v) square += value * value;
-  const scale = 1 / Math.sqrt(square);
-  return v.map((value) => value * scale);
 }
 
 function largest(values: Float64Array): number {

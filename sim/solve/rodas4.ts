@@ -39,16 +39,15 @@ export interface StageSystem {
   readonly width: number;
   /** f at stage `stage` of step `step`. */
   rateInto(step: number, stage: number, y: Float64Array, f: Float64Array): void;
-  /** ∂f/∂y at the start of step `step`. */
-  jacobianInto(step: number, y: Float64Array, matrix: Banded): void;
-  /** ∂f/∂t at the start of step `step`. */
-  driftInto(step: number, y: Float64Array, drift: Float64Array): void;
+  /** f, ∂f/∂y and ∂f/∂t at the start of step `step`: at once, since they share much. */
+  lineariseInto(step: number, y: Float64Array, f: Float64Array, matrix: Banded, drift: Float64Array): void;
 }
 
 /** Buffers of a march; one per thread and size. */
 export interface StageWork {
   readonly stages: readonly Float64Array[];
   readonly trial: Float64Array;
+  readonly mixed: Float64Array;
   readonly drift: Float64Array;
   readonly matrix: Banded;
 }
@@ -57,6 +56,7 @@ export function stageWork(size: number, width: number): StageWork {
   return {
     stages: stageTimes.map(() => new Float64Array(size)),
     trial: new Float64Array(size),
+    mixed: new Float64Array(size),
     drift: new Float64Array(size),
     matrix: banded(size, width),
   };
@@ -105,22 +105,21 @@ function takeStep(
   history: StageHistory | null,
 ): boolean {
   const { size } = system;
-  const { stages, trial, drift, matrix } = work;
-  system.jacobianInto(step, y, matrix);
-  system.driftInto(step, y, drift);
+  const { stages, trial, mixed, drift, matrix } = work;
+  system.lineariseInto(step, y, stages[0], matrix, drift);
+  if (history !== null) history.rate.set(stages[0], step * size);
   const scale = 1 / (gamma * h);
   for (const diagonal of matrix.diagonals) for (let i = 0; i < size; i++) diagonal[i] = -diagonal[i];
   const main = matrix.diagonals[matrix.width];
   for (let i = 0; i < size; i++) main[i] += scale;
   if (!factorBanded(matrix)) return false;
-  for (let stage = 0; stage < stages.length; stage++) {
+  addDrift(timeFactors[0] * h, drift, stages[0]);
+  solveBanded(matrix, stages[0]);
+  for (let stage = 1; stage < stages.length; stage++) {
     const u = stages[stage];
-    addStages(y, stages, shift[stage], 1, trial);
+    prepareStage(stage, h, y, work);
     system.rateInto(step, stage, trial, u);
-    if (stage === 0 && history !== null) history.rate.set(u, step * size);
-    addStages(u, stages, mix[stage], 1 / h, u);
-    const factor = timeFactors[stage] * h;
-    if (factor !== 0) for (let i = 0; i < size; i++) u[i] += factor * drift[i];
+    for (let i = 0; i < size; i++) u[i] += mixed[i];
     solveBanded(matrix, u);
   }
   const last = stages[stages.length - 1];
@@ -128,36 +127,51 @@ function takeStep(
   return true;
 }
 
-/** out = y + factor Σ_j weights[j] u_j, over the first stages; at most five, in one pass. */
-function addStages(
-  y: Float64Array,
-  stages: readonly Float64Array[],
-  weights: readonly number[],
-  factor: number,
-  out: Float64Array,
-): void {
+function addDrift(factor: number, drift: Float64Array, u: Float64Array): void {
+  for (let i = 0; i < u.length; i++) u[i] += factor * drift[i];
+}
+
+/**
+ * trial = y + Σ_j shift_j u_j, where the stage is evaluated, and mixed = Σ_j mix_j u_j / h + drift, what joins its rate: in one
+ * pass over the stages before it, each of which has its own loop so that its weights stay in registers.
+ */
+function prepareStage(stage: number, h: number, y: Float64Array, { stages, trial, mixed, drift }: StageWork): void {
+  const size = y.length;
+  const [a0 = 0, a1 = 0, a2 = 0, a3 = 0] = shift[stage];
+  const inverse = 1 / h;
+  const [b0 = 0, b1 = 0, b2 = 0, b3 = 0, b4 = 0] = mix[stage];
+  const [m0, m1, m2, m3, m4] = [b0 * inverse, b1 * inverse, b2 * inverse, b3 * inverse, b4 * inverse];
+  const d = timeFactors[stage] * h;
   const [u0, u1, u2, u3, u4] = stages;
-  const [w0 = 0, w1 = 0, w2 = 0, w3 = 0, w4 = 0] = weights.map((weight) => factor * weight);
-  const size = out.length;
-  switch (weights.length) {
-    case 0:
-      if (out !== y) out.set(y);
-      break;
+  switch (stage) {
     case 1:
-      for (let i = 0; i < size; i++) out[i] = y[i] + w0 * u0[i];
+      for (let i = 0; i < size; i++) {
+        trial[i] = y[i] + a0 * u0[i];
+        mixed[i] = m0 * u0[i] + d * drift[i];
+      }
       break;
     case 2:
-      for (let i = 0; i < size; i++) out[i] = y[i] + w0 * u0[i] + w1 * u1[i];
+      for (let i = 0; i < size; i++) {
+        trial[i] = y[i] + a0 * u0[i] + a1 * u1[i];
+        mixed[i] = m0 * u0[i] + m1 * u1[i] + d * drift[i];
+      }
       break;
     case 3:
-      for (let i = 0; i < size; i++) out[i] = y[i] + w0 * u0[i] + w1 * u1[i] + w2 * u2[i];
+      for (let i = 0; i < size; i++) {
+        trial[i] = y[i] + a0 * u0[i] + a1 * u1[i] + a2 * u2[i];
+        mixed[i] = m0 * u0[i] + m1 * u1[i] + m2 * u2[i] + d * drift[i];
+      }
       break;
     case 4:
-      for (let i = 0; i < size; i++) out[i] = y[i] + w0 * u0[i] + w1 * u1[i] + w2 * u2[i] + w3 * u3[i];
-      break;
-    default:
       for (let i = 0; i < size; i++) {
-        out[i] = y[i] + w0 * u0[i] + w1 * u1[i] + w2 * u2[i] + w3 * u3[i] + w4 * u4[i];
+        trial[i] = y[i] + a0 * u0[i] + a1 * u1[i] + a2 * u2[i] + a3 * u3[i];
+        mixed[i] = m0 * u0[i] + m1 * u1[i] + m2 * u2[i] + m3 * u3[i];
+      }
+      break;
+    default: // the last starts where the one before it did, and from its own result
+      for (let i = 0; i < size; i++) {
+        trial[i] += u4[i];
+        mixed[i] = m0 * u0[i] + m1 * u1[i] + m2 * u2[i] + m3 * u3[i] + m4 * u4[i];
       }
   }
 }

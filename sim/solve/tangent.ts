@@ -20,36 +20,51 @@ export interface Tangent {
   readonly period: number;
 }
 
+/** A tangent that keeps its steps. */
+export interface SteppedTangent extends Tangent {
+  /** Adds the difference that starts as v to the rows of a march, (steps + 1) × size. */
+  addAlong(v: Float64Array, rows: Float64Array): void;
+}
+
 export type JacobianAt = (step: number, y: Float64Array, matrix: Banded) => void;
 
+/** Room for the factors of every step: large, so made once for a mesh. What it holds is a tangent's until the next one takes it. */
+export interface TangentStore {
+  readonly factors: readonly Banded[];
+  readonly ends: readonly [Banded, Banded];
+  readonly mean: Banded;
+}
+
+export function tangentStore(steps: number, size: number, width: number): TangentStore {
+  const matrix = () => banded(size, width);
+  return { factors: Array.from({ length: steps }, matrix), ends: [matrix(), matrix()], mean: matrix() };
+}
+
+/** Null where a step's matrix cannot be factored. */
 export function tangentOf(
   jacobianAt: JacobianAt,
   { size, width }: { readonly size: number; readonly width: number },
   widths: Float64Array,
   history: StageHistory,
-): Tangent | null {
-  const meanJacobian = banded(size, width);
-  const factors: Banded[] = [];
+  { factors, ends, mean: meanJacobian }: TangentStore = tangentStore(widths.length, size, width),
+): SteppedTangent | null {
   const period = widths.reduce((sum, width) => sum + width, 0);
-  let start = jacobianRow(jacobianAt, size, width, 0, history);
+  let [start, end] = ends;
+  for (const diagonal of meanJacobian.diagonals) diagonal.fill(0);
+  jacobianAt(0, history.value.subarray(0, size), start);
   for (let step = 0; step < widths.length; step++) {
     // The Jacobian at the step's end is that of the next start; a period closes on itself.
-    const end = jacobianRow(jacobianAt, size, width, (step + 1) % widths.length, history);
-    const matrix = banded(size, width);
+    const next = (step + 1) % widths.length;
+    jacobianAt(next, history.value.subarray(next * size, (next + 1) * size), end);
     const share = widths[step] / (2 * period);
+    const scale = (-gamma * widths[step]) / 2;
     for (let k = 0; k <= 2 * width; k++) {
-      const [a, b, mean, target] = [start, end, meanJacobian, matrix].map(({ diagonals }) => diagonals[k]);
-      const scale = (-gamma * widths[step]) / 2;
-      for (let i = 0; i < size; i++) {
-        const sum = a[i] + b[i];
-        mean[i] += share * sum;
-        target[i] = scale * sum;
-      }
+      const target = factors[step].diagonals[k];
+      addSum(start.diagonals[k], end.diagonals[k], share, meanJacobian.diagonals[k], scale, target);
+      if (k === width) for (let i = 0; i < size; i++) target[i] += 1;
     }
-    for (let i = 0; i < size; i++) matrix.diagonals[width][i] += 1;
-    if (!factorBanded(matrix)) return null;
-    factors.push(matrix);
-    start = end;
+    if (!factorBanded(factors[step])) return null;
+    [start, end] = [end, start];
   }
   const once = new Float64Array(size);
   const stepInto = (factor: Banded, v: Float64Array): void => {
@@ -66,6 +81,14 @@ export function tangentOf(
       for (const factor of factors) stepInto(factor, out);
       return out;
     },
+    addAlong(v, rows) {
+      const moved = v.slice();
+      for (const [step, factor] of factors.entries()) {
+        addTo(rows, step * size, moved);
+        stepInto(factor, moved);
+      }
+      addTo(rows, factors.length * size, moved);
+    },
     grow(v) {
       unit(v);
       let log = 0;
@@ -78,6 +101,10 @@ export function tangentOf(
   };
 }
 
+function addTo(rows: Float64Array, offset: number, v: Float64Array): void {
+  for (let i = 0; i < v.length; i++) rows[offset + i] += v[i];
+}
+
 /** Scales v to length 1; gives the length that it had. */
 function unit(v: Float64Array): number {
   let square = 0;
@@ -87,8 +114,18 @@ function unit(v: Float64Array): number {
   return length;
 }
 
-function jacobianRow(jacobianAt: JacobianAt, size: number, width: number, step: number, history: StageHistory): Banded {
-  const row = banded(size, width);
-  jacobianAt(step, history.value.subarray(step * size, (step + 1) * size), row);
-  return row;
+/** mean += share (a + b); target = scale (a + b). */
+function addSum(
+  a: Float64Array,
+  b: Float64Array,
+  share: number,
+  mean: Float64Array,
+  scale: number,
+  target: Float64Array,
+): void {
+  for (let i = 0; i < a.length; i++) {
+    const sum = a[i] + b[i];
+    mean[i] += share * sum;
+    target[i] = scale * sum;
+  }
 }

@@ -1,5 +1,4 @@
 /** Two temperatures a band, sea at 2i and land at 2i + 1: seven diagonals. */
-import type { StageSystem } from '../../solve/rodas4.ts';
 import { addMeridionalConvergence } from '../../transport/diffusion.ts';
 import type { YearMesh } from './mesh.ts';
 import { bandAlbedo, type LandPhysics, leastLand, seaHeatCapacity, type ZonalPhysics } from './physics.ts';
@@ -62,7 +61,7 @@ export function landAndSea(physics: ZonalPhysics, land: LandPhysics, mesh: YearM
     }
   }
 
-  function jacobian(frozen: boolean): StageSystem['jacobianInto'] {
+  function jacobian(frozen: boolean): ZonalSystem['jacobianInto'] {
     return (step, y, { diagonals }) => {
       const offset = step * 5 * count;
       split(y);
@@ -103,28 +102,41 @@ export function landAndSea(physics: ZonalPhysics, land: LandPhysics, mesh: YearM
     };
   }
 
+  function rateInto(step: number, stage: number, y: Float64Array, rate: Float64Array): void {
+    split(y);
+    for (const s of surfaces) warm.into(s.temperature, s.warm);
+    fluxInto((step * 5 + Math.min(stage, 4)) * count);
+    for (const s of surfaces) for (let i = 0; i < count; i++) rate[2 * i + s.which] = s.flux[i] / capacityOf(s, i);
+  }
+
+  /** From the temperatures and shares of `surfaces`. */
+  function drift(step: number, into: Float64Array): void {
+    for (const s of surfaces) {
+      for (let i = 0; i < count; i++) {
+        const absorbed = mesh.insolationDrift[step * count + i] * (1 - bandAlbedo(physics, i, s.warm[i]));
+        into[2 * i + s.which] = absorbed / capacityOf(s, i);
+      }
+    }
+  }
+
+  const jacobianInto = jacobian(false);
   return {
     size: 2 * count,
     width,
     mesh,
     physics,
-    rateInto(step, stage, y, rate) {
+    rateInto,
+    lineariseInto(step, y, f, matrix, driftOfStep) {
+      rateInto(step, 0, y, f);
+      drift(step, driftOfStep);
+      jacobianInto(step, y, matrix);
+    },
+    jacobianInto,
+    frozenJacobianInto: jacobian(true),
+    driftInto(step, y, into) {
       split(y);
       for (const s of surfaces) warm.into(s.temperature, s.warm);
-      fluxInto((step * 5 + Math.min(stage, 4)) * count);
-      for (const s of surfaces) for (let i = 0; i < count; i++) rate[2 * i + s.which] = s.flux[i] / capacityOf(s, i);
-    },
-    jacobianInto: jacobian(false),
-    frozenJacobianInto: jacobian(true),
-    driftInto(step, y, drift) {
-      split(y);
-      for (const s of surfaces) {
-        warm.into(s.temperature, s.warm);
-        for (let i = 0; i < count; i++) {
-          const absorbed = mesh.insolationDrift[step * count + i] * (1 - bandAlbedo(physics, i, s.warm[i]));
-          drift[2 * i + s.which] = absorbed / capacityOf(s, i);
-        }
-      }
+      drift(step, into);
     },
   };
 }

@@ -36,40 +36,19 @@ export function yearMesh(world: World, globe: Globe, bands: Bands, steps: number
   const width = time.slice(1).map((end, i) => end - time[i]);
   const insolation = new Float64Array(steps * distinctStages * bands.count);
   const insolationDrift = new Float64Array(steps * bands.count);
-  const at = bandInsolation(world, globe, bands);
-  const row = new Float64Array(bands.count);
+  const insolationAt = bandInsolation(world, globe, bands);
+  const rowAt = (of: Float64Array, index: number) => of.subarray(index * bands.count, (index + 1) * bands.count);
   for (let step = 0; step < steps; step++) {
-    for (let stage = 0; stage < distinctStages; stage++) {
-      const offset = (step * distinctStages + stage) * bands.count;
-      if (stage === 0 && step > 0) {
-        insolation.copyWithin(offset, offset - bands.count, offset);
-        continue;
-      }
-      at(time[step] + stageTimes[stage] * width[step], row);
-      insolation.set(row, offset);
+    const first = step * distinctStages;
+    insolationAt.withDrift(time[step], rowAt(insolation, first), rowAt(insolationDrift, step));
+    for (let stage = 1; stage < distinctStages - 1; stage++) {
+      insolationAt.at(time[step] + stageTimes[stage] * width[step], rowAt(insolation, first + stage));
     }
-    driftInto(
-      at,
-      time[step],
-      1e-4 * perRadian,
-      row,
-      insolationDrift.subarray(step * bands.count, (step + 1) * bands.count),
-    );
+    // The last stage of a step is the first of the next; a year closes on itself.
+    if (step > 0) rowAt(insolation, first - 1).set(rowAt(insolation, first));
   }
+  rowAt(insolation, steps * distinctStages - 1).set(rowAt(insolation, 0));
   return { steps, time, width, insolation, insolationDrift };
-}
-
-/** Central difference over `reach` either way: relative error 1e-8, far below the method's own. */
-function driftInto(
-  at: (time: Seconds, row: Float64Array) => void,
-  time: Seconds,
-  reach: Seconds,
-  row: Float64Array,
-  drift: Float64Array,
-): void {
-  at(time + reach, drift);
-  at(time - reach, row);
-  for (let i = 0; i < drift.length; i++) drift[i] = (drift[i] - row[i]) / (2 * reach);
 }
 
 /** Where the planet is at a time: true anomaly and instellation. */

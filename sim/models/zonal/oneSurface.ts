@@ -1,44 +1,66 @@
 /** One temperature a band: tridiagonal. */
-import type { StageSystem } from '../../solve/rodas4.ts';
 import { addMeridionalConvergence } from '../../transport/diffusion.ts';
 import type { YearMesh } from './mesh.ts';
-import { bandAlbedo, seaHeatCapacity, type ZonalPhysics } from './physics.ts';
+import { seaHeatCapacity, type ZonalPhysics } from './physics.ts';
 import type { ZonalSystem } from './system.ts';
 
 export function oneSurface(physics: ZonalPhysics, mesh: YearMesh): ZonalSystem {
-  const { bands, conductance, warm, warmAlbedo, iceAlbedo, world } = physics;
+  const { bands, conductance, warm, world } = physics;
   const { emission, internalHeat } = world.surface;
   const size = bands.count;
   const row = () => new Float64Array(size);
-  const [share, below, here, above, flux] = [row(), row(), row(), row(), row()];
+  const [share, below, here, above, flux, inverseCapacity] = [row(), row(), row(), row(), row(), row()];
   const varyingCapacity = physics.heatCapacity - physics.frozenHeatCapacity;
+  inverseCapacity.fill(1 / physics.heatCapacity);
+  const iceAbsorbs = 1 - physics.iceAlbedo;
+  /** What a band absorbs more without ice than with it, as a share. */
+  const gain = physics.warmAlbedo.map((albedo) => physics.iceAlbedo - albedo);
 
+  /** From `share`. */
   function fluxInto(offset: number, y: Float64Array): void {
+    const { insolation } = mesh;
     for (let i = 0; i < size; i++) {
-      const albedo = iceAlbedo + (warmAlbedo[i] - iceAlbedo) * share[i];
-      flux[i] = mesh.insolation[offset + i] * (1 - albedo) + internalHeat - emission.at(y[i]);
+      flux[i] = insolation[offset + i] * (iceAbsorbs + gain[i] * share[i]) + internalHeat - emission.at(y[i]);
     }
     addMeridionalConvergence(y, conductance, flux);
+    if (varyingCapacity !== 0) for (let i = 0; i < size; i++) inverseCapacity[i] = 1 / seaHeatCapacity(physics, y[i]);
   }
 
-  function jacobian(frozen: boolean): StageSystem['jacobianInto'] {
-    return (step, y, matrix) => {
-      const [lower, diagonal, upper] = matrix.diagonals;
-      const offset = step * 5 * size;
+  /** From `share`, `flux` and the slopes of `share`. */
+  function jacobian(step: number, y: Float64Array, frozen: boolean, [lower, diagonal, upper]: readonly Float64Array[]) {
+    const offset = step * 5 * size;
+    const { insolation } = mesh;
+    for (let i = 0; i < size; i++) {
+      const fromBelow = i > 0 ? conductance[i - 1] : 0;
+      const fromAbove = i < size - 1 ? conductance[i] : 0;
+      const inverse = inverseCapacity[i];
+      // Less ice absorbs more; an open sea stores more.
+      const response = frozen ? 0 : insolation[offset + i] * gain[i];
+      const stores = varyingCapacity === 0 ? 0 : flux[i] * varyingCapacity * physics.rampWeight.slopeAt(y[i]) * inverse;
+      lower[i] = (fromBelow + response * below[i]) * inverse;
+      upper[i] = (fromAbove + response * above[i]) * inverse;
+      diagonal[i] = (response * here[i] - fromBelow - fromAbove - emission.slopeAt(y[i]) - stores) * inverse;
+    }
+  }
+
+  function rate(f: Float64Array): void {
+    for (let i = 0; i < size; i++) f[i] = flux[i] * inverseCapacity[i];
+  }
+
+  /** From `share`. */
+  function drift(step: number, into: Float64Array): void {
+    const offset = step * size;
+    const { insolationDrift } = mesh;
+    for (let i = 0; i < size; i++) {
+      into[i] = insolationDrift[offset + i] * (iceAbsorbs + gain[i] * share[i]) * inverseCapacity[i];
+    }
+  }
+
+  function jacobianInto(frozen: boolean): ZonalSystem['jacobianInto'] {
+    return (step, y, { diagonals }) => {
       warm.slopesInto(y, share, below, here, above);
-      if (varyingCapacity !== 0) fluxInto(offset, y);
-      for (let i = 0; i < size; i++) {
-        const fromBelow = i > 0 ? conductance[i - 1] : 0;
-        const fromAbove = i < size - 1 ? conductance[i] : 0;
-        const capacity = seaHeatCapacity(physics, y[i]);
-        // Less ice absorbs more; an open sea stores more.
-        const response = frozen ? 0 : mesh.insolation[offset + i] * (iceAlbedo - warmAlbedo[i]);
-        const stores =
-          varyingCapacity === 0 ? 0 : (flux[i] * varyingCapacity * physics.rampWeight.slopeAt(y[i])) / capacity;
-        lower[i] = (fromBelow + response * below[i]) / capacity;
-        upper[i] = (fromAbove + response * above[i]) / capacity;
-        diagonal[i] = (-fromBelow - fromAbove - emission.slopeAt(y[i]) - stores + response * here[i]) / capacity;
-      }
+      if (varyingCapacity !== 0) fluxInto(step * 5 * size, y);
+      jacobian(step, y, frozen, diagonals);
     };
   }
 
@@ -47,20 +69,24 @@ export function oneSurface(physics: ZonalPhysics, mesh: YearMesh): ZonalSystem {
     width: 1,
     mesh,
     physics,
-    rateInto(step, stage, y, rate) {
+    rateInto(step, stage, y, f) {
       warm.into(y, share);
       fluxInto((step * 5 + Math.min(stage, 4)) * size, y);
-      for (let i = 0; i < size; i++) rate[i] = flux[i] / seaHeatCapacity(physics, y[i]);
+      rate(f);
     },
-    jacobianInto: jacobian(false),
-    frozenJacobianInto: jacobian(true),
-    driftInto(step, y, drift) {
+    lineariseInto(step, y, f, matrix, driftOfStep) {
+      warm.slopesInto(y, share, below, here, above);
+      fluxInto(step * 5 * size, y);
+      rate(f);
+      jacobian(step, y, false, matrix.diagonals);
+      drift(step, driftOfStep);
+    },
+    jacobianInto: jacobianInto(false),
+    frozenJacobianInto: jacobianInto(true),
+    driftInto(step, y, into) {
       warm.into(y, share);
-      const offset = step * size;
-      for (let i = 0; i < size; i++) {
-        const absorbed = mesh.insolationDrift[offset + i] * (1 - bandAlbedo(physics, i, share[i]));
-        drift[i] = absorbed / seaHeatCapacity(physics, y[i]);
-      }
+      if (varyingCapacity !== 0) fluxInto(step * 5 * size, y);
+      drift(step, into);
     },
   };
 }

@@ -2,9 +2,15 @@
 
 import { steadyAtAlbedo } from '../../findings/steadyState.ts';
 import { instellation } from '../../instellation/instellation.ts';
-import { logDominantMultiplier, settlePeriodic, type YearMap } from '../../solve/periodicMap.ts';
+import {
+  logDominantMultiplier,
+  type Settled,
+  type SettleOptions,
+  settlePeriodic,
+  type YearMap,
+} from '../../solve/periodicMap.ts';
 import { marchRodas4, type StageHistory, stageHistory, stageWork } from '../../solve/rodas4.ts';
-import { tangentOf } from '../../solve/tangent.ts';
+import { type SteppedTangent, type TangentStore, tangentOf, tangentStore } from '../../solve/tangent.ts';
 import type { Globe, World } from '../../world.ts';
 import { relaxToAnnualBalance } from './annualBalance.ts';
 import { equalAreaBands } from './bands.ts';
@@ -50,13 +56,11 @@ export function zonalGrid(world: World, globe: Globe, bandCount: number): ZonalG
   };
 }
 
-const coarseSteps = 32;
+const coarseSteps = 24;
 /** Of the mesh on which a start is followed, and of any. */
-const finestStart = 2048;
-const finestSteps = 8192;
+const finestStart = 1536;
+const finestSteps = 6144;
 const largestStep = 4;
-/** A last change, K, that the history of a year need not show. */
-const negligible = 1e-5;
 /** Years on one mesh: fewer on a finer one, so that a world that cannot settle is given up in bounded time. */
 const maximumYears = (steps: number) => Math.min(300, Math.max(12, Math.ceil(20_000 / steps)));
 /** Rodas4 gains 2⁴ by halving its steps; 6 leaves room for the kinks of polar night. */
@@ -71,17 +75,23 @@ export function settleZonal(grid: ZonalGrid, bandStart: Float64Array, tolerance:
   const deep = yearOverMemory(grid) < 1;
   const first = deep ? relaxToAnnualBalance(grid.physics, grid.mesh(steps), start) : start;
   const firstStep = deep ? 4 : 1;
+  const onCoarse = () => settleOn(grid, steps, first, { tolerance: 1e-2, firstStep, contraction: 1 });
   // Steps too coarse for the fastest bands may lose their way: then the way from the start is tried again on finer ones.
-  let previous = settleOn(grid, steps, first, 1e-2, firstStep);
+  let previous = onCoarse();
   while (!previous.settled.converged && 2 * steps <= finestStart) {
     years += previous.settled.years * steps;
     steps *= 2;
-    previous = settleOn(grid, steps, first, 1e-2, firstStep);
+    previous = onCoarse();
   }
   years += previous.settled.years * steps;
   for (;;) {
     steps *= 2;
-    const fine = settleOn(grid, steps, previous.settled.state, 0.02 * tolerance * 250, Number.POSITIVE_INFINITY);
+    const { state, contraction } = previous.settled;
+    const fine = settleOn(grid, steps, state, {
+      tolerance: 0.02 * tolerance * 250,
+      firstStep: Number.POSITIVE_INFINITY,
+      contraction,
+    });
     years += fine.settled.years * steps;
     const difference = largestDifference(previous, fine);
     const converged = fine.settled.converged && difference < safety * tolerance;
@@ -107,34 +117,50 @@ function yearOverMemory({ world }: ZonalGrid): number {
 
 interface OnMesh {
   readonly system: ZonalSystem;
-  readonly map: YearMap;
-  readonly settled: ReturnType<typeof settlePeriodic>;
+  readonly map: ZonalYearMap;
+  readonly settled: Settled<SteppedTangent>;
 }
 
-function settleOn(grid: ZonalGrid, steps: number, start: Float64Array, tolerance: number, firstStep: number): OnMesh {
+type HowToSettle = Pick<SettleOptions, 'tolerance' | 'firstStep' | 'contraction'>;
+
+function settleOn(grid: ZonalGrid, steps: number, start: Float64Array, how: HowToSettle): OnMesh {
   const mesh = grid.mesh(steps);
   const system = zonalSystem(grid.physics, mesh);
   const map = yearMap(system);
-  const settled = settlePeriodic(map, start, {
-    tolerance,
-    largestStep,
-    firstStep,
-    maximumYears: maximumYears(steps),
-  });
-  // The history belongs to the state before its last change: where that matters, march the final state once more.
-  if (settled.lastChange > negligible) map.year(settled.state.slice());
+  const settled = settlePeriodic(map, start, { ...how, largestStep, maximumYears: maximumYears(steps) });
+  if (settled.converged && settled.tangent !== null) map.move(settled.tangent, settled.change);
   return { system, map, settled };
 }
 
-export function yearMap(system: ZonalSystem): YearMap {
+export interface ZonalYearMap extends YearMap<SteppedTangent> {
+  /** The tangent with the albedo held; takes the room of the other. */
+  frozenTangent(): SteppedTangent | null;
+  /** Moves the last history by a small change of its start. */
+  move(tangent: SteppedTangent, change: Float64Array): void;
+}
+
+export function yearMap(system: ZonalSystem): ZonalYearMap {
   const { mesh, size } = system;
   const work = stageWork(size, system.width);
   const history = stageHistory(mesh.steps, size);
+  let store: TangentStore | null = null;
+  const tangent = (jacobian: ZonalSystem['jacobianInto']) => {
+    store ??= tangentStore(mesh.steps, size, system.width);
+    return tangentOf(jacobian, system, mesh.width, history, store);
+  };
   return {
     size,
     history,
     year: (y) => marchRodas4(system, mesh.width, y, work, history),
-    tangent: () => tangentOf(system.jacobianInto, system, mesh.width, history),
+    tangent: () => tangent(system.jacobianInto),
+    frozenTangent: () => tangent(system.frozenJacobianInto),
+    move(along, change) {
+      along.addAlong(change, history.value);
+      for (let step = 0; step <= mesh.steps; step++) {
+        const row = (values: Float64Array) => values.subarray(step * size, (step + 1) * size);
+        system.rateInto(step % mesh.steps, 0, row(history.value), row(history.rate));
+      }
+    },
   };
 }
 
@@ -168,13 +194,14 @@ function largestDifference(coarse: OnMesh, fine: OnMesh): number {
 }
 
 function finished(on: OnMesh, errorEstimate: number, converged: boolean, yearEquivalents: number): ZonalState {
-  const { system, map } = on;
-  const tangent = map.tangent();
-  const frozen = tangentOf(system.frozenJacobianInto, system, system.mesh.width, map.history);
+  const { system, map, settled } = on;
+  const tangent = settled.tangent ?? map.tangent();
+  const logMultiplier = tangent === null ? Number.NaN : logDominantMultiplier(tangent);
+  const frozen = map.frozenTangent();
   return {
     system,
     history: map.history,
-    logMultiplier: tangent === null ? Number.NaN : logDominantMultiplier(tangent),
+    logMultiplier,
     frozenLogMultiplier: frozen === null ? Number.NaN : logDominantMultiplier(frozen),
     errorEstimate,
     converged,

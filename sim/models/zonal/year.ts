@@ -73,7 +73,7 @@ export function zonalYear(world: World, globe: Globe, state: ZonalState): ZonalY
     physics,
     curves,
     at(time) {
-      insolationAt(time, moment.insolation);
+      insolationAt.at(time, moment.insolation);
       for (const part of ['temperature', 'warmShare', 'albedo', 'emitted', 'convergence'] as const)
         moment[part].fill(0);
       for (let i = 0; i < count; i++) moment.seaTemperature[i] = curveValue(curves.sea[i], time);

@@ -136,7 +136,7 @@ test('north and south receive the same in a year, on any orbit, and as much as t
 });
 
 describe('global annual mean S₀/(4√(1−e²)) from the bands', () => {
-  const edges = Float64Array.from({ length: 19 }, (_, i) => i / 9 - 1);
+  const edges = Float64Array.from({ length: 19 }, (_, i) => (i - 9) / 9);
   const bands = new Float64Array(18);
   for (const { epoch, eccentricity, obliquityDeg, perihelionDeg, expected } of globalMeans) {
     test(epoch, () => {
