@@ -36,8 +36,12 @@ function signedCentralShare(x: number): number {
 /** Enough at x = centre, where it converges slowest: the error falls as exp(−2x√n). */
 const fractions = 400;
 
+/** Beyond it a tail is less than the least double. */
+const nothingBeyond = 39;
+
 /** Share above x > 0: φ(x) / (x + 1/(x + 2/(x + 3/(x + …)))). */
 function tailShare(x: number): number {
+  if (x > nothingBeyond) return 0;
   let fraction = x;
   for (let n = fractions; n > 0; n--) fraction = x + n / fraction;
   return density(x) / fraction;
