@@ -25,8 +25,8 @@ function leastResultant(count: number): number {
  */
 export function summariseTurns(turns: Float64Array, scratch = new Float64Array(turns.length)): CircularSummary {
   const { cosine, sine, count } = resultant(turns);
-  const defined = count / turns.length;
   if (count === 0) return { ...undefinedSummary(0, 'no draw has a value'), resultantLength: null };
+  const defined = count / turns.length;
   const resultantLength = Math.min(1, Math.hypot(cosine, sine) / count);
   if (resultantLength < leastResultant(count)) {
     return { ...undefinedSummary(defined, noDirection(resultantLength)), resultantLength };

@@ -38,10 +38,9 @@ export function addInOrder(total: RunningSum, values: Float64Array): void {
 export function summarise(values: Float64Array, scratch = new Float64Array(values.length)): Summary {
   const total: RunningSum = { sum: 0, count: 0 };
   addInOrder(total, values);
-  const defined = total.count / values.length;
   if (total.count === 0) return undefinedSummary(0, 'no draw has a value');
   const percentiles = percentilesInto(definedInto(values, scratch));
-  return { mean: total.sum / total.count, percentiles, defined };
+  return { mean: total.sum / total.count, percentiles, defined: total.count / values.length };
 }
 
 export function undefinedSummary(defined: number, reason: string): Summary {

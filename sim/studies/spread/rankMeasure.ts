@@ -44,7 +44,7 @@ export function rankOrder(values: Float64Array): RankOrder {
 }
 
 /**
- * Shape:  input and finding over the same n draws; draws without a finding are left out.
+ * Shape:  input and finding over the same n draws; draws without a finding are left out; every draw has its input.
  *         `rows` (n,), for posterior samples: the row that each draw took, so that repeats are not counted as independent.
  */
 export function rankMeasure(input: RankOrder, finding: RankOrder, rows?: ArrayLike<number>): RankMeasure {
@@ -54,8 +54,8 @@ export function rankMeasure(input: RankOrder, finding: RankOrder, rows?: ArrayLi
   if (isConstant(finding)) return noMeasure('the finding is the same in every draw');
   if (isConstant(input)) return noMeasure('the input is the same in every draw');
   const classes = classesByRank(input, finding, Math.round(Math.sqrt(independent)));
-  const raw = classDependence(finding, classes);
-  return lessChance(raw, classes.used, independent);
+  if (classes.used < 2) return noMeasure('nearly all draws have the same input');
+  return lessChance(classDependence(finding, classes), chanceOf(finding, classes.used, independent));
 }
 
 const leastDraws = 64;
@@ -129,12 +129,38 @@ function classDependence({ draws, groupEnd }: RankOrder, { of, size }: Classes):
   return between / whole;
 }
 
+interface Chance {
+  /** Of D when the finding is shuffled against the input: exact. */
+  readonly average: number;
+  /** D that shuffling exceeds in about 2.5 % of cases. */
+  readonly level: number;
+}
+
+/** Standard normal at 97.5 %. */
+const oneInForty = 1.959963984540054;
+
 /**
- * Shuffling finding against input gives (used − 1)/(n − 1) on average, exactly, ties or not. Around it: each class's Cramér–von Mises
- * statistic has variance 1/45 (Anderson & Darling 1952, Ann. Math. Stat. 23, 193), and D is 6/n times their sum.
+ * Shuffling gives (used − 1)/(n − 1) on average, ties or not. Each class adds a Cramér–von Mises statistic, a sum of squares whose
+ * relative variance is 2 ∫∫ K² / (∫ K(t, t))², K(s, t) = F(s)(1 − F(t)) for s ≤ t (0.8 without ties, 2 for a finding with two values:
+ * Anderson & Darling 1952, Ann. Math. Stat. 23, 193). Their sum is as a χ² of the same variance, whose quantile is Wilson & Hilferty's
+ * (1931, Proc. Natl Acad. Sci. 17, 684).
  */
-function lessChance(raw: number, used: number, independent: number): RankMeasure {
-  const average = Math.min(0.999, (used - 1) / (independent - 1));
-  const deviation = (6 / independent) * Math.sqrt((used - 1) / 45);
-  return { value: (raw - average) / (1 - average), chanceLevel: (2 * deviation) / (1 - average) };
+function chanceOf({ draws, groupEnd }: RankOrder, used: number, independent: number): Chance {
+  let lower = 0; // Σ p F² of the groups so far
+  let squares = 0;
+  let whole = 0;
+  for (let start = 0; start < draws.length; start = groupEnd[start]) {
+    const below = groupEnd[start] / draws.length;
+    const own = (groupEnd[start] - start) / draws.length;
+    squares += own * (1 - below) ** 2 * (2 * lower + own * below ** 2);
+    lower += own * below ** 2;
+    whole += own * below * (1 - below);
+  }
+  const average = Math.min(1, (used - 1) / (independent - 1));
+  const third = (2 * squares) / whole ** 2 / (9 * (used - 1)); // 2/(9ν), ν the degrees of freedom
+  return { average, level: average * (1 - third + oneInForty * Math.sqrt(third)) ** 3 };
+}
+
+function lessChance(raw: number, { average, level }: Chance): RankMeasure {
+  return { value: (raw - average) / (1 - average), chanceLevel: (level - average) / (1 - average) };
 }
