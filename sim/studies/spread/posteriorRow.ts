@@ -29,7 +29,7 @@ export function rowsEvenly(where: string, rows: number): RowChooser {
 
 /**
  * How many rows of equal weight would tell as much: (Σw)² / Σw².
- * Source: Kish (1965) Survey Sampling §11.7.
+ * Source: Kish (1965) Survey Sampling.
  */
 export function effectiveRows(weights: Float64Array): number {
   let sum = 0;

@@ -2,10 +2,10 @@
  * Sobol' points: draws that fill the cube of inputs evenly, so that means converge nearly as 1/n and not as 1/√n.
  *
  * Scrambling: a random lower-triangular matrix of bits on each coordinate and a random digital shift (Matoušek 1998, J. Complexity
- * 14, 527). Chosen over nested uniform scrambling by a hash because the variance of a mean is exactly that of full nested scrambling
- * (Owen 2003, ACM TOMACS 13, 363) whatever a hash is worth, because a scrambled net stays a net by construction, and because it
- * costs nothing for each point: the matrix is folded into the direction numbers once. Each coordinate alone is uniform on
- * (0, 1), so means are unbiased over seeds.
+ * 14, 527). Chosen over nested uniform scrambling by a hash for three reasons. Two coordinates that first differ in bit r come out
+ * equal before r, different in r, and with independent even bits behind it: just as nested scrambling would leave them, so that the
+ * variance of a mean is the same, whatever a hash is worth. A scrambled net stays a net by construction. And it costs nothing for each
+ * point: the matrix is folded into the direction numbers once. Each draw alone is uniform, so means are unbiased over seeds.
  */
 import { pseudoRandomDraws, purposes, randomWords } from './pseudoRandom.ts';
 import { directionNumbers, sobolBits, sobolDimensions } from './sobolTable.ts';
@@ -13,7 +13,7 @@ import type { UniformDraws } from './uniformDraws.ts';
 
 const step = 2 ** -sobolBits;
 
-/** One coordinate of point k: `directions` (32,) by the Gray code of k, 32 bits. Source: Antonov & Saleev (1979). */
+/** One coordinate of point k: `directions` (32,) by the Gray code of k, 32 bits. Source: Antonov & Saleev (1979) USSR Comput. Math. Math. Phys. 19, 252. */
 function coordinateBits(directions: Uint32Array, point: number): number {
   let bits = 0;
   for (let gray = (point ^ (point >>> 1)) >>> 0, i = 0; gray !== 0; gray >>>= 1, i++) {

@@ -81,7 +81,7 @@ export function directionNumbers(dimension: number): Uint32Array {
   return directions;
 }
 
-/** v_i = a₁v_{i−1} ⊕ … ⊕ a_{s−1}v_{i−s+1} ⊕ v_{i−s} ⊕ (v_{i−s} >> s): Joe & Kuo (2008) eq. 2.2. */
+/** v_i = a₁v_{i−1} ⊕ … ⊕ a_{s−1}v_{i−s+1} ⊕ v_{i−s} ⊕ (v_{i−s} >> s). Source: Joe & Kuo (2008), §2. */
 function recurrence(directions: Uint32Array, polynomial: number, degree: number, i: number): number {
   let next = directions[i - degree] ^ (directions[i - degree] >>> degree);
   for (let back = 1; back < degree; back++) if ((polynomial >>> (degree - back)) & 1) next ^= directions[i - back];
