@@ -13,7 +13,10 @@ import type { UniformDraws } from './uniformDraws.ts';
 
 const step = 2 ** -sobolBits;
 
-/** One coordinate of point k: `directions` (32,) by the Gray code of k, 32 bits. Source: Antonov & Saleev (1979) USSR Comput. Math. Math. Phys. 19, 252. */
+/**
+ * One coordinate of point k, 32 bits: directions (32,) by the Gray code of k.
+ * Source: Antonov & Saleev (1979) USSR Comput. Math. Math. Phys. 19, 252.
+ */
 function coordinateBits(directions: Uint32Array, point: number): number {
   let bits = 0;
   for (let gray = (point ^ (point >>> 1)) >>> 0, i = 0; gray !== 0; gray >>>= 1, i++) {
