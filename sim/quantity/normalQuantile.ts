@@ -38,12 +38,31 @@ const farTail = {
  */
 export function normalQuantile(probability: number): number {
   const q = probability - 0.5;
-  if (Math.abs(q) <= 0.425) return q * ratio(central, 0.180625 - q * q);
+  if (Math.abs(q) <= centralHalf) return centralQuantile(q);
   const share = q < 0 ? probability : 1 - probability;
   if (share === 0) return q < 0 ? Number.NEGATIVE_INFINITY : Number.POSITIVE_INFINITY;
   const r = Math.sqrt(-Math.log(share));
   const size = r <= 5 ? ratio(tail, r - 1.6) : ratio(farTail, r - 5);
   return q < 0 ? -size : size;
+}
+
+/**
+ * The x for which a share `share` of the standard normal distribution lies between −x and x.
+ * Shape:  one number in, one out; relative error about 1e-16, down to the smallest shares.
+ * Units:  probability 1 → standard deviations; 0 at 0, +∞ at 1, NaN outside.
+ * Source: as normalQuantile.
+ */
+export function halfNormalQuantile(share: number): number {
+  if (Math.abs(share / 2) <= centralHalf) return share < 0 ? Number.NaN : centralQuantile(share / 2);
+  return -normalQuantile((1 - share) / 2);
+}
+
+/** |probability − ½| up to which the first range reaches. */
+const centralHalf = 0.425;
+
+/** At probability ½ + q. */
+function centralQuantile(q: number): number {
+  return q * ratio(central, 0.180625 - q * q);
 }
 
 function ratio({ top, bottom }: { top: readonly number[]; bottom: readonly number[] }, x: number): number {
