@@ -59,7 +59,7 @@ function policy(scripts) {
 
 /** Replaces what must be there exactly once; a function keeps `$&` in a bundle from being read as a pattern. */
 function filled(html, place, content) {
-  if (html.split(place).length !== 2) throw new Error(`template.html: ${place} is not there exactly once`);
+  if (html.split(place).length !== 2) throw new Error(`the page: ${place} is not there exactly once`);
   return html.replace(place, () => content);
 }
 
@@ -71,6 +71,8 @@ html = filled(html, '<script id="page"></script>', `<script>${scripts[0]}</scrip
 html = filled(html, '<script id="plotly"></script>', `<script>${scripts[1]}</script>`);
 const charset = '<meta charset="utf-8">';
 html = filled(html, charset, `${charset}\n<meta http-equiv="Content-Security-Policy" content="${policy(scripts)}">`);
+// Where the command line puts a run's results: it looks for the first such place and must find the only one.
+filled(html, '<script type="application/json" id="perilag-data"></script>', '');
 
 await mkdir(here('../dist'), { recursive: true });
 await writeFile(`${target}.part`, html);

@@ -10,7 +10,7 @@ import { SimError } from '../error.ts';
 type PortableArray = { readonly f8: string } | { readonly f4: string };
 
 /** Arrays longer than this are stored in single precision. */
-export const longestExact = 16_384;
+export const longestExact = 8192;
 
 /** RFC 4648 base64 of a string with a byte in each letter, and back: in Node, browsers and workers alike. */
 declare function btoa(binary: string): string;

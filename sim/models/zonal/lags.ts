@@ -93,8 +93,9 @@ export function localLags(year: ZonalYear): Finding[] {
   const samples = 720;
   const times = Float64Array.from({ length: samples }, (_, i) => (period * i) / samples);
   const insolation = places.map(() => new Float64Array(samples));
+  const row = new Float64Array(latitude.length);
   for (let i = 0; i < samples; i++) {
-    const row = year.at(times[i]).insolation;
+    year.insolationInto(times[i], row);
     for (const [k, [, , band]] of places.entries()) insolation[k][i] = row[band];
   }
   return places.map(([name, where, band], k) => {

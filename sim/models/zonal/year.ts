@@ -1,6 +1,5 @@
 /** A settled zonal year as people look at it: rows of temperature, insolation, albedo and fluxes at any time. */
 import type { Seconds } from '../../si.ts';
-import { curveValue } from '../../solve/curve.ts';
 import { addMeridionalConvergence } from '../../transport/diffusion.ts';
 import type { Globe, World } from '../../world.ts';
 import { globalMean } from './bands.ts';
@@ -30,6 +29,8 @@ export interface ZonalYear {
   readonly physics: ZonalPhysics;
   readonly curves: YearCurves;
   at(time: Seconds): Moment;
+  /** W m⁻² by band. */
+  insolationInto(time: Seconds, into: Float64Array): void;
   /** Heat that the year has left in store, J m⁻², area mean: zero but for what the solver leaves. */
   storedOverYear(): number;
 }
@@ -53,13 +54,15 @@ export function zonalYear(world: World, globe: Globe, state: ZonalState): ZonalY
     warmShare: row(),
   };
   const share = row();
-  const landShare = (i: number) => physics.land?.fraction[i] ?? 0;
+  const unknowns = new Float64Array(state.system.size);
+  const landShare = physics.land?.fraction ?? row();
+  const seaShare = landShare.map((f) => 1 - f);
 
   /** Adds one surface's part to the band means. */
-  function addSurface(temperature: Float64Array, weight: (i: number) => number): void {
+  function addSurface(temperature: Float64Array, weight: Float64Array): void {
     physics.warm.into(temperature, share);
     for (let i = 0; i < count; i++) {
-      const f = weight(i);
+      const f = weight[i];
       moment.temperature[i] += f * temperature[i];
       moment.warmShare[i] += f * share[i];
       moment.albedo[i] += f * bandAlbedo(physics, i, share[i]);
@@ -76,21 +79,24 @@ export function zonalYear(world: World, globe: Globe, state: ZonalState): ZonalY
       insolationAt.at(time, moment.insolation);
       for (const part of ['temperature', 'warmShare', 'albedo', 'emitted', 'convergence'] as const)
         moment[part].fill(0);
-      for (let i = 0; i < count; i++) moment.seaTemperature[i] = curveValue(curves.sea[i], time);
-      addSurface(moment.seaTemperature, (i) => 1 - landShare(i));
+      curves.unknownsInto(time, unknowns);
+      const surfaces = curves.land === null ? 1 : 2;
+      for (let i = 0; i < count; i++) moment.seaTemperature[i] = unknowns[surfaces * i];
+      addSurface(moment.seaTemperature, seaShare);
       if (curves.land !== null) {
-        for (let i = 0; i < count; i++) moment.landTemperature[i] = curveValue(curves.land[i], time);
+        for (let i = 0; i < count; i++) moment.landTemperature[i] = unknowns[2 * i + 1];
         addSurface(moment.landTemperature, landShare);
       }
       for (let i = 0; i < count; i++) moment.absorbed[i] = moment.insolation[i] * (1 - moment.albedo[i]);
       addMeridionalConvergence(moment.temperature, physics.conductance, moment.convergence);
       return moment;
     },
+    insolationInto: insolationAt.at,
     storedOverYear() {
       const change = (curve: YearCurves['sea'][number]) => curve.value[curve.value.length - 1] - curve.value[0];
       return globalMean(
         Float64Array.from(curves.sea, (curve, i) => {
-          const f = landShare(i);
+          const f = landShare[i];
           const sea = (1 - f) * seaHeatCapacity(physics, curve.value[0]) * change(curve);
           return sea + (curves.land === null ? 0 : f * physics.land!.heatCapacity * change(curves.land[i]));
         }),

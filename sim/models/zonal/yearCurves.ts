@@ -1,5 +1,6 @@
 /** A settled year as curves in time, one a band: quintic Hermite from T, T′ = f and T″ = J f + ∂f/∂t at the step ends. */
 
+import type { Seconds } from '../../si.ts';
 import { banded, multiplyBanded } from '../../solve/banded.ts';
 import type { Curve } from '../../solve/curve.ts';
 import type { StageHistory } from '../../solve/rodas4.ts';
@@ -14,6 +15,8 @@ export interface YearCurves {
   readonly land: readonly Curve[] | null;
   /** Mean over the globe. */
   readonly mean: Curve;
+  /** The unknowns at a time after periapsis, 0 … period, as the system orders them: all curves at once. */
+  unknownsInto(time: Seconds, into: Float64Array): void;
 }
 
 export function yearCurves(system: ZonalSystem, history: StageHistory): YearCurves {
@@ -31,7 +34,46 @@ export function yearCurves(system: ZonalSystem, history: StageHistory): YearCurv
     land === null || fraction === undefined
       ? sea
       : sea.map((curve, i) => weightedSum([curve, land[i]], [1 - fraction[i], fraction[i]]));
-  return { bands, sea, land, mean: weightedSum(bands, new Array(bands.length).fill(1 / bands.length)) };
+  return {
+    bands,
+    sea,
+    land,
+    mean: weightedSum(bands, new Array(bands.length).fill(1 / bands.length)),
+    unknownsInto: rowInterpolation(mesh, system.size, history, second),
+  };
+}
+
+/** Quintic Hermite as the curves have it, with the weights of the six ordinates worked out once for a row. */
+function rowInterpolation(
+  { time, steps }: YearMesh,
+  size: number,
+  { value, rate }: StageHistory,
+  second: Float64Array,
+): (at: Seconds, into: Float64Array) => void {
+  let step = 0;
+  return (at, into) => {
+    while (step > 0 && at < time[step]) step--;
+    while (step < steps - 1 && at >= time[step + 1]) step++;
+    const h = time[step + 1] - time[step];
+    const x = (at - time[step]) / h;
+    const cube = x * x * x;
+    const arrive = cube * (10 - x * (15 - 6 * x));
+    const leaveSlope = h * x * (1 - x * x * (6 - x * (8 - 3 * x)));
+    const arriveSlope = h * cube * (x * (7 - 3 * x) - 4);
+    const leaveBend = 0.5 * h * h * x * x * (1 - x) ** 3;
+    const arriveBend = 0.5 * h * h * cube * (1 - x) ** 2;
+    for (let i = 0; i < size; i++) {
+      const a = step * size + i;
+      const b = a + size;
+      into[i] =
+        value[a] +
+        arrive * (value[b] - value[a]) +
+        leaveSlope * rate[a] +
+        arriveSlope * rate[b] +
+        leaveBend * second[a] +
+        arriveBend * second[b];
+    }
+  };
 }
 
 function curveOf(mesh: YearMesh, size: number, column: number, history: StageHistory, second: Float64Array): Curve {
