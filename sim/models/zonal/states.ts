@@ -62,7 +62,7 @@ const finestStart = 1536;
 const finestSteps = 6144;
 const largestStep = 4;
 /** Years on one mesh: fewer on a finer one, so that a world that cannot settle is given up in bounded time. */
-const maximumYears = (steps: number) => Math.min(300, Math.max(12, Math.ceil(20_000 / steps)));
+const maximumYears = (steps: number) => Math.min(60, Math.max(12, Math.ceil(20_000 / steps)));
 /** Rodas4 gains 2⁴ by halving its steps; 6 leaves room for the kinks of polar night. */
 const safety = 6;
 

@@ -120,16 +120,18 @@ describe('ice and albedo', () => {
   });
 });
 
-test.each([1e5, 2.1e8, 1e12])('every depth of store settles in a few years: C = %f', (heatCapacity) => {
-  const { iterations, states } = solve(zonalWorld({ e: 0.3, heatCapacity }));
-  expect(states[0].converged).toBe(true);
-  expect(iterations).toBeLessThan(12);
-});
-
-test('a short orbit over a deep ocean settles as quickly', () => {
-  const { iterations, states } = solve(zonalWorld({ e: 0.1, periodDays: 11, heatCapacity: 2.05e8 }));
-  expect(states[0].converged).toBe(true);
-  expect(iterations).toBeLessThan(12);
+test('every depth of store settles in as many years, within a factor of 3; a short orbit over a deep ocean too', () => {
+  const stores = [1e5, 1e6, 1e7, 1e8, 1e9, 1e10, 1e11, 1e12];
+  const worlds = [
+    ...stores.map((heatCapacity) => zonalWorld({ e: 0.3, heatCapacity })),
+    zonalWorld({ e: 0.1, periodDays: 11, heatCapacity: 2.05e8 }), // 50 m of water
+  ];
+  const years = worlds.map((world) => {
+    const { iterations, states } = solve(world);
+    expect(states[0].converged).toBe(true);
+    return iterations;
+  });
+  expect(Math.max(...years) / Math.min(...years)).toBeLessThan(3);
 });
 
 test('nothing in a finding or a row is ever not a number', () => {
