@@ -1,0 +1,41 @@
+/** What `grid` hands to files, terminal and page: plain data. Findings are SI; inputs are in the unit in which they were typed. */
+import type { Origin } from '../../origin.ts';
+
+export interface GridAxis {
+  readonly key: string;
+  readonly label: string;
+  readonly unit: string;
+  readonly log: boolean;
+  /** Nodes in `unit`, ascending. */
+  readonly nodes: Float64Array;
+}
+
+export interface GridFinding {
+  readonly name: string;
+  readonly label: string;
+  readonly unit: string;
+  /** (axes[0] nodes, axes[1] nodes) row-major, or (nodes,) with one axis; NaN where undefined. */
+  readonly values: Float64Array;
+  /** Times that come round with the orbit. */
+  readonly circular: boolean;
+}
+
+export interface GridCase {
+  readonly name: string;
+  readonly model: string;
+  readonly findings: readonly GridFinding[];
+  /** The scenario's own point in the axes' units; null where it says nothing that gives it, or lies outside. */
+  readonly own: readonly (number | null)[];
+  readonly failed: readonly { readonly node: number; readonly message: string }[];
+  readonly warnings: readonly string[];
+  readonly notes: readonly string[];
+  /** The case on the chart of plain lumped worlds; null where it is not one. */
+  readonly universal: { readonly eccentricity: number; readonly storeNumber: number } | null;
+}
+
+export interface GridReport extends Origin {
+  /** One or two. */
+  readonly axes: readonly GridAxis[];
+  readonly hold: string | null;
+  readonly cases: readonly GridCase[];
+}
