@@ -14,8 +14,8 @@ export interface GridFinding {
   readonly name: string;
   readonly label: string;
   readonly unit: string;
-  /** (axes[0] nodes, axes[1] nodes) row-major, or (nodes,) with one axis; NaN where undefined. */
-  readonly values: Float64Array;
+  /** (axes[0] nodes, axes[1] nodes) row-major, or (nodes,) with one axis; null where undefined. */
+  readonly values: readonly (number | null)[];
   /** Times that come round with the orbit. */
   readonly circular: boolean;
 }
