@@ -4,7 +4,7 @@ export { formatNumber, formatQuantity, fromUnit, inUnit } from './format.ts';
 export { formatInstantUtc, type Instant, julianDateTdb, parseInstant, type TimeScale } from './instant.ts';
 export { nearest } from './nearest.ts';
 export { normalQuantile } from './normalQuantile.ts';
-export { parseQuantity, type QuantitySpec } from './parse.ts';
+export { checkBounds, isWithin, parseQuantity, type QuantitySpec } from './parse.ts';
 export { quantityPattern, unitsInWords } from './pattern.ts';
 export type { Distribution, Quantity } from './types.ts';
 export { parseUnit, type Unit } from './units.ts';

@@ -21,6 +21,11 @@ import { type Fault, validateCase, validateHead } from './validate.ts';
  * Errors: ScenarioError with all problems of the file, sorted by place.
  */
 export function readScenario(text: string, file: string): Scenario {
+  return readWithTrees(text, file).scenario;
+}
+
+/** The same, with the tree of each case for what varies its numbers. */
+export function readWithTrees(text: string, file: string): { scenario: Scenario; trees: readonly CaseTree[] } {
   const { root, problems: syntax } = readDocument(text, file);
   if (!root) throw new ScenarioError(syntax);
   const { head, base, cases, faults } = takeApart(root);
@@ -35,7 +40,8 @@ export function readScenario(text: string, file: string): Scenario {
   ];
   if (problems.length) throw new ScenarioError(inOrder(problems));
   const asUnderstood = understood(root, head, base, read);
-  return { title, notes, file, cases: read.map(({ result }) => result!), asUnderstood };
+  const scenario = { title, notes, file, cases: read.map(({ result }) => result!), asUnderstood };
+  return { scenario, trees: read.map(({ name, tree }) => ({ name, tree })) };
 }
 
 /** Faults of the scenario itself, for the keys that every case replaces. What is missing may come with the cases. */
