@@ -2,7 +2,8 @@
 import { basename, extname, join, resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
 import { originOf } from '../../sim/origin.ts';
-import { type Along, type CaseAlong, casesAlong, readAlong } from '../../sim/scenario/along.ts';
+import { type Along, readAlong } from '../../sim/scenario/along.ts';
+import { type CaseAlong, casesAlong } from '../../sim/scenario/caseAlong.ts';
 import { reportedAlong, traceAlong } from '../../sim/studies/traceAlong.ts';
 import type { TraceReport, TraceReportCase } from '../../sim/studies/traceReport.ts';
 import { exitCode } from '../exit.ts';

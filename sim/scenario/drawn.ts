@@ -5,14 +5,15 @@ import type { Distribution } from '../quantity/types.ts';
 import type { SolveOptions, Window, World } from '../world.ts';
 import { standardDeviation } from './build/given.ts';
 import type { Built } from './build/world.ts';
-import { fingerprintWithWindows } from './influence.ts';
+import { withDefaults } from './defaults.ts';
+import { type ProbeValues, probe } from './probes.ts';
 import { readWithTrees } from './read.ts';
 import { type Redundant, withoutRedundant } from './redundant.ts';
 import { endsOfSpread, turnOf } from './schema/lookup.ts';
 import type { Branch } from './tree.ts';
 import type { CaseInput, ScenarioCase } from './types.ts';
 import { validateCase } from './validate.ts';
-import { type Varied, varied } from './varied.ts';
+import { varied } from './varied.ts';
 
 /** An input that is drawn. SI but for `unit` and `text`. */
 export interface UncertainInput {
@@ -74,13 +75,15 @@ function caseDrawn(one: ScenarioCase, tree: Branch): CaseDrawn {
   const spread = one.inputs.filter(({ distribution }) => distribution.form !== 'exact');
   const dated = spread.filter(({ since }) => since !== undefined);
   const numbers = spread.filter((input) => !dated.includes(input));
+  const filled = withDefaults(tree);
   const { redundant, ...rest } = withoutRedundant(
-    { tree, keys: validateCase(tree).keys },
+    { tree: filled, keys: validateCase(filled).keys },
     new Set(numbers.map(({ key }) => key)),
   );
   const candidates = numbers.filter(({ key }) => redundant.every((gone) => gone.key !== key)).map(uncertain);
-  const probed = new Probes(varied(rest, candidates.map(toVarying)), candidates, one.name);
-  const inputs = candidates.filter((_, i) => probed.matters(i));
+  const probes = probe(varied(rest, candidates.map(toVarying)), probeValues(candidates));
+  for (const [i, input] of candidates.entries()) requireRoom(one.name, input, probes.faultBeside(i));
+  const inputs = candidates.filter((_, i) => probes.matters(i));
   const idle = [
     ...dated.map((input) => idleInput(input, 'no finding depends on a date')),
     ...candidates.filter((input) => !inputs.includes(input)).map((input) => idleInput(input, reasonOf(one, input.key))),
@@ -90,7 +93,7 @@ function caseDrawn(one: ScenarioCase, tree: Branch): CaseDrawn {
     model: one.model,
     options: one.options,
     windows: one.windows,
-    windowsVary: probed.moveWindows(),
+    windowsVary: probes.windowsMove,
     inputs,
     idle,
     warnings: one.warnings,
@@ -123,77 +126,19 @@ export function redundantNote({ key, instead }: Redundant): string {
   return `${key} is left out: it follows from ${words}.`;
 }
 
-/** Worlds at a few values of each input, to see which of them change anything. */
-class Probes {
-  private readonly low: readonly number[];
-  private readonly high: readonly number[];
-  private readonly centre: readonly number[];
-  private readonly seen = new Map<string, Built | SimError>();
-
-  private readonly made: Varied;
-  private readonly inputs: readonly UncertainInput[];
-  private readonly name: string;
-
-  constructor(made: Varied, inputs: readonly UncertainInput[], name: string) {
-    this.made = made;
-    this.inputs = inputs;
-    this.name = name;
-    this.centre = inputs.map(({ centre }) => centre);
-    this.low = inputs.map((input) => aside(input, -1));
-    this.high = inputs.map((input) => aside(input, 1));
-  }
-
-  /** Whether input `i` changes a World or a window, whatever the others are; where no two values can be compared, it may. */
-  matters(i: number): boolean {
-    this.requireRoom(i);
-    const pairs = this.pairs(i);
-    return pairs.length === 0 || pairs.some(([a, b]) => fingerprintWithWindows(a) !== fingerprintWithWindows(b));
-  }
-
-  moveWindows(): boolean {
-    const print = ({ windows }: Built) => JSON.stringify(windows);
-    return this.inputs.some((_, i) => this.pairs(i).some(([a, b]) => print(a) !== print(b)));
-  }
-
-  private pairs(i: number): [Built, Built][] {
-    return [this.centre, this.low, this.high].flatMap((others) => {
-      const [a, b] = [this.low, this.high].map((side) => this.at(others.with(i, side[i]!)));
-      return isBuilt(a!) && isBuilt(b!) ? [[a, b] as [Built, Built]] : [];
-    });
-  }
-
-  private at(values: readonly number[]): Built | SimError {
-    const id = values.join();
-    const known = this.seen.get(id);
-    if (known) return known;
-    const found = attempt(() => this.made.builtAt(values));
-    this.seen.set(id, found);
-    return found;
-  }
-
-  /** A circle with a spread, of a planet that has seasons: nothing but its centre is complete. */
-  private requireRoom(i: number): void {
-    const { centre, key, unit } = this.inputs[i]!;
-    const sides = [this.low[i]!, this.high[i]!].filter((value) => value !== centre);
-    const faults = sides.map((value) => this.at(this.centre.with(i, value))).filter((found) => !isBuilt(found));
-    if (faults.length < sides.length || sides.length === 0) return;
-    const { where, what, mend } = faults[0] as SimError;
-    const found = `case \`${this.name}\` is sound only where ${key} is ${formatQuantity(centre, unit)}: ${where}: ${what}`;
-    throw new SimError(key, found, mend);
-  }
+/** A circle with a spread, of a planet that has seasons: nothing but its centre is complete. */
+function requireRoom(name: string, { key, unit, centre }: UncertainInput, fault: SimError | null): void {
+  if (!fault) return;
+  const found = `case \`${name}\` is sound only where it is ${formatQuantity(centre, unit)}: ${fault.where}: ${fault.what}`;
+  throw new SimError(key, found, fault.mend);
 }
 
-function isBuilt(found: Built | SimError): found is Built {
-  return !(found instanceof SimError);
-}
-
-function attempt(make: () => Built): Built | SimError {
-  try {
-    return make();
-  } catch (error) {
-    if (error instanceof SimError) return error;
-    throw error;
-  }
+function probeValues(inputs: readonly UncertainInput[]): ProbeValues {
+  return {
+    centre: inputs.map(({ centre }) => centre),
+    low: inputs.map((input) => aside(input, -1)),
+    high: inputs.map((input) => aside(input, 1)),
+  };
 }
 
 /** A value to one side of the centre that the spread takes. */

@@ -24,7 +24,7 @@ export function readScenario(text: string, file: string): Scenario {
   return readWithTrees(text, file).scenario;
 }
 
-/** The same, with the tree of each case for what varies its numbers. */
+/** The same, with the tree of each case, its defaults still open, for what varies its numbers. */
 export function readWithTrees(text: string, file: string): { scenario: Scenario; trees: readonly CaseTree[] } {
   const { root, problems: syntax } = readDocument(text, file);
   if (!root) throw new ScenarioError(syntax);
@@ -41,7 +41,7 @@ export function readWithTrees(text: string, file: string): { scenario: Scenario;
   if (problems.length) throw new ScenarioError(inOrder(problems));
   const asUnderstood = understood(root, head, base, read);
   const scenario = { title, notes, file, cases: read.map(({ result }) => result!), asUnderstood };
-  return { scenario, trees: read.map(({ name, tree }) => ({ name, tree })) };
+  return { scenario, trees: cases };
 }
 
 /** Faults of the scenario itself, for the keys that every case replaces. What is missing may come with the cases. */
