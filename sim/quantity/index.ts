@@ -1,5 +1,5 @@
 /** Numbers with units, uncertain numbers and dates: read at the border, SI inside, printed back in the user's units. */
-export { type Dimension, type DimensionName, dimensions } from './dimension.ts';
+export { type Dimension, type DimensionName, dimensions, sameDimension } from './dimension.ts';
 export { formatNumber, formatQuantity, fromUnit, inUnit } from './format.ts';
 export { formatInstantUtc, type Instant, julianDateTdb, parseInstant, type TimeScale } from './instant.ts';
 export { nearest } from './nearest.ts';

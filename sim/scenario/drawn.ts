@@ -1,11 +1,12 @@
 /** A scenario whose uncertain inputs are drawn: which they are, and the World of each case at any of their values. */
 import { SimError } from '../error.ts';
-import { formatQuantity } from '../quantity/index.ts';
+import { formatQuantity, fromUnit } from '../quantity/index.ts';
 import type { Distribution } from '../quantity/types.ts';
 import type { SolveOptions, Window, World } from '../world.ts';
 import { standardDeviation } from './build/given.ts';
 import type { Built } from './build/world.ts';
 import { withDefaults } from './defaults.ts';
+import { type CaseColumns, columnsOf, type Posterior, rulesNote } from './posterior.ts';
 import { type ProbeValues, probe } from './probes.ts';
 import { readWithTrees } from './read.ts';
 import { type Redundant, withoutRedundant } from './redundant.ts';
@@ -28,6 +29,8 @@ export interface UncertainInput {
   readonly bounds: { readonly low: number; readonly high: number } | null;
   /** 2π for angles that come round and are never cut, else null. */
   readonly period: number | null;
+  /** The column of the posterior that gives it, whatever its distribution; null where the distribution does. */
+  readonly column: string | null;
 }
 
 /** An input with a spread that is not drawn, and why. */
@@ -67,12 +70,13 @@ export interface CaseDrawn {
 export function casesDrawn(text: string, file: string, only?: readonly string[]): readonly CaseDrawn[] {
   const { scenario, trees } = readWithTrees(text, file);
   return scenario.cases.flatMap((one, i) =>
-    (only?.includes(one.name) ?? true) ? [caseDrawn(one, trees[i]!.tree)] : [],
+    (only?.includes(one.name) ?? true) ? [caseDrawn(one, trees[i]!.tree, scenario.posterior)] : [],
   );
 }
 
-function caseDrawn(one: ScenarioCase, tree: Branch): CaseDrawn {
-  const spread = one.inputs.filter(({ distribution }) => distribution.form !== 'exact');
+function caseDrawn(one: ScenarioCase, tree: Branch, posterior: Posterior | null): CaseDrawn {
+  const { ruling, notes } = columnsOf(posterior, tree);
+  const spread = one.inputs.filter(({ key, distribution }) => distribution.form !== 'exact' || ruling.has(key));
   const dated = spread.filter(({ since }) => since !== undefined);
   const numbers = spread.filter((input) => !dated.includes(input));
   const filled = withDefaults(tree);
@@ -80,7 +84,9 @@ function caseDrawn(one: ScenarioCase, tree: Branch): CaseDrawn {
     { tree: filled, keys: validateCase(filled).keys },
     new Set(numbers.map(({ key }) => key)),
   );
-  const candidates = numbers.filter(({ key }) => redundant.every((gone) => gone.key !== key)).map(uncertain);
+  const candidates = numbers
+    .filter(({ key }) => redundant.every((gone) => gone.key !== key))
+    .map((input) => uncertain(input, ruling.get(input.key)?.column ?? null));
   const probes = probe(varied(rest, candidates.map(toVarying)), probeValues(candidates));
   for (const [i, input] of candidates.entries()) requireRoom(one.name, input, probes.faultBeside(i));
   const inputs = candidates.filter((_, i) => probes.matters(i));
@@ -97,18 +103,26 @@ function caseDrawn(one: ScenarioCase, tree: Branch): CaseDrawn {
     inputs,
     idle,
     warnings: one.warnings,
-    notes: redundant.map(redundantNote),
+    notes: [...notes, ...spread.flatMap((input) => overruled(input, ruling)), ...redundant.map(redundantNote)],
     ...varied(rest, inputs.map(toVarying)),
   };
 }
 
 const toVarying = ({ key, unit }: UncertainInput) => ({ key, unit });
 
-function uncertain({ key, label, writtenUnit, text, value, distribution }: CaseInput): UncertainInput {
+function overruled({ key, text, distribution }: CaseInput, ruling: CaseColumns['ruling']): string[] {
+  const column = ruling.get(key);
+  return column && distribution.form !== 'exact' ? [rulesNote(column, key, text)] : [];
+}
+
+function uncertain(
+  { key, label, writtenUnit, text, value, distribution }: CaseInput,
+  column: string | null,
+): UncertainInput {
   const path = key.split('.');
   const period = turnOf(path);
   const bounds = endsOfSpread(path);
-  return { key, label, unit: writtenUnit, text, centre: value!, distribution, bounds, period };
+  return { key, label, unit: writtenUnit, text, centre: value!, distribution, bounds, period, column };
 }
 
 function idleInput({ key, label }: Pick<CaseInput, 'key' | 'label'>, reason: string): IdleInput {
@@ -142,9 +156,15 @@ function probeValues(inputs: readonly UncertainInput[]): ProbeValues {
 }
 
 /** A value to one side of the centre that the spread takes. */
-function aside({ centre, distribution, bounds }: UncertainInput, side: -1 | 1): number {
+function aside({ centre, unit, distribution, bounds }: UncertainInput, side: -1 | 1): number {
   if (distribution.form === 'uniform' || distribution.form === 'logUniform')
     return side < 0 ? distribution.low : distribution.high;
-  const value = centre + (side * standardDeviation(distribution)) / 2;
+  const width = distribution.form === 'exact' ? aPart(centre, unit) : standardDeviation(distribution) / 2;
+  const value = centre + side * width;
   return bounds ? Math.min(Math.max(value, bounds.low), bounds.high) : value;
+}
+
+/** A width for samples that nobody has read yet: a part of the centre, or of the unit. */
+function aPart(centre: number, unit: string): number {
+  return 0.05 * (Math.abs(centre) || fromUnit(1, unit) - fromUnit(0, unit));
 }

@@ -10,7 +10,7 @@ const fileSchema = caseSchema.extend(headSchema.shape);
 const topKeys = topOrder([...Object.keys(headSchema.shape), ...Object.keys(caseSchema.shape), 'cases']);
 
 function topOrder(keys: readonly string[]): readonly string[] {
-  const order = ['title', 'notes', 'model', 'star', 'orbit', 'planet', 'cases', 'windows', 'solve'];
+  const order = ['title', 'notes', 'model', 'star', 'orbit', 'planet', 'posterior', 'cases', 'windows', 'solve'];
   return [...order, ...keys.filter((key) => !order.includes(key) && key !== '$schema')];
 }
 
