@@ -80,7 +80,7 @@ function checkWeights(raw: RawColumns, name: string, file: string): Float64Array
   const negative = weights.findIndex((value) => value < 0);
   if (negative >= 0) {
     const what = `the weight ${weights[negative]} is negative`;
-    throw new SimError(`${raw.placeOf(negative)}: ${name}`, what, 'A weight is zero or more; is it a logarithm?');
+    throw new SimError(`${raw.placeOf(negative)}: ${name}`, what, 'A weight is zero or more, and not its logarithm');
   }
   if (weights.every((value) => value === 0)) {
     throw new SimError(`${file}: ${name}`, 'all weights are zero', 'Name another column, or delete `weights`');

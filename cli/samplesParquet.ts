@@ -17,7 +17,8 @@ export async function columnsOfParquet(bytes: Uint8Array, file: string, names: r
   const [root, ...rest] = metadata.schema;
   requireColumns(topNames(rest, root?.num_children ?? 0), names, file);
   const count = Number(metadata.num_rows);
-  const columns = new Map(names.map((name) => [name, new Float64Array(count)]));
+  const columns = new Map(names.map((name) => [name, new Float64Array(count).fill(Number.NaN)]));
+  const faults: { readonly row: number; readonly error: SimError }[] = []; // the reader passes on no error of ours
   const placeOf = (row: number) => `${file}: row ${row + 1}`;
   await readable(file, () =>
     parquetRead({
@@ -28,11 +29,19 @@ export async function columnsOfParquet(bytes: Uint8Array, file: string, names: r
       onChunk: ({ columnName, columnData, rowStart }) => {
         const column = columns.get(columnName)!;
         for (let i = 0; i < columnData.length && rowStart + i < count; i++) {
-          column[rowStart + i] = numberOf(columnData[i], `${placeOf(rowStart + i)}: ${columnName}`);
+          const row = rowStart + i;
+          const value = numberOf(columnData[i]);
+          if (typeof value !== 'number') {
+            faults.push({ row, error: new SimError(`${placeOf(row)}: ${columnName}`, value.what, mend) });
+            return;
+          }
+          column[row] = value;
         }
       },
     }),
   );
+  const [first] = faults.sort((a, b) => a.row - b.row);
+  if (first) throw first.error;
   return { count, columns, placeOf };
 }
 
@@ -56,12 +65,13 @@ function topNames(elements: readonly Element[], count: number): string[] {
   return names;
 }
 
-function numberOf(value: unknown, where: string): number {
+const mend = 'Give numbers, or leave the row out';
+
+function numberOf(value: unknown): number | { readonly what: string } {
   if (typeof value === 'number') return value;
   if (typeof value === 'bigint') return Number(value);
-  const what =
-    value === null || value === undefined ? 'nothing is given' : `${typeof value} stands where a number should`;
-  throw new SimError(where, what, 'Give numbers, or leave the row out');
+  if (value === null || value === undefined) return { what: 'nothing is given' };
+  return { what: `${typeof value} stands where a number should` };
 }
 
 async function readable<T>(file: string, read: () => Promise<T>): Promise<T> {
