@@ -1,10 +1,9 @@
 /** Reads scenario files from disk: bytes, text, then the Scenario. */
 import { createHash } from 'node:crypto';
-import { readFileSync } from 'node:fs';
 import { resolve } from 'node:path';
-import { SimError } from '../sim/error.ts';
 import { readScenario } from '../sim/scenario/read.ts';
 import type { Scenario } from '../sim/scenario/types.ts';
+import { bytesOf, textOf } from './bytes.ts';
 
 export interface ScenarioFile {
   /** As the user named it. */
@@ -17,8 +16,8 @@ export interface ScenarioFile {
 
 /** Errors: SimError when the file cannot be read as text; ScenarioError with every problem in it. */
 export function readScenarioFile(file: string, cwd: string): ScenarioFile {
-  const bytes = bytesOf(file, cwd);
-  const text = textOf(bytes, file);
+  const bytes = bytesOf(file, resolve(cwd, file), 'a scenario file');
+  const text = textOf(bytes, file, 'Save the scenario as plain UTF-8 text');
   const sha256 = createHash('sha256').update(bytes).digest('hex');
   return { file, text, sha256, scenario: readScenario(text, file) };
 }
@@ -36,27 +35,4 @@ export function readScenarioFiles(files: readonly string[], cwd: string): readon
   }
   if (faults.length > 0) throw faults.length === 1 ? faults[0] : new AggregateError(faults);
   return read;
-}
-
-function bytesOf(file: string, cwd: string): Uint8Array {
-  try {
-    return readFileSync(resolve(cwd, file));
-  } catch (error) {
-    throw new SimError(file, readingFault(error as NodeJS.ErrnoException), 'Check the path', error);
-  }
-}
-
-function readingFault(error: NodeJS.ErrnoException): string {
-  if (error.code === 'ENOENT') return 'there is no such file';
-  if (error.code === 'EISDIR') return 'this is a folder, not a scenario file';
-  if (error.code === 'EACCES') return 'the file may not be read';
-  return `the file cannot be read (${error.code ?? error.message})`;
-}
-
-function textOf(bytes: Uint8Array, file: string): string {
-  try {
-    return new TextDecoder('utf-8', { fatal: true }).decode(bytes);
-  } catch (error) {
-    throw new SimError(file, 'this is not UTF-8 text', 'Save the scenario as plain UTF-8 text', error);
-  }
 }

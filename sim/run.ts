@@ -55,7 +55,7 @@ export function runScenario(scenario: Scenario, identity: Identity): RunResult {
   return {
     ...originOf(scenario, identity),
     cases: scenario.cases.map(runCase),
-    notes: spreadNotes(scenario.cases),
+    notes: spreadNotes(scenario),
   };
 }
 

@@ -53,7 +53,7 @@ export function describeScenario(scenario: Scenario, page: Page): string {
     ),
     section(
       'Notes',
-      spreadNotes(cases).flatMap((note) => hanging('  ', page.say(note), page.width)),
+      spreadNotes(scenario).flatMap((note) => hanging('  ', page.say(note), page.width)),
       page,
     ),
   ];

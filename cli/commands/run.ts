@@ -18,6 +18,7 @@ import { summaryOf, summaryText } from '../output/summary.ts';
 import { tableLines } from '../output/table.ts';
 import { type Terminal, terminalOf } from '../output/terminal.ts';
 import { hanging, printable } from '../output/text.ts';
+import { samplesFrom } from '../posteriorFile.ts';
 import { readScenarioFiles, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
 
@@ -43,8 +44,9 @@ export async function run(files: readonly string[], options: RunOptions, program
   const results: RunResult[] = [];
   for (const [index, item] of chosen.entries()) {
     const result = runScenario(item.scenario, { sha256: item.sha256, version: program.version });
-    const products = filesOf(item, result, program, io);
-    await writeFolder(resolve(io.cwd, folders[index]!), products);
+    const folder = resolve(io.cwd, folders[index]!);
+    const products = filesOf(item, result, folder, program, io);
+    await writeFolder(folder, products);
     show(result, { folder: folders[index]!, products, isLater: index > 0 }, options, io);
     results.push(result);
   }
@@ -57,12 +59,19 @@ export async function run(files: readonly string[], options: RunOptions, program
 }
 
 /** The report is the last: it is what the others stand beside. */
-function filesOf({ scenario }: ScenarioFile, result: RunResult, program: Program, io: Io): readonly OutputFile[] {
+function filesOf(
+  item: ScenarioFile,
+  result: RunResult,
+  folder: string,
+  program: Program,
+  io: Io,
+): readonly OutputFile[] {
+  const { scenario } = item;
   return [
     { name: 'summary.json', pieces: [summaryText(result)] },
     { name: 'series.csv', pieces: [seriesText(result)] },
     ...(hasFields(result) ? [fieldsOf(scenario, result, program)] : []),
-    { name: 'scenario.yaml', pieces: [scenarioYamlText(scenario)] },
+    { name: 'scenario.yaml', pieces: [scenarioYamlText(scenario, samplesFrom(folder, item, io.cwd))] },
     { name: 'report.html', pieces: reportPieces(result, io.reportTemplate) },
   ];
 }

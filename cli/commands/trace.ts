@@ -2,7 +2,8 @@
 import { basename, extname, join, resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
 import { originOf } from '../../sim/origin.ts';
-import { type Along, type CaseAlong, casesAlong, readAlong } from '../../sim/scenario/along.ts';
+import { type Along, readAlong } from '../../sim/scenario/along.ts';
+import { type CaseAlong, casesAlong } from '../../sim/scenario/caseAlong.ts';
 import { reportedAlong, traceAlong } from '../../sim/studies/traceAlong.ts';
 import type { TraceReport, TraceReportCase } from '../../sim/studies/traceReport.ts';
 import { exitCode } from '../exit.ts';
@@ -15,6 +16,7 @@ import { terminalOf } from '../output/terminal.ts';
 import { hanging, printable } from '../output/text.ts';
 import { traceCsvText, traceSummary } from '../output/traceFiles.ts';
 import { traceLines } from '../output/traceTable.ts';
+import { samplesFrom } from '../posteriorFile.ts';
 import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
 import type { Program } from './run.ts';
@@ -40,7 +42,8 @@ export async function trace(file: string, options: TraceCommandOptions, program:
     cases.map((one) => follow(one, along, options, io)),
     program,
   );
-  await writeFolder(resolve(io.cwd, folder), filesOf(report, item!, io));
+  const place = resolve(io.cwd, folder);
+  await writeFolder(place, filesOf(report, item!, place, io));
   show(report, folder, options, io);
   return tellUnfinished(report, io) ? exitCode.notWithinTolerance : exitCode.done;
 }
@@ -69,11 +72,11 @@ function reportOf(
 }
 
 /** The report is the last: it is what the others stand beside. */
-function filesOf(report: TraceReport, { scenario }: ScenarioFile, { reportTemplate }: Io) {
+function filesOf(report: TraceReport, item: ScenarioFile, folder: string, { reportTemplate, cwd }: Io) {
   return [
     { name: 'summary.json', pieces: [`${jsonText(traceSummary(report))}\n`] },
     { name: 'trace.csv', pieces: [traceCsvText(report)] },
-    { name: 'scenario.yaml', pieces: [scenarioYamlText(scenario)] },
+    { name: 'scenario.yaml', pieces: [scenarioYamlText(item.scenario, samplesFrom(folder, item, cwd))] },
     { name: 'report.html', pieces: pagePieces({ trace: report }, reportTemplate) },
   ];
 }

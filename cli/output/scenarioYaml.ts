@@ -1,6 +1,8 @@
 /** `scenario.yaml`: the scenario as understood, so that running it again gives the same numbers. */
 import type { Scenario } from '../../sim/scenario/types.ts';
 
-export function scenarioYamlText(scenario: Scenario): string {
-  return scenario.asUnderstood.endsWith('\n') ? scenario.asUnderstood : `${scenario.asUnderstood}\n`;
+/** `samples`: the path to the file of samples from where the text will stand; left out, it is as typed. */
+export function scenarioYamlText(scenario: Scenario, samples: string | null = null): string {
+  const text = samples === null ? scenario.asUnderstood : scenario.understoodWith(samples);
+  return text.endsWith('\n') ? text : `${text}\n`;
 }

@@ -253,20 +253,29 @@ function spreadSi(piece: Piece, unit: Unit, plain: string): number {
   throw fault(`the spread in \`${plain}\` is not above zero`, 'Write a positive spread, or leave it out');
 }
 
-function checkBounds(si: number, unit: Unit, shown: string, spec: QuantitySpec): void {
+/** Throws what `parseQuantity` throws for a number outside the bounds of its key. */
+export function checkBounds(si: number, unit: Unit, shown: string, spec: QuantitySpec): void {
+  if (isWithin(si, spec)) return;
   if (spec.dimension === 'temperature' && si < 0) {
     throw fault(`${shown} is below absolute zero`, 'Write a temperature above 0 K');
   }
   const { above = spec.positive ? 0 : undefined, below, min, max } = spec;
-  const isInside =
-    (above === undefined || si > above) &&
-    (min === undefined || si >= min) &&
-    (below === undefined || si < below) &&
-    (max === undefined || si <= max);
-  if (isInside) return;
   const bounds = Object.entries({ above, 'at least': min, below, 'at most': max });
   const words = bounds.flatMap(([word, bound]) =>
     bound === undefined ? [] : [`${word} ${formatQuantity(bound, unit)}`],
   );
   throw fault(`${shown} is out of bounds`, `Keep it ${words.join(' and ')}`);
+}
+
+/** Whether a key takes this number, SI. */
+export function isWithin(si: number, spec: QuantitySpec): boolean {
+  const { above, below, min, max } = spec;
+  if (spec.dimension === 'temperature' && si < 0) return false;
+  if (spec.positive && above === undefined && !(si > 0)) return false;
+  return (
+    (above === undefined || si > above) &&
+    (min === undefined || si >= min) &&
+    (below === undefined || si < below) &&
+    (max === undefined || si <= max)
+  );
 }

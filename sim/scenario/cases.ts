@@ -12,7 +12,7 @@ export interface CaseTree {
 }
 
 export interface Parts {
-  /** Title and notes. */
+  /** Title, notes and posterior. */
   readonly head: Branch;
   /** Everything else but cases. */
   readonly base: Branch;
@@ -21,7 +21,7 @@ export interface Parts {
   readonly faults: readonly Fault[];
 }
 
-const headKeys = ['title', 'notes', '$schema'];
+const headKeys = ['title', 'notes', 'posterior', '$schema'];
 const mendCases = 'Write `name: {}` for the scenario as it stands, or `name: { changes }`, one a line';
 /** C0 and C1 controls: they would garble tables and file names. */
 // biome-ignore lint/suspicious/noControlCharactersInRegex: the control characters are the point

@@ -7,10 +7,12 @@ import { withDefaults, withStartDefault } from './defaults.ts';
 import { readDocument } from './document.ts';
 import { yamlLines } from './emit.ts';
 import { listInputs } from './inputs.ts';
+import { merge, patchOf } from './merge.ts';
+import { readPosterior } from './posterior.ts';
 import { ScenarioError } from './problem.ts';
 import { spreadWarnings } from './spreads.ts';
 import { shorten } from './syntax.ts';
-import { type Branch, placeOf } from './tree.ts';
+import { type Branch, placeOf, subtree } from './tree.ts';
 import type { Problem, Scenario, ScenarioCase } from './types.ts';
 import { type Fault, validateCase, validateHead } from './validate.ts';
 
@@ -21,21 +23,38 @@ import { type Fault, validateCase, validateHead } from './validate.ts';
  * Errors: ScenarioError with all problems of the file, sorted by place.
  */
 export function readScenario(text: string, file: string): Scenario {
+  return readWithTrees(text, file).scenario;
+}
+
+/** The same, with the tree of each case, its defaults still open, for what varies its numbers. */
+export function readWithTrees(text: string, file: string): { scenario: Scenario; trees: readonly CaseTree[] } {
   const { root, problems: syntax } = readDocument(text, file);
   if (!root) throw new ScenarioError(syntax);
   const { head, base, cases, faults } = takeApart(root);
-  const { title, notes, faults: headFaults } = validateHead(head);
+  const { title, notes, posterior: sampled, faults: headFaults } = validateHead(head);
+  const { posterior, faults: posteriorFaults } = sampled ? readPosterior(sampled, base) : noPosterior;
   const read = cases.map(readCase);
   const problems = [
     ...syntax,
-    ...[...faults, ...headFaults].map((fault) => problemAt(root, fault, file)),
+    ...[...faults, ...headFaults, ...posteriorFaults].map((fault) => problemAt(root, fault, file)),
     ...baseFaults(base).map((fault) => problemAt(base, fault, file)),
     ...read.flatMap(({ tree, keyFaults }) => keyFaults.map((fault) => problemAt(tree, fault, file))),
     ...namingCases(read, file),
   ];
   if (problems.length) throw new ScenarioError(inOrder(problems));
+  const understoodWith = (samples: string) => understood(root, withSamples(head, samples), base, read);
   const asUnderstood = understood(root, head, base, read);
-  return { title, notes, file, cases: read.map(({ result }) => result!), asUnderstood };
+  const results = read.map(({ result }) => result!);
+  const scenario = { title, notes, file, posterior, cases: results, asUnderstood, understoodWith };
+  return { scenario, trees: cases };
+}
+
+const noPosterior = { posterior: null, faults: [] };
+
+/** The head with another path to the samples. */
+function withSamples(head: Branch, samples: string): Branch {
+  if (!subtree(head, ['posterior', 'file'])) return head;
+  return merge(head, patchOf('posterior.file', samples));
 }
 
 /** Faults of the scenario itself, for the keys that every case replaces. What is missing may come with the cases. */

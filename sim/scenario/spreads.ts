@@ -1,11 +1,20 @@
 /** What a run makes of uncertain inputs: it uses their centres. Said once for the scenario, with every centre that nobody typed. */
 import { formatInstantUtc, formatQuantity, parseUnit } from '../quantity/index.ts';
-import type { CaseInput, ScenarioCase } from './types.ts';
+import type { Posterior } from './posterior.ts';
+import type { CaseInput, Scenario, ScenarioCase } from './types.ts';
 
 const digits = 4;
 
-/** Empty where every input that is used is exact. */
-export function spreadNotes(cases: readonly ScenarioCase[]): string[] {
+/** Empty where every input that is used is exact and no samples are given. */
+export function spreadNotes({ cases, posterior }: Pick<Scenario, 'cases' | 'posterior'>): string[] {
+  return [...centreNotes(cases), ...(posterior ? [sampleNote(posterior)] : [])];
+}
+
+function sampleNote({ file }: Posterior): string {
+  return `Samples of ${file} are not used by run: the values that stand in the scenario are; perilag spread draws from them.`;
+}
+
+function centreNotes(cases: readonly ScenarioCase[]): string[] {
   const uncertain = cases.flatMap(({ name, inputs }) =>
     inputs.filter(isSpread).map((input) => ({ name, input, said: saidOf(input) })),
   );
@@ -13,7 +22,7 @@ export function spreadNotes(cases: readonly ScenarioCase[]): string[] {
   const told = new Map<string, string[]>();
   for (const { name, said } of uncertain) if (said !== null) told.set(said, [...(told.get(said) ?? []), name]);
   return [
-    'Spreads of inputs are not propagated by run: every input is used at its centre.',
+    'Spreads of inputs are not propagated by run: every input is used at its centre; perilag spread samples them.',
     ...[...told].map(([said, names]) =>
       names.length === cases.length
         ? `${said}.`

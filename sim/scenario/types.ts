@@ -1,6 +1,7 @@
 /** What reading a scenario file yields. Plain data but for the closures inside each World. */
 import type { Distribution } from '../quantity/types.ts';
 import type { SolveOptions, Window, World } from '../world.ts';
+import type { Posterior } from './posterior.ts';
 
 /** One input as this case uses it. */
 export interface CaseInput {
@@ -47,9 +48,13 @@ export interface Scenario {
   readonly title: string | null;
   readonly notes: string | null;
   readonly file: string;
+  /** Samples that `spread` draws from; null without. */
+  readonly posterior: Posterior | null;
   readonly cases: readonly ScenarioCase[];
   /** `scenario.yaml` of the contract: every default shown, the user's own number text kept; running it again gives the same numbers. */
   readonly asUnderstood: string;
+  /** The same with another path to the file of samples, for a file that stands elsewhere. */
+  understoodWith(samples: string): string;
 }
 
 /** One thing wrong with a file. Printed `FILE:LINE:COL: key: what. mend.` */

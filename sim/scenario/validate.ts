@@ -2,6 +2,7 @@
 import type * as z from 'zod';
 import { nearest } from '../quantity/index.ts';
 import { aboutKey, keyOfSymbol, keysIn, sectionOf } from './schema/lookup.ts';
+import type { PosteriorKeys } from './schema/posterior.ts';
 import { type CaseKeys, caseSchema, headSchema, modelNames } from './schema/scenario.ts';
 import { shorten } from './syntax.ts';
 import { type Branch, isNull, plain, subtree, type Tree, without } from './tree.ts';
@@ -52,13 +53,19 @@ function isExplained({ path, isMissing }: Fault, found: readonly Fault[]): boole
   return isMissing === true && found.some(({ meant }) => meant?.join('.') === path.join('.'));
 }
 
-/** The head of a file: title and notes. */
-export function validateHead(tree: Branch): { title: string | null; notes: string | null; faults: readonly Fault[] } {
+export interface ValidHead {
+  readonly title: string | null;
+  readonly notes: string | null;
+  readonly posterior: PosteriorKeys | null;
+  readonly faults: readonly Fault[];
+}
+
+/** The head of a file: title, notes and posterior. */
+export function validateHead(tree: Branch): ValidHead {
   const result = headSchema.safeParse(plain(tree));
-  if (!result.success) {
-    return { title: null, notes: null, faults: result.error.issues.flatMap((issue) => faultsOf(issue, tree)) };
-  }
-  return { title: result.data.title ?? null, notes: result.data.notes ?? null, faults: [] };
+  const faults = result.success ? [] : result.error.issues.flatMap((issue) => faultsOf(issue, tree));
+  const { title = null, notes = null, posterior = null } = result.data ?? {};
+  return { title, notes, posterior, faults };
 }
 
 type Issue = z.core.$ZodIssue;

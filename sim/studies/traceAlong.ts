@@ -1,6 +1,7 @@
 /** One case of a scenario traced along an input, as it is reported. A log range is followed in the logarithm of the input. */
 import { inUnit } from '../quantity/index.ts';
-import type { Along, CaseAlong } from '../scenario/along.ts';
+import type { Along } from '../scenario/along.ts';
+import type { CaseAlong } from '../scenario/caseAlong.ts';
 import { type TraceOptions, traceClimates } from './trace.ts';
 import type { TraceReport, TraceReportCase } from './traceReport.ts';
 

@@ -6,8 +6,8 @@ import { shown, shownNumber } from './show.ts';
 export interface Estimate {
   readonly value: number;
   readonly relativeSigma: number;
-  /** `period 130 d and star mass 0.85 Msun`. */
-  readonly source: string;
+  /** `period 130 d and star mass 0.85 Msun`; asked only where two estimates differ. */
+  readonly source: () => string;
   /** The source says the value itself. */
   readonly isGiven?: true;
 }
@@ -36,13 +36,13 @@ export function agree(given: Given, { key, label, unit, chosen, other }: Compari
   const sigma = Math.hypot(chosen.relativeSigma, other.relativeSigma);
   const limit = Math.max(allowed, 3 * sigma);
   const show = ({ value, source, isGiven }: Estimate) =>
-    isGiven ? source : `${shown(value, unit, 5)} (from ${source})`;
+    isGiven ? source() : `${shown(value, unit, 5)} (from ${source()})`;
   const percent = (share: number) => `${shownNumber(100 * share, 2)} %`;
   if (!(difference <= limit)) {
     const what = `${show(other)} and ${show(chosen)} differ by ${percent(difference)}; at most ${percent(limit)} is allowed`;
     given.wrong(key, what, 'Correct one of them, or leave one out');
   } else if (difference > worthMention) {
-    const text = `${label}: ${show(chosen)} is used; ${show(other)} is ${percent(difference)} off.`;
+    const text = () => `${label}: ${show(chosen)} is used; ${show(other)} is ${percent(difference)} off.`;
     if (difference <= Math.max(worthWarning, sigma)) given.remark(text);
     else given.warn(text);
   }

@@ -22,10 +22,13 @@ export interface Given {
   missing(section: string, keys: readonly string[], what: string, mend: string): null;
   /** Runs a part's factory; its SimError becomes an error of the file. */
   attempt<T>(make: () => T): T | null;
-  warn(text: string): void;
+  /** The words are made only where somebody listens. */
+  warn(text: () => string): void;
   /** For `check` only. */
-  remark(text: string): void;
+  remark(text: () => string): void;
   derive(key: string, value: number, unit: string, label: string): void;
+  /** Work on keys that take no spread, under a name of its own: made once for all draws of a case. */
+  once<T>(name: string, make: () => T): T;
 }
 
 export interface Desk extends Given {
@@ -85,14 +88,15 @@ export function desk(tree: Branch, keys: CaseKeys, broken: ReadonlySet<string>):
       }
     },
     warn: (text) => {
-      warnings.push(text);
+      warnings.push(text());
     },
     remark: (text) => {
-      remarks.push(text);
+      remarks.push(text());
     },
     derive: (key, value, unit, label) => {
       derived.push({ key, value, unit, label });
     },
+    once: (_name, make) => make(),
   };
 }
 

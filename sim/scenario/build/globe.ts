@@ -3,6 +3,7 @@ import { legendreSeries } from '../../instellation/legendre.ts';
 import type { Quantity } from '../../quantity/index.ts';
 import type { ArealHeatCapacity, Radians, Seconds } from '../../si.ts';
 import type { Albedo, Globe, Orbit } from '../../world.ts';
+import { showRotation } from '../schema/planet.ts';
 import type { Given } from './given.ts';
 import type { GroundSetting } from './ground.ts';
 import { buildHeatStore } from './heatStore.ts';
@@ -68,7 +69,8 @@ function buildInsolation(given: Given): Globe['insolation'] | null {
   given.use('planet.insolation');
   const insolation = given.keys.planet?.insolation;
   if (insolation === undefined || typeof insolation === 'string') return insolation ?? null;
-  const legendre = readSeries(given, insolation.legendre);
+  const { legendre: coefficients } = insolation;
+  const legendre = given.once('planet.insolation', () => readSeries(given, coefficients));
   return legendre && { legendre };
 }
 
@@ -116,13 +118,12 @@ function buildSolarDay(
   const length = solarDay(siderealPeriod(rotation, orbit), orbit.period, obliquity);
   const hasDay = length < longestDay * orbit.period;
   const needs = 'the mean over a day is not justified; it would need a model with longitude';
-  const text =
-    rotation.form === 'period' ? rotation.period.text : rotation.form === 'resonance' ? rotation.text : rotation.form;
   if (isDaily && !hasDay) {
-    given.warn(`rotationPeriod ${text}: the star stands still in the sky, so that ${needs}.`);
+    given.warn(() => `rotationPeriod ${showRotation(rotation)}: the star stands still in the sky, so that ${needs}.`);
   } else if (isDaily && (rotation.form === 'resonance' || rotation.form === 'synchronous')) {
     given.warn(
-      `rotationPeriod ${text} ties the days to the orbit: each longitude has a climate of its own, and ${needs}.`,
+      () =>
+        `rotationPeriod ${showRotation(rotation)} ties the days to the orbit: each longitude has a climate of its own, and ${needs}.`,
     );
   }
   if (!hasDay) return { length: null };
@@ -159,9 +160,11 @@ function buildFrozen(given: Given, setting: GlobeSetting): { heatCapacity: Areal
     return given.wrong('planet.frozenHeatStore', what, mend);
   }
   if (heatCapacity === null) return null;
-  if (setting.heatCapacity !== null && heatCapacity > setting.heatCapacity) {
+  const { heatCapacity: open } = setting;
+  if (open !== null && heatCapacity > open) {
     given.warn(
-      `The frozen sea stores ${shown(heatCapacity, 'J/m2/K', 3)}, more than the open sea, ${shown(setting.heatCapacity, 'J/m2/K', 3)}: usually it is less.`,
+      () =>
+        `The frozen sea stores ${shown(heatCapacity, 'J/m2/K', 3)}, more than the open sea, ${shown(open, 'J/m2/K', 3)}: usually it is less.`,
     );
   }
   return { heatCapacity };

@@ -56,7 +56,8 @@ function groundCycle(given: Given, key: string, cycle: Ground['cycle'], setting:
   if (!(Math.abs(day / sidereal - 1) < 0.1)) {
     const found = Number.isFinite(day) ? `its solar day is ${shown(day, 'd', 4)}` : 'it has no solar day';
     given.warn(
-      `${key}.ground.cycle: rotation takes the rotation period ${shown(sidereal, 'd', 4)}, but the star warms the ground once a solar day, and ${found}; a time can stand for cycle.`,
+      () =>
+        `${key}.ground.cycle: rotation takes the rotation period ${shown(sidereal, 'd', 4)}, but the star warms the ground once a solar day, and ${found}; a time can stand for cycle.`,
     );
   }
   return sidereal;
@@ -82,6 +83,7 @@ function compareWithHalfSpace(given: Given, key: string, ground: LumpedGround): 
   const percent = (amplitude: number) => `${shownNumber(100 * amplitude, 2)} %`;
   const days = (lag: number) => shown(lag * seconds, 'd', 2);
   given.warn(
-    `Ground as one lumped store: small swings come through at ${percent(lumped.amplitude)} and ${days(lumped.lag)} late, those of the half-space itself at ${percent(halfSpace.amplitude)} and ${days(halfSpace.lag)} late: more than 20 % apart.`,
+    () =>
+      `Ground as one lumped store: small swings come through at ${percent(lumped.amplitude)} and ${days(lumped.lag)} late, those of the half-space itself at ${percent(halfSpace.amplitude)} and ${days(halfSpace.lag)} late: more than 20 % apart.`,
   );
 }

@@ -91,15 +91,17 @@ function airCapacity(
   air: NonNullable<HeatStoreKeys['atmosphere']>,
 ): ArealHeatCapacity | null {
   const own = surfaceGravity(given);
-  const gravity = air.gravity?.value ?? own;
+  const { gravity: written } = air;
+  const gravity = written?.value ?? own;
   if (gravity === null) {
     const what = 'no gravity is given';
     return given.wrong(`${key}.atmosphere`, what, 'Add gravity, e.g. 11 m/s2, or planet.mass and planet.radius');
   }
-  if (!air.gravity) given.use('planet.mass', 'planet.radius');
+  if (!written) given.use('planet.mass', 'planet.radius');
   else if (own !== null && Math.abs(own / gravity - 1) > 0.01) {
     given.warn(
-      `${key}.atmosphere.gravity ${air.gravity.text} is used; mass and radius of the planet give ${shown(own, 'm/s2', 3)}.`,
+      () =>
+        `${key}.atmosphere.gravity ${written.text} is used; mass and radius of the planet give ${shown(own, 'm/s2', 3)}.`,
     );
   }
   return atmosphereHeatCapacity({

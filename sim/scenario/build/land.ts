@@ -12,7 +12,10 @@ export function buildLand(given: Given, ground: GroundSetting | null): { land: L
   given.use('planet.landFraction');
   const written = given.keys.planet?.landFraction;
   if (!written) return given.has('planet.landFraction') ? null : { land: null };
-  const fraction = 'latitudes' in written ? readTable(given, written) : everywhere(written.value);
+  const fraction =
+    'latitudes' in written
+      ? given.once('planet.landFraction', () => readTable(given, written))
+      : everywhere(written.value);
   if (!fraction) return null;
   const { value } = fraction;
   if (value.every((share) => share === 0)) return { land: null };

@@ -57,7 +57,8 @@ const widestOrbit = 1e5 * metresPerAu;
 function checkAxis(given: Given, { semiMajorAxis }: Size): void {
   if (semiMajorAxis <= widestOrbit) return;
   given.warn(
-    `A semi-major axis of ${shown(semiMajorAxis, 'au', 3)} is wider than the orbits that stars can hold, some 1e5 au. Is its unit right?`,
+    () =>
+      `A semi-major axis of ${shown(semiMajorAxis, 'au', 3)} is wider than the orbits that stars can hold, some 1e5 au. Is its unit right?`,
   );
 }
 
@@ -70,7 +71,8 @@ function checkPeriapsis(given: Given, star: StarParts, { eccentricity }: Shape, 
     given.wrong(`orbit.${key ?? 'eccentricity'}`, what, 'Lower the eccentricity or widen the orbit');
   } else if (radii < nearStar) {
     given.warn(
-      `Periapsis lies ${shownNumber(radii, 3)} stellar radii from the centre of the star: nearer than ${nearStar}, where the star is no point of light and tides matter.`,
+      () =>
+        `Periapsis lies ${shownNumber(radii, 3)} stellar radii from the centre of the star: nearer than ${nearStar}, where the star is no point of light and tides matter.`,
     );
   }
 }

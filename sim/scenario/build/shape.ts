@@ -3,10 +3,8 @@ import { SimError } from '../../error.ts';
 import { shapeFromComponents, shapeFromRootComponents } from '../../orbit/shape.ts';
 import type { Radians } from '../../si.ts';
 import { alternatives } from '../merge.ts';
+import { mostEccentric } from '../schema/orbit.ts';
 import type { Given } from './given.ts';
-
-/** The solver keeps its promise of accuracy up to here. */
-const mostEccentric = 0.9999;
 
 export interface Shape {
   readonly eccentricity: number;

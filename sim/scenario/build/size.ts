@@ -40,8 +40,9 @@ function totalMass(given: Given, star: StarParts): Estimate | null {
   const planet = given.quantity('planet.mass');
   if (!star.mass) return null;
   const value = star.mass.value + (planet?.value ?? 0);
-  const source = planet?.value ? `${star.mass.source} and planet mass ${planet.text}` : star.mass.source;
-  return { value, relativeSigma: (star.mass.relativeSigma * star.mass.value) / value, source };
+  const { mass } = star;
+  const source = planet?.value ? () => `${mass.source()} and planet mass ${planet.text}` : mass.source;
+  return { value, relativeSigma: (mass.relativeSigma * mass.value) / value, source };
 }
 
 interface AxisEstimate {
@@ -58,13 +59,13 @@ function axisEstimates(given: Given, star: StarParts, period: Quantity | null, t
       estimate: {
         value: axisFromPeriod(period.value, total.value),
         relativeSigma: Math.hypot((2 / 3) * relativeSigma(period), total.relativeSigma / 3),
-        source: `period ${period.text} and ${total.source}`,
+        source: () => `period ${period.text} and ${total.source()}`,
       },
     });
   }
   const axis = given.quantity('orbit.semiMajorAxis');
   if (axis) {
-    const source = `semiMajorAxis ${axis.text}`;
+    const source = () => `semiMajorAxis ${axis.text}`;
     const estimate = { value: axis.value, relativeSigma: relativeSigma(axis), source, isGiven: true as const };
     found.push({ key: 'semiMajorAxis', estimate });
   }
@@ -87,7 +88,7 @@ function scaledAxis(given: Given, { radius, radiusKeys }: StarParts): Estimate |
   return {
     value: scaled.value * radius.value,
     relativeSigma: Math.hypot(relativeSigma(scaled), radius.relativeSigma),
-    source: `scaledSemiMajorAxis ${scaled.text} and ${radius.source}`,
+    source: () => `scaledSemiMajorAxis ${scaled.text} and ${radius.source()}`,
   };
 }
 
@@ -98,7 +99,7 @@ function litAxis(given: Given, luminosity: Estimate | null): Estimate | null {
   return {
     value: Math.sqrt(luminosity.value / (4 * Math.PI * instellation.value)),
     relativeSigma: Math.hypot(luminosity.relativeSigma, relativeSigma(instellation)) / 2,
-    source: `instellation ${instellation.text} and ${luminosity.source}`,
+    source: () => `instellation ${instellation.text} and ${luminosity.source()}`,
   };
 }
 

@@ -37,7 +37,8 @@ const [coolestStar, hottestStar] = [2000, 60_000];
 function checkTemperature(given: Given, temperature: Quantity | null): void {
   if (!temperature || (temperature.value >= coolestStar && temperature.value <= hottestStar)) return;
   given.warn(
-    `A star of ${temperature.text} would be unusual: most have between ${coolestStar} and ${hottestStar} K. Is star.temperature right?`,
+    () =>
+      `A star of ${temperature.text} would be unusual: most have between ${coolestStar} and ${hottestStar} K. Is star.temperature right?`,
   );
 }
 
@@ -45,7 +46,7 @@ function estimate(name: string, quantity: Quantity): Estimate {
   return {
     value: quantity.value,
     relativeSigma: relativeSigma(quantity),
-    source: `${name} ${quantity.text}`,
+    source: () => `${name} ${quantity.text}`,
     isGiven: true,
   };
 }
@@ -77,7 +78,7 @@ function radiatedBy(temperature: Quantity, radius: Quantity): Estimate {
   return {
     value: luminosityFromTemperature(temperature.value, radius.value),
     relativeSigma: Math.hypot(4 * relativeSigma(temperature), 2 * relativeSigma(radius)),
-    source: `temperature ${temperature.text} and radius ${radius.text}`,
+    source: () => `temperature ${temperature.text} and radius ${radius.text}`,
   };
 }
 
@@ -93,7 +94,7 @@ function radiusOf(luminosity: Estimate | null, temperature: Quantity | null): Es
   return {
     value: radiusFromLuminosity(luminosity.value, temperature.value),
     relativeSigma: Math.hypot(luminosity.relativeSigma / 2, 2 * relativeSigma(temperature)),
-    source: `${luminosity.source} and temperature ${temperature.text}`,
+    source: () => `${luminosity.source()} and temperature ${temperature.text}`,
   };
 }
 
@@ -116,6 +117,6 @@ function buildMass(given: Given, radius: Estimate | null, radiusKeys: readonly s
   return {
     value,
     relativeSigma: Math.hypot(relativeSigma(density), 3 * radius.relativeSigma),
-    source: `star density ${density.text} and ${radius.source}`,
+    source: () => `star density ${density.text} and ${radius.source()}`,
   };
 }

@@ -44,7 +44,7 @@ function buildAlbedo(given: Given): Albedo | null {
     }
     if (ice.value < warm.value) {
       given.warn(
-        `The albedo of ice, ${ice.text}, is below the warm one, ${warm.text}: freezing would darken this planet.`,
+        () => `The albedo of ice, ${ice.text}, is below the warm one, ${warm.text}: freezing would darken this planet.`,
       );
     }
     return given.attempt(() => rampAlbedo({ warm: warm.value, ice: ice.value, from: from.value, to: to.value }));

@@ -13,6 +13,7 @@ import { isAllLand } from './land.ts';
 import { buildOrbit } from './orbit.ts';
 import { buildOptions } from './solve.ts';
 import { buildStar, type StarParts } from './star.ts';
+import { unusable } from './strictDesk.ts';
 import { buildSkin, type Skin } from './surface.ts';
 import { buildWindows } from './windows.ts';
 
@@ -35,7 +36,7 @@ export function buildWorld(given: Desk): Built | null {
   const orbit = placed?.orbit ?? null;
   const globe = asks.globe ? buildGlobe(given, { orbit, ground, albedo: skin.albedo, heatCapacity }) : null;
   const windows = buildWindows(given, parts);
-  const options = buildOptions(given, asks.start);
+  const options = given.once('solve', () => buildOptions(given, asks.start));
   const surface = finishSurface(skin, heatCapacity);
   if (!orbit || !star || !surface || !options || (asks.globe && !globe)) return null;
   derivePlanet(given, star, orbit, surface);
@@ -100,23 +101,22 @@ function derivePlanet(given: Given, star: Star, orbit: Orbit, { albedo }: Surfac
 
 /** The last guard: numbers that are each in bounds can still overflow, or vanish, together. */
 function isUsable({ star, orbit, surface, globe }: World, given: Desk): boolean {
-  const positive = {
-    'star.luminosity': star.luminosity,
-    'star.temperature': star.temperature,
-    'star.radius': star.radius,
-    'star.mass': star.mass,
-    'orbit.semiMajorAxis': orbit.semiMajorAxis,
-    'orbit.period': orbit.period,
-    'orbit.instellation': instellation(star.luminosity, orbit.semiMajorAxis),
-    'planet.heatStore': surface.heatCapacity,
-    'planet.landHeatStore': globe?.land?.heatCapacity ?? null,
-    'planet.frozenHeatStore': globe?.frozenHeatCapacity ?? null,
-    'planet.rotationPeriod': globe?.solarDay ?? null,
-  };
+  const positive: readonly (readonly [key: string, value: number | null | undefined])[] = [
+    ['star.luminosity', star.luminosity],
+    ['star.temperature', star.temperature],
+    ['star.radius', star.radius],
+    ['star.mass', star.mass],
+    ['orbit.semiMajorAxis', orbit.semiMajorAxis],
+    ['orbit.period', orbit.period],
+    ['orbit.instellation', instellation(star.luminosity, orbit.semiMajorAxis)],
+    ['planet.heatStore', surface.heatCapacity],
+    ['planet.landHeatStore', globe?.land?.heatCapacity],
+    ['planet.frozenHeatStore', globe?.frozenHeatCapacity],
+    ['planet.rotationPeriod', globe?.solarDay],
+  ];
   const bad =
-    Object.entries(positive).find(([, value]) => value !== null && !(value > 0 && Number.isFinite(value))) ??
+    positive.find(([, value]) => value != null && !(value > 0 && Number.isFinite(value))) ??
     given.derived.map(({ key, value }) => [key, value] as const).find(([, value]) => !Number.isFinite(value));
-  if (bad)
-    given.wrong(bad[0], `the inputs together give ${bad[1]}, which is no usable number`, 'Use the numbers of a planet');
+  if (bad) given.wrong(bad[0], `the inputs together give ${bad[1]}, which is no usable number`, unusable);
   return !bad;
 }

@@ -1,16 +1,19 @@
 import * as z from 'zod';
 import { SimError } from '../../error.ts';
-import { nearest, parseQuantity, type Quantity } from '../../quantity/index.ts';
+import { nearest, parseQuantity, type Quantity, type QuantitySpec } from '../../quantity/index.ts';
 import { type About, described, leaf, quantity } from './leaf.ts';
 
 /** Over which period ground is warmed: the orbit's, the rotation's, or one that is given. */
 export type GroundCycle = 'orbit' | 'rotation' | Quantity;
+
+const cycleTime: QuantitySpec = { dimension: 'time', positive: true };
 
 const cycle = leaf<GroundCycle>(readCycle, (value) => (typeof value === 'string' ? value : value.text), {
   title: 'Cycle that warms the ground',
   description: 'orbit, rotation (needs planet.rotationPeriod), or a time',
   examples: ['orbit', 'rotation', '26 h'],
   takes: 'text',
+  numbers: cycleTime,
 });
 
 function readCycle(input: string | number): GroundCycle {
@@ -32,7 +35,7 @@ function readCycle(input: string | number): GroundCycle {
   if (/^[A-Za-z]+$/.test(text)) {
     throw new SimError('cycle', `\`${text}\` is not known here`, 'Write orbit, rotation, or a time, e.g. 26 h');
   }
-  return parseQuantity(input, { dimension: 'time', positive: true });
+  return parseQuantity(input, cycleTime);
 }
 
 /** One form of heat store. */

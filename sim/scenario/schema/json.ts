@@ -45,6 +45,7 @@ function properties(schema: z.ZodObject): Json {
       const about = z.globalRegistry.get(zodSchema) as About | undefined;
       if (about?.examples) jsonSchema.examples = [...about.examples];
       if (about?.takes) asText(jsonSchema as Json, about.takes);
+      for (const ours of ['takes', 'numbers', 'cut']) Reflect.deleteProperty(jsonSchema, ours);
       if (alone.has(zodSchema)) Object.assign(jsonSchema, { minProperties: 1, maxProperties: 1 });
     },
   });
@@ -53,7 +54,6 @@ function properties(schema: z.ZodObject): Json {
 
 /** A number with a dimension is text: without its unit it is not understood. Pure numbers stay text or number. */
 function asText(schema: Json, takes: NonNullable<About['takes']>): void {
-  Reflect.deleteProperty(schema, 'takes');
   if (takes !== 'text' && takes.dimension === 'number') return;
   Reflect.deleteProperty(schema, 'anyOf');
   schema.type = 'string';

@@ -11,6 +11,10 @@ export interface About {
   readonly examples: readonly (string | number)[];
   /** What the key takes where that is a quantity; `text` where a bare number is never understood. */
   readonly takes?: QuantitySpec | 'text';
+  /** What its numbers are, where it takes words, too. */
+  readonly numbers?: QuantitySpec;
+  /** Closer ends of a spread than the bounds of the key, SI. */
+  readonly cut?: { readonly low?: number; readonly high?: number };
 }
 
 /** Writes down what a schema says of itself. (`.meta()` would copy it: half of the time it takes to start.) */

@@ -10,7 +10,7 @@ const fileSchema = caseSchema.extend(headSchema.shape);
 const topKeys = topOrder([...Object.keys(headSchema.shape), ...Object.keys(caseSchema.shape), 'cases']);
 
 function topOrder(keys: readonly string[]): readonly string[] {
-  const order = ['title', 'notes', 'model', 'star', 'orbit', 'planet', 'cases', 'windows', 'solve'];
+  const order = ['title', 'notes', 'model', 'star', 'orbit', 'planet', 'posterior', 'cases', 'windows', 'solve'];
   return [...order, ...keys.filter((key) => !order.includes(key) && key !== '$schema')];
 }
 
@@ -85,6 +85,28 @@ export function sectionOf(key: string): string | null {
 export function quantityAt(path: readonly string[]): QuantitySpec | null {
   const found = schemaAt(path);
   return found && takenBy(found);
+}
+
+/** What the numbers of a key are, those of a key that takes words, too; null where it takes no quantity. */
+export function numbersAt(path: readonly string[]): QuantitySpec | null {
+  return quantityAt(path) ?? aboutKey(path)?.numbers ?? null;
+}
+
+/** Where a spread of a key ends, SI, infinite where it does not; null where it has no end at all. */
+export function endsOfSpread(path: readonly string[]): { low: number; high: number } | null {
+  const spec = numbersAt(path);
+  if (!spec) return null;
+  const { cut } = aboutKey(path) ?? {};
+  const isKelvin = spec.dimension === 'temperature';
+  const low = cut?.low ?? spec.min ?? spec.above ?? (spec.positive || isKelvin ? 0 : Number.NEGATIVE_INFINITY);
+  const high = cut?.high ?? spec.max ?? spec.below ?? Number.POSITIVE_INFINITY;
+  return Number.isFinite(low) || Number.isFinite(high) ? { low, high } : null;
+}
+
+/** 2π for an angle without bounds: it comes round, and a spread of it is never cut. */
+export function turnOf(path: readonly string[]): number | null {
+  const isAngle = numbersAt(path)?.dimension === 'angle';
+  return isAngle && endsOfSpread(path) === null ? 2 * Math.PI : null;
 }
 
 type Schema = z.core.$ZodType;

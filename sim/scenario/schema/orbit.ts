@@ -1,6 +1,9 @@
 import * as z from 'zod';
 import { instant, quantity } from './leaf.ts';
 
+/** The solver keeps its promise of accuracy up to here. */
+export const mostEccentric = 0.9999;
+
 const component = (title: string, description: string) =>
   quantity({ dimension: 'number', min: -1, max: 1 }, { title, description, examples: [0.1] }).optional();
 
@@ -32,7 +35,12 @@ export const orbitSchema = z
     ).optional(),
     eccentricity: quantity(
       { dimension: 'number', min: 0, below: 1 },
-      { title: 'Eccentricity', description: '0 is a circle; solved up to 0.9999', examples: [0.62, '0.62 ± 0.03'] },
+      {
+        title: 'Eccentricity',
+        description: `0 is a circle; solved up to ${mostEccentric}`,
+        examples: [0.62, '0.62 ± 0.03'],
+        cut: { high: mostEccentric },
+      },
     ).optional(),
     argumentOfPeriapsis: quantity(
       { dimension: 'angle' },

@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import { SimError } from '../../error.ts';
-import { nearest, parseQuantity, type Quantity } from '../../quantity/index.ts';
+import { nearest, parseQuantity, type Quantity, type QuantitySpec } from '../../quantity/index.ts';
 import { globeShape } from './globe.ts';
 import { heatStoreSchema } from './heatStore.ts';
 import { leaf, quantity } from './leaf.ts';
@@ -13,11 +13,14 @@ export type RotationPeriod =
   | { readonly form: 'synchronous' | 'pseudoSynchronous' }
   | { readonly form: 'resonance'; readonly turns: number; readonly orbits: number; readonly text: string };
 
+const turnTime: QuantitySpec = { dimension: 'time', positive: true };
+
 const rotationPeriod = leaf<RotationPeriod>(readRotation, showRotation, {
   title: 'Rotation period',
   description: 'Sidereal; a time, synchronous, pseudoSynchronous, or a resonance such as 3:2 (turns : orbits)',
   examples: ['26 h', 'synchronous', 'pseudoSynchronous', '3:2'],
   takes: 'text',
+  numbers: turnTime,
 });
 
 function readRotation(input: string | number): RotationPeriod {
@@ -31,10 +34,11 @@ function readRotation(input: string | number): RotationPeriod {
   }
   const meant = /^[A-Za-z]+$/.test(text) ? nearest(text, ['synchronous', 'pseudoSynchronous']) : null;
   if (meant) throw new SimError('planet.rotationPeriod', `\`${text}\` is not known here`, `Did you mean \`${meant}\``);
-  return { form: 'period', period: parseQuantity(input, { dimension: 'time', positive: true }) };
+  return { form: 'period', period: parseQuantity(input, turnTime) };
 }
 
-function showRotation(rotation: RotationPeriod): string {
+/** As it was typed. */
+export function showRotation(rotation: RotationPeriod): string {
   if (rotation.form === 'period') return rotation.period.text;
   return rotation.form === 'resonance' ? rotation.text : rotation.form;
 }

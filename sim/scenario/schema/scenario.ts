@@ -5,6 +5,7 @@ import { freeText, word } from './leaf.ts';
 import { withModelKeys } from './modelKeys.ts';
 import { orbitSchema } from './orbit.ts';
 import { planetSchema } from './planet.ts';
+import { posteriorSchema } from './posterior.ts';
 import { solveSchema } from './solve.ts';
 import { starSchema } from './star.ts';
 import { windowSchema } from './windows.ts';
@@ -49,4 +50,5 @@ export const headSchema = z.strictObject({
     examples: ['Corvane b under three ground assumptions'],
   }).optional(),
   notes: freeText({ title: 'Notes', description: 'Free text', examples: ['Elements from the 2025 fit'] }).optional(),
+  posterior: posteriorSchema.optional(),
 });

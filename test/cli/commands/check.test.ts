@@ -107,7 +107,8 @@ Remarks
   Rsun) is 0.073 % off.
 
 Notes
-  Spreads of inputs are not propagated by run: every input is used at its centre.`);
+  Spreads of inputs are not propagated by run: every input is used at its centre; perilag spread
+  samples them.`);
   });
 
   test.each([40, 60, 80, 120])('fits %i columns', (columns) => {

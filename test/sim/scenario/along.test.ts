@@ -1,7 +1,8 @@
 /** `--along`: what it takes, what it refuses in plain words, and the worlds that it gives. */
 import { describe, expect, test } from 'vitest';
 import { solarLuminosity } from '../../../sim/constants.ts';
-import { alongText, casesAlong, readAlong } from '../../../sim/scenario/along.ts';
+import { alongText, readAlong } from '../../../sim/scenario/along.ts';
+import { casesAlong } from '../../../sim/scenario/caseAlong.ts';
 
 const text = `title: two stores
 star: { luminosity: 0.6 Lsun, mass: 0.9 Msun }

@@ -311,7 +311,7 @@ const table: readonly Broken[] = [
     name: 'unknown key',
     text: edited(['title: Test', 'colour: red']),
     says: [
-      'p.yaml:1:1: colour: `colour` is not a key of a scenario. Keys here are `title`, `notes`, `model`, `star`, `orbit`, `planet`, `cases`, `windows`, `solve`.',
+      'p.yaml:1:1: colour: `colour` is not a key of a scenario. Keys here are `title`, `notes`, `model`, `star`, `orbit`, `planet`, `posterior`, `cases`, `windows`, `solve`.',
     ],
   },
   {

@@ -9,7 +9,7 @@ import { readDocument } from '../../../sim/scenario/document.ts';
 import { scenarioJsonSchema } from '../../../sim/scenario/schema/json.ts';
 import { quantity } from '../../../sim/scenario/schema/leaf.ts';
 import { aboutKey, isKnownKey, keysIn, labelOf } from '../../../sim/scenario/schema/lookup.ts';
-import { validateCase } from '../../../sim/scenario/validate.ts';
+import { validateCase, validateHead } from '../../../sim/scenario/validate.ts';
 import { rich } from './mutate.ts';
 import { sound } from './sound.ts';
 
@@ -116,7 +116,8 @@ test('every example that the schema gives is read at its key', () => {
     for (const example of aboutKey(path)?.examples ?? []) {
       const text = path.reduceRight((inner, key) => `{ ${key}: ${inner} }`, String(example));
       const { root, problems } = readDocument(text, 'p.yaml');
-      const faults = root ? validateCase(root).faults.filter(({ isMissing }) => !isMissing) : [];
+      const validate = path[0] === 'posterior' ? validateHead : validateCase;
+      const faults = root ? validate(root).faults.filter(({ isMissing }) => !isMissing) : [];
       expect([...problems, ...faults], text).toEqual([]);
     }
   }

@@ -4,8 +4,9 @@ import { readScenario } from '../../../sim/scenario/read.ts';
 import { centreText, spreadNotes } from '../../../sim/scenario/spreads.ts';
 import { edited, onlyCase, sound } from './sound.ts';
 
-const head = 'Spreads of inputs are not propagated by run: every input is used at its centre.';
-const notes = (text: string) => spreadNotes(readScenario(text, 'p.yaml').cases);
+const head =
+  'Spreads of inputs are not propagated by run: every input is used at its centre; perilag spread samples them.';
+const notes = (text: string) => spreadNotes(readScenario(text, 'p.yaml'));
 
 test('exact inputs: nothing is said', () => {
   expect(notes(sound)).toEqual([]);

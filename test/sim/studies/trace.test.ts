@@ -1,7 +1,8 @@
 /** Climates along an input: on a circular orbit the periodic state is the balance itself, so that folds are known in closed form. */
 import { describe, expect, test } from 'vitest';
 import { metresPerAu, solarLuminosity, stefanBoltzmann } from '../../../sim/constants.ts';
-import { casesAlong, readAlong } from '../../../sim/scenario/along.ts';
+import { readAlong } from '../../../sim/scenario/along.ts';
+import { casesAlong } from '../../../sim/scenario/caseAlong.ts';
 import { climateEnds, severalClimates, stretchesOf } from '../../../sim/studies/climateRanges.ts';
 import { traceAlong } from '../../../sim/studies/traceAlong.ts';
 import type { TraceReportCase } from '../../../sim/studies/traceReport.ts';
