@@ -29,6 +29,14 @@ export function loadNodePiece({ size, value, slope, curvature }: Nodes, index: n
   );
 }
 
+/** Value half-way from node `index` to the next. */
+export function midpointValue({ size, value, slope, curvature }: Nodes, index: number): number {
+  const next = index + 1 === size ? 0 : index + 1;
+  const h = (2 * Math.PI) / size;
+  const lift = ((5 * h) / 32) * (slope[index] - slope[next]) + ((h * h) / 64) * (curvature[index] + curvature[next]);
+  return 0.5 * (value[index] + value[next]) + lift;
+}
+
 /** Value at s in [0, 2π]; `piece` is loaded anew only when s lies outside it. */
 export function nodeValue(nodes: Nodes, s: number, piece: Piece): number {
   let x = (s - piece.left) / piece.width;

@@ -20,9 +20,10 @@ import { balancedParameter, meanFromBalanced } from '../../orbit/balanced.ts';
 import { movableForcing } from '../../orbit/forcing.ts';
 import type { Kelvin, Radians } from '../../si.ts';
 import { circleCache } from '../../solve/circle.ts';
-import { emptyPiece } from '../../solve/curve.ts';
+import { emptyPiece, pieceCurvature, pieceSlope, pieceValue } from '../../solve/curve.ts';
 import {
   loadNodePiece,
+  midpointValue,
   nodeValue,
   placeOfLevel,
   type Turn,
@@ -92,10 +93,15 @@ interface Scratch {
   readonly turns: Turns;
   readonly highest: Turn;
   readonly lowest: Turn;
-  /** dN/ds of the present state, for `rootBetween`. */
-  readonly changeOfHeating: (s: Radians) => number;
+  readonly fastest: { rate: number; position: Radians; value: number };
+  /** For `rootBetween`. */
+  readonly changeOfRate: (s: Radians) => number;
+  readonly evenWave: Wave;
+  readonly oddWave: Wave;
   world: World;
   state: PlainState;
+  /** The balanced parameter. */
+  b: number;
   mean: Kelvin;
   moving: boolean;
 }
@@ -110,7 +116,11 @@ function newScratch(): Scratch {
     turns: { maxima: 0, minima: 0, maximumIn: 0, minimumIn: 0 },
     highest: { index: 0, x: 0.5, position: 0.5, value: 0.5, curvature: 0.5 },
     lowest: { index: 0, x: 0.5, position: 0.5, value: 0.5, curvature: 0.5 },
-    changeOfHeating: (s) => changeOfHeating(scratch, s),
+    fastest: { rate: 0.5, position: 0.5, value: 0.5 },
+    changeOfRate: (s) => changeOfRate(scratch, s),
+    evenWave: { cosine: 0.5, sine: 0.5 },
+    oddWave: { cosine: 0.5, sine: 0.5 },
+    b: 0.5,
     world: null as unknown as World,
     state: null as unknown as PlainState,
     mean: 0.5,
@@ -287,51 +297,99 @@ function enterLag(scratch: Scratch, sheet: Sheet): void {
 }
 
 /**
- * Phase of ⟨(T − ⟨T⟩) e^{iM}⟩; that of the steady value, even in s, is 0. With z = e^{is}, e^{iE} = (z + b)/(1 + bz).
- * Times mirrored in periapsis share their cosines and sines.
+ * Phase of ⟨(T − ⟨T⟩) e^{iM}⟩; that of the steady value, even in s, is 0. e^{iM} is steeper than T near apoapsis of a long
+ * orbit: where the nodes do not resolve it, the midpoints between them are taken in.
  */
 function enterHarmonicLag(scratch: Scratch, sheet: Sheet): boolean {
-  if (!scratch.moving) {
+  const { world, state, moving, evenWave, oddWave } = scratch;
+  if (!moving) {
     enterUndefined(sheet, at.lagOfFirstHarmonic, still);
     return true;
   }
-  const { world, state, circle } = scratch;
-  const { eccentricity, scale, solution, tolerance } = state;
-  const { size, value, forcing } = solution;
-  const { r0 } = forcing;
-  const { cosines, sines } = circle(size);
-  const b = balancedParameter(eccentricity);
-  const mean = scratch.mean / scale;
-  const half = size / 2;
-  // M is 0 at node 0 and π half-way round; both are even nodes.
-  let evenCosine = (value[0] - mean) * r0[0] - (value[half] - mean) * r0[half];
-  let evenSine = 0;
-  let oddCosine = 0;
-  let oddSine = 0;
-  for (let i = 1; i < half; i++) {
-    const inverse = 1 / (1 + b * b + 2 * b * cosines[i]);
-    const sineE = (1 - b * b) * sines[i] * inverse;
-    const cosineE = ((1 + b * b) * cosines[i] + 2 * b) * inverse;
-    const sine = Math.sin(eccentricity * sineE);
-    const cosine = Math.cos(eccentricity * sineE);
-    const there = (value[i] - mean) * r0[i];
-    const back = (value[size - i] - mean) * r0[i];
-    const cosineSum = (there + back) * (cosineE * cosine + sineE * sine);
-    const sineSum = (there - back) * (sineE * cosine - cosineE * sine);
-    if ((i & 1) === 0) {
-      evenCosine += cosineSum;
-      evenSine += sineSum;
-    } else {
-      oddCosine += cosineSum;
-      oddSine += sineSum;
-    }
+  scratch.b = balancedParameter(state.eccentricity);
+  addNodes(scratch);
+  let isKnown = agree(evenWave, oddWave, state.tolerance);
+  evenWave.cosine += oddWave.cosine;
+  evenWave.sine += oddWave.sine;
+  if (!isKnown) {
+    addMidpoints(scratch);
+    isKnown = agree(evenWave, oddWave, state.tolerance);
+    evenWave.cosine += oddWave.cosine;
+    evenWave.sine += oddWave.sine;
   }
-  const cosine = evenCosine + oddCosine;
-  const sine = evenSine + oddSine;
-  const difference = Math.abs(evenCosine - oddCosine) + Math.abs(evenSine - oddSine);
-  if (!isResolved(difference, Math.abs(cosine) + Math.abs(sine), tolerance)) return false;
-  enter(sheet, at.lagOfFirstHarmonic, (Math.atan2(sine, cosine) / turn) * world.orbit.period);
-  return true;
+  const phase = Math.atan2(evenWave.sine, evenWave.cosine);
+  if (isKnown) enter(sheet, at.lagOfFirstHarmonic, (phase / turn) * world.orbit.period);
+  return isKnown;
+}
+
+/** ∮ (y − ⟨y⟩) cos M dM and with sin M, up to a common factor. */
+interface Wave {
+  cosine: number;
+  sine: number;
+}
+
+function agree(even: Wave, odd: Wave, tolerance: number): boolean {
+  const difference = Math.abs(even.cosine - odd.cosine) + Math.abs(even.sine - odd.sine);
+  return isResolved(difference, Math.abs(even.cosine + odd.cosine) + Math.abs(even.sine + odd.sine), tolerance);
+}
+
+/** The even nodes into one wave, the odd ones into the other. */
+function addNodes(scratch: Scratch): void {
+  const { state, circle, evenWave, oddWave } = scratch;
+  const { size, value } = state.solution;
+  const { cosines, sines } = circle(size);
+  const mean = scratch.mean / state.scale;
+  const half = size / 2;
+  clear(evenWave);
+  clear(oddWave);
+  // Periapsis and apoapsis stand for themselves alone.
+  addPair(scratch.b, state.eccentricity, 1, 0, value[0] - mean, 0, evenWave);
+  addPair(scratch.b, state.eccentricity, -1, 0, value[half] - mean, 0, evenWave);
+  for (let i = 1; i < half; i++) {
+    const wave = (i & 1) === 0 ? evenWave : oddWave;
+    addPair(scratch.b, state.eccentricity, cosines[i], sines[i], value[i] - mean, value[size - i] - mean, wave);
+  }
+}
+
+/** The midpoints between the nodes into the odd wave. */
+function addMidpoints(scratch: Scratch): void {
+  const { state, circle, oddWave } = scratch;
+  const { solution } = state;
+  const { size } = solution;
+  const { cosines, sines } = circle(2 * size);
+  const mean = scratch.mean / state.scale;
+  clear(oddWave);
+  for (let i = 0; i < size / 2; i++) {
+    const there = midpointValue(solution, i) - mean;
+    const back = midpointValue(solution, size - 1 - i) - mean;
+    addPair(scratch.b, state.eccentricity, cosines[2 * i + 1], sines[2 * i + 1], there, back, oddWave);
+  }
+}
+
+function clear(wave: Wave): void {
+  wave.cosine = 0;
+  wave.sine = 0;
+}
+
+/** Two times mirrored in periapsis share cosine and clock. With z = e^{is}, e^{iE} = (z + b)/(1 + bz); the clock is D₋/D₊². */
+function addPair(
+  b: number,
+  eccentricity: number,
+  cosine: number,
+  sine: number,
+  there: number,
+  back: number,
+  wave: Wave,
+): void {
+  const inverse = 1 / (1 + b * b + 2 * b * cosine);
+  const clock = (1 + b * b - 2 * b * cosine) * inverse * inverse;
+  const sineE = (1 - b * b) * sine * inverse;
+  const cosineE = ((1 + b * b) * cosine + 2 * b) * inverse;
+  // M = E − e sin E
+  const sineBehind = Math.sin(eccentricity * sineE);
+  const cosineBehind = Math.cos(eccentricity * sineE);
+  wave.cosine += (there + back) * clock * (cosineE * cosineBehind + sineE * sineBehind);
+  wave.sine += (there - back) * clock * (sineE * cosineBehind - cosineE * sineBehind);
 }
 
 function enterFastestChanges(scratch: Scratch, sheet: Sheet): boolean {
@@ -350,44 +408,58 @@ function enterFastestChanges(scratch: Scratch, sheet: Sheet): boolean {
  * the best counts; without any, the curve is read.
  */
 function enterFastest(scratch: Scratch, sign: 1 | -1, rateColumn: number, timeColumn: number, sheet: Sheet): boolean {
-  const { world, state, forcing, point, piece } = scratch;
+  const { world, state, piece, fastest } = scratch;
   const { solution, coefficient, scale } = state;
   const { size, slope, curvature } = solution;
   const { r0, r1 } = solution.forcing;
-  const h = turn / size;
-  let best = Number.NEGATIVE_INFINITY;
-  let place = 0;
-  let height = 0;
+  fastest.rate = 0;
   let before = sign * (curvature[size - 1] * r0[size - 1] - slope[size - 1] * r1[size - 1]);
   for (let i = 0; i < size; i++) {
     const here = sign * (curvature[i] * r0[i] - slope[i] * r1[i]);
     if (before > 0 && here <= 0) {
-      const left = i === 0 ? turn - h : (i - 1) * h;
-      const s = rootBetween(scratch.changeOfHeating, left, left + h);
-      forcing.at(s, point);
-      const y = nodeValue(solution, s, piece);
-      const rate = sign * heating(scratch, y);
-      if (rate > best) {
-        best = rate;
-        place = s;
-        height = y;
-      }
+      loadNodePiece(solution, i === 0 ? size - 1 : i - 1, piece);
+      tryPiece(scratch, sign);
     }
     before = here;
   }
-  if (!(best > 0)) return false;
+  if (!(fastest.rate > 0)) return false;
   const toKelvinPerSecond = (coefficient * scale ** 4) / world.surface.heatCapacity;
-  const shift = height ** 4 * ((1 + solution.errorEstimate) ** 4 - 1);
-  enter(sheet, rateColumn, sign * best * toKelvinPerSecond, shift * toKelvinPerSecond);
-  enter(sheet, timeColumn, (meanFromBalanced(place, state.eccentricity) * world.orbit.period) / turn);
+  const shift = fastest.value ** 4 * ((1 + solution.errorEstimate) ** 4 - 1);
+  enter(sheet, rateColumn, sign * fastest.rate * toKelvinPerSecond, shift * toKelvinPerSecond);
+  enter(sheet, timeColumn, (meanFromBalanced(fastest.position, state.eccentricity) * world.orbit.period) / turn);
   return true;
 }
 
-/** dN/ds along the curve, N = φ(a/r)² + 1 − φ − y⁴. */
-function changeOfHeating(scratch: Scratch, s: Radians): number {
+/** Looks for the extreme of N in the present piece, at whose ends its change has two signs. */
+function tryPiece(scratch: Scratch, sign: 1 | -1): void {
+  const { state, piece, forcing, point, fastest, changeOfRate } = scratch;
+  const s = rootBetween(changeOfRate, piece.left, piece.left + piece.width);
+  const x = (s - piece.left) / piece.width;
+  forcing.at(s, point);
+  const y = pieceValue(piece, x);
+  const rate = sign * (isSlow(scratch) ? heating(scratch, y) : pieceSlope(piece, x) / (state.rate * point.clock));
+  if (rate > fastest.rate) {
+    fastest.rate = rate;
+    fastest.position = s;
+    fastest.value = y;
+  }
+}
+
+/**
+ * A small difference of large fluxes, N knows the rate badly where κh is large: there an error of y counts κ times, and the
+ * slope of the curve is better by orders. Where κh is small, N is better.
+ */
+function isSlow({ state }: Scratch): boolean {
+  return (state.rate * turn) / state.solution.size < 0.1;
+}
+
+/** Of the sign of dN/ds on the present piece. */
+function changeOfRate(scratch: Scratch, s: Radians): number {
   const { state, forcing, point, piece } = scratch;
   forcing.at(s, point);
-  const y = nodeValue(state.solution, s, piece);
+  const x = (s - piece.left) / piece.width;
+  if (!isSlow(scratch)) return pieceCurvature(piece, x) * point.clock - pieceSlope(piece, x) * point.clockSlope;
+  const y = pieceValue(piece, x);
   const flux = (state.share * point.arrival) / point.clock;
   const fluxSlope = flux * (point.arrivalSlope / point.arrival - point.clockSlope / point.clock);
   return fluxSlope - 4 * y * y * y * state.rate * point.clock * heating(scratch, y);
