@@ -100,10 +100,25 @@ export function forcingAt(eccentricity: number): (s: number, into: ForcingPoint)
 export interface MovableForcing {
   moveTo(eccentricity: number): void;
   at(s: number, into: ForcingPoint): void;
+  /** For those who have sin(s/2) and cos(s/2) already. */
+  atHalfAngle(halfSine: number, halfCosine: number, into: ForcingPoint): void;
 }
 
 export function movableForcing(): MovableForcing {
   const orbit = { b: 0.5, w: 0.5, oneMinusB2: 0.5 };
+  const atHalfAngle: MovableForcing['atHalfAngle'] = (halfSine, halfCosine, into) => {
+    const { b, w, oneMinusB2 } = orbit;
+    // D∓ = (1 ∓ b)² ± 4b sin²(s/2), without cancellation where D− is small
+    const minus = (1 - b) * (1 - b) + 4 * b * halfSine * halfSine;
+    const plus = (1 - b) * (1 - b) + 4 * b * halfCosine * halfCosine;
+    const slope = 4 * b * halfSine * halfCosine;
+    const q = oneMinusB2 / (w * minus);
+    const m = (oneMinusB2 * w * minus) / (plus * plus);
+    into.arrival = q;
+    into.arrivalSlope = (-q * slope) / minus;
+    into.clock = m;
+    into.clockSlope = m * (slope / minus + (2 * slope) / plus);
+  };
   return {
     moveTo(eccentricity) {
       const b = balancedParameter(eccentricity);
@@ -111,20 +126,7 @@ export function movableForcing(): MovableForcing {
       orbit.w = Math.sqrt((1 - eccentricity) * (1 + eccentricity));
       orbit.oneMinusB2 = (1 - b) * (1 + b);
     },
-    at(s, into) {
-      const { b, w, oneMinusB2 } = orbit;
-      const halfSine = Math.sin(s / 2);
-      const halfCosine = Math.cos(s / 2);
-      // D∓ = (1 ∓ b)² ± 4b sin²(s/2), without cancellation where D− is small
-      const minus = (1 - b) * (1 - b) + 4 * b * halfSine * halfSine;
-      const plus = (1 - b) * (1 - b) + 4 * b * halfCosine * halfCosine;
-      const slope = 4 * b * halfSine * halfCosine;
-      const q = oneMinusB2 / (w * minus);
-      const m = (oneMinusB2 * w * minus) / (plus * plus);
-      into.arrival = q;
-      into.arrivalSlope = (-q * slope) / minus;
-      into.clock = m;
-      into.clockSlope = m * (slope / minus + (2 * slope) / plus);
-    },
+    at: (s, into) => atHalfAngle(Math.sin(s / 2), Math.cos(s / 2), into),
+    atHalfAngle,
   };
 }

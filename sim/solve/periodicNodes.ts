@@ -37,17 +37,6 @@ export function midpointValue({ size, value, slope, curvature }: Nodes, index: n
   return 0.5 * (value[index] + value[next]) + lift;
 }
 
-/** Value at s in [0, 2π]; `piece` is loaded anew only when s lies outside it. */
-export function nodeValue(nodes: Nodes, s: number, piece: Piece): number {
-  let x = (s - piece.left) / piece.width;
-  if (!(x >= 0 && x <= 1)) {
-    const { size } = nodes;
-    loadNodePiece(nodes, Math.min(size - 1, Math.max(0, Math.floor((s * size) / (2 * Math.PI)))), piece);
-    x = (s - piece.left) / piece.width;
-  }
-  return pieceValue(piece, x);
-}
-
 /** The pieces in which the slope changes sign. */
 export interface Turns {
   maxima: number;
@@ -139,4 +128,4 @@ export function placeOfLevel(piece: Piece, level: number, low: number, high: num
 }
 
 /** Newton's steps square: what is left after one below this is rounding. */
-const lastStep = 1e-9;
+const lastStep = 1e-8;

@@ -31,8 +31,12 @@ export interface PlainState {
 /** A solver with its own buffers, which its next call overwrites; it leaves no garbage. */
 export function plainStates(): (world: World, quarticCoefficient: number, tolerance: number) => PlainState {
   const solve = quarticSolver();
+  let table: ForcingTable | null = null;
+  let known: QuarticForcing | null = null;
   const forcingInto = (cosines: Float64Array, sines: Float64Array, size: number, into: QuarticForcing): void => {
-    circleForcingInto(state.eccentricity, cosines, sines, size, asTable(into));
+    if (table === null || known !== into) table = asTable(into);
+    known = into;
+    circleForcingInto(state.eccentricity, cosines, sines, size, table);
     if (state.share < 1) mixHeat(into, state.share, size);
   };
   const problem = { rate: 0.5, forcingInto, tolerance: 0.5, firstSize: 16 };

@@ -24,15 +24,14 @@ import { emptyPiece, pieceCurvature, pieceSlope, pieceValue } from '../../solve/
 import {
   loadNodePiece,
   midpointValue,
-  nodeValue,
   placeOfLevel,
   type Turn,
   type Turns,
   turnInto,
   turnsInto,
 } from '../../solve/periodicNodes.ts';
-import { rootBetween } from '../../solve/roots.ts';
 import { forcingPoint } from '../../solve/separable.ts';
+import { smallCosine, smallSine } from '../../solve/smallAngle.ts';
 import type { Window, World } from '../../world.ts';
 import { at, type Wanted } from './columns.ts';
 import {
@@ -65,8 +64,7 @@ export type PlainFindings = (
 export function plainFindings(): PlainFindings {
   const scratch = newScratch();
   return (world, state, windows, wanted, sheet) => {
-    scratch.world = world;
-    scratch.state = state;
+    begin(scratch, world, state);
     if (!findMean(scratch) || !findExtremes(scratch)) return false;
     if (wanted.harmonic && !enterHarmonicLag(scratch, sheet)) return false;
     if (wanted.fastest && !enterFastestChanges(scratch, sheet)) return false;
@@ -93,11 +91,18 @@ interface Scratch {
   readonly turns: Turns;
   readonly highest: Turn;
   readonly lowest: Turn;
-  readonly fastest: { rate: number; position: Radians; value: number };
-  /** For `rootBetween`. */
-  readonly changeOfRate: (s: Radians) => number;
+  readonly warming: Fastest;
+  readonly cooling: Fastest;
   readonly evenWave: Wave;
   readonly oddWave: Wave;
+  midpoints: Float64Array;
+  /** Of the present mesh: cos(s/2) and sin(s/2) at its nodes. */
+  size: number;
+  halfCosines: Float64Array;
+  halfSines: Float64Array;
+  /** The present piece, −1 before one is loaded, and the place in it, 0 … 1. */
+  index: number;
+  x: number;
   world: World;
   state: PlainState;
   /** The balanced parameter. */
@@ -107,26 +112,43 @@ interface Scratch {
 }
 
 function newScratch(): Scratch {
-  const point = forcingPoint();
-  const scratch: Scratch = {
+  return {
     circle: circleCache(),
     forcing: movableForcing(),
-    point,
+    point: forcingPoint(),
     piece: emptyPiece(),
     turns: { maxima: 0, minima: 0, maximumIn: 0, minimumIn: 0 },
     highest: { index: 0, x: 0.5, position: 0.5, value: 0.5, curvature: 0.5 },
     lowest: { index: 0, x: 0.5, position: 0.5, value: 0.5, curvature: 0.5 },
-    fastest: { rate: 0.5, position: 0.5, value: 0.5 },
-    changeOfRate: (s) => changeOfRate(scratch, s),
+    warming: { rate: 0.5, position: 0.5, value: 0.5 },
+    cooling: { rate: 0.5, position: 0.5, value: 0.5 },
     evenWave: { cosine: 0.5, sine: 0.5 },
     oddWave: { cosine: 0.5, sine: 0.5 },
+    midpoints: new Float64Array(0),
+    size: 0,
+    halfCosines: new Float64Array(0),
+    halfSines: new Float64Array(0),
+    index: -1,
+    x: 0.5,
     b: 0.5,
     world: null as unknown as World,
     state: null as unknown as PlainState,
     mean: 0.5,
     moving: false,
   };
-  return scratch;
+}
+
+function begin(scratch: Scratch, world: World, state: PlainState): void {
+  const { size } = state.solution;
+  scratch.world = world;
+  scratch.state = state;
+  scratch.index = -1;
+  scratch.forcing.moveTo(state.eccentricity);
+  if (scratch.size === size) return;
+  const { cosines, sines } = scratch.circle(2 * size);
+  scratch.size = size;
+  scratch.halfCosines = cosines;
+  scratch.halfSines = sines;
 }
 
 /** Whether two halves of a trapezoidal sum agree well enough for the error of the whole, the square of their difference. */
@@ -157,11 +179,11 @@ function findMean(scratch: Scratch): boolean {
 function findExtremes(scratch: Scratch): boolean {
   const { state, highest, lowest, turns, piece } = scratch;
   const { solution, eccentricity, scale } = state;
-  scratch.forcing.moveTo(eccentricity);
   turnsInto(solution, turns);
   if (turns.maxima === 1 && turns.minima === 1 && eccentricity > 0) {
     turnInto(solution, turns.maximumIn, piece, highest);
     turnInto(solution, turns.minimumIn, piece, lowest);
+    scratch.index = turns.minimumIn;
     scratch.moving = isMoving(scale * (highest.value - lowest.value), scratch.mean);
     return true;
   }
@@ -236,16 +258,16 @@ function steadyMeanBySum({ state, circle }: Scratch): number {
 }
 
 function enterTime(scratch: Scratch, column: number, extreme: Turn, sheet: Sheet): void {
-  const { world, state, forcing, point } = scratch;
+  const { world, state, point } = scratch;
   const { period, eccentricity } = world.orbit;
   if (!scratch.moving) {
     enterUndefined(sheet, column, still);
     return;
   }
   moveToRest(scratch, extreme);
-  forcing.at(extreme.position, point);
+  goTo(scratch, extreme.position);
   // An error δy shifts the balance f(y, s) = 0 by |∂f/∂y| δy / |y″| along s.
-  const steepness = 4 * state.rate * point.clock * extreme.value ** 3;
+  const steepness = 4 * state.rate * point.clock * extreme.value * extreme.value * extreme.value;
   const shift = (steepness * state.solution.errorEstimate * extreme.value) / Math.abs(extreme.curvature);
   const plusMinus = (shift * point.clock * period) / turn;
   if (!(plusMinus <= largestTimeError * period)) enterUndefined(sheet, column, tooFlat);
@@ -257,19 +279,45 @@ function enterTime(scratch: Scratch, column: number, extreme: Turn, sheet: Sheet
  * keeps digits that differences of temperature have lost. Newton with d/ds = y″/(κ dM/ds). Near the ends of the orbit it stays.
  */
 function moveToRest(scratch: Scratch, extreme: Turn): void {
-  const { state, forcing, point, piece } = scratch;
-  const { rate, solution } = state;
+  const { state, point } = scratch;
   const reach = 0.02;
-  loadNodePiece(solution, extreme.index, piece);
   let { position } = extreme;
   for (let trial = 0; trial < 3; trial++) {
-    forcing.at(position, point);
-    const y = nodeValue(solution, position, piece);
-    const next = position - (rate * point.clock * heating(scratch, y)) / extreme.curvature;
+    goTo(scratch, position);
+    const y = pieceValue(scratch.piece, scratch.x);
+    const next = position - (state.rate * point.clock * heating(scratch, y)) / extreme.curvature;
     if (!(Math.abs(next - extreme.position) < reach && next > 0 && next < turn)) return;
+    const step = Math.abs(next - position);
     position = next;
+    if (step < 1e-11) break; // the next one would be smaller by the relative error of y″
   }
   extreme.position = position;
+}
+
+/** Loads the piece that holds s in [0, 2π], and the forcing there. */
+function goTo(scratch: Scratch, s: Radians): void {
+  const { size } = scratch.state.solution;
+  const place = (s * size) / turn;
+  const index = Math.min(size - 1, Math.floor(place));
+  goToPiece(scratch, index);
+  scratch.x = place - index;
+  lookAround(scratch);
+}
+
+function goToPiece(scratch: Scratch, index: number): void {
+  if (scratch.index === index) return;
+  scratch.index = index;
+  loadNodePiece(scratch.state.solution, index, scratch.piece);
+}
+
+/** The forcing at the present place: the half-angle of the piece's left node is in the table of twice the size. */
+function lookAround({ halfCosines, halfSines, index, x, piece, forcing, point }: Scratch): void {
+  const further = 0.5 * x * piece.width;
+  const sine = smallSine(further);
+  const cosine = smallCosine(further);
+  const s = halfSines[index];
+  const c = halfCosines[index];
+  forcing.atHalfAngle(s * cosine + c * sine, c * cosine - s * sine, point);
 }
 
 /** φ(a/r)² + 1 − φ − y⁴ at the present point. */
@@ -279,17 +327,16 @@ function heating({ state, point }: Scratch, y: number): number {
   return (share * point.arrival) / point.clock + (1 - share) - squared * squared;
 }
 
-/** After the time of the maximum has been entered. */
+/** Right after the time of the maximum has been entered, with the present point still there. */
 function enterLag(scratch: Scratch, sheet: Sheet): void {
   const reason = sheet.reason[at.timeOfMax];
   if (reason !== null) {
     enterNoLag(sheet, reason);
     return;
   }
-  const { world, forcing, point, highest } = scratch;
+  const { world, point, highest } = scratch;
   const { period } = world.orbit;
   const plusMinus = sheet.plusMinus[at.timeOfMax];
-  forcing.at(highest.position, point);
   // A maximum that is late by less than its own error may seem to come before the periapsis that it follows.
   const reach = (plusMinus * turn) / (point.clock * period);
   const periapsis = Math.floor((highest.position + reach) / turn + 1e-12) * period;
@@ -335,112 +382,162 @@ function agree(even: Wave, odd: Wave, tolerance: number): boolean {
 
 /** The even nodes into one wave, the odd ones into the other. */
 function addNodes(scratch: Scratch): void {
-  const { state, circle, evenWave, oddWave } = scratch;
+  const { state, evenWave, oddWave, b } = scratch;
   const { size, value } = state.solution;
-  const { cosines, sines } = circle(size);
   const mean = scratch.mean / state.scale;
-  const half = size / 2;
-  clear(evenWave);
-  clear(oddWave);
-  // Periapsis and apoapsis stand for themselves alone.
-  addPair(scratch.b, state.eccentricity, 1, 0, value[0] - mean, 0, evenWave);
-  addPair(scratch.b, state.eccentricity, -1, 0, value[half] - mean, 0, evenWave);
-  for (let i = 1; i < half; i++) {
-    const wave = (i & 1) === 0 ? evenWave : oddWave;
-    addPair(scratch.b, state.eccentricity, cosines[i], sines[i], value[i] - mean, value[size - i] - mean, wave);
-  }
+  const squared = ((1 + b) / (1 - b)) ** 2;
+  // Periapsis and apoapsis stand for themselves alone: e^{iM} = ±1, clock (1 ∓ b)²/(1 ± b)⁴.
+  const periapsis = (value[0] - mean) / (squared * (1 + b) * (1 + b));
+  const apoapsis = ((value[size / 2] - mean) * squared) / ((1 - b) * (1 - b));
+  evenWave.cosine = periapsis - apoapsis;
+  evenWave.sine = 0;
+  oddWave.cosine = 0;
+  oddWave.sine = 0;
+  addPairs(scratch, value, size, 4, 4, evenWave);
+  addPairs(scratch, value, size, 2, 4, oddWave);
 }
 
 /** The midpoints between the nodes into the odd wave. */
 function addMidpoints(scratch: Scratch): void {
-  const { state, circle, oddWave } = scratch;
+  const { state, oddWave } = scratch;
   const { solution } = state;
   const { size } = solution;
-  const { cosines, sines } = circle(2 * size);
-  const mean = scratch.mean / state.scale;
-  clear(oddWave);
-  for (let i = 0; i < size / 2; i++) {
-    const there = midpointValue(solution, i) - mean;
-    const back = midpointValue(solution, size - 1 - i) - mean;
-    addPair(scratch.b, state.eccentricity, cosines[2 * i + 1], sines[2 * i + 1], there, back, oddWave);
-  }
+  if (scratch.midpoints.length < size) scratch.midpoints = new Float64Array(size);
+  for (let i = 0; i < size; i++) scratch.midpoints[i] = midpointValue(solution, i);
+  oddWave.cosine = 0;
+  oddWave.sine = 0;
+  addPairs(scratch, scratch.midpoints, size - 1, 1, 2, oddWave);
 }
 
-function clear(wave: Wave): void {
-  wave.cosine = 0;
-  wave.sine = 0;
-}
-
-/** Two times mirrored in periapsis share cosine and clock. With z = e^{is}, e^{iE} = (z + b)/(1 + bz); the clock is D₋/D₊². */
-function addPair(
-  b: number,
-  eccentricity: number,
-  cosine: number,
-  sine: number,
-  there: number,
-  back: number,
+/**
+ * Times s = πj/size, j = first, first + step … below size, with those mirrored in periapsis, which share cosine and clock;
+ * ordinate j/2 stands there, and `mirror` − j/2 at the other. With z = e^{is}, e^{iE} = (z + b)/(1 + bz); the clock is D₋/D₊².
+ */
+function addPairs(
+  scratch: Scratch,
+  ordinate: Float64Array,
+  mirror: number,
+  first: number,
+  step: number,
   wave: Wave,
 ): void {
-  const inverse = 1 / (1 + b * b + 2 * b * cosine);
-  const clock = (1 + b * b - 2 * b * cosine) * inverse * inverse;
-  const sineE = (1 - b * b) * sine * inverse;
-  const cosineE = ((1 + b * b) * cosine + 2 * b) * inverse;
-  // M = E − e sin E
-  const sineBehind = Math.sin(eccentricity * sineE);
-  const cosineBehind = Math.cos(eccentricity * sineE);
-  wave.cosine += (there + back) * clock * (cosineE * cosineBehind + sineE * sineBehind);
-  wave.sine += (there - back) * clock * (sineE * cosineBehind - cosineE * sineBehind);
-}
-
-function enterFastestChanges(scratch: Scratch, sheet: Sheet): boolean {
-  if (!scratch.moving) {
-    enterNoChange(sheet, still);
-    return true;
+  const { state, b, halfCosines, halfSines, size } = scratch;
+  const { eccentricity } = state;
+  const mean = scratch.mean / state.scale;
+  const oneB2 = 1 + b * b;
+  const oneMinusB2 = 1 - b * b;
+  let cosineSum = wave.cosine;
+  let sineSum = wave.sine;
+  for (let j = first; j < size; j += step) {
+    const i = j >> 1;
+    const c = 2 * b * halfCosines[j];
+    const inverse = 1 / (oneB2 + c);
+    const sineE = oneMinusB2 * halfSines[j] * inverse;
+    const cosineE = (oneB2 * halfCosines[j] + 2 * b) * inverse;
+    // M = E − e sin E
+    const sine = smallSine(eccentricity * sineE);
+    const cosine = smallCosine(eccentricity * sineE);
+    const clock = (oneB2 - c) * inverse * inverse;
+    const there = ordinate[i] - mean;
+    const back = ordinate[mirror - i] - mean;
+    cosineSum += (there + back) * clock * (cosineE * cosine + sineE * sine);
+    sineSum += (there - back) * clock * (sineE * cosine - cosineE * sine);
   }
-  return (
-    enterFastest(scratch, 1, at.fastestWarming, at.timeOfFastestWarming, sheet) &&
-    enterFastest(scratch, -1, at.fastestCooling, at.timeOfFastestCooling, sheet)
-  );
+  wave.cosine = cosineSum;
+  wave.sine = sineSum;
 }
 
 /**
  * The rate is proportional to the heating N = y′/(κr), and extreme where y″r − y′r′ changes its sign. Of several such pieces
  * the best counts; without any, the curve is read.
  */
-function enterFastest(scratch: Scratch, sign: 1 | -1, rateColumn: number, timeColumn: number, sheet: Sheet): boolean {
-  const { world, state, piece, fastest } = scratch;
-  const { solution, coefficient, scale } = state;
-  const { size, slope, curvature } = solution;
-  const { r0, r1 } = solution.forcing;
-  fastest.rate = 0;
-  let before = sign * (curvature[size - 1] * r0[size - 1] - slope[size - 1] * r1[size - 1]);
+function enterFastestChanges(scratch: Scratch, sheet: Sheet): boolean {
+  if (!scratch.moving) {
+    enterNoChange(sheet, still);
+    return true;
+  }
+  const { solution } = scratch.state;
+  const { size, slope, curvature, forcing } = solution;
+  const { r0, r1 } = forcing;
+  const { warming, cooling } = scratch;
+  warming.rate = 0;
+  cooling.rate = 0;
+  const last = size - 1;
+  let before = curvature[last] * r0[last] - slope[last] * r1[last];
   for (let i = 0; i < size; i++) {
-    const here = sign * (curvature[i] * r0[i] - slope[i] * r1[i]);
-    if (before > 0 && here <= 0) {
-      loadNodePiece(solution, i === 0 ? size - 1 : i - 1, piece);
-      tryPiece(scratch, sign);
+    const here = curvature[i] * r0[i] - slope[i] * r1[i];
+    const isMaximum = before > 0 && here <= 0;
+    if (isMaximum || (before < 0 && here >= 0)) {
+      goToPiece(scratch, i === 0 ? last : i - 1);
+      tryPiece(scratch, before, here, isMaximum ? 1 : -1, isMaximum ? warming : cooling);
     }
     before = here;
   }
-  if (!(fastest.rate > 0)) return false;
-  const toKelvinPerSecond = (coefficient * scale ** 4) / world.surface.heatCapacity;
-  const shift = fastest.value ** 4 * ((1 + solution.errorEstimate) ** 4 - 1);
-  enter(sheet, rateColumn, sign * fastest.rate * toKelvinPerSecond, shift * toKelvinPerSecond);
-  enter(sheet, timeColumn, (meanFromBalanced(fastest.position, state.eccentricity) * world.orbit.period) / turn);
+  if (!(warming.rate > 0 && cooling.rate > 0)) return false;
+  enterFastest(scratch, warming, 1, at.fastestWarming, sheet);
+  enterFastest(scratch, cooling, -1, at.fastestCooling, sheet);
   return true;
 }
 
-/** Looks for the extreme of N in the present piece, at whose ends its change has two signs. */
-function tryPiece(scratch: Scratch, sign: 1 | -1): void {
-  const { state, piece, forcing, point, fastest, changeOfRate } = scratch;
-  const s = rootBetween(changeOfRate, piece.left, piece.left + piece.width);
-  const x = (s - piece.left) / piece.width;
-  forcing.at(s, point);
+interface Fastest {
+  /** |N|, dimensionless. */
+  rate: number;
+  position: Radians;
+  value: number;
+}
+
+function enterFastest(scratch: Scratch, fastest: Fastest, sign: 1 | -1, column: number, sheet: Sheet): void {
+  const { world, state } = scratch;
+  const { coefficient, scale, solution, eccentricity } = state;
+  const { period } = world.orbit;
+  const toKelvinPerSecond = (coefficient * fourthPower(scale)) / world.surface.heatCapacity;
+  const shift = fourthPower(fastest.value) * (fourthPower(1 + solution.errorEstimate) - 1);
+  enter(sheet, column, sign * fastest.rate * toKelvinPerSecond, shift * toKelvinPerSecond);
+  enter(sheet, column + 1, (meanFromBalanced(fastest.position, eccentricity) * period) / turn);
+}
+
+function fourthPower(x: number): number {
+  return x * x * (x * x);
+}
+
+/**
+ * The extreme of N in the present piece, at whose ends its change is `left` and `right`, of two signs: regula falsi as
+ * Anderson & Björck (1973, BIT 13, 253) mend it.
+ */
+function tryPiece(scratch: Scratch, left: number, right: number, sign: 1 | -1, fastest: Fastest): void {
+  const { state, piece, point } = scratch;
+  let a = 0;
+  let fa = left;
+  let b = 1;
+  let fb = right;
+  let x = left / (left - right);
+  for (let trial = 0; trial < 60; trial++) {
+    scratch.x = x;
+    lookAround(scratch);
+    const fx = changeOfRate(scratch);
+    if (fx === 0) break;
+    if (fx > 0 === fb > 0) {
+      const rest = 1 - fx / fb;
+      fa *= rest > 0 ? rest : 0.5;
+    } else {
+      a = b;
+      fa = fb;
+    }
+    b = x;
+    fb = fx;
+    let next = b - (fb * (b - a)) / (fb - fa);
+    if (!((next - a) * (next - b) < 0)) next = (a + b) / 2;
+    const step = Math.abs(next - x);
+    x = next;
+    if (step < 1e-9) break;
+  }
+  scratch.x = x;
+  lookAround(scratch);
   const y = pieceValue(piece, x);
   const rate = sign * (isSlow(scratch) ? heating(scratch, y) : pieceSlope(piece, x) / (state.rate * point.clock));
   if (rate > fastest.rate) {
     fastest.rate = rate;
-    fastest.position = s;
+    fastest.position = piece.left + x * piece.width;
     fastest.value = y;
   }
 }
@@ -453,16 +550,16 @@ function isSlow({ state }: Scratch): boolean {
   return (state.rate * turn) / state.solution.size < 0.1;
 }
 
-/** Of the sign of dN/ds on the present piece. */
-function changeOfRate(scratch: Scratch, s: Radians): number {
-  const { state, forcing, point, piece } = scratch;
-  forcing.at(s, point);
-  const x = (s - piece.left) / piece.width;
-  if (!isSlow(scratch)) return pieceCurvature(piece, x) * point.clock - pieceSlope(piece, x) * point.clockSlope;
+/** κr² dN/ds = y″r − y′r′ at the present place. */
+function changeOfRate(scratch: Scratch): number {
+  const { state, point, piece, x } = scratch;
+  const { clock } = point;
+  if (!isSlow(scratch)) return pieceCurvature(piece, x) * clock - pieceSlope(piece, x) * point.clockSlope;
   const y = pieceValue(piece, x);
-  const flux = (state.share * point.arrival) / point.clock;
-  const fluxSlope = flux * (point.arrivalSlope / point.arrival - point.clockSlope / point.clock);
-  return fluxSlope - 4 * y * y * y * state.rate * point.clock * heating(scratch, y);
+  const flux = (state.share * point.arrival) / clock;
+  const fluxSlope = flux * (point.arrivalSlope / point.arrival - point.clockSlope / clock);
+  const change = fluxSlope - 4 * y * y * y * state.rate * clock * heating(scratch, y);
+  return state.rate * clock * clock * change;
 }
 
 function enterWindows(scratch: Scratch, windows: readonly Window[], sheet: Sheet): void {
@@ -496,8 +593,8 @@ function timeAbove(scratch: Scratch, level: number): Radians {
 }
 
 /** Where the curve passes `level` on its way from one extreme to the next. */
-function crossing({ state, piece }: Scratch, from: Turn, to: Turn, level: number): Radians {
-  const { solution } = state;
+function crossing(scratch: Scratch, from: Turn, to: Turn, level: number): Radians {
+  const { solution } = scratch.state;
   const { size, value } = solution;
   const rises = to.value > from.value;
   let index = from.index;
@@ -506,7 +603,8 @@ function crossing({ state, piece }: Scratch, from: Turn, to: Turn, level: number
     index = next;
     next = index + 1 === size ? 0 : index + 1;
   }
-  loadNodePiece(solution, index, piece);
+  goToPiece(scratch, index);
+  const { piece } = scratch;
   const x = placeOfLevel(piece, level, index === from.index ? from.x : 0, index === to.index ? to.x : 1);
   return piece.left + x * piece.width;
 }
