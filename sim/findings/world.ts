@@ -3,7 +3,7 @@ import { stefanBoltzmann } from '../constants.ts';
 import { instellation } from '../instellation/instellation.ts';
 import type { Kelvin } from '../si.ts';
 import type { World } from '../world.ts';
-import type { Finding } from './finding.ts';
+import type { Finding, FindingColumn } from './finding.ts';
 import { orbitMeanClosedForm } from './orbitMean.ts';
 import { steadyTemperature } from './steadyState.ts';
 
@@ -11,35 +11,36 @@ import { steadyTemperature } from './steadyState.ts';
 export function textbookTemperature(world: World, absorbingFraction = 0.25): Kelvin {
   const { star, orbit, surface } = world;
   const absorbed = absorbingFraction * (1 - surface.albedo.warm) * instellation(star.luminosity, orbit.semiMajorAxis);
-  return (absorbed / stefanBoltzmann) ** 0.25;
+  return Math.sqrt(Math.sqrt(absorbed / stefanBoltzmann));
 }
 
-/** `near`: the temperature from which, with several balances, the steady values are reached. */
-export function worldFindings(world: World, near: Kelvin): Finding[] {
+export const worldColumns: readonly FindingColumn[] = [
+  { name: 'period', unit: 's', label: 'Orbital period' },
+  { name: 'orbitMeanInstellation', unit: 'W/m2', label: 'Orbit-mean instellation' },
+  { name: 'equilibriumTemperature', unit: 'K', label: 'Equilibrium temperature (textbook)' },
+  { name: 'circularTemperature', unit: 'K', label: 'Steady temperature at distance a' },
+  { name: 'fluxMeanTemperature', unit: 'K', label: 'Steady temperature for the orbit-mean flux' },
+  { name: 'radiativeTimeConstant', unit: 's', label: 'Radiative time constant' },
+];
+
+/**
+ * Overwrites the first entries of `values`, one for each of `worldColumns`. `near`: the temperature from which, with several
+ * balances, the steady values are reached.
+ */
+export function worldValuesInto(world: World, near: Kelvin, values: Float64Array): void {
   const { star, orbit, surface } = world;
   const meanFlux = orbitMeanClosedForm(world);
   const fluxMean = steadyTemperature(surface, meanFlux, near);
-  return [
-    { name: 'period', value: orbit.period, unit: 's', label: 'Orbital period' },
-    { name: 'orbitMeanInstellation', value: meanFlux, unit: 'W/m2', label: 'Orbit-mean instellation' },
-    {
-      name: 'equilibriumTemperature',
-      value: textbookTemperature(world),
-      unit: 'K',
-      label: 'Equilibrium temperature (textbook)',
-    },
-    {
-      name: 'circularTemperature',
-      value: steadyTemperature(surface, instellation(star.luminosity, orbit.semiMajorAxis), near),
-      unit: 'K',
-      label: 'Steady temperature at distance a',
-    },
-    { name: 'fluxMeanTemperature', value: fluxMean, unit: 'K', label: 'Steady temperature for the orbit-mean flux' },
-    {
-      name: 'radiativeTimeConstant',
-      value: surface.heatCapacity / surface.emission.slopeAt(fluxMean),
-      unit: 's',
-      label: 'Radiative time constant',
-    },
-  ];
+  values[0] = orbit.period;
+  values[1] = meanFlux;
+  values[2] = textbookTemperature(world);
+  values[3] = steadyTemperature(surface, instellation(star.luminosity, orbit.semiMajorAxis), near);
+  values[4] = fluxMean;
+  values[5] = surface.heatCapacity / surface.emission.slopeAt(fluxMean);
+}
+
+export function worldFindings(world: World, near: Kelvin): Finding[] {
+  const values = new Float64Array(worldColumns.length);
+  worldValuesInto(world, near, values);
+  return worldColumns.map((column, i) => ({ ...column, value: values[i] }));
 }

@@ -1,7 +1,7 @@
 /** What every model exports. A new model is a folder that fills this in, and a line in the registry. */
 import type { ZodRawShape } from 'zod';
 import type { Dataset } from '../dataset/dataset.ts';
-import type { Finding } from '../findings/finding.ts';
+import type { Finding, FindingColumn } from '../findings/finding.ts';
 import type { SolveOptions, Window, World } from '../world.ts';
 
 /** One periodic state (or one forward run) and what is known of its stability. */
@@ -51,6 +51,17 @@ export interface ModelAsks {
   readonly start: boolean;
 }
 
+/** Many worlds straight to their findings. All share the options, the windows and the set of findings. */
+export interface Batch {
+  /** What a row holds, in order. */
+  readonly columns: readonly FindingColumn[];
+  /**
+   * Overwrites `row` (columns.length) by the findings of a world's warm state, to the last bit those of `solve`; NaN where
+   * one is undefined. Returns whether the state kept its tolerance. Errors: as `solve`.
+   */
+  into(world: World, row: Float64Array): boolean;
+}
+
 export interface Model {
   /** What `model:` says in a scenario. */
   readonly name: string;
@@ -58,4 +69,9 @@ export interface Model {
   /** Keys that only some models know, merged into the strict schema: the lumped model brings absorbingFraction. */
   readonly keys: { readonly planet?: ZodRawShape; readonly solve?: ZodRawShape; readonly top?: ZodRawShape };
   solve(world: World, options: SolveOptions, windows: readonly Window[]): Solution;
+  /**
+   * A faster way to the findings alone, where the model has one (`batchOf` makes do without). `only`: the names wanted, in
+   * the order wanted; without it all of them. Errors: SimError for a name that is no finding.
+   */
+  batch?(options: SolveOptions, windows: readonly Window[], only?: readonly string[]): Batch;
 }

@@ -24,6 +24,31 @@ export interface ForcingTable {
   readonly clockCurvature: Float64Array;
 }
 
+/**
+ * Fills `table` on the uniform mesh s = 2πi/size, size even: one half from its cosines and sines, the other by symmetry
+ * (arrival and clock are even in s, their slopes odd).
+ */
+export function circleForcingInto(
+  eccentricity: number,
+  cosines: Float64Array,
+  sines: Float64Array,
+  size: number,
+  table: ForcingTable,
+): void {
+  const half = size >> 1;
+  forcingInto(eccentricity, cosines, sines, half + 1, table);
+  const { arrival, arrivalSlope, arrivalCurvature, clock, clockSlope, clockCurvature } = table;
+  for (let i = 1; i < half; i++) {
+    const mirrored = size - i;
+    arrival[mirrored] = arrival[i];
+    arrivalSlope[mirrored] = -arrivalSlope[i];
+    arrivalCurvature[mirrored] = arrivalCurvature[i];
+    clock[mirrored] = clock[i];
+    clockSlope[mirrored] = -clockSlope[i];
+    clockCurvature[mirrored] = clockCurvature[i];
+  }
+}
+
 /** Fills `table` at s = s_i for the given cos s_i and sin s_i, i < count. */
 export function forcingInto(
   eccentricity: number,
@@ -66,12 +91,23 @@ export interface ForcingPoint {
 
 /** Returns a function that fills a `ForcingPoint` at any s. */
 export function forcingAt(eccentricity: number): (s: number, into: ForcingPoint) => void {
-  const w = Math.sqrt((1 - eccentricity) * (1 + eccentricity));
-  const b = balancedParameter(eccentricity);
-  const oneMinusB2 = (1 - b) * (1 + b);
-  return (s, into) => {
-    const halfSine = Math.sin(s / 2);
-    const halfCosine = Math.cos(s / 2);
+  const orbit = movableForcing();
+  orbit.moveTo(eccentricity);
+  return (s, into) => orbit.at(s, into);
+}
+
+/** The forcing of one orbit after another, for those who see many: neither call leaves garbage. */
+export interface MovableForcing {
+  moveTo(eccentricity: number): void;
+  at(s: number, into: ForcingPoint): void;
+  /** For those who have sin(s/2) and cos(s/2) already. */
+  atHalfAngle(halfSine: number, halfCosine: number, into: ForcingPoint): void;
+}
+
+export function movableForcing(): MovableForcing {
+  const orbit = { b: 0.5, w: 0.5, oneMinusB2: 0.5 };
+  const atHalfAngle: MovableForcing['atHalfAngle'] = (halfSine, halfCosine, into) => {
+    const { b, w, oneMinusB2 } = orbit;
     // D∓ = (1 ∓ b)² ± 4b sin²(s/2), without cancellation where D− is small
     const minus = (1 - b) * (1 - b) + 4 * b * halfSine * halfSine;
     const plus = (1 - b) * (1 - b) + 4 * b * halfCosine * halfCosine;
@@ -82,5 +118,15 @@ export function forcingAt(eccentricity: number): (s: number, into: ForcingPoint)
     into.arrivalSlope = (-q * slope) / minus;
     into.clock = m;
     into.clockSlope = m * (slope / minus + (2 * slope) / plus);
+  };
+  return {
+    moveTo(eccentricity) {
+      const b = balancedParameter(eccentricity);
+      orbit.b = b;
+      orbit.w = Math.sqrt((1 - eccentricity) * (1 + eccentricity));
+      orbit.oneMinusB2 = (1 - b) * (1 + b);
+    },
+    at: (s, into) => atHalfAngle(Math.sin(s / 2), Math.cos(s / 2), into),
+    atHalfAngle,
   };
 }

@@ -28,20 +28,35 @@ export function emptyPiece(): Piece {
   return { left: 0, width: 1, c0: 0, c1: 0, c2: 0, c3: 0, c4: 0, c5: 0 };
 }
 
-/** Quintic Hermite interpolation: matches value, slope and curvature at both ends. */
 export function loadPiece(curve: Curve, index: number, piece: Piece): void {
-  const left = curve.position[index];
-  const h = curve.position[index + 1] - left;
+  const { position, value, slope, curvature } = curve;
+  const left = position[index];
   const a = 2 * index;
   const b = a + 1;
-  const rise = curve.value[b] - curve.value[a];
-  const v0 = curve.slope[a] * h;
-  const v1 = curve.slope[b] * h;
-  const w0 = curve.curvature[a] * h * h;
-  const w1 = curve.curvature[b] * h * h;
+  const h = position[index + 1] - left;
+  setPiece(piece, left, h, value[a], value[b], slope[a], slope[b], curvature[a], curvature[b]);
+}
+
+/** Quintic Hermite interpolation: matches value, slope and curvature at both ends of [left, left + h]. */
+export function setPiece(
+  piece: Piece,
+  left: number,
+  h: number,
+  value0: number,
+  value1: number,
+  slope0: number,
+  slope1: number,
+  curvature0: number,
+  curvature1: number,
+): void {
+  const rise = value1 - value0;
+  const v0 = slope0 * h;
+  const v1 = slope1 * h;
+  const w0 = curvature0 * h * h;
+  const w1 = curvature1 * h * h;
   piece.left = left;
   piece.width = h;
-  piece.c0 = curve.value[a];
+  piece.c0 = value0;
   piece.c1 = v0;
   piece.c2 = 0.5 * w0;
   piece.c3 = 10 * rise - 6 * v0 - 4 * v1 - 1.5 * w0 + 0.5 * w1;

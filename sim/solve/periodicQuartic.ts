@@ -35,12 +35,17 @@ export interface QuarticProblem {
   readonly firstSize: number;
 }
 
+/** Belongs to its solver, whose next solve overwrites it. */
 export interface QuarticSolution {
   readonly size: number;
-  /** y, y′ and y″ at the nodes; views into the solver's buffers, valid until its next solve. */
+  /** y, y′ and y″ at the nodes: the first `size` entries. */
   readonly value: Float64Array;
   readonly slope: Float64Array;
   readonly curvature: Float64Array;
+  /** p and r at the nodes. */
+  readonly forcing: QuarticForcing;
+  /** κ. */
+  readonly rate: number;
   /** Upper bound of the relative error of y anywhere. */
   readonly errorEstimate: number;
   readonly converged: boolean;
@@ -58,103 +63,144 @@ const rounding = 4e-15;
 const safety = 10;
 /** On the slow manifold the curvature is known to O(κ⁻¹) only: interpolation gains a factor 4 by halving the mesh. */
 const manifoldSafety = 3;
-/** Interpolated values feel an error of y as (gh)²/64 times itself, through the curvature: g = 4κ max(r y³), h the step. */
-const amplification = (stiffness: number, size: number): number => 1 + (stiffness * ((2 * Math.PI) / size)) ** 2 / 64;
 /** Newton's next change is below this times the square of the last. */
 const newtonConstant = 20;
 
-/** A solver with its own buffers; one per thread. */
+/** A solver with its own buffers; one per thread. It leaves no garbage once its buffers have grown. */
 export function quarticSolver(): (problem: QuarticProblem) => QuarticSolution {
   const circle = circleCache();
-  let capacity = 0;
-  let forcing: QuarticForcing;
-  let y: Float64Array = new Float64Array(0);
-  let coarse: Float64Array = new Float64Array(0);
-  let slope: Float64Array;
-  let curvature: Float64Array;
-  let homogeneous: Float64Array;
-  let particular: Float64Array;
+  const work = workspace();
 
-  function reserve(size: number): void {
-    if (size <= capacity) return;
-    capacity = Math.max(512, size);
-    const column = () => new Float64Array(capacity);
-    forcing = { p0: column(), p1: column(), p2: column(), r0: column(), r1: column(), r2: column() };
-    y = grown(y, capacity);
-    coarse = grown(coarse, capacity);
-    slope = column();
-    curvature = column();
-    homogeneous = column();
-    particular = column();
+  function load(problem: QuarticProblem): void {
+    reserve(work, 2 * work.size); // this mesh, and the next when it is prolonged
+    const { cosines, sines } = circle(work.size);
+    problem.forcingInto(cosines, sines, work.size, work.forcing);
   }
 
   return (problem) => {
     const { rate, tolerance } = problem;
-    let sweeps = 0;
-    let leftover = 0;
-    const sweep: Sweep = { change: 0, stiffness: 0 };
-    let size = problem.firstSize;
-    let pass = 0;
-
-    const load = (): void => {
-      reserve(2 * size); // this mesh, and the next when it is prolonged
-      const { cosines, sines } = circle(size);
-      problem.forcingInto(cosines, sines, size, forcing);
-    };
-    /** Slopes from f amplify rounding; where that alone would spoil the tolerance they come from the slow manifold. */
-    const onManifold = (): boolean => amplification(sweep.stiffness, size) * 40 * rounding > tolerance;
-    /** Newton until what the next sweep would change, as interpolated values feel it, is below `target`. */
-    const settle = (target: number): boolean => {
-      for (let count = 0; count < maximumSweeps; count++) {
-        newtonSweep(y, forcing, rate, size, homogeneous, particular, sweep);
-        sweeps++;
-        if (!Number.isFinite(sweep.change)) return false;
-        leftover = newtonConstant * sweep.change ** 2 * (onManifold() ? 1 : amplification(sweep.stiffness, size));
-        if (leftover <= target) {
-          if (rate < slowRate) pinMean(y, forcing, size);
-          return true;
-        }
-      }
-      return false;
-    };
-
-    load();
-    blendedGuess(y, forcing, rate, size);
-    let settled = settle(1e-4);
+    work.rate = rate;
+    work.size = problem.firstSize;
+    work.sweeps = 0;
+    load(problem);
+    blendedGuess(work.value, work.forcing, rate, work.size);
+    let settled = settle(work, 1e-4, tolerance);
     let difference = Number.POSITIVE_INFINITY;
     let accepted = false;
-    while (size < maximumSize) {
+    while (work.size < maximumSize && !accepted) {
       if (settled) {
-        derivatives(y, forcing, rate, size, onManifold(), slope, curvature);
-        prolong(y, slope, curvature, size, coarse);
+        derivatives(work, onManifold(work, tolerance));
+        prolong(work);
       }
-      size *= 2;
-      load();
-      if (settled) y.set(coarse.subarray(0, size));
-      else blendedGuess(y, forcing, rate, size);
+      work.size *= 2;
+      load(problem);
+      if (settled) copy(work.coarse, work.size, work.value);
+      else blendedGuess(work.value, work.forcing, rate, work.size);
       const compare = settled;
-      settled = settle(0.02 * tolerance);
-      difference = settled && compare ? largestRelativeChange(y, coarse, size) : Number.POSITIVE_INFINITY;
-      pass++;
-      accepted = difference < (onManifold() ? manifoldSafety : safety) * tolerance;
-      if (accepted) break;
+      settled = settle(work, 0.02 * tolerance, tolerance);
+      difference =
+        settled && compare ? largestRelativeChange(work.value, work.coarse, work.size) : Number.POSITIVE_INFINITY;
+      work.sweeps++; // for the log, a mesh counts as one
+      accepted = difference < (onManifold(work, tolerance) ? manifoldSafety : safety) * tolerance;
     }
-    derivatives(y, forcing, rate, size, onManifold(), slope, curvature);
-    return {
-      size,
-      value: y,
-      slope,
-      curvature,
-      errorEstimate:
-        leftover +
-        (onManifold()
-          ? difference / manifoldSafety + rounding
-          : difference / safety + rounding * amplification(sweep.stiffness, size)),
-      converged: accepted,
-      logMultiplier: logMultiplier(y, forcing, rate, size),
-      sweeps: sweeps + pass,
-    };
+    const manifold = onManifold(work, tolerance);
+    derivatives(work, manifold);
+    work.errorEstimate =
+      work.leftover +
+      (manifold ? difference / manifoldSafety + rounding : difference / safety + rounding * amplification(work));
+    work.converged = accepted;
+    work.logMultiplier = logMultiplier(work.value, work.forcing, rate, work.size);
+    return work;
   };
+}
+
+/** The solution as it grows, and what a sweep leaves behind. */
+interface Work {
+  size: number;
+  rate: number;
+  forcing: QuarticForcing;
+  value: Float64Array;
+  coarse: Float64Array;
+  slope: Float64Array;
+  curvature: Float64Array;
+  homogeneous: Float64Array;
+  particular: Float64Array;
+  /** Largest relative change of y in the last sweep. */
+  change: number;
+  /** 4κ max(r y³). */
+  stiffness: number;
+  /** What Newton has left, as interpolated values feel it. */
+  leftover: number;
+  sweeps: number;
+  errorEstimate: number;
+  converged: boolean;
+  logMultiplier: number;
+}
+
+function workspace(): Work {
+  const none = new Float64Array(0);
+  return {
+    size: 0,
+    rate: 0,
+    forcing: { p0: none, p1: none, p2: none, r0: none, r1: none, r2: none },
+    value: none,
+    coarse: none,
+    slope: none,
+    curvature: none,
+    homogeneous: none,
+    particular: none,
+    change: 0,
+    stiffness: 0,
+    leftover: 0,
+    sweeps: 0,
+    errorEstimate: 0,
+    converged: false,
+    logMultiplier: 0,
+  };
+}
+
+function reserve(work: Work, size: number): void {
+  if (size <= work.value.length) return;
+  const capacity = Math.max(512, size);
+  const column = () => new Float64Array(capacity);
+  work.forcing = { p0: column(), p1: column(), p2: column(), r0: column(), r1: column(), r2: column() };
+  work.value = grown(work.value, capacity);
+  work.coarse = grown(work.coarse, capacity);
+  work.slope = column();
+  work.curvature = column();
+  work.homogeneous = column();
+  work.particular = column();
+}
+
+/** Interpolated values feel an error of y as (gh)²/64 times itself, through the curvature: g = 4κ max(r y³), h the step. */
+function amplification({ stiffness, size }: Work): number {
+  const gh = (stiffness * (2 * Math.PI)) / size;
+  return 1 + (gh * gh) / 64;
+}
+
+/** Slopes from f amplify rounding; where that alone would spoil the tolerance they come from the slow manifold. */
+function onManifold(work: Work, tolerance: number): boolean {
+  return amplification(work) * 40 * rounding > tolerance;
+}
+
+/** Newton until what the next sweep would change, as interpolated values feel it, is below `target`. */
+function settle(work: Work, target: number, tolerance: number): boolean {
+  for (let count = 0; count < maximumSweeps; count++) {
+    newtonSweep(work);
+    work.sweeps++;
+    const { change } = work;
+    if (!Number.isFinite(change)) return false;
+    work.leftover = newtonConstant * change * change * (onManifold(work, tolerance) ? 1 : amplification(work));
+    if (work.leftover <= target) {
+      if (work.rate < slowRate) pinMean(work.value, work.forcing, work.size);
+      return true;
+    }
+  }
+  return false;
+}
+
+function copy(from: Float64Array, count: number, to: Float64Array): void {
+  for (let i = 0; i < count; i++) to[i] = from[i];
 }
 
 function grown(column: Float64Array, capacity: number): Float64Array {
@@ -182,24 +228,10 @@ function blendedGuess(y: Float64Array, forcing: QuarticForcing, rate: number, si
   for (let i = 0; i < size; i++) y[i] = Math.sqrt(Math.sqrt((w * p0[i]) / r0[i] + constant));
 }
 
-interface Sweep {
-  /** Largest relative change of y. */
-  change: number;
-  /** 4κ max(r y³). */
-  stiffness: number;
-}
-
 /** One Newton iteration of all steps at once. */
-function newtonSweep(
-  y: Float64Array,
-  forcing: QuarticForcing,
-  rate: number,
-  size: number,
-  homogeneous: Float64Array,
-  particular: Float64Array,
-  sweep: Sweep,
-): void {
-  const { p0, p1, p2, r0, r1, r2 } = forcing;
+function newtonSweep(work: Work): void {
+  const { value: y, rate, size, homogeneous, particular } = work;
+  const { p0, p1, p2, r0, r1, r2 } = work.forcing;
   const h = (2 * Math.PI) / size;
   const left1 = 0.6 * h;
   const left2 = 0.15 * h * h;
@@ -269,22 +301,15 @@ function newtonSweep(
     // Divides only when a new largest is found; NaN is one.
     if (!(Math.abs(d) <= largest * t)) largest = Math.abs(d) / t;
   }
-  sweep.change = largest;
-  sweep.stiffness = stiffness;
+  work.change = largest;
+  work.stiffness = stiffness;
 }
 
 /** y′ and y″ at the nodes. */
-function derivatives(
-  y: Float64Array,
-  forcing: QuarticForcing,
-  rate: number,
-  size: number,
-  onManifold: boolean,
-  slope: Float64Array,
-  curvature: Float64Array,
-): void {
-  const { p0, p1, p2, r0, r1, r2 } = forcing;
-  if (!onManifold) {
+function derivatives(work: Work, manifold: boolean): void {
+  const { value: y, rate, size, slope, curvature } = work;
+  const { p0, p1, p2, r0, r1, r2 } = work.forcing;
+  if (!manifold) {
     for (let i = 0; i < size; i++) {
       const t = y[i];
       const t3 = t * t * t;
@@ -308,13 +333,7 @@ function derivatives(
 }
 
 /** Quintic Hermite midpoints: the mesh of `size` nodes to one of twice as many. Kept positive on coarse meshes. */
-function prolong(
-  y: Float64Array,
-  slope: Float64Array,
-  curvature: Float64Array,
-  size: number,
-  finer: Float64Array,
-): void {
+function prolong({ value: y, slope, curvature, size, coarse: finer }: Work): void {
   const h = (2 * Math.PI) / size;
   const a = (5 * h) / 32;
   const b = (h * h) / 64;

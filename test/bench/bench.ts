@@ -3,6 +3,7 @@
  *
  *   npm run bench            everything (a few minutes: most of it is waiting for spin-up)
  *   npm run bench -- quick   without scipy's slowest cases
+ *   npm run bench -- draws   many random draws alone
  *
  * Never a test: absolute times mean nothing on a shared machine.
  */
@@ -19,6 +20,7 @@ import { linearEmission } from '../../sim/surface/emission/linear.ts';
 import { world } from '../sim/models/lumped/worlds.ts';
 import { degrees, zonalWorld } from '../sim/models/zonal/worlds.ts';
 import { toolPath } from '../support/require.ts';
+import { manyDraws } from './draws.ts';
 import { compiledQuartic, scipySpinUp, scipyZonal } from './outside.ts';
 import { plainSpinUp } from './plainSpinUp.ts';
 import { geometricMean, median, medianMicroseconds } from './timing.ts';
@@ -34,11 +36,17 @@ const positions = Float64Array.from({ length: samples }, (_, i) => (2 * Math.PI 
 const temperatures = new Float64Array(samples);
 const print = (line: string) => process.stdout.write(`${line}\n`);
 
-onePeriodicCase();
-costOverHeatCapacity();
-wholeModel();
-zonal();
-wholeProcess();
+if (process.argv.includes('draws')) manyDraws(print);
+else everything();
+
+function everything(): void {
+  onePeriodicCase();
+  costOverHeatCapacity();
+  wholeModel();
+  manyDraws(print);
+  zonal();
+  wholeProcess();
+}
 
 function sampled(trajectory: Trajectory): void {
   curveValuesInto(trajectory.curve, positions, temperatures);

@@ -10,7 +10,7 @@ const maximumSteps = 400_000;
 
 export interface Climates {
   /** Warmest first. */
-  readonly trajectories: readonly Trajectory[];
+  readonly all: readonly Trajectory[];
   /** States that were seen but could not be followed to the tolerance's mesh. */
   readonly unresolved: number;
 }
@@ -34,6 +34,6 @@ export function findClimates(world: World, tolerance: number): Climates {
     tolerance,
     maximumSteps,
   );
-  const trajectories = states.map((state) => ({ ...state, effort: state.steps }));
-  return { trajectories, unresolved };
+  const all = states.map((state) => ({ ...state, effort: state.steps }));
+  return { all, unresolved };
 }

@@ -2,7 +2,7 @@
  * When the temperature changes fastest. The rate is the heating over the heat capacity, dT/dt = N(T, S)/C, so the extreme is
  * the root of dN/ds = f(1−A) dS/ds − (E′ + f S A′) dT/ds, found to rounding rather than read off samples.
  */
-import type { Finding } from '../../findings/finding.ts';
+import { enter, enterUndefined, type Sheet } from '../../findings/sheet.ts';
 import { netHeating } from '../../findings/steadyState.ts';
 import { forcingAt } from '../../orbit/forcing.ts';
 import type { Radians } from '../../si.ts';
@@ -11,36 +11,37 @@ import { rootBetween } from '../../solve/roots.ts';
 import { forcingPoint } from '../../solve/separable.ts';
 import type { World } from '../../world.ts';
 import { type OrbitClock, timeAt } from './clock.ts';
+import { at } from './columns.ts';
+import { enterNoChange, still } from './entries.ts';
 import { instellationAtAxis, pacing } from './problem.ts';
 import type { Trajectory } from './trajectory.ts';
 
 const samplesPerPiece = 4;
 
-export function fastestChanges(world: World, trajectory: Trajectory, clock: OrbitClock, moving: boolean): Finding[] {
-  const warming = { rate: 'fastestWarming', time: 'timeOfFastestWarming', label: 'Fastest warming' };
-  const cooling = { rate: 'fastestCooling', time: 'timeOfFastestCooling', label: 'Fastest cooling' };
-  return [
-    ...fastest(world, trajectory, clock, moving, 1, warming),
-    ...fastest(world, trajectory, clock, moving, -1, cooling),
-  ];
-}
-
-function fastest(
+export function enterFastestChanges(
   world: World,
   trajectory: Trajectory,
   clock: OrbitClock,
   moving: boolean,
-  sign: 1 | -1,
-  names: { readonly rate: string; readonly time: string; readonly label: string },
-): Finding[] {
-  const rate = { name: names.rate, unit: 'K/s', label: names.label };
-  const time = { name: names.time, unit: 's', label: `Time of ${names.label.toLowerCase()}` };
+  sheet: Sheet,
+): void {
   if (!moving) {
-    return [
-      { ...rate, value: 0 },
-      { ...time, value: null, reason: 'the temperature does not vary' },
-    ];
+    enterNoChange(sheet, still);
+    return;
   }
+  enterFastest(world, trajectory, clock, 1, at.fastestWarming, at.timeOfFastestWarming, sheet);
+  enterFastest(world, trajectory, clock, -1, at.fastestCooling, at.timeOfFastestCooling, sheet);
+}
+
+function enterFastest(
+  world: World,
+  trajectory: Trajectory,
+  clock: OrbitClock,
+  sign: 1 | -1,
+  rateColumn: number,
+  timeColumn: number,
+  sheet: Sheet,
+): void {
   const { curve, errorEstimate } = trajectory;
   const s = placeOfFastest(world, trajectory, clock, sign);
   const temperature = curveValue(curve, s);
@@ -50,15 +51,12 @@ function fastest(
   const shifted = netHeating(world.surface, flux, temperature * (1 + errorEstimate)) / heatCapacity;
   if (sign * value <= 0) {
     const reason = `the temperature only ${sign === 1 ? 'falls' : 'rises'}`;
-    return [
-      { ...rate, value: null, reason },
-      { ...time, value: null, reason },
-    ];
+    enterUndefined(sheet, rateColumn, reason);
+    enterUndefined(sheet, timeColumn, reason);
+    return;
   }
-  return [
-    { ...rate, value, plusMinus: Math.abs(shifted - value) },
-    { ...time, value: timeAt(trajectory, clock, s) },
-  ];
+  enter(sheet, rateColumn, value, Math.abs(shifted - value));
+  enter(sheet, timeColumn, timeAt(trajectory, clock, s));
 }
 
 /** The best of the samples, and then the root of the change of heating beside it. */

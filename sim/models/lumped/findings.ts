@@ -1,32 +1,40 @@
 /** What people quote of a trajectory. Times are found as roots of the rate, never as the largest sample. */
 import { stefanBoltzmann } from '../../constants.ts';
-import type { Finding } from '../../findings/finding.ts';
-import { instellationWindowFindings } from '../../findings/instellationWindow.ts';
+import { enter, enterUndefined, type Sheet } from '../../findings/sheet.ts';
 import { netHeating } from '../../findings/steadyState.ts';
-import { worldFindings } from '../../findings/world.ts';
 import type { Kelvin, Radians, Seconds } from '../../si.ts';
 import { type Curve, curveValue } from '../../solve/curve.ts';
 import { extremes, integrate, shareBetween, type TurningPoint } from '../../solve/features.ts';
 import type { Window, World } from '../../world.ts';
 import { type OrbitClock, timeAt } from './clock.ts';
-import { fastestChanges } from './fastest.ts';
+import { at } from './columns.ts';
+import {
+  circular,
+  enterDampingOf,
+  enterInstellationWindow,
+  enterLagOf,
+  enterNoLag,
+  enterWorld,
+  isMoving,
+  largestTimeError,
+  still,
+  tooFlat,
+} from './entries.ts';
+import { enterFastestChanges } from './fastest.ts';
 import { pacing } from './problem.ts';
 import { type SteadySeries, steadySeries } from './steadySeries.ts';
 import type { Trajectory } from './trajectory.ts';
 
-/** A time of an extreme counts as undefined when its own error is larger than this share of an orbit. */
-const largestTimeError = 0.02;
-/** A swing below this share of the temperature is rounding. */
-const smallestSwing = 1e-13;
 const notPeriodic = 'a run from a start is not periodic';
-const circular = 'the instellation does not vary on a circular orbit';
 
-export function lumpedFindings(
+/** The findings of any trajectory, read off its curve. Overwrites `sheet`, whose columns are those of `lumpedColumns`. */
+export function lumpedFindingsInto(
   world: World,
   trajectory: Trajectory,
   clock: OrbitClock,
   windows: readonly Window[],
-): Finding[] {
+  sheet: Sheet,
+): void {
   const { curve, errorEstimate } = trajectory;
   const steady = steadySeries(world, curve, clock);
   const mean = meanOver(curve, clock, (temperature) => temperature);
@@ -34,41 +42,38 @@ export function lumpedFindings(
   const highest = atRestOfRate(world, curve, clock, found.highest);
   const lowest = atRestOfRate(world, curve, clock, found.lowest);
   const swing = highest.value - lowest.value;
-  const moving = swing > smallestSwing * mean;
+  const moving = isMoving(swing, mean);
   const error = (temperature: Kelvin) => errorEstimate * temperature;
-  const kelvin = (name: string, value: number, label: string, plusMinus = error(value)): Finding => {
-    return { name, value, unit: 'K', label, plusMinus };
-  };
-  return [
-    ...worldFindings(world, mean),
-    kelvin('steadyTemperatureMax', steady.highest, 'Maximum steady temperature', 0),
-    kelvin('steadyTemperatureMin', steady.lowest, 'Minimum steady temperature', 0),
-    kelvin('steadyTemperatureMean', steady.mean, 'Mean steady temperature', 0),
-    kelvin('temperatureMax', highest.value, 'Maximum temperature'),
-    kelvin('temperatureMin', lowest.value, 'Minimum temperature'),
-    kelvin('temperatureMean', mean, 'Mean temperature'),
-    ...timing(world, trajectory, clock, steady, highest, lowest, moving),
-    harmonicLag(world, trajectory, clock, steady, moving),
-    damping(trajectory, swing, steady, error(highest.value) + error(lowest.value)),
-    emissionTemperature(world, curve, clock, error),
-    ...fastestChanges(world, trajectory, clock, moving),
-    ...windows.flatMap((window) => windowFindings(world, curve, clock, window)),
-  ];
+  enterWorld(world, mean, sheet);
+  enter(sheet, at.steadyTemperatureMax, steady.highest, 0);
+  enter(sheet, at.steadyTemperatureMin, steady.lowest, 0);
+  enter(sheet, at.steadyTemperatureMean, steady.mean, 0);
+  enter(sheet, at.temperatureMax, highest.value, error(highest.value));
+  enter(sheet, at.temperatureMin, lowest.value, error(lowest.value));
+  enter(sheet, at.temperatureMean, mean, error(mean));
+  enterTimes(world, trajectory, clock, steady, highest, lowest, moving, sheet);
+  enterHarmonicLag(world, trajectory, clock, steady, moving, sheet);
+  enterDamping(trajectory, swing, steady, error(highest.value) + error(lowest.value), sheet);
+  enterEmissionTemperature(world, curve, clock, error, sheet);
+  enterFastestChanges(world, trajectory, clock, moving, sheet);
+  enterWindows(world, curve, clock, windows, sheet);
 }
 
-/** Null where a linear law, far below its range, emits less than nothing: only a run from a cold start gets there. */
-function emissionTemperature(
+/** Undefined where a linear law, far below its range, emits less than nothing: only a run from a cold start gets there. */
+function enterEmissionTemperature(
   world: World,
   curve: Curve,
   clock: OrbitClock,
   error: (temperature: Kelvin) => Kelvin,
-): Finding {
-  const base = { name: 'emissionTemperatureMean', unit: 'K', label: 'Mean emission temperature' };
+  sheet: Sheet,
+): void {
   const { emission } = world.surface;
   const value = meanOver(curve, clock, (temperature) => (emission.at(temperature) / stefanBoltzmann) ** 0.25);
-  return Number.isFinite(value)
-    ? { ...base, value, plusMinus: error(value) }
-    : { ...base, value: null, reason: 'the emission law falls below zero at the lowest temperatures' };
+  if (Number.isFinite(value)) enter(sheet, at.emissionTemperatureMean, value, error(value));
+  else {
+    const reason = 'the emission law falls below zero at the lowest temperatures';
+    enterUndefined(sheet, at.emissionTemperatureMean, reason);
+  }
 }
 
 function meanOver(curve: Curve, clock: OrbitClock, f: (temperature: Kelvin) => number): number {
@@ -112,7 +117,7 @@ function heatingSlope(world: World, instellation: number, temperature: Kelvin): 
   return Math.abs(feedback + surface.emission.slopeAt(temperature));
 }
 
-function timing(
+function enterTimes(
   world: World,
   trajectory: Trajectory,
   clock: OrbitClock,
@@ -120,28 +125,21 @@ function timing(
   highest: TurningPoint,
   lowest: TurningPoint,
   moving: boolean,
-): Finding[] {
+  sheet: Sheet,
+): void {
   const { period } = world.orbit;
-  const since = trajectory.logMultiplier === null ? 'after the start' : 'after periapsis';
-  const still = 'the temperature does not vary';
-  const errorOf = (point: TurningPoint) => timeError(world, point, clock, trajectory.errorEstimate);
-  const when = (name: string, label: string, point: TurningPoint): Finding => {
-    const plusMinus = moving ? errorOf(point) : Number.POSITIVE_INFINITY;
-    const base = { name, unit: 's', label };
-    if (!moving) return { ...base, value: null, reason: still };
+  const enterTime = (column: number, point: TurningPoint): void => {
     const end = endOfRun(trajectory, point);
-    if (end === runEnd) return { ...base, value: null, reason: 'the run ends before the temperature turns' };
-    if (end === runStart) return { ...base, value: 0, plusMinus: 0 };
-    if (!(plusMinus <= largestTimeError * period)) return { ...base, value: null, reason: tooFlat };
-    return { ...base, value: timeAt(trajectory, clock, point.position), plusMinus };
+    const plusMinus = timeError(world, point, clock, trajectory.errorEstimate);
+    if (!moving) enterUndefined(sheet, column, still);
+    else if (end === runEnd) enterUndefined(sheet, column, 'the run ends before the temperature turns');
+    else if (end === runStart) enter(sheet, column, 0, 0);
+    else if (!(plusMinus <= largestTimeError * period)) enterUndefined(sheet, column, tooFlat);
+    else enter(sheet, column, timeAt(trajectory, clock, point.position), plusMinus);
   };
-  const timeOfMax = when('timeOfMax', `Time of maximum, ${since}`, highest);
-  const timeOfMin = when('timeOfMin', `Time of minimum, ${since}`, lowest);
-  return [
-    timeOfMax,
-    timeOfMin,
-    ...lagFindings(world, clock, steady, highest, timeOfMax, endOfRun(trajectory, highest)),
-  ];
+  enterTime(at.timeOfMax, highest);
+  enterTime(at.timeOfMin, lowest);
+  enterLag(world, clock, steady, highest, endOfRun(trajectory, highest), sheet);
 }
 
 const runStart = 'the start itself';
@@ -155,79 +153,67 @@ function endOfRun(trajectory: Trajectory, point: TurningPoint): string | null {
   return point.position === position[position.length - 1] ? runEnd : null;
 }
 
-const tooFlat =
-  'the maximum or minimum is too flat: its time is uncertain by more than 0.02 orbit; lower solve.tolerance';
-
-function lagFindings(
+/** After the time of the maximum has been entered. */
+function enterLag(
   world: World,
   clock: OrbitClock,
   steady: SteadySeries,
   highest: TurningPoint,
-  timeOfMax: Finding,
   end: string | null,
-): Finding[] {
-  const { period } = world.orbit;
-  const lag = { name: 'lagOfMax', unit: 's', label: 'Lag of the maximum behind the steady maximum' };
-  const inOrbits = { name: 'lagOfMaxOrbits', unit: '1', label: 'Lag of the maximum, in orbits' };
-  const undefinedLag = (reason: string): Finding[] => [
-    { ...lag, value: null, reason },
-    { ...inOrbits, value: null, reason },
-  ];
-  if (end !== null) return undefinedLag(`the maximum is ${end}`);
-  if (timeOfMax.value === null) return undefinedLag(timeOfMax.reason ?? tooFlat);
+  sheet: Sheet,
+): void {
+  const timeless = end === null ? sheet.reason[at.timeOfMax] : `the maximum is ${end}`;
+  if (timeless !== null) {
+    enterNoLag(sheet, timeless);
+    return;
+  }
   // A maximum that is late by less than its own error may seem to come before the one that it follows.
-  const reach = (timeOfMax.plusMinus ?? 0) / (clock.pace(highest.position) * clock.secondsPerRadian);
+  const error = sheet.plusMinus[at.timeOfMax];
+  const reach = error / (clock.pace(highest.position) * clock.secondsPerRadian);
   const behind = steady.maximumBefore(highest.position + reach);
-  if (behind === null) return undefinedLag(circular);
+  if (behind === null) {
+    enterNoLag(sheet, circular);
+    return;
+  }
   const value = Math.max(0, clock.mean(highest.position) - clock.mean(behind.position)) * clock.secondsPerRadian;
-  const plusMinus = (timeOfMax.plusMinus ?? 0) + behind.error * clock.secondsPerRadian;
-  return [
-    { ...lag, value, plusMinus },
-    { ...inOrbits, value: value / period, plusMinus: plusMinus / period },
-  ];
+  enterLagOf(world, value, error + behind.error * clock.secondsPerRadian, sheet);
 }
 
 /** Phase of the first harmonic in mean anomaly, temperature behind steady temperature; within half an orbit either way. */
-function harmonicLag(
+function enterHarmonicLag(
   world: World,
   trajectory: Trajectory,
   clock: OrbitClock,
   steady: SteadySeries,
   moving: boolean,
-): Finding {
-  const base = { name: 'lagOfFirstHarmonic', unit: 's', label: 'Lag of the first harmonic' };
-  if (trajectory.logMultiplier === null) return { ...base, value: null, reason: notPeriodic };
-  if (!moving) return { ...base, value: null, reason: 'the temperature does not vary' };
+  sheet: Sheet,
+): void {
+  if (trajectory.logMultiplier === null || !moving) {
+    enterUndefined(sheet, at.lagOfFirstHarmonic, moving ? notPeriodic : still);
+    return;
+  }
   const { curve } = trajectory;
   const project = (wave: (mean: Radians) => number) =>
     integrate(curve, (s, temperature) => temperature * wave(clock.mean(s)) * clock.pace(s));
   const phase = Math.atan2(project(Math.sin), project(Math.cos));
   const difference = phase - steady.harmonicPhase();
   const folded = difference - 2 * Math.PI * Math.round(difference / (2 * Math.PI));
-  return { ...base, value: (folded / (2 * Math.PI)) * world.orbit.period };
+  enter(sheet, at.lagOfFirstHarmonic, (folded / (2 * Math.PI)) * world.orbit.period);
 }
 
-function damping(trajectory: Trajectory, swing: Kelvin, steady: SteadySeries, error: Kelvin): Finding {
-  const base = { name: 'damping', unit: '1', label: 'Damping (swing over steady swing)' };
-  if (trajectory.logMultiplier === null) return { ...base, value: null, reason: notPeriodic };
-  const steadySwing = steady.highest - steady.lowest;
-  if (!(steadySwing > smallestSwing * steady.highest)) return { ...base, value: null, reason: circular };
-  return { ...base, value: swing / steadySwing, plusMinus: error / steadySwing };
+function enterDamping(trajectory: Trajectory, swing: Kelvin, steady: SteadySeries, error: Kelvin, sheet: Sheet): void {
+  if (trajectory.logMultiplier === null) enterUndefined(sheet, at.damping, notPeriodic);
+  else enterDampingOf(swing, steady.highest, steady.lowest, error, sheet);
 }
 
-/** Mean anomaly at the curve's two ends. */
-function spanOf(curve: Curve, clock: OrbitClock): [Radians, Radians] {
-  return [clock.mean(curve.position[0]), clock.mean(curve.position[curve.position.length - 1])];
-}
-
-function windowFindings(world: World, curve: Curve, clock: OrbitClock, window: Window): Finding[] {
-  if (window.of === 'instellation') return instellationWindowFindings(world, window, ...spanOf(curve, clock));
-  return [
-    {
-      name: `fractionInWindow.${window.name}`,
-      value: shareBetween(curve, window.from, window.to, (s) => clock.mean(s)),
-      unit: '1',
-      label: `Time in “${window.name}”`,
-    },
-  ];
+function enterWindows(world: World, curve: Curve, clock: OrbitClock, windows: readonly Window[], sheet: Sheet): void {
+  const start = clock.mean(curve.position[0]);
+  const end = clock.mean(curve.position[curve.position.length - 1]);
+  let column: number = at.windows;
+  for (const window of windows) {
+    if (window.of === 'instellation') {
+      enterInstellationWindow(world, window, start, end, column, sheet);
+      column += 2;
+    } else enter(sheet, column++, shareBetween(curve, window.from, window.to, clock.mean));
+  }
 }

@@ -42,7 +42,7 @@ export const lumpedTraceModel: TraceModel = {
 function stableTrajectories(world: World, tolerance: number): Trajectory[] {
   const { albedo, emission } = world.surface;
   if (albedo.ramp !== null) {
-    return findClimates(world, tolerance).trajectories.filter(({ logMultiplier }) => (logMultiplier ?? 0) < 0);
+    return findClimates(world, tolerance).all.filter(({ logMultiplier }) => (logMultiplier ?? 0) < 0);
   }
   const { quarticCoefficient } = emission;
   if (quarticCoefficient === null) return [smoothSolver()(world, tolerance)];

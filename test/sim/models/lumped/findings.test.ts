@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { SimError } from '../../../../sim/error.ts';
+import { instellationAtAxis } from '../../../../sim/models/lumped/problem.ts';
 import { constantAlbedo } from '../../../../sim/surface/albedo/constant.ts';
 import { greyAtmosphere } from '../../../../sim/surface/emission/greyAtmosphere.ts';
 import { linearEmission } from '../../../../sim/surface/emission/linear.ts';
@@ -151,4 +152,32 @@ test('fastest changes are roots of the change of heating, also near the ends of 
     expect(Math.abs(finding(dense, 'fastestWarming') / warming - 1)).toBeLessThan(1e-6);
     expect(Math.abs(finding(dense, 'fastestCooling') / cooling - 1)).toBeLessThan(1e-6);
   }
+});
+
+// Where the heat store vanishes the temperature is the steady one, T ∝ (a/r)^½, and with d(r/a)/dt = n e sin ν/√(1−e²)
+// (Kepler's second law) its rate is ½ T_c n e sin ν (1 + e cos ν)^(3/2) / (1 − e²)². A store of κ = 1e6 is late by about 1e-6 of
+// the orbit; tolerance 1e-6 with a margin of ten, since a rate knows less than a temperature.
+test.each([0.05, 0.3, 0.6, 0.9])('the fastest changes of a fast world follow the closed form, e = %f', (e) => {
+  const fast = state(world({ e, kappa: 1e6 }));
+  const motion = (2 * Math.PI) / world({ e, kappa: 1e6 }).orbit.period;
+  const rate = (nu: number) => (e * Math.sin(nu) * (1 + e * Math.cos(nu)) ** 1.5) / (1 - e * e) ** 2;
+  const steps = 200_000; // the largest sample is the maximum to (π/steps)²
+  const fastest = Array.from({ length: steps }, (_, i) => rate((Math.PI * i) / steps)).reduce((a, b) => Math.max(a, b));
+  const expected = 0.5 * finding(fast, 'circularTemperature') * motion * fastest;
+  expect(Math.abs(finding(fast, 'fastestWarming') / expected - 1)).toBeLessThan(1e-5);
+  expect(Math.abs(finding(fast, 'fastestCooling') / -expected - 1)).toBeLessThan(1e-5);
+});
+
+// ⟨T⟩ of the steady value with internal heat, by the trapezoidal rule in the eccentric anomaly, dM = (1 − e cos E) dE.
+test.each([0.1, 0.62, 0.95])('mean steady temperature over internal heat, e = %f', (e) => {
+  const warm = world({ e, kappa: 1, internalHeat: 40 });
+  const { surface } = warm;
+  const points = 4096; // poles at ± i ln(1/β): β^4096 is nothing at e = 0.95
+  let sum = 0;
+  for (let i = 0; i < points; i++) {
+    const ratio = 1 - e * Math.cos((2 * Math.PI * i) / points);
+    const absorbed = surface.absorbingFraction * (1 - surface.albedo.warm) * instellationAtAxis(warm);
+    sum += ratio * surface.emission.inverse(absorbed / ratio ** 2 + 40);
+  }
+  expect(finding(state(warm), 'steadyTemperatureMean') / (sum / points)).toBeCloseTo(1, 13);
 });
