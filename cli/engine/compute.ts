@@ -35,8 +35,10 @@ export interface Computed {
   discardWork(): Promise<void>;
 }
 
-/** How many chunks are under way for each worker: while one is written, another is computed. */
-const lanesPerWorker = 2;
+/** How many chunks are under way: while one is written, a worker computes another; alone, a thread can do but one thing. */
+function lanesFor(workers: number): number {
+  return workers === 1 ? 1 : 2 * workers;
+}
 
 /**
  * Computes the rows of `job` that are not there yet, and writes the table. The bytes depend on the job alone.
@@ -150,7 +152,7 @@ async function runLanes(
       }
     }
   };
-  const ends = await Promise.allSettled(Array.from({ length: lanesPerWorker * workers }, lane));
+  const ends = await Promise.allSettled(Array.from({ length: lanesFor(workers) }, lane));
   const broken = ends.find((end) => end.status === 'rejected');
   if (broken !== undefined) throw broken.reason;
 }

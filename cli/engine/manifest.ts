@@ -20,21 +20,31 @@ export function manifestText(manifest: Manifest): string {
   return `${jsonText({ format: formatNumber, ...manifest }, 'manifest')}\n`;
 }
 
-/** Null when there is none. Errors: SimError when the file is not one of these. */
+/** Null when there is none. Errors: SimError when the file is not one of these; otherwise as the system gives them. */
 export function readManifest(path: string): Manifest | null {
+  const text = textOf(path);
+  if (text === null) return null;
   try {
-    const { format, ...manifest } = JSON.parse(readFileSync(path, 'utf8'));
+    const { format, ...manifest } = JSON.parse(text);
     if (format !== formatNumber || fingerprintOf(manifest.job) !== manifest.fingerprint)
       throw new SyntaxError('format');
     return manifest;
   } catch (error) {
-    if ((error as NodeJS.ErrnoException).code === 'ENOENT') return null;
     throw new SimError(
       path,
       'this does not read as what a run noted about its rows',
       'Remove the folder it is in, and compute its rows again',
       error,
     );
+  }
+}
+
+function textOf(path: string): string | null {
+  try {
+    return readFileSync(path, 'utf8');
+  } catch (error) {
+    if (['ENOENT', 'ENOTDIR'].includes((error as NodeJS.ErrnoException).code ?? '')) return null;
+    throw error;
   }
 }
 

@@ -4,6 +4,7 @@ import { rm } from 'node:fs/promises';
 import { join } from 'node:path';
 import { setImmediate } from 'node:timers/promises';
 import { csvField } from '../output/csv.ts';
+import { makeFolder } from '../output/makeFolder.ts';
 import {
   type Column,
   columnsOf,
@@ -47,6 +48,7 @@ export async function writeTable(
   const { createParquet } = await import('../output/parquet.ts');
   const { path, failedPath } = tablePaths(folder, table);
   const sorted = pieces.toSorted((a, b) => a.from - b.from);
+  await makeFolder(folder);
   await removeAbandoned(folder);
   return land(path, async (temporary) => {
     const file = createParquet(temporary, columnsOf(job));

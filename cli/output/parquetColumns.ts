@@ -35,11 +35,17 @@ export function writeDraws(writer: ByteWriter, from: number, count: number): Col
   return writeColumn({ writer, column, pageData }).chunk;
 }
 
+/** Share of repeated values from which packing pays: doubles that differ do not get shorter, and take their time. */
+const worthPacking = 0.25;
+
 /** Numbers in one page; what is not finite becomes null. */
 export function writeNumbers(writer: ByteWriter, name: string, values: Float64Array): ColumnChunk {
   const start = writer.offset;
-  const { defined, levels, min, max } = definedOf(values);
-  const { head, plain, packed } = pageParts(defined, levels, values.length);
+  const { defined, levels, repeats, min, max } = definedOf(values);
+  const head = levelBytes(levels, values.length);
+  const plain = new Uint8Array(defined.buffer, defined.byteOffset, defined.byteLength);
+  const packs = repeats > defined.length * worthPacking;
+  const packed = packs ? snappyCompress(plain) : plain;
   const nulls = values.length - defined.length;
   writePageHeader(writer, {
     type: 'DATA_PAGE_V2',
@@ -52,7 +58,7 @@ export function writeNumbers(writer: ByteWriter, name: string, values: Float64Ar
       encoding: 'PLAIN',
       definition_levels_byte_length: head.length,
       repetition_levels_byte_length: 0,
-      is_compressed: true,
+      is_compressed: packs,
     },
   });
   const header = writer.offset - start;
@@ -65,7 +71,7 @@ export function writeNumbers(writer: ByteWriter, name: string, values: Float64Ar
       type: 'DOUBLE',
       encodings: ['PLAIN', 'RLE'],
       path_in_schema: [name],
-      codec: 'SNAPPY',
+      codec: packs ? 'SNAPPY' : 'UNCOMPRESSED',
       num_values: BigInt(values.length),
       total_uncompressed_size: BigInt(header + head.length + plain.length),
       total_compressed_size: BigInt(writer.offset - start),
@@ -80,34 +86,46 @@ interface Defined {
   readonly defined: Float64Array;
   /** 1 where there is one, 0 where there is none; null when there is one everywhere. */
   readonly levels: Uint8Array | null;
+  /** How many of them are equal to the one before. */
+  readonly repeats: number;
   readonly min: number;
   readonly max: number;
 }
 
 function definedOf(values: Float64Array): Defined {
+  const defined = new Float64Array(values.length);
+  const levels = new Uint8Array(values.length);
   let count = 0;
+  let repeats = 0;
+  let last = NaN;
   let min = Infinity;
   let max = -Infinity;
-  for (const value of values) {
-    if (value - value !== 0) continue;
-    count++;
+  for (let row = 0; row < values.length; row++) {
+    const value = values[row]!;
+    if (value - value !== 0) continue; // NaN or infinite
+    if (value === last) repeats++;
+    last = value;
+    defined[count++] = value;
+    levels[row] = 1;
     if (value < min) min = value;
     if (value > max) max = value;
   }
-  const bounds = { min: min === 0 ? -0 : min, max: max === 0 ? 0 : max }; // as the format asks
-  if (count === values.length) return { defined: values, levels: null, ...bounds };
-  const defined = values.filter((value) => Number.isFinite(value));
-  return { defined, levels: Uint8Array.from(values, (value) => Number(Number.isFinite(value))), ...bounds };
+  return {
+    defined: defined.subarray(0, count),
+    levels: count === values.length ? null : levels,
+    repeats,
+    min: min === 0 ? -0 : min, // as the format asks
+    max: max === 0 ? 0 : max,
+  };
 }
 
-/** Levels, and the numbers before and after they are packed. */
-function pageParts(defined: Float64Array, levels: Uint8Array | null, count: number) {
-  const head = new ByteWriter();
-  if (levels !== null) writeRleBitPackedHybrid(head, levels, 1);
+/** Which values are defined: runs, or bits. */
+function levelBytes(levels: Uint8Array | null, count: number): Uint8Array {
+  const writer = new ByteWriter();
+  if (levels !== null) writeRleBitPackedHybrid(writer, levels, 1);
   else {
-    head.appendVarInt(count << 1); // one run
-    head.appendUint8(1);
+    writer.appendVarInt(count << 1); // one run
+    writer.appendUint8(1);
   }
-  const plain = new Uint8Array(defined.buffer, defined.byteOffset, defined.byteLength);
-  return { head: head.getBytes(), plain, packed: snappyCompress(plain) };
+  return writer.getBytes();
 }

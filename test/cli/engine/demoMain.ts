@@ -1,9 +1,10 @@
-/** A program for tests of whole processes: `node --import tsx demoMain.ts FOLDER ROWS PRICE WORKERS [--resume] [--columns N] [--out]`. */
+/** A program for tests of whole processes: `node --import tsx demoMain.ts FOLDER ROWS PRICE WORKERS [--resume] [--columns N] [--memory]`: the last reads all back, and says how long it took and how much memory. */
 import { fileURLToPath } from 'node:url';
 import { parseArgs } from 'node:util';
 import { computeTable } from '../../../cli/engine/compute.ts';
 import { tellError } from '../../../cli/exit.ts';
 import { processIo } from '../../../cli/io.ts';
+import { readColumn } from '../../../cli/output/parquetReader.ts';
 import { demoJob, demoKinds } from './demo.ts';
 
 const { positionals, values } = parseArgs({
@@ -24,8 +25,10 @@ try {
     words: process.argv.slice(2),
   };
   const start = performance.now();
-  await (await computeTable(job, options, demoKinds, io)).discardWork();
+  const { files, discardWork } = await computeTable(job, options, demoKinds, io);
+  await discardWork();
   if (values.memory) {
+    for (const { name } of job.findings) (await readColumn(files!.path, name)).sort();
     const megabytes = Math.round(process.resourceUsage().maxRSS / 1024);
     io.stdout.write(`${((performance.now() - start) / 1000).toFixed(2)} s, ${megabytes} MB at most\n`);
   }
