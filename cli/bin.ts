@@ -3,5 +3,6 @@ import { fileURLToPath } from 'node:url';
 import { processIo } from './io.ts';
 import { main } from './program.ts';
 
-const reportTemplate = fileURLToPath(new URL('../dist/report.html', import.meta.url));
-process.exitCode = await main(process.argv.slice(2), processIo(reportTemplate));
+const at = (path: string) => fileURLToPath(new URL(path, import.meta.url));
+const io = processIo(at('../dist/report.html'), at('engine/workerFromSource.mjs'));
+process.exitCode = await main(process.argv.slice(2), io);

@@ -7,6 +7,7 @@ import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { Script } from 'node:vm';
 import { build } from 'esbuild';
+import { buildParquet, buildWorker, parquetOutside } from './buildApart.mjs';
 import { buildHdf5, hdf5Change, hdf5Outside } from './buildHdf5.mjs';
 
 const root = fileURLToPath(new URL('..', import.meta.url));
@@ -30,12 +31,13 @@ const { metafile } = await build({
   banner: { js: '(function(require){const module={exports:{}};' },
   footer: { js: 'return module.exports})' },
   supported: { 'dynamic-import': false }, // what lies outside is required
-  plugins: [hdf5Outside],
+  plugins: [hdf5Outside, parquetOutside],
   legalComments: 'none',
   metafile: true,
   logLevel: 'warning',
 });
-const packages = packagesIn(metafile, await buildHdf5(root));
+const apart = [await buildHdf5(root), await buildParquet(root), await buildWorker(root)];
+const packages = packagesIn(metafile, ...apart);
 await writeFile(at('LICENSES.txt'), (await Promise.all(packages.map(licenceOf))).join('\n'));
 await writeFile(at('perilag.v8'), await compiledForm(at('perilag.cjs')));
 await copyFile(join(root, 'cli/start.mjs'), at('perilag.mjs'));
@@ -55,6 +57,11 @@ async function compiledForm(filename) {
     stderr: writer,
     isTTY: false,
     columns: 80,
+    stderrIsTTY: false,
+    stderrColumns: 80,
+    now: () => 0,
+    signals: { on: () => () => undefined },
+    worker: '',
     env: { LANG: 'C.UTF-8' },
     cwd,
     reportTemplate,

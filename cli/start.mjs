@@ -11,4 +11,4 @@ const filename = at('perilag.cjs');
 const cachedData = existsSync(at('perilag.v8')) ? readFileSync(at('perilag.v8')) : undefined;
 const script = new Script(readFileSync(filename, 'utf8'), { filename, cachedData });
 const { main, processIo } = script.runInThisContext()(createRequire(import.meta.url));
-process.exitCode = await main(process.argv.slice(2), processIo(at('report.html')));
+process.exitCode = await main(process.argv.slice(2), processIo(at('report.html'), at('worker.cjs')));

@@ -9,6 +9,8 @@ import { dirname, join } from 'node:path';
 import { setImmediate } from 'node:timers/promises';
 import { SimError } from '../../sim/error.ts';
 import { interruptible } from '../interrupt.ts';
+import { makeFolder } from './makeFolder.ts';
+import { writingFault } from './writingFault.ts';
 
 /** A file to write: its name in the folder, and its pieces one after the other. */
 export interface PiecedFile {
@@ -45,44 +47,6 @@ export async function writeFolder(folder: string, files: readonly OutputFile[]):
     await rm(stage, { recursive: true, force: true });
     await removeAbandonedStages(folder);
   });
-}
-
-/**
- * Makes `folder` and what is missing above it, one by one: gives the first that was made, undefined when it stood already.
- * (Node's own recursive mkdir never returns where the system refuses a folder although the one above it is there, as in /proc.)
- */
-async function makeFolder(folder: string): Promise<string | undefined> {
-  const missing: string[] = [];
-  for (let path = folder; !(await isFolder(path)); path = dirname(path)) missing.unshift(path);
-  const made: string[] = [];
-  try {
-    for (const path of missing) if (await makeOne(path)) made.push(path);
-  } catch (error) {
-    for (const path of made.toReversed()) await rmdir(path).catch(() => undefined);
-    throw error;
-  }
-  return made[0];
-}
-
-/** False where nothing stands. Errors: EEXIST for a file. */
-async function isFolder(path: string): Promise<boolean> {
-  const found = await stat(path).catch((error: NodeJS.ErrnoException) => {
-    if (error.code === 'ENOENT') return null;
-    throw error;
-  });
-  if (found === null || found.isDirectory()) return found !== null;
-  throw Object.assign(new Error('a file stands there'), { code: 'EEXIST' });
-}
-
-/** False when another run has made it in the meantime. */
-async function makeOne(path: string): Promise<boolean> {
-  try {
-    await mkdir(path);
-    return true;
-  } catch (error) {
-    if ((error as NodeJS.ErrnoException).code === 'EEXIST' && (await isFolder(path))) return false;
-    throw error;
-  }
 }
 
 async function fillStage(stage: string, files: readonly OutputFile[], checkpoint: () => void): Promise<void> {
@@ -141,7 +105,8 @@ async function removeAbandonedStages(folder: string): Promise<void> {
   await Promise.all(dead.map((name) => rm(join(folder, name), { recursive: true, force: true })));
 }
 
-function isAlive(pid: number): boolean {
+/** Does a process with this number run on this machine? */
+export function isAlive(pid: number): boolean {
   try {
     process.kill(pid, 0);
     return true;
@@ -154,24 +119,6 @@ async function attempt<T>(folder: string, work: () => Promise<T>): Promise<T> {
   try {
     return await work();
   } catch (error) {
-    const fault = writingFaults[(error as NodeJS.ErrnoException).code ?? ''];
-    throw fault === undefined ? error : new SimError(folder, fault, 'Choose another folder with -o', error);
+    throw writingFault(folder, error);
   }
 }
-
-const writingFaults: Readonly<Record<string, string>> = {
-  EACCES: 'the output folder may not be written',
-  EPERM: 'the output folder may not be written',
-  EROFS: 'the output folder is on a read-only disk',
-  ENOSPC: 'the disk is full',
-  EDQUOT: 'the disk quota is used up',
-  EFBIG: 'a file would be larger than allowed here',
-  ENOENT: 'the output folder cannot be made here',
-  EEXIST: 'a file stands where the output folder should be',
-  ENOTDIR: 'a part of this path is a file, not a folder',
-  ENAMETOOLONG: 'this path is too long',
-  ELOOP: 'this path goes round in links',
-  EIO: 'the disk failed',
-  EMFILE: 'too many files are open',
-  ENFILE: 'too many files are open',
-};

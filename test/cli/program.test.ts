@@ -7,7 +7,7 @@ import { loadHdf5 } from '../../cli/output/hdf5.ts';
 import { main } from '../../cli/program.ts';
 import packageJson from '../../package.json' with { type: 'json' };
 import { SimError } from '../../sim/error.ts';
-import { threeCasesText, type Workplace, workplace, zonalText } from './support.ts';
+import { threeCasesText, undisturbed, type Workplace, workplace, zonalText } from './support.ts';
 
 const products = ['report.html', 'scenario.yaml', 'series.csv', 'summary.json'];
 let place: Workplace;
@@ -27,6 +27,7 @@ async function toldIn(columns: number): Promise<string> {
     stdout: { write: () => true },
     stderr: { write: (text: string) => (stderr += text) },
     isTTY: false,
+    ...undisturbed,
     columns,
     env: { LANG: 'C.UTF-8' },
     cwd: place.folder,
@@ -289,6 +290,7 @@ describe('run', () => {
       stdout: { write: () => true },
       stderr: { write: (text: string) => (stderr += text) },
       isTTY: false,
+      ...undisturbed,
       columns: 80,
       env: new Proxy(
         {},

@@ -2,6 +2,8 @@
 import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import type { Io } from '../../cli/io.ts';
 import { main } from '../../cli/program.ts';
 
 export const threeCasesText = `title: Corvane b under three ground assumptions
@@ -40,6 +42,15 @@ solve: { samples: 48, tolerance: 1e-5 }
 export const emptyPage =
   '<!doctype html><title>page</title><script type="application/json" id="perilag-data"></script>';
 
+/** What most tests do not care about: no terminal on standard error, no signals, the program's own worker. */
+export const undisturbed: Pick<Io, 'stderrIsTTY' | 'stderrColumns' | 'now' | 'signals' | 'worker'> = {
+  stderrIsTTY: false,
+  stderrColumns: 80,
+  now: () => performance.now(),
+  signals: { on: () => () => undefined },
+  worker: fileURLToPath(new URL('../../cli/engine/workerFromSource.mjs', import.meta.url)),
+};
+
 export interface Workplace {
   readonly folder: string;
   path(...names: string[]): string;
@@ -65,6 +76,7 @@ export function workplace(env: Record<string, string> = { LANG: 'C.UTF-8' }): Wo
         stderr: { write: (text: string) => (printed.stderr += text) },
         isTTY: false,
         columns: 80,
+        ...undisturbed,
         env,
         cwd: folder,
         reportTemplate: path('page.html'),

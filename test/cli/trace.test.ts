@@ -3,7 +3,7 @@ import { existsSync, readdirSync, readFileSync } from 'node:fs';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { textWidth } from '../../cli/output/text.ts';
 import { main } from '../../cli/program.ts';
-import { type Workplace, workplace } from './support.ts';
+import { undisturbed, type Workplace, workplace } from './support.ts';
 
 const scenario = `title: Melaina b, thawed or frozen
 star: { luminosity: 0.6 Lsun, mass: 0.88 Msun }
@@ -35,6 +35,7 @@ async function toldIn(columns: number, env: Record<string, string>, isTTY = fals
     stdout: { write: (text: string) => (printed.stdout += text) },
     stderr: { write: (text: string) => (printed.stderr += text) },
     isTTY,
+    ...undisturbed,
     columns,
     env,
     cwd: place.folder,

@@ -11,6 +11,7 @@ import { terminalOf } from '../../../cli/output/terminal.ts';
 import { textWidth } from '../../../cli/output/text.ts';
 import { readScenario } from '../../../sim/scenario/read.ts';
 import { edited, sound } from '../../sim/scenario/sound.ts';
+import { undisturbed } from '../support.ts';
 
 const folder = mkdtempSync(join(tmpdir(), 'perilag-check-'));
 afterAll(() => rmSync(folder, { recursive: true }));
@@ -21,6 +22,7 @@ function testIo(): Io & { out: () => string; err: () => string } {
     stdout: { write: (text) => (written.out += text) },
     stderr: { write: (text) => (written.err += text) },
     isTTY: false,
+    ...undisturbed,
     columns: 100,
     env: { LANG: 'C.UTF-8' },
     cwd: folder,

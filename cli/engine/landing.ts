@@ -1,0 +1,47 @@
+/** Files appear whole or not at all, also when the process is killed or the power fails: written beside, synced, renamed. */
+import { open, readdir, rename, rm } from 'node:fs/promises';
+import { hostname } from 'node:os';
+import { join } from 'node:path';
+import { isAlive } from '../output/folder.ts';
+
+/** `write` makes the file under another name; it stands at `path` only when all of it is on the disk. */
+export async function land<T>(path: string, write: (temporary: string) => Promise<T>): Promise<T> {
+  const temporary = `${path}.${hostname()}-${process.pid}.tmp`;
+  try {
+    const result = await write(temporary);
+    await sync(temporary);
+    await rename(temporary, path);
+    return result;
+  } catch (error) {
+    await rm(temporary, { force: true });
+    throw error;
+  }
+}
+
+/** These bytes, one piece after the other. */
+export async function landBytes(path: string, pieces: readonly Uint8Array[]): Promise<void> {
+  await land(path, async (temporary) => {
+    const file = await open(temporary, 'w');
+    try {
+      for (const piece of pieces) await file.writeFile(piece);
+    } finally {
+      await file.close();
+    }
+  });
+}
+
+async function sync(path: string): Promise<void> {
+  const file = await open(path, 'r+');
+  try {
+    await file.sync();
+  } finally {
+    await file.close();
+  }
+}
+
+/** Removes what processes on this machine left in `folder` that were killed while they wrote. */
+export async function removeAbandoned(folder: string): Promise<void> {
+  const parts = (await readdir(folder)).map((name) => ({ name, match: /^.+\.(.+)-(\d+)\.tmp$/.exec(name) }));
+  const ours = parts.filter(({ match }) => match?.[1] === hostname() && !isAlive(Number(match[2])));
+  await Promise.all(ours.map(({ name }) => rm(join(folder, name), { force: true })));
+}

@@ -1,0 +1,112 @@
+/** The work folder of a table: a manifest, and the rows that are computed, a whole file for each chunk. */
+import { readdirSync } from 'node:fs';
+import { rm } from 'node:fs/promises';
+import { join } from 'node:path';
+import { SimError } from '../../sim/error.ts';
+import { makeFolder } from '../output/makeFolder.ts';
+import { chunkPieces, readChunk } from './chunkFile.ts';
+import { columnsOf, type Range, type Rows } from './job.ts';
+import { landBytes, removeAbandoned } from './landing.ts';
+import { differences, type Manifest, manifestText, readManifest, shardWords } from './manifest.ts';
+import { countRows } from './plan.ts';
+
+export interface Store {
+  readonly folder: string;
+  readonly manifest: Manifest;
+  /** What is there, in order. */
+  chunks(): readonly Range[];
+  /** Errors: as the system gives them. */
+  land(chunk: Range & Rows): Promise<void>;
+  /** Errors: SimError when the file is damaged. */
+  read(range: Range): Rows;
+  remove(): Promise<void>;
+}
+
+const suffix = '.work';
+
+export function workFolder(out: string, table: string): string {
+  return join(out, table + suffix);
+}
+
+/** Tables whose rows are kept in an output folder. */
+export function tablesIn(out: string): readonly string[] {
+  const entries = readdirSync(out, { withFileTypes: true });
+  const folders = entries.filter((entry) => entry.isDirectory() && entry.name.endsWith(suffix));
+  return folders.map(({ name }) => name.slice(0, -suffix.length)).sort();
+}
+
+/** What stands in a work folder, or null. Errors: SimError when its manifest cannot be read. */
+export function findStore(folder: string): Store | null {
+  const manifest = readManifest(join(folder, 'manifest.json'));
+  return manifest === null ? null : storeOf(folder, manifest);
+}
+
+/**
+ * A store for these rows: a new one, or with `resume` the one that is there.
+ * Errors: SimError when rows are there and `resume` is false, or they are of another job; nothing is lost either way.
+ */
+export async function openStore(folder: string, manifest: Manifest, resume: boolean): Promise<Store> {
+  const found = findStore(folder);
+  if (found !== null && found.chunks().length > 0) {
+    refuseOthers(found, manifest);
+    if (!resume) refuseFresh(found);
+    await removeAbandoned(folder);
+    return found;
+  }
+  await makeFolder(folder);
+  await removeAbandoned(folder);
+  if (chunksIn(folder).length > 0) refuseNameless(folder);
+  await landBytes(join(folder, 'manifest.json'), [Buffer.from(manifestText(manifest))]);
+  return storeOf(folder, manifest);
+}
+
+function refuseFresh({ folder, manifest, chunks }: Store): void {
+  const rows = `${countRows(chunks())} of ${countRows([manifest.range])} rows`;
+  throw new SimError(
+    folder,
+    `${rows} of an earlier run with the same settings are kept there`,
+    'Add --resume to go on with them, or remove that folder to start afresh',
+  );
+}
+
+function refuseNameless(folder: string): never {
+  throw new SimError(
+    folder,
+    'rows are kept there, but not of which run: manifest.json is missing',
+    'Remove that folder',
+  );
+}
+
+function refuseOthers({ folder, manifest, chunks }: Store, wanted: Manifest): void {
+  const [there, now] = [shardWords(manifest.shard), shardWords(wanted.shard)];
+  const found = differences(manifest.job, wanted.job);
+  const all = there === now ? found : [...found, `${there} there, ${now} now`];
+  if (all.length === 0) return;
+  throw new SimError(
+    folder,
+    `${countRows(chunks())} rows of an unfinished run with other settings are kept there (${all.join('; ')})`,
+    'Go on with the settings of that run and --resume, choose another folder with -o, or remove that folder to start afresh',
+  );
+}
+
+function storeOf(folder: string, manifest: Manifest): Store {
+  const columns = columnsOf(manifest.job).length;
+  const path = ({ from, to }: Range) => join(folder, `rows-${from}-${to}.bin`);
+  const present = chunksIn(folder);
+  return {
+    folder,
+    manifest,
+    chunks: () => present.toSorted((a, b) => a.from - b.from),
+    land: async (chunk) => {
+      await landBytes(path(chunk), chunkPieces(chunk));
+      present.push({ from: chunk.from, to: chunk.to });
+    },
+    read: (range) => readChunk(path(range), range, columns),
+    remove: () => rm(folder, { recursive: true, force: true }),
+  };
+}
+
+function chunksIn(folder: string): Range[] {
+  const names = readdirSync(folder).map((name) => /^rows-(\d+)-(\d+)\.bin$/.exec(name));
+  return names.filter((match) => match !== null).map(([, from, to]) => ({ from: Number(from), to: Number(to) }));
+}

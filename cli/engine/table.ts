@@ -1,0 +1,141 @@
+/** From rows in pieces to the files of a table: the Parquet file, and a list of the draws that failed. */
+import { closeSync, openSync, writeSync } from 'node:fs';
+import { rm } from 'node:fs/promises';
+import { join } from 'node:path';
+import { setImmediate } from 'node:timers/promises';
+import { csvField } from '../output/csv.ts';
+import { makeFolder } from '../output/makeFolder.ts';
+import {
+  type Column,
+  columnsOf,
+  type Failure,
+  fingerprintOf,
+  groupRows,
+  type JobRecord,
+  type Range,
+  type Rows,
+} from './job.ts';
+import { land, removeAbandoned } from './landing.ts';
+
+/** Some rows that are there, and how to get them. */
+export interface Piece extends Range {
+  read(): Rows;
+}
+
+export interface TableFiles {
+  readonly path: string;
+  readonly rows: number;
+  readonly failed: number;
+  /** Where the failed draws are listed; null when none failed. */
+  readonly failedPath: string | null;
+}
+
+/** `failed.csv` for the draws themselves, `failed-indices.csv` for a table `indices`. */
+export function tablePaths(folder: string, table: string): { readonly path: string; readonly failedPath: string } {
+  const failed = table === 'draws' ? 'failed.csv' : `failed-${table}.csv`;
+  return { path: join(folder, `${table}.parquet`), failedPath: join(folder, failed) };
+}
+
+/**
+ * Writes the files of a table from pieces that cover all its rows once, none of them over the edge of a row group. Holds one
+ * group at a time. `checkpoint` is called between groups, and may throw. The Parquet file comes last: where it stands, all is done.
+ */
+export async function writeTable(
+  { folder, table, job }: { readonly folder: string; readonly table: string; readonly job: JobRecord },
+  pieces: readonly Piece[],
+  checkpoint: () => void,
+): Promise<TableFiles> {
+  const { createParquet } = await import('../output/parquet.ts');
+  const { path, failedPath } = tablePaths(folder, table);
+  const sorted = pieces.toSorted((a, b) => a.from - b.from);
+  await makeFolder(folder);
+  await removeAbandoned(folder);
+  return land(path, async (temporary) => {
+    const file = createParquet(temporary, columnsOf(job));
+    try {
+      const failed = await land(failedPath, (list) => fill(file.append, list, job, sorted, checkpoint));
+      if (failed === 0) await rm(failedPath);
+      file.finish({ settings: JSON.stringify(job.settings), fingerprint: fingerprintOf(job), failed: String(failed) });
+      return { path, rows: job.rows, failed, failedPath: failed === 0 ? null : failedPath };
+    } finally {
+      file.close();
+    }
+  });
+}
+
+/** The files of this very table, when an earlier run has finished them; else null. */
+export async function finishedTable(folder: string, table: string, job: JobRecord): Promise<TableFiles | null> {
+  const { openParquet } = await import('../output/parquetReader.ts');
+  const { path, failedPath } = tablePaths(folder, table);
+  const file = await openParquet(path).catch(() => null); // none, or none of ours
+  if (file === null) return null;
+  await file.close();
+  if (file.metadata.fingerprint !== fingerprintOf(job)) return null;
+  const failed = Number(file.metadata.failed);
+  return { path, rows: file.rows, failed, failedPath: failed === 0 ? null : failedPath };
+}
+
+/** Gives the number of failed rows. */
+async function fill(
+  append: (from: number, columns: readonly Float64Array[]) => void,
+  listPath: string,
+  job: JobRecord,
+  pieces: readonly Piece[],
+  checkpoint: () => void,
+): Promise<number> {
+  const list = openSync(listPath, 'w');
+  let failed = 0;
+  let next = 0;
+  try {
+    writeText(list, failedHeader(job.inputs));
+    for (let from = 0; from < job.rows; from += groupRows) {
+      const group = emptyGroup(from, Math.min(groupRows, job.rows - from), columnsOf(job).length);
+      while (next < pieces.length && pieces[next]!.from < from + groupRows) copyInto(group, pieces[next++]!);
+      append(from, group.columns);
+      writeText(list, group.failures.map((failure) => failedLine(failure, group, job.inputs.length)).join(''));
+      failed += group.failures.length;
+      await setImmediate(); // a signal is heard between groups
+      checkpoint();
+    }
+    return failed;
+  } finally {
+    closeSync(list);
+  }
+}
+
+interface Group {
+  readonly from: number;
+  readonly columns: readonly Float64Array[];
+  readonly failures: Failure[];
+}
+
+function emptyGroup(from: number, rows: number, columns: number): Group {
+  return { from, columns: Array.from({ length: columns }, () => new Float64Array(rows)), failures: [] };
+}
+
+function copyInto({ from, columns, failures }: Group, piece: Piece): void {
+  const rows = piece.read();
+  for (const [index, column] of columns.entries()) column.set(rows.columns[index]!, piece.from - from);
+  failures.push(...rows.failures);
+}
+
+function failedHeader(inputs: readonly Column[]): string {
+  return `${['draw', ...inputs.map(headerOf), 'message'].map(csvField).join(',')}\n`;
+}
+
+/** `star.luminosity_Lsun`; a pure number has no unit behind it. */
+function headerOf({ name, unit }: Column): string {
+  return unit === '1' ? name : `${name}_${unit.replace(/[^A-Za-z0-9.^]+/g, '_')}`;
+}
+
+/** An input that could not even be drawn is empty. */
+function failedLine({ draw, message }: Failure, { from, columns }: Group, inputs: number): string {
+  const values = columns.slice(0, inputs).map((column) => column[draw - from]!);
+  const fields = values.map((value) => (Number.isFinite(value) ? String(value) : ''));
+  return `${[draw, ...fields, csvField(message)].join(',')}\n`;
+}
+
+function writeText(file: number, text: string): void {
+  const bytes = Buffer.from(text);
+  for (let at = 0; at < bytes.length; ) at += writeSync(file, bytes, at);
+}

@@ -1,0 +1,8 @@
+/** What we use of the Parquet library. The build keeps it in a file of its own, loaded when a table is written or read. */
+export { parquetMetadataAsync } from 'hyparquet';
+export { parquetReadColumn } from 'hyparquet/src/read.js';
+export { ByteWriter, ParquetWriter } from 'hyparquet-writer';
+export { writeColumn } from 'hyparquet-writer/src/column.js';
+export { writePageHeader } from 'hyparquet-writer/src/datapage.js';
+export { writeRleBitPackedHybrid } from 'hyparquet-writer/src/encoding.js';
+export { snappyCompress } from 'hyparquet-writer/src/snappy.js';
