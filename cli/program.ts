@@ -1,5 +1,5 @@
 /** The command line: which commands there are. Each loads what it needs only when it is called. */
-import { Command, CommanderError } from 'commander';
+import { Command, CommanderError, InvalidArgumentError } from 'commander';
 import packageJson from '../package.json' with { type: 'json' };
 import { exitCode, tellError } from './exit.ts';
 import type { Io } from './io.ts';
@@ -59,6 +59,40 @@ function program(words: readonly string[], io: Io, outcome: { code: number }): C
       outcome.code = await trace(file, options, { version: packageJson.version, words }, io);
     });
   perilag
+    .command('spread')
+    .description('draw the uncertain inputs many times: percentiles of every finding, and which input matters most')
+    .argument('<scenario>', 'scenario file, YAML or JSON')
+    .option('--draws <n>', 'how many draws', wholeNumber('--draws', 2, 2 ** 31), 4096)
+    .option('--seed <n>', 'of the draws (default: solve.seed, or 1)', wholeNumber('--seed', 0, 2 ** 32 - 1))
+    .option('--random', "pseudo-random draws instead of scrambled Sobol' points")
+    .option('--no-indices', 'leave out which input matters, and the runs that it needs')
+    .option(
+      '--workers <n>',
+      'threads (default: one a processor); the numbers do not depend on it',
+      wholeNumber('--workers', 1, 512),
+    )
+    .option('--shard <i/n>', 'compute one part of n only, to be joined by gather', shardOf)
+    .option('--resume', 'go on with what an interrupted run has left')
+    .option('-o, --out <dir>', 'output folder (default: out/<file name without extension>/spread)')
+    .option('--only <case>', 'draw only this case; may be given several times', collect)
+    .option('--json', 'print the summary as JSON on standard output, and nothing else there')
+    .option('--quiet', 'print nothing but errors')
+    .action(async (file: string, options) => {
+      const { spread } = await import('./commands/spread.ts');
+      outcome.code = await spread(file, options, { version: packageJson.version, words }, io);
+    });
+  perilag
+    .command('gather')
+    .description('join the parts of a spread that were computed apart, to the same bytes as one run')
+    .argument('<dir...>', 'output folders of the shards')
+    .requiredOption('-o, --out <dir>', 'folder of the whole')
+    .option('--json', 'print the summary as JSON on standard output, and nothing else there')
+    .option('--quiet', 'print nothing but errors')
+    .action(async (folders: string[], options) => {
+      const { gather } = await import('./commands/gather.ts');
+      outcome.code = await gather(folders, options, io);
+    });
+  perilag
     .command('new')
     .description('write a commented scenario to start from')
     .argument('[file]', 'file to write (default: scenario.yaml)')
@@ -74,6 +108,21 @@ function program(words: readonly string[], io: Io, outcome: { code: number }): C
       outcome.code = schema(io);
     });
   return perilag;
+}
+
+/** Reads a whole number of an option. Errors: as Commander tells them. */
+function wholeNumber(name: string, least: number, most: number): (text: string) => number {
+  return (text) => {
+    const value = Number(text);
+    if (Number.isInteger(value) && value >= least && value <= most && /^\d/.test(text)) return value;
+    throw new InvalidArgumentError(`${name} takes a whole number from ${least} to ${most}.`);
+  };
+}
+
+function shardOf(text: string): { index: number; count: number } {
+  const [, index, count] = /^(\d+)\/(\d+)$/.exec(text) ?? [];
+  if (index === undefined || count === undefined) throw new InvalidArgumentError('Write it as part/parts, e.g. 3/64.');
+  return { index: Number(index), count: Number(count) };
 }
 
 function collect(value: string, earlier: readonly string[] = []): readonly string[] {

@@ -23,7 +23,10 @@ function leastResultant(count: number): number {
  * Units:  turns. The mean lies in [0, 1). Percentiles are counted from half a turn before the mean to half a turn after, and
  *         do not jump: 2.5 % may be −0.02, which is the end of the turn before.
  */
-export function summariseTurns(turns: Float64Array, scratch = new Float64Array(turns.length)): CircularSummary {
+export function summariseTurns(
+  turns: Float64Array,
+  scratch: Float64Array = new Float64Array(turns.length),
+): CircularSummary {
   const { cosine, sine, count } = resultant(turns);
   if (count === 0) return { ...undefinedSummary(0, 'no draw has a value'), resultantLength: null };
   const defined = count / turns.length;

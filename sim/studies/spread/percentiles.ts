@@ -35,7 +35,7 @@ export function addInOrder(total: RunningSum, values: Float64Array): void {
  * Shape:  values (draws,) in draw order, left alone; scratch at least as long, overwritten: allocates nothing of that size when given.
  * Units:  those of the values; `defined` 1.
  */
-export function summarise(values: Float64Array, scratch = new Float64Array(values.length)): Summary {
+export function summarise(values: Float64Array, scratch: Float64Array = new Float64Array(values.length)): Summary {
   const total: RunningSum = { sum: 0, count: 0 };
   addInOrder(total, values);
   if (total.count === 0) return undefinedSummary(0, 'no draw has a value');

@@ -1,0 +1,70 @@
+/** `perilag gather`: the parts of a spread that were computed apart, joined to what one run would have written. */
+import { resolve } from 'node:path';
+import { SimError } from '../../sim/error.ts';
+import { readScenario } from '../../sim/scenario/read.ts';
+import { planSpread } from '../../sim/studies/spread/plan.ts';
+import { gatherTable } from '../engine/gather.ts';
+import { tablesIn } from '../engine/store.ts';
+import type { Io } from '../io.ts';
+import { readSamples } from '../posteriorFile.ts';
+import type { ScenarioFile } from '../scenarioFile.ts';
+import { onlyCases } from './only.ts';
+import { finishSpread, type SpreadContext, type SpreadTableFiles } from './spreadFiles.ts';
+
+export interface GatherOptions {
+  readonly out: string;
+  readonly json?: boolean;
+  readonly quiet?: boolean;
+}
+
+/** Gives the exit code. Errors: SimError that names the folders when parts are missing, stand twice, or are of different runs. */
+export async function gather(folders: readonly string[], options: GatherOptions, io: Io): Promise<number> {
+  if (options.out.trim() === '') throw new SimError('-o', 'the folder has no name', 'Name one, e.g. `-o results`');
+  const paths = folders.map((folder) => resolve(io.cwd, folder));
+  const tables = tablesOf(paths[0]!, folders[0]!);
+  const out = resolve(io.cwd, options.out);
+  const gathered = [];
+  for (const table of tables) gathered.push({ table, ...(await gatherTable(paths, table, out)) });
+  const context = gathered[0]!.job.context as unknown as SpreadContext;
+  const item = scenarioOf(context);
+  const plan = planSpread({
+    text: context.text,
+    file: context.file,
+    only: context.only,
+    draws: context.draws,
+    seed: context.seed,
+    sampling: context.sampling,
+    samples: await samplesOf(item, context, io),
+  });
+  const files = Object.fromEntries(
+    gathered.map(({ table, files: made }) => [table, made]),
+  ) as unknown as SpreadTableFiles;
+  return finishSpread({ plan, context, files, out: options.out, item }, options, io);
+}
+
+function tablesOf(path: string, named: string): readonly string[] {
+  const tables = foundTables(path);
+  if (tables.includes('draws')) return tables;
+  throw new SimError(named, 'no rows of draws are kept there', 'Name the output folders of the shards');
+}
+
+function foundTables(path: string): readonly string[] {
+  try {
+    return tablesIn(path);
+  } catch {
+    return [];
+  }
+}
+
+function scenarioOf({ text, file, sha256, only }: SpreadContext): ScenarioFile {
+  const item = { file, text, sha256, scenario: readScenario(text, file) };
+  return onlyCases([item], only ?? [])[0]!;
+}
+
+/** The file of samples must be the one that the shards drew from. */
+async function samplesOf({ scenario, file }: ScenarioFile, { samplesSha256 }: SpreadContext, io: Io) {
+  if (!scenario.posterior) return null;
+  const samples = await readSamples(scenario.posterior, file, io.cwd);
+  if (samples.sha256 === samplesSha256) return samples;
+  throw new SimError(scenario.posterior.file, 'it is not the file that the shards drew from', 'Put that file back');
+}

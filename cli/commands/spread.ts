@@ -1,0 +1,108 @@
+/** `perilag spread`: the uncertain inputs of a scenario drawn many times, as percentiles, as tables, and which of them matters most. */
+import { availableParallelism } from 'node:os';
+import { basename, extname, join, resolve } from 'node:path';
+import { SimError } from '../../sim/error.ts';
+import { planSpread, type SpreadSetup } from '../../sim/studies/spread/plan.ts';
+import { type Computed, computeTable } from '../engine/compute.ts';
+import type { Job } from '../engine/job.ts';
+import { kinds } from '../engine/kinds.ts';
+import type { Shard } from '../engine/plan.ts';
+import type { Io } from '../io.ts';
+import { commandLine } from '../output/history.ts';
+import { readSamples } from '../posteriorFile.ts';
+import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
+import { onlyCases } from './only.ts';
+import type { Program } from './run.ts';
+import { finishSpread, type SpreadContext, type SpreadTableFiles } from './spreadFiles.ts';
+import { spreadJobs } from './spreadJobs.ts';
+
+export interface SpreadOptions {
+  readonly draws: number;
+  readonly seed?: number;
+  readonly workers?: number;
+  readonly random?: boolean;
+  /** Commander's `--no-indices`. */
+  readonly indices: boolean;
+  readonly shard?: Shard;
+  readonly resume?: boolean;
+  readonly out?: string;
+  readonly only?: readonly string[];
+  readonly json?: boolean;
+  readonly quiet?: boolean;
+}
+
+/** Gives the exit code. Errors: SimError and ScenarioError for the input's faults; Interrupted after a signal. */
+export async function spread(file: string, options: SpreadOptions, program: Program, io: Io): Promise<number> {
+  const [item] = onlyCases([readScenarioFile(file, io.cwd)], options.only ?? []);
+  const { context, setup } = await whatToDraw(item!, options, program, io);
+  const plan = planSpread(setup);
+  const out = outputFolder(file, options.out);
+  const jobs = spreadJobs(plan, context);
+  const compute = (job: Job, table: string) =>
+    computeTable(job, { ...engineOptions(options, out, program, io), table }, kinds, io);
+  const computed: Computed[] = [];
+  for (const { table, job } of jobs) computed.push(await compute(job, table));
+  if (options.shard) {
+    if (!options.quiet) tellShard(out, options.shard, io);
+    return 0;
+  }
+  const files = Object.fromEntries(
+    jobs.map(({ table }, i) => [table, computed[i]!.files]),
+  ) as unknown as SpreadTableFiles;
+  const code = await finishSpread({ plan, context, files, out, item: item! }, options, io);
+  for (const one of computed) await one.discardWork();
+  return code;
+}
+
+async function whatToDraw(
+  item: ScenarioFile,
+  { draws, seed, random = false, indices, only }: SpreadOptions,
+  { version }: Program,
+  io: Io,
+): Promise<{ context: SpreadContext; setup: SpreadSetup }> {
+  const { scenario, text, file, sha256 } = item;
+  const samples = scenario.posterior ? await readSamples(scenario.posterior, file, io.cwd) : null;
+  const chosen = only && only.length > 0 ? scenario.cases.map(({ name }) => name) : null;
+  const sampling = random ? 'random' : 'sobol';
+  const settled = { draws, seed: seed ?? seedOf(item), sampling, only: chosen } as const;
+  return {
+    setup: { text, file, samples, ...settled },
+    context: {
+      command: 'spread',
+      file,
+      text,
+      sha256,
+      version,
+      samplesSha256: samples?.sha256 ?? null,
+      indices: indices && samples === null,
+      ...settled,
+    },
+  };
+}
+
+/** The scenario's own, or 1. */
+function seedOf({ scenario }: ScenarioFile): number {
+  return scenario.cases[0]!.inputs.find(({ key }) => key === 'solve.seed')?.value ?? 1;
+}
+
+function outputFolder(file: string, out: string | undefined): string {
+  if (out?.trim() === '')
+    throw new SimError('-o', 'the folder has no name', 'Name one, e.g. `-o results`, or leave -o out');
+  return out ?? join('out', basename(file, extname(file)), 'spread');
+}
+
+function engineOptions(options: SpreadOptions, out: string, program: Program, io: Io) {
+  return {
+    folder: resolve(io.cwd, out),
+    shard: options.shard ?? null,
+    resume: options.resume ?? false,
+    workers: options.workers ?? availableParallelism(),
+    quiet: options.quiet ?? false,
+    words: program.words,
+  };
+}
+
+function tellShard(out: string, { index, count }: Shard, io: Io): void {
+  const gather = commandLine(['gather', '...', '-o', 'DIR']);
+  io.stderr.write(`shard ${index} of ${count} is in ${out}. When all are there: ${gather}\n`);
+}

@@ -1,0 +1,119 @@
+/** From the finished tables of a spread to what stands beside them: summary, scenario, report, and the table of the terminal. */
+import { resolve } from 'node:path';
+import { originOf } from '../../sim/origin.ts';
+import { runScenario } from '../../sim/run.ts';
+import type { SpreadPlan } from '../../sim/studies/spread/plan.ts';
+import type { SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
+import { summariseSpread } from '../../sim/studies/spread/summariseSpread.ts';
+import type { TableFiles } from '../engine/table.ts';
+import { exitCode } from '../exit.ts';
+import type { Io } from '../io.ts';
+import { writeFolder } from '../output/folder.ts';
+import { jsonText } from '../output/json.ts';
+import { pagePieces } from '../output/report.ts';
+import { scenarioYamlText } from '../output/scenarioYaml.ts';
+import { spreadSummary } from '../output/spreadSummary.ts';
+import { spreadLines } from '../output/spreadTable.ts';
+import { summaryOf } from '../output/summary.ts';
+import { terminalOf } from '../output/terminal.ts';
+import { hanging } from '../output/text.ts';
+import { samplesFrom } from '../posteriorFile.ts';
+import type { ScenarioFile } from '../scenarioFile.ts';
+import { bandDrawsOf, indexRowsOf } from './spreadJobs.ts';
+
+/** What a spread was asked for: kept beside its rows, so that `gather` can go on. */
+export interface SpreadContext {
+  readonly command: 'spread';
+  readonly file: string;
+  readonly text: string;
+  readonly sha256: string;
+  readonly version: string;
+  readonly samplesSha256: string | null;
+  readonly only: readonly string[] | null;
+  readonly draws: number;
+  readonly seed: number;
+  readonly sampling: 'sobol' | 'random';
+  readonly indices: boolean;
+}
+
+export interface SpreadTableFiles {
+  readonly draws: TableFiles;
+  readonly bands?: TableFiles;
+  readonly indices?: TableFiles;
+}
+
+export interface FinishedSpread {
+  readonly plan: SpreadPlan;
+  readonly context: SpreadContext;
+  readonly files: SpreadTableFiles;
+  /** As the user named it. */
+  readonly out: string;
+  readonly item: ScenarioFile;
+}
+
+/** More failed draws than this share are no longer a few odd ones. */
+const tolerableFailures = 0.01;
+
+/** Writes the files and shows the table; gives the exit code. */
+export async function finishSpread(
+  finished: FinishedSpread,
+  options: { readonly json?: boolean; readonly quiet?: boolean },
+  io: Io,
+): Promise<number> {
+  const { plan, context, item, out } = finished;
+  const report = await reportOf(finished);
+  const folder = resolve(io.cwd, out);
+  const run = runScenario(item.scenario, { sha256: context.sha256, version: context.version });
+  const summary = { ...summaryOf(run), spread: spreadSummary(report) };
+  await writeFolder(folder, [
+    { name: 'summary.json', pieces: [`${jsonText(summary)}\n`] },
+    { name: 'scenario.yaml', pieces: [scenarioYamlText(item.scenario, samplesFrom(folder, item, io.cwd))] },
+    { name: 'report.html', pieces: pagePieces({ spread: report }, io.reportTemplate) },
+  ]);
+  if (options.json) io.stdout.write(`${jsonText(summary)}\n`);
+  if (!options.quiet) show(report, finished, options.json ?? false, io);
+  return tellFailures(report, plan.setup.draws, finished.files.draws, io);
+}
+
+async function reportOf({ plan, context, files, item }: FinishedSpread): Promise<SpreadReport> {
+  const { openParquet } = await import('../output/parquetReader.ts');
+  const open = async (table: TableFiles | undefined) => (table === undefined ? null : openParquet(table.path));
+  const [draws, bands, indices] = [
+    await openParquet(files.draws.path),
+    await open(files.bands),
+    await open(files.indices),
+  ];
+  try {
+    return await summariseSpread(plan, originOf({ ...item.scenario, file: item.file }, context), {
+      draws: draws.column,
+      bands: bands?.column ?? null,
+      indices: indices?.column ?? null,
+      failed: files.draws.failed,
+      bandDraws: bandDrawsOf(plan),
+      indexRows: indexRowsOf(plan),
+    });
+  } finally {
+    for (const table of [draws, bands, indices]) await table?.close();
+  }
+}
+
+function show(report: SpreadReport, { files, out }: FinishedSpread, json: boolean, io: Io): void {
+  const terminal = terminalOf(io);
+  if (!json) io.stdout.write(`${spreadLines(report, terminal).join('\n')}\n`);
+  const tables = [files.draws, files.bands, files.indices].filter((one) => one !== undefined);
+  const names = tables.flatMap(({ path, failedPath }) => [path, ...(failedPath === null ? [] : [failedPath])]);
+  const listed = ['summary.json', ...names.map((path) => path.slice(path.lastIndexOf('/') + 1)), 'scenario.yaml'].join(
+    ', ',
+  );
+  const lines = hanging('files   ', `${listed} beside it`, terminal.width);
+  io.stderr.write(`report  ${terminal.say(`${out.replace(/\/$/, '')}/report.html`)}\n${lines.join('\n')}\n`);
+}
+
+function tellFailures({ failed }: SpreadReport, draws: number, { failedPath }: TableFiles, io: Io): number {
+  if (failed === 0) return exitCode.done;
+  const share = `${failed} of ${draws} draws`;
+  io.stderr.write(
+    `${share} failed: they are no sound planets, or not known to the tolerance; ${failedPath} lists them\n`,
+  );
+  return failed > tolerableFailures * draws ? exitCode.notWithinTolerance : exitCode.done;
+}

@@ -1,0 +1,122 @@
+/** What `spread` shows of each case: the chief findings with their intervals, what matters most, what was not drawn. */
+import { formatNumber, inUnit } from '../../sim/quantity/index.ts';
+import type { SpreadCase, SpreadFinding, SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
+import { panels } from './grid.ts';
+import type { Terminal } from './terminal.ts';
+import { hanging, wrap } from './text.ts';
+
+/** Shown where a case has them; the files have all. */
+const chief = [
+  'temperatureMax',
+  'temperatureMean',
+  'temperatureMin',
+  'hottestTemperature',
+  'coldestTemperature',
+  'timeOfMax',
+  'lagOfMax',
+  'damping',
+  'equilibriumTemperature',
+  'orbitMeanInstellation',
+  'period',
+  'iceFractionMean',
+];
+const mostImportant = 3;
+
+/** Lines that fit the terminal, from 40 columns up. */
+export function spreadLines(report: SpreadReport, terminal: Terminal): string[] {
+  const title = wrap(terminal.say(report.scenario.title ?? report.scenario.file), terminal.width);
+  const head = `${report.draws} draws (${samplingWords[report.sampling]}), seed ${report.seed}`;
+  return [
+    ...title.map((line) => terminal.paint('bold', line)),
+    ...wrap(terminal.say(head), terminal.width).map((line) => terminal.paint('dim', line)),
+    ...report.cases.flatMap((one) => ['', ...caseLines(one, terminal)]),
+  ];
+}
+
+const samplingWords = { sobol: "scrambled Sobol' points", random: 'pseudo-random', posterior: 'posterior samples' };
+
+function caseLines(one: SpreadCase, terminal: Terminal): string[] {
+  const shown = chief.flatMap((name) => one.findings.filter((finding) => finding.name === name));
+  const windows = one.findings.filter(({ name }) => /^(fractionInWindow|habitableFraction)\./.test(name));
+  const findings = [...shown, ...windows];
+  const grid = {
+    headings: ['2.5 %', '16 %', 'median', '84 %', '97.5 %', 'at centre'],
+    rows: findings.map((finding) => {
+      const label = terminal.say(labelOf(finding));
+      return { section: label, label: '', alone: label };
+    }),
+    cells: findings.map(cellsOf),
+  };
+  const name = wrap(terminal.say(`${one.name} (${one.model})`), terminal.width);
+  return [
+    ...name.map((line) => terminal.paint('bold', line)),
+    ...panels(grid, terminal).flatMap((panel, index) => (index === 0 ? panel : ['', ...panel])),
+    ...undefinedLines(findings, terminal),
+    ...importanceLines(one, terminal),
+    ...one.inputs
+      .filter(({ truncatedShare }) => truncatedShare > 0.05)
+      .flatMap(({ key, text, truncatedShare }) => {
+        const cut = `${(100 * truncatedShare).toFixed(1)} % of ${key} ${text} lies beyond what is physical and was cut away`;
+        return hanging('warning   ', terminal.say(cut), terminal.width);
+      }),
+    ...one.idle.flatMap(({ key, reason }) => hanging('not drawn ', terminal.say(`${key}: ${reason}`), terminal.width)),
+    ...one.warnings.flatMap((text) => hanging('warning   ', terminal.say(text), terminal.width)),
+    ...one.notes.flatMap((text) => hanging('note      ', terminal.say(text), terminal.width)),
+  ];
+}
+
+/** Times in days, instellation in that of the Earth, all else as it is. */
+function shownIn({ unit }: SpreadFinding): string {
+  return unit === 's' ? 'd' : unit === '1' ? '' : unit;
+}
+
+function labelOf(finding: SpreadFinding): string {
+  const unit = shownIn(finding);
+  return unit === '' ? finding.label : `${finding.label}, ${unit}`;
+}
+
+function cellsOf(finding: SpreadFinding): string[] {
+  const { percentiles } = finding.summary;
+  const numbers = percentiles === null ? [null, null, null, null, null] : levels.map((level) => percentiles[level]);
+  return [...numbers, finding.atCentre].map((value) => {
+    if (value === null) return '—';
+    return formatNumber(finding.unit === 's' ? inUnit(value, 'd') : value, 5);
+  });
+}
+
+const levels = ['2.5', '16', '50', '84', '97.5'] as const;
+
+function undefinedLines(findings: readonly SpreadFinding[], terminal: Terminal): string[] {
+  return findings.flatMap(({ label, summary }) => {
+    if (summary.reason !== undefined)
+      return hanging('          ', terminal.say(`${label}: ${summary.reason}`), terminal.width);
+    if (summary.defined === 1) return [];
+    const text = `${label}: defined in ${(100 * summary.defined).toFixed(1)} % of the draws`;
+    return hanging('          ', terminal.say(text), terminal.width);
+  });
+}
+
+function importanceLines(one: SpreadCase, terminal: Terminal): string[] {
+  return ['temperatureMean', 'temperatureMax', 'lagOfMax'].flatMap((name) => {
+    const finding = one.findings.find((candidate) => candidate.name === name);
+    if (!finding) return [];
+    const { first, total, ranks } = finding.importance;
+    const parts = one.inputs.map(({ key }, i) => {
+      if (total !== null && first !== null)
+        return { key, size: total[i]!.value, text: `${key} ${share(total[i]!.value)}` };
+      return { key, size: ranks?.[i]?.value ?? 0, text: `${key} ${share(ranks?.[i]?.value ?? 0)}` };
+    });
+    if (total === null && ranks === null) return [];
+    const chosen = parts.toSorted((a, b) => b.size - a.size).slice(0, mostImportant);
+    const head = total === null ? 'goes along with' : 'total index';
+    return hanging(
+      'matters   ',
+      terminal.say(`${finding.label}, ${head}: ${chosen.map(({ text }) => text).join(', ')}`),
+      terminal.width,
+    );
+  });
+}
+
+function share(value: number): string {
+  return Math.max(0, value).toFixed(2);
+}
