@@ -26,9 +26,8 @@ export interface BandPlace {
 }
 
 const places = 120;
-/** Rows of a draw's own year: of one temperature, whose lines are read between rows; of fields, which cost more. */
-const rowsOfLine = 720;
-const rowsOfField = 240;
+/** Rows of a draw's own year; the cubic between them is off by some 1e-6 of the swing, far below the spread that is shown. */
+const rows = 240;
 
 /** Nothing for a run from a start, which is no orbit that repeats. */
 export function bandSampler(drawn: CaseDrawn, centre: readonly number[]): BandSampler {
@@ -45,8 +44,11 @@ export function bandSampler(drawn: CaseDrawn, centre: readonly number[]): BandSa
     columns: bands.flatMap(({ name, positions }) => Array.from(positions, (_, i) => `${name}.${i}`)),
     at(values) {
       const { world: one, options } = drawn.builtAt(values);
-      const samples = one.globe ? rowsOfField : rowsOfLine;
-      const [state] = models[drawn.model].solve(one, { ...options, samples, spacing: 'balancedAnomaly' }, []).states;
+      const [state] = models[drawn.model].solve(
+        one,
+        { ...options, samples: rows, spacing: 'balancedAnomaly' },
+        [],
+      ).states;
       if (!state.converged) throw new SimError('solve.tolerance', 'the state is not known to it', 'Raise it');
       const { dataset } = state;
       const parts = [throughOrbit(dataset, one, phases), ...(one.globe ? alongLatitude(dataset) : [])];
@@ -75,9 +77,9 @@ function latitudeBands(count: number): BandPlace[] {
 
 /** Between rows, equal in the draw's own balanced anomaly, by the cubic through four of them. */
 function throughOrbit({ variables }: Dataset, { orbit }: World, phases: Float64Array): Float64Array {
-  const rows = variables.temperature.data;
-  const count = rows.length;
-  const row = (i: number) => rows[((i % count) + count) % count];
+  const temperatures = variables.temperature.data;
+  const count = temperatures.length;
+  const row = (i: number) => temperatures[((i % count) + count) % count];
   return phases.map((phase) => {
     const place = (balancedFromMean(2 * Math.PI * phase, orbit.eccentricity) / (2 * Math.PI)) * count;
     const i = Math.floor(place);
@@ -95,12 +97,12 @@ function throughOrbit({ variables }: Dataset, { orbit }: World, phases: Float64A
 
 function alongLatitude({ variables }: Dataset): Float64Array[] {
   const { data, shape } = variables.bandTemperature;
-  const [rows, bands] = shape;
+  const [count, bands] = shape;
   const weight = variables.weight.data;
   const mean = new Float64Array(bands);
   const highest = new Float64Array(bands).fill(Number.NEGATIVE_INFINITY);
   const lowest = new Float64Array(bands).fill(Number.POSITIVE_INFINITY);
-  for (let row = 0; row < rows; row++) {
+  for (let row = 0; row < count; row++) {
     for (let band = 0; band < bands; band++) {
       const value = data[row * bands + band];
       mean[band] += weight[row] * value;

@@ -1,0 +1,204 @@
+import { existsSync, readFileSync } from 'node:fs';
+import { afterEach, beforeEach, describe, expect, test } from 'vitest';
+import { readColumn } from '../../cli/output/parquetReader.ts';
+import { type Workplace, workplace } from './support.ts';
+
+/** A fast world: its temperature is the steady one, T ∝ (L (1 − A))^¼, up to its small store. */
+const quarterText = `title: Corvane b, a rock that answers at once
+star: { luminosity: 0.5 to 1.5 Lsun, mass: 0.85 Msun }
+orbit: { semiMajorAxis: 0.48 au, eccentricity: 0 }
+planet: { bondAlbedo: 0.1 to 0.5, heatStore: { heatCapacity: 1e4 J/m2/K } }
+`;
+
+const twoCasesText = `title: Corvane b under two assumptions
+star: { luminosity: 0.52 ± 0.02 Lsun, mass: 0.85 Msun }
+orbit: { semiMajorAxis: 0.48 au, eccentricity: 0.62 ± 0.03 }
+planet: { bondAlbedo: 0.1 to 0.5, heatStore: { mixedLayer: 5 m to 50 m log } }
+cases:
+  sea: {}
+  rock: { planet: { heatStore: { heatCapacity: 1e6 J/m2/K } } }
+`;
+
+let place: Workplace;
+beforeEach(() => {
+  place = workplace();
+  place.write('quarter.yaml', quarterText);
+  place.write('two.yaml', twoCasesText);
+});
+afterEach(() => place.remove());
+
+const bytes = (...names: string[]) => readFileSync(place.path(...names));
+const summary = (folder: string) => JSON.parse(readFileSync(place.path(folder, 'summary.json'), 'utf8'));
+
+async function spread(file: string, out: string, ...words: string[]) {
+  const done = await place.perilag('spread', file, '-o', out, '--quiet', ...words);
+  expect(done.stderr).toBe('');
+  expect(done.code).toBe(0);
+}
+
+test('T ∝ (1 − A)^¼ L^¼: percentiles as their closed form has them', async () => {
+  await spread('quarter.yaml', 'out', '--draws', '16384', '--no-indices');
+  const { findings } = summary('out').spread.cases[0];
+  const { percentiles, mean } = findings.temperatureMean;
+  // Stefan–Boltzmann with IAU nominal values; L (1 − A) is a product of two uniforms on [½, 3/2] and [½, 9/10].
+  const at = (luminosity: number, albedo: number) =>
+    ((luminosity * 3.828e26 * (1 - albedo)) / (16 * Math.PI * 5.670374419e-8 * (0.48 * 149_597_870_700) ** 2)) ** 0.25;
+  const grid = 2000;
+  const values = new Float64Array(grid * grid);
+  for (let i = 0; i < grid; i++) {
+    for (let j = 0; j < grid; j++) values[i * grid + j] = at(0.5 + (i + 0.5) / grid, 0.1 + (0.4 * (j + 0.5)) / grid);
+  }
+  values.sort();
+  // 16384 Sobol' points: the share below a value is off by some 2e-4, of a density of about 1/60 per K
+  for (const level of ['2.5', '16', '50', '84', '97.5']) {
+    expect(Math.abs(percentiles[level] - values[Math.floor((values.length * Number(level)) / 100)]!)).toBeLessThan(0.1);
+  }
+  expect(Math.abs(mean - values.reduce((sum, value) => sum + value, 0) / values.length)).toBeLessThan(0.02);
+});
+
+test("indices of T ∝ L^¼ (1 − A)^¼ are those of the product's closed form", async () => {
+  await spread('quarter.yaml', 'out', '--draws', '4096');
+  const { first, total } = summary('out').spread.cases[0].importance.temperatureMean;
+  // f = g(L) h(A): V = E g² E h² − (E g E h)²; first order of g: Var g (E h)² / V; total: Var g E h² / V.
+  const moment = (low: number, high: number, power: number) =>
+    (high ** (power + 1) - low ** (power + 1)) / ((power + 1) * (high - low));
+  const [g1, g2, h1, h2] = [
+    moment(0.5, 1.5, 0.25),
+    moment(0.5, 1.5, 0.5),
+    moment(0.5, 0.9, 0.25),
+    moment(0.5, 0.9, 0.5),
+  ];
+  const variance = g2 * h2 - (g1 * h1) ** 2;
+  const light = first['star.luminosity'];
+  // within its own interval, which for Sobol' points is rather too wide
+  const expected = ((g2 - g1 ** 2) * h1 ** 2) / variance;
+  expect(light.percentiles['2.5']).toBeLessThan(expected);
+  expect(light.percentiles['97.5']).toBeGreaterThan(expected);
+  expect(Math.abs(light.value - expected)).toBeLessThan(0.01);
+  expect(Math.abs(total['planet.bondAlbedo'].value - ((h2 - h1 ** 2) * g2) / variance)).toBeLessThan(0.01);
+});
+
+describe('the same bytes', () => {
+  const tables = ['draws.parquet', 'bands.parquet', 'indices.parquet'];
+
+  test('on one, two and four workers, and from three shards that are gathered', async () => {
+    const draws = ['--draws', '300'];
+    await spread('two.yaml', 'one', ...draws, '--workers', '1');
+    await spread('two.yaml', 'two', ...draws, '--workers', '2');
+    await spread('two.yaml', 'four', ...draws, '--workers', '4');
+    for (const part of ['1/3', '2/3', '3/3']) await spread('two.yaml', `part${part[0]}`, ...draws, '--shard', part);
+    const gathered = await place.perilag('gather', 'part1', 'part2', 'part3', '-o', 'whole', '--quiet');
+    expect(gathered).toEqual({ code: 0, stdout: '', stderr: '' });
+    for (const table of tables) {
+      for (const folder of ['two', 'four', 'whole'])
+        expect(bytes(folder, table).equals(bytes('one', table))).toBe(true);
+    }
+    expect(summary('whole').spread).toEqual(summary('one').spread);
+  }, 60_000);
+
+  test('a case alone draws as it does among others', async () => {
+    await spread('two.yaml', 'both', '--draws', '64', '--no-indices');
+    await spread('two.yaml', 'sea', '--draws', '64', '--no-indices', '--only', 'sea');
+    const among = await readColumn(place.path('both', 'draws.parquet'), 'sea: temperatureMax');
+    expect(await readColumn(place.path('sea', 'draws.parquet'), 'temperatureMax')).toEqual(among);
+  });
+});
+
+test('inputs that cases share are drawn once: cases differ by what is told apart', async () => {
+  await spread('two.yaml', 'out', '--draws', '64', '--no-indices');
+  const { openParquet } = await import('../../cli/output/parquetReader.ts');
+  const table = await openParquet(place.path('out', 'draws.parquet'));
+  expect(table.names.slice(0, 5)).toEqual([
+    'draw',
+    'star.luminosity',
+    'orbit.eccentricity',
+    'planet.bondAlbedo',
+    'planet.heatStore.mixedLayer',
+  ]);
+  await table.close();
+});
+
+test('a seed gives its draws again; another gives others', async () => {
+  const draws = ['--draws', '32', '--no-indices'];
+  await spread('quarter.yaml', 'a', ...draws, '--seed', '7');
+  await spread('quarter.yaml', 'b', ...draws, '--seed', '8');
+  await spread('quarter.yaml', 'c', ...draws, '--seed', '7', '--random');
+  const column = async (folder: string) => readColumn(place.path(folder, 'draws.parquet'), 'star.luminosity');
+  expect(await column('a')).not.toEqual(await column('b'));
+  expect(await column('a')).not.toEqual(await column('c'));
+});
+
+test('draws that are no planets are listed with their inputs, and many of them end with 3', async () => {
+  // the star of 0.9 Rsun reaches 0.0042 au: periapsis is inside it when e > 0.9163
+  place.write(
+    'graze.yaml',
+    quarterText
+      .replace('mass: 0.85 Msun', 'mass: 0.85 Msun, radius: 0.9 Rsun')
+      .replace('0.48 au, eccentricity: 0', '0.05 au, eccentricity: 0.85 to 0.95'),
+  );
+  const { code, stderr } = await place.perilag(
+    'spread',
+    'graze.yaml',
+    '-o',
+    'out',
+    '--draws',
+    '256',
+    '--no-indices',
+    '--quiet',
+  );
+  expect(code).toBe(3);
+  expect(stderr).toContain('of 256 draws failed');
+  const lines = readFileSync(place.path('out', 'failed.csv'), 'utf8').trim().split('\n');
+  expect(lines[0]).toContain('draw,star.luminosity_Lsun,orbit.eccentricity,planet.bondAlbedo,message');
+  const { failed, cases } = summary('out').spread;
+  expect(lines.length - 1).toBe(failed);
+  expect(cases[0].failed).toBe(failed);
+  // uniform: a third of the draws lies above 0.9163, to within what 256 even points allow
+  expect(failed / 256).toBeCloseTo((0.95 - 0.9163) / 0.1, 1);
+  expect(cases[0].findings.temperatureMean.defined).toBeCloseTo(1 - failed / 256, 12);
+  for (const line of lines.slice(1)) expect(Number(line.split(',')[2])).toBeGreaterThan(0.916);
+});
+
+test('nothing uncertain, a lost file of rows, numbers that are none: said, with 2', async () => {
+  place.write('exact.yaml', quarterText.replace('0.5 to 1.5 Lsun', '1 Lsun').replace('0.1 to 0.5', '0.3'));
+  const exact = await place.perilag('spread', 'exact.yaml', '-o', 'out');
+  expect(exact.code).toBe(2);
+  expect(exact.stderr).toContain('no input has a spread');
+  expect(existsSync(place.path('out'))).toBe(false);
+  const wrong = await place.perilag('spread', 'quarter.yaml', '--draws', '1');
+  expect(wrong.code).toBe(2);
+  expect(wrong.stderr).toContain('--draws');
+  const nowhere = await place.perilag('gather', 'nowhere', '-o', 'out');
+  expect(nowhere.code).toBe(2);
+  expect(nowhere.stderr).toContain('nowhere');
+});
+
+test('a latitude model: its own findings, and bands along latitude', async () => {
+  place.write(
+    'zonal.yaml',
+    `title: Chione b
+model: zonal
+star: { luminosity: 0.48 Lsun, mass: 0.82 Msun }
+orbit: { instellation: 0.95 S0, eccentricity: 0.05 }
+planet:
+  bondAlbedo: 0.2 to 0.4
+  emission: { opticalDepth: 0.83 }
+  heatStore: { mixedLayer: 12 m }
+  heatTransport: 0.3 to 0.8 W/m2/K
+  obliquity: 24 ± 2 deg
+  rotationPeriod: 22 h
+  solarLongitudeOfPeriapsis: 120 ± 20 deg
+  bands: 18
+solve: { samples: 48, tolerance: 1e-4 }
+`,
+  );
+  await spread('zonal.yaml', 'out', '--draws', '48', '--no-indices', '--workers', '2');
+  const { findings, bandDraws } = summary('out').spread.cases[0];
+  expect(bandDraws).toBe(48);
+  expect(findings.hottestTemperature.percentiles['97.5']).toBeGreaterThan(
+    findings.hottestTemperature.percentiles['2.5'],
+  );
+  const equator = await readColumn(place.path('out', 'bands.parquet'), 'latitudeMean.9');
+  const pole = await readColumn(place.path('out', 'bands.parquet'), 'latitudeMean.0');
+  for (let draw = 0; draw < 48; draw++) expect(equator[draw]).toBeGreaterThan(pole[draw]!);
+}, 60_000);
