@@ -12,43 +12,52 @@ const root = fileURLToPath(new URL('../../..', import.meta.url));
 const rows = '300000';
 const price = '20';
 
-/** Runs to its end, or is killed so many milliseconds after its start. */
-function run(folder: string, workers: number, killAfter: number | null): Promise<number | null> {
-  return new Promise((resolve) => {
-    const words = ['--import', 'tsx', program, folder, rows, price, String(workers), '--resume'];
-    const child = spawn(process.execPath, words, { cwd: root, stdio: 'ignore' });
-    const timer = killAfter === null ? undefined : setTimeout(() => child.kill('SIGKILL'), killAfter);
-    child.on('close', (code) => {
-      clearTimeout(timer);
-      resolve(code);
-    });
-  });
-}
-
 /** Whole and half-written files of a folder and the work folder in it. */
 function filesIn(folder: string): readonly string[] {
   return existsSync(folder) ? readdirSync(folder, { recursive: true }).map(String) : [];
 }
 
+const isChunk = (name: string) => name.endsWith('.bin');
+const isTableHalfWritten = (name: string) => /^draws\.parquet\..*\.tmp$/.test(name);
+
+/** Runs to its end, or is killed some milliseconds after `moment` has come. Gives the exit code, null when it was killed. */
+function run(folder: string, workers: number, moment: () => boolean, delay: number): Promise<number | null> {
+  return new Promise((resolve) => {
+    const words = ['--import', 'tsx', program, folder, rows, price, String(workers), '--resume'];
+    const child = spawn(process.execPath, words, { cwd: root, stdio: 'ignore' });
+    const watch = setInterval(() => {
+      if (!moment()) return;
+      clearInterval(watch);
+      setTimeout(() => child.kill('SIGKILL'), delay);
+    }, 1);
+    child.on('close', (code) => {
+      clearInterval(watch);
+      resolve(code);
+    });
+  });
+}
+
 test.each([1, 2])('kill -9 at random moments, %i workers', async (workers) => {
   const home = mkdtempSync(join(tmpdir(), 'perilag-kill-'));
   const [whole, killed] = [join(home, 'whole'), join(home, 'killed')];
-  const start = performance.now();
-  expect(await run(whole, workers, null)).toBe(0);
-  const duration = performance.now() - start;
-  let kills = 0;
-  let halfWritten = 0;
+  expect(await run(whole, workers, () => false, 0)).toBe(0);
+  const counts = { kills: 0, halfChunks: 0, halfTables: 0 };
   for (let round = 0; ; round++) {
-    // From the starting of the threads to the writing of the table; on a busy machine later and later, so that it ends.
-    const share = 0.2 + 0.8 * hashed(workers, round, 0) + 0.05 * round;
-    const code = await run(killed, workers, share * duration);
+    // Later and later: chunks grow from one row in every run.
+    const enough = filesIn(killed).filter(isChunk).length + Math.floor((5 + 5 * round) * hashed(workers, round, 0));
+    const moment = () => {
+      const files = filesIn(killed);
+      return files.filter(isChunk).length > enough || (counts.halfTables < 3 && files.some(isTableHalfWritten));
+    };
+    const code = await run(killed, workers, moment, 40 * hashed(workers, round, 1));
     if (code === 0) break;
     expect(code).toBeNull();
-    kills++;
-    if (filesIn(killed).some((name) => name.endsWith('.tmp'))) halfWritten++;
+    counts.kills++;
+    if (filesIn(killed).some((name) => name.includes('.bin.'))) counts.halfChunks++;
+    if (filesIn(killed).some(isTableHalfWritten)) counts.halfTables++;
   }
-  process.stderr.write(`${workers} workers: killed ${kills} times, ${halfWritten} of them with a file half written\n`);
-  expect(kills).toBeGreaterThan(0);
+  process.stderr.write(`${workers} workers: ${JSON.stringify(counts)}\n`);
+  expect(counts.kills).toBeGreaterThan(3);
   expect(readdirSync(killed).sort()).toEqual(['draws.parquet', 'failed.csv']);
   for (const name of ['draws.parquet', 'failed.csv'])
     expect(readFileSync(join(killed, name)).equals(readFileSync(join(whole, name))), name).toBe(true);

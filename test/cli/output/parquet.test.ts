@@ -2,6 +2,7 @@ import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { asyncBufferFromFile, parquetMetadataAsync, parquetReadObjects } from 'hyparquet';
+import { parquetWriteFile } from 'hyparquet-writer';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { createParquet } from '../../../cli/output/parquet.ts';
 import { openParquet, readColumn } from '../../../cli/output/parquetReader.ts';
@@ -65,6 +66,8 @@ describe('a Parquet file', () => {
     const read = await readColumn(path, 'orbit.eccentricity');
     expect(read.subarray(0, 100)).toEqual(few);
     expect(read.subarray(100).every(Number.isNaN)).toBe(true);
+    const half = await readColumn(path, 'temperatureMax');
+    expect(half.subarray(0, 100)).toEqual(many.map((value) => (Number.isFinite(value) ? value : NaN)));
   });
 
   test('repeated numbers are packed, others not, and both read back', async () => {
@@ -100,6 +103,21 @@ describe('a Parquet file', () => {
     expect(JSON.parse(table.metadata.labels!).temperatureMax).toBe('Maximum temperature');
     expect(table.metadata.fingerprint).toBe('abc');
     await table.close();
+  });
+
+  test('another program’s file is read as well: whole numbers, doubles, nulls', async () => {
+    parquetWriteFile({
+      filename: path,
+      rowGroupSize: 2,
+      columnData: [
+        { name: 'ecc', data: [0.1, null, 0.3], type: 'DOUBLE' },
+        { name: 'chain', data: Int32Array.of(1, 2, 3), type: 'INT32' },
+        { name: 'note', data: ['a', 'b', 'c'], type: 'STRING' },
+      ],
+    });
+    expect(await readColumn(path, 'ecc')).toEqual(Float64Array.of(0.1, NaN, 0.3));
+    expect(await readColumn(path, 'chain')).toEqual(Float64Array.of(1, 2, 3));
+    await expect(readColumn(path, 'note')).rejects.toThrow('the column "note" does not hold numbers');
   });
 
   test('has the same bytes when written again', () => {
