@@ -4,10 +4,10 @@
  */
 import { SimError } from '../error.ts';
 import { lumpedTraceModel } from '../models/lumped/traceFamily.ts';
-import type { TraceModel, TraceNumbers } from '../models/traceModel.ts';
+import type { TraceFamily, TraceModel, TraceNumbers } from '../models/traceModel.ts';
 import { zonalTraceModel } from '../models/zonal/traceFamily.ts';
 import type { Kelvin } from '../si.ts';
-import { type Branch, type BranchPoint, type Family, followBranch } from '../solve/continuation.ts';
+import { type Branch, type BranchPoint, followBranch } from '../solve/continuation.ts';
 import { rampAlbedo } from '../surface/albedo/ramp.ts';
 import type { World } from '../world.ts';
 
@@ -58,14 +58,14 @@ export function traceClimates(model: string, worldAt: (value: number) => World, 
   const tracer = traceModels[model];
   const stepped = worldAt(from).surface.albedo.ramp !== null && isStep(worldAt(from));
   const smooth = (value: number): World => withoutStep(worldAt(value));
-  const family = tracer.family(smooth, (to - from) / 2, from);
+  const family = tracer.family(smooth, { from, to });
   const branches: TraceBranch[] = [];
   for (const [value, direction] of [
     [to, -1],
     [from, 1],
   ] as const) {
     for (const y of tracer.startsAt(smooth(value), tolerance)) {
-      if (branches.some((branch) => passesThrough(branch, value, y, tracer, smooth, family))) continue;
+      if (branches.some((branch) => passesThrough(branch, value, y, family))) continue;
       const branch = followBranch(
         family,
         { y, p: value },
@@ -79,7 +79,7 @@ export function traceClimates(model: string, worldAt: (value: number) => World, 
           maximumPoints,
         },
       );
-      branches.push({ ended: branch.ended, points: branch.points.map((point) => describe(tracer, smooth, point)) });
+      branches.push({ ended: branch.ended, points: branch.points.map((point) => describe(family, point)) });
       options.progress?.(branches.length, branch.points.length);
     }
   }
@@ -104,28 +104,16 @@ function withoutStep(world: World): World {
   return { ...world, surface: { ...world.surface, albedo: wider } };
 }
 
-function describe(tracer: TraceModel, worldAt: (value: number) => World, point: BranchPoint): TracePoint {
-  return {
-    value: point.p,
-    stable: point.logMultiplier < 0,
-    logMultiplier: point.logMultiplier,
-    fold: point.fold,
-    ...tracer.summarise(worldAt(point.p), point),
-  };
+function describe(family: TraceFamily, { p, y, logMultiplier, fold }: BranchPoint): TracePoint {
+  const numbers = family.summarise(p, y);
+  if (numbers === null) throw new Error(`the year at ${p} was marched before and cannot be now`);
+  return { value: p, stable: logMultiplier < 0, logMultiplier, fold, ...numbers };
 }
 
 /** Whether a start lies on a branch: its mean temperature between two neighbouring points of it, at the same input. */
-function passesThrough(
-  branch: TraceBranch,
-  value: number,
-  y: Float64Array,
-  tracer: TraceModel,
-  worldAt: (value: number) => World,
-  family: Family,
-): boolean {
-  const map = family.at(value);
-  if (!map.year(y.slice())) return false;
-  const here = tracer.summarise(worldAt(value), { p: value, y, logMultiplier: 0, fold: false, map }).temperatureMean;
+function passesThrough(branch: TraceBranch, value: number, y: Float64Array, family: TraceFamily): boolean {
+  const here = family.summarise(value, y)?.temperatureMean;
+  if (here === undefined) return false;
   return branch.points.some((point, i) => {
     const next = branch.points[i + 1];
     if (next === undefined || (point.value - value) * (next.value - value) > 0) return false;
