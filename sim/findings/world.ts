@@ -5,7 +5,7 @@ import type { Kelvin } from '../si.ts';
 import type { World } from '../world.ts';
 import type { Finding } from './finding.ts';
 import { orbitMeanClosedForm } from './orbitMean.ts';
-import { steadyTemperature } from './steadyState.ts';
+import { repellingTemperature, steadyTemperature } from './steadyState.ts';
 
 /** The textbook and catalogue number: [f L(1−A)/(4πσa²)]^¼ with the warm albedo and unit emissivity; f = ¼ for a whole sphere. */
 export function textbookTemperature(world: World, absorbingFraction = 0.25): Kelvin {
@@ -14,11 +14,15 @@ export function textbookTemperature(world: World, absorbingFraction = 0.25): Kel
   return (absorbed / stefanBoltzmann) ** 0.25;
 }
 
-/** `near`: the temperature from which, with several balances, the steady values are reached. */
-export function worldFindings(world: World, near: Kelvin): Finding[] {
+/**
+ * `near`: the temperature from which, with several balances, the steady values are reached; or repelled, of a state that is
+ * not stable.
+ */
+export function worldFindings(world: World, near: Kelvin, isStable = true): Finding[] {
   const { star, orbit, surface } = world;
   const meanFlux = orbitMeanClosedForm(world);
-  const fluxMean = steadyTemperature(surface, meanFlux, near);
+  const balance = isStable ? steadyTemperature : repellingTemperature;
+  const fluxMean = balance(surface, meanFlux, near);
   return [
     { name: 'period', value: orbit.period, unit: 's', label: 'Orbital period' },
     { name: 'orbitMeanInstellation', value: meanFlux, unit: 'W/m2', label: 'Orbit-mean instellation' },
@@ -30,7 +34,7 @@ export function worldFindings(world: World, near: Kelvin): Finding[] {
     },
     {
       name: 'circularTemperature',
-      value: steadyTemperature(surface, instellation(star.luminosity, orbit.semiMajorAxis), near),
+      value: balance(surface, instellation(star.luminosity, orbit.semiMajorAxis), near),
       unit: 'K',
       label: 'Steady temperature at distance a',
     },

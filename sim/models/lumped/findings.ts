@@ -40,7 +40,7 @@ export function lumpedFindings(
     return { name, value, unit: 'K', label, plusMinus };
   };
   return [
-    ...worldFindings(world, mean),
+    ...worldFindings(world, mean, (trajectory.logMultiplier ?? -1) < 0),
     kelvin('steadyTemperatureMax', steady.highest, 'Maximum steady temperature', 0),
     kelvin('steadyTemperatureMin', steady.lowest, 'Minimum steady temperature', 0),
     kelvin('steadyTemperatureMean', steady.mean, 'Mean steady temperature', 0),
