@@ -6,7 +6,7 @@ import type { StageHistory } from '../../solve/rodas4.ts';
 import type { Globe, World } from '../../world.ts';
 import type { TraceModel, TraceNumbers } from '../traceModel.ts';
 import { areaMeanOf, iceFractionOf } from './areaMeans.ts';
-import { periodicStates } from './index.ts';
+import { isPhysical, periodicStates } from './index.ts';
 import { yearMap, zonalGrid } from './states.ts';
 import { type ZonalSystem, zonalSystem } from './system.ts';
 
@@ -18,7 +18,7 @@ export const zonalTraceModel: TraceModel = {
   startsAt(world, tolerance) {
     const globe = globeOf(world);
     return periodicStates(world, globe, globe.bands, tolerance)
-      .filter(({ logMultiplier }) => logMultiplier < 0)
+      .filter((state) => isPhysical(state) && state.logMultiplier < 0)
       .map(({ history, system }) => history.value.slice(0, system.size));
   },
   family(worldAt, { from, to }) {
