@@ -15,6 +15,8 @@ export interface Io {
   readonly columns: number;
   readonly env: Readonly<Record<string, string | undefined>>;
   readonly cwd: string;
+  /** A clock that only runs forwards, ms. */
+  readonly now: () => number;
   /** Path of the page that `npm run build` makes, to be filled with results. */
   readonly reportTemplate: string;
 }
@@ -32,6 +34,7 @@ export function processIo(reportTemplate: string): Io {
     columns: process.stdout.columns || Number(process.env.COLUMNS) || defaultColumns,
     env: process.env,
     cwd: process.cwd(),
+    now: () => performance.now(),
     reportTemplate,
   };
 }

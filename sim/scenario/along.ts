@@ -126,7 +126,7 @@ export function alongText({ unit }: Pick<Along, 'unit'>, value: number, digits =
 }
 
 /**
- * The cases of a scenario (those that `only` names) along one input, in the order of the file.
+ * The cases of a scenario (those that `only` names) along one input, in the order of the file; those that coincide as one.
  * Shape:  the text of a file that `readScenario` takes.
  * Errors: ScenarioError where it does not; SimError at `--along` where a case is not sound at an end of the range, or does not
  *         depend on the input.
@@ -135,10 +135,37 @@ export function casesAlong(text: string, file: string, along: Along, only?: read
   const { root, problems } = readDocument(text, file);
   if (!root) throw new ScenarioError(problems);
   const { cases } = takeApart(root);
-  return cases.filter(({ name }) => only?.includes(name) ?? true).map((item) => caseAlong(item, along));
+  const chosen = cases.filter(({ name }) => only?.includes(name) ?? true);
+  return coinciding(chosen.map((item) => caseAlong(item, along))).map(together);
 }
 
-function caseAlong({ name, tree }: CaseTree, along: Along): CaseAlong {
+/** Cases in groups that are one and the same along the input: they differed in what it replaces. */
+function coinciding(all: readonly PrintedCase[]): PrintedCase[][] {
+  const groups: PrintedCase[][] = [];
+  for (const one of all) {
+    const group = groups.find(([first]) => first!.print === one.print);
+    if (group) group.push(one);
+    else groups.push([one]);
+  }
+  return groups;
+}
+
+/** One case that bears the names of all. */
+function together(group: readonly PrintedCase[]): CaseAlong {
+  const { print: _, ...one } = group[0]!;
+  if (group.length === 1) return one;
+  const names = group.map(({ name }) => name);
+  const listed = names.map((name) => `“${name}”`).join(', ');
+  const warning = `The cases ${listed} are the same along this input, which replaces what sets them apart: they were followed once.`;
+  return { ...one, name: names.join(' = '), warnings: [...one.warnings, warning] };
+}
+
+/** With all that its climates depend on at both ends of the input. */
+interface PrintedCase extends CaseAlong {
+  readonly print: string;
+}
+
+function caseAlong({ name, tree }: CaseTree, along: Along): PrintedCase {
   const path = along.key.split('.');
   const listAt = path.findIndex((_, depth) => subtree(tree, path.slice(0, depth))?.kind === 'list');
   if (listAt >= 0) {
@@ -155,7 +182,8 @@ function caseAlong({ name, tree }: CaseTree, along: Along): CaseAlong {
     return made;
   };
   const [first, last] = [caseAt(along.from), caseAt(along.to)];
-  if (fingerprint(first.world) === fingerprint(last.world)) {
+  const prints = [fingerprint(first.world), fingerprint(last.world)];
+  if (prints[0] === prints[1]) {
     const what = `the climate of case \`${name}\` does not depend on ${along.key}`;
     throw new SimError(where, what, 'Follow another key, or leave the case out with --only');
   }
@@ -165,6 +193,7 @@ function caseAlong({ name, tree }: CaseTree, along: Along): CaseAlong {
     tolerance: first.options.tolerance,
     warnings: warningsOf(along, first.world, last.world),
     worldAt: (value) => caseAt(value).world,
+    print: JSON.stringify([first.model, first.options.tolerance, ...prints]),
   };
 }
 

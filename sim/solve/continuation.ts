@@ -34,6 +34,8 @@ export interface BranchOptions {
   readonly longest: number;
   readonly shortest: number;
   readonly maximumPoints: number;
+  /** Told before every step how many points there are and where the last one lies. */
+  readonly told?: (points: number, p: number) => void;
 }
 
 export interface Branch {
@@ -72,6 +74,7 @@ export function followBranch(family: Family, start: Vector, options: BranchOptio
   points.push(pointOf(here, first.evaluated, false));
   let step = options.longest / 4;
   while (points.length < options.maximumPoints) {
+    options.told?.(points.length, here.p);
     const guess = advance(here, direction, step, family);
     const bound = guess.p < options.from ? options.from : guess.p > options.to ? options.to : null;
     const last = bound === null ? null : endAt(solver, bound, here, direction, step);

@@ -39,8 +39,18 @@ export interface TraceOptions {
   readonly to: number;
   /** Relative error of temperature. */
   readonly tolerance: number;
-  /** Told of each branch, counted from 1, when it has been followed. */
-  readonly progress?: (branch: number, points: number) => void;
+  /** Told before every step along a branch, and when the branch has been followed. */
+  readonly progress?: (step: TraceStep) => void;
+}
+
+/** How far a trace is. */
+export interface TraceStep {
+  /** Counted from 1. */
+  readonly branch: number;
+  readonly points: number;
+  /** Of the input at the last point. */
+  readonly value: number;
+  readonly finished: boolean;
 }
 
 /** A stepped albedo is followed as a ramp of this width: its branch then turns where it would have a corner. */
@@ -66,6 +76,9 @@ export function traceClimates(model: string, worldAt: (value: number) => World, 
   ] as const) {
     for (const y of tracer.startsAt(smooth(value), tolerance)) {
       if (branches.some((branch) => passesThrough(branch, value, y, family))) continue;
+      const number = branches.length + 1;
+      const tell = (points: number, at: number, finished: boolean) =>
+        options.progress?.({ branch: number, points, value: at, finished });
       const branch = followBranch(
         family,
         { y, p: value },
@@ -77,10 +90,11 @@ export function traceClimates(model: string, worldAt: (value: number) => World, 
           longest: 0.06,
           shortest: 1e-7,
           maximumPoints,
+          told: (points, p) => tell(points, p, false),
         },
       );
       branches.push({ ended: branch.ended, points: branch.points.map((point) => describe(family, point)) });
-      options.progress?.(branches.length, branch.points.length);
+      tell(branch.points.length, branch.points.at(-1)?.p ?? value, true);
     }
   }
   return { branches, folds: foldsOf(branches), warnings: warningsOf(branches, stepped) };

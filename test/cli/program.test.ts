@@ -30,6 +30,7 @@ async function toldIn(columns: number): Promise<string> {
     columns,
     env: { LANG: 'C.UTF-8' },
     cwd: place.folder,
+    now: () => 0,
     reportTemplate: place.path('page.html'),
   };
   expect(await main(['run', 'corvane.yaml'], io)).toBe(0);
@@ -299,6 +300,7 @@ describe('run', () => {
         },
       ),
       cwd: place.folder,
+      now: () => 0,
       reportTemplate: place.path('page.html'),
     };
     expect(await main(['run', 'corvane.yaml'], io)).toBe(1);

@@ -67,6 +67,7 @@ export function workplace(env: Record<string, string> = { LANG: 'C.UTF-8' }): Wo
         columns: 80,
         env,
         cwd: folder,
+        now: () => 0,
         reportTemplate: path('page.html'),
       };
       return { code: await main(words, io), ...printed };
