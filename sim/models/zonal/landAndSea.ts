@@ -3,7 +3,7 @@ import type { StageSystem } from '../../solve/rodas4.ts';
 import { addMeridionalConvergence } from '../../transport/diffusion.ts';
 import type { YearMesh } from './mesh.ts';
 import { bandAlbedo, type LandPhysics, leastLand, seaHeatCapacity, type ZonalPhysics } from './physics.ts';
-import type { ZonalSystem } from './system.ts';
+import type { ZonalSystem } from './systemShape.ts';
 
 const width = 3;
 

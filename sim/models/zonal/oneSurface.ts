@@ -3,7 +3,7 @@ import type { StageSystem } from '../../solve/rodas4.ts';
 import { addMeridionalConvergence } from '../../transport/diffusion.ts';
 import type { YearMesh } from './mesh.ts';
 import { bandAlbedo, seaHeatCapacity, type ZonalPhysics } from './physics.ts';
-import type { ZonalSystem } from './system.ts';
+import type { ZonalSystem } from './systemShape.ts';
 
 export function oneSurface(physics: ZonalPhysics, mesh: YearMesh): ZonalSystem {
   const { bands, conductance, warm, warmAlbedo, iceAlbedo, world } = physics;

@@ -1,16 +1,9 @@
 /** The zonal balance as a stiff system on a year's mesh. Unknowns are band temperatures; with land, sea and land by turns. */
-import type { StageSystem } from '../../solve/rodas4.ts';
 import { landAndSea } from './landAndSea.ts';
 import type { YearMesh } from './mesh.ts';
 import { oneSurface } from './oneSurface.ts';
 import type { ZonalPhysics } from './physics.ts';
-
-export interface ZonalSystem extends StageSystem {
-  readonly mesh: YearMesh;
-  readonly physics: ZonalPhysics;
-  /** ∂f/∂y as `jacobianInto`, with the albedo's response to temperature left out. */
-  readonly frozenJacobianInto: StageSystem['jacobianInto'];
-}
+import type { ZonalSystem } from './systemShape.ts';
 
 /** Binds physics to a mesh; owns scratch buffers. */
 export function zonalSystem(physics: ZonalPhysics, mesh: YearMesh): ZonalSystem {

@@ -8,7 +8,8 @@ import type { TraceModel, TraceNumbers } from '../traceModel.ts';
 import { areaMeanOf, iceFractionOf } from './areaMeans.ts';
 import { isPhysical, periodicStates } from './index.ts';
 import { yearMap, zonalGrid } from './states.ts';
-import { type ZonalSystem, zonalSystem } from './system.ts';
+import { zonalSystem } from './system.ts';
+import type { ZonalSystem } from './systemShape.ts';
 
 /** Steps of a year while a branch is followed: coarser than a run's, the same for all of its points. */
 const fewestSteps = 48;
