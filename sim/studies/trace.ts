@@ -56,6 +56,8 @@ export interface TraceStep {
 /** A stepped albedo is followed as a ramp of this width: its branch then turns where it would have a corner. */
 const narrowRamp: Kelvin = 0.3;
 const maximumPoints = 600;
+/** ln of a multiplier at which a march, good to 1e-8, no longer tells where an unstable year began. */
+const illConditioned = 15;
 /** Two starts closer than this to a branch that is there already belong to it. */
 const onBranch: Kelvin = 0.1;
 
@@ -151,9 +153,19 @@ function warningsOf(branches: readonly TraceBranch[], stepped: boolean): string[
       `The albedo step is followed as a ramp ${narrowRamp} K wide: folds move by about 1e-3 of the input where ice first appears or last melts.`,
     );
   }
-  if (branches.some(({ ended }) => ended !== 'left')) {
+  const unfinished = branches.filter(({ ended }) => ended !== 'left');
+  if (unfinished.length > 0) {
     warnings.push(
       'A branch could not be followed to the end of the range: what lies beyond its last point is not shown.',
+    );
+  }
+  const strongest = Math.max(
+    0,
+    ...unfinished.flatMap(({ points }) => points.map((one) => Math.abs(one.logMultiplier))),
+  );
+  if (strongest > illConditioned) {
+    warnings.push(
+      `The heat store forgets far within a year: disturbances shrink or grow by a factor of up to e^${strongest.toFixed(0)}. An unstable climate is lost there, since a march through the year magnifies its rounding as much; only stable climates can be relied on.`,
     );
   }
   return warnings;
