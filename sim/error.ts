@@ -16,6 +16,11 @@ export class SimError extends Error {
   }
 }
 
+/** A number that no writer may let pass: our own fault, since whatever computed it should have said why there is none. */
+export function notAResult(where: string, value: number): Error {
+  return new Error(`${where}: ${value} is not a result`);
+}
+
 /** Advice as it is printed: a question ends as one. */
 export function sentence(mend: string): string {
   return `${mend}${mend.startsWith('Did you mean') ? '?' : '.'}`;

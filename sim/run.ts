@@ -40,7 +40,7 @@ export interface CaseResult {
   /** Textbook steady values for absorbing fractions ¼, ½, ⅔, 1 (K): [f L(1−A)/(4πσa²)]^¼. */
   readonly steadyByFraction: readonly { readonly fraction: number; readonly temperature: number }[];
   readonly warnings: readonly string[];
-  /** Both accounts kept and every state within the tolerance; the command line exits 3 otherwise. */
+  /** Both accounts kept, no state failed and every one within the tolerance; the command line exits 3 otherwise. */
   readonly passed: boolean;
 }
 
@@ -67,6 +67,7 @@ export function runCase(scenarioCase: ScenarioCase): CaseResult {
   const orbitMeanInstellation = checkOrbitMean(world, accountLimit);
   const relativeDifference = Math.max(...solution.states.map((state) => state.energyBalance.relativeDifference));
   const energyBalance = { relativeDifference, passed: relativeDifference <= accountLimit };
+  const { failures = [] } = solution;
   const unconverged = solution.states.filter((state) => !state.converged);
   return {
     name,
@@ -85,9 +86,10 @@ export function runCase(scenarioCase: ScenarioCase): CaseResult {
     warnings: [
       ...scenarioCase.warnings,
       ...solution.warnings,
+      ...failures,
       ...unconverged.map((state) => missed(state, options.tolerance)),
     ],
-    passed: orbitMeanInstellation.passed && energyBalance.passed && unconverged.length === 0,
+    passed: orbitMeanInstellation.passed && energyBalance.passed && unconverged.length === 0 && failures.length === 0,
   };
 }
 

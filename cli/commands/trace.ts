@@ -2,6 +2,7 @@
 import { basename, extname, join, resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
 import { originOf } from '../../sim/origin.ts';
+import { formatNumber } from '../../sim/quantity/index.ts';
 import { type Along, readAlong } from '../../sim/scenario/along.ts';
 import { type CaseAlong, casesAlong } from '../../sim/scenario/caseAlong.ts';
 import { reportedAlong, traceAlong } from '../../sim/studies/traceAlong.ts';
@@ -10,6 +11,7 @@ import { exitCode } from '../exit.ts';
 import type { Io } from '../io.ts';
 import { writeFolder } from '../output/folder.ts';
 import { jsonText } from '../output/json.ts';
+import { type Progress, progressOf } from '../output/progress.ts';
 import { pagePieces } from '../output/report.ts';
 import { scenarioYamlText } from '../output/scenarioYaml.ts';
 import { terminalOf } from '../output/terminal.ts';
@@ -36,12 +38,9 @@ export async function trace(file: string, options: TraceCommandOptions, program:
   const folder = outputFolder(file, options.out);
   const names = item!.scenario.cases.map(({ name }) => name);
   const cases = casesAlong(item!.text, file, along, names);
-  const report = reportOf(
-    item!,
-    along,
-    cases.map((one) => follow(one, along, options, io)),
-    program,
-  );
+  const progress = progressOf(io, options.quiet);
+  const followed = cases.map((one) => follow(one, along, progress));
+  const report = reportOf(item!, along, followed, program);
   const place = resolve(io.cwd, folder);
   await writeFolder(place, filesOf(report, item!, place, io));
   show(report, folder, options, io);
@@ -54,12 +53,13 @@ function outputFolder(file: string, out: string | undefined): string {
   return out ?? join('out', basename(file, extname(file)), 'trace');
 }
 
-function follow(one: CaseAlong, along: Along, { quiet }: TraceCommandOptions, io: Io): TraceReportCase {
-  const tell = (text: string) => {
-    if (io.isTTY && !quiet) io.stderr.write(`${printable(`${one.name}: ${text}`)}\n`);
-  };
-  tell('following its climates');
-  return traceAlong(one, along, (branch: number, points: number) => tell(`branch ${branch}, ${points} points`));
+function follow(one: CaseAlong, along: Along, progress: Progress): TraceReportCase {
+  progress.milestone(`${one.name}: following its climates`);
+  return traceAlong(one, along, ({ branch, points, value, finished }) => {
+    const counted = `${one.name}: branch ${branch}, ${points} points`;
+    if (finished) progress.milestone(counted);
+    else progress.beat(() => `${counted}, at ${formatNumber(value)}${along.unit === '1' ? '' : ` ${along.unit}`}`);
+  });
 }
 
 function reportOf(

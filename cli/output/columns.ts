@@ -56,6 +56,11 @@ export function periodOf({ state, heading }: Pick<Column, 'state' | 'heading'>):
   return period;
 }
 
+/** Decimals of a time in a unit: about a ten-thousandth of the orbit. */
+export function timeDecimals(column: Pick<Column, 'state' | 'heading'>, { seconds }: TimeUnit): number {
+  return Math.max(0, Math.min(6, 4 - Math.floor(Math.log10(periodOf(column) / seconds))));
+}
+
 /** Hours for orbits under five days, years for those over a thousand. */
 export function timeUnitFor(period: number): TimeUnit {
   if (period < 5 * day.seconds) return hour;

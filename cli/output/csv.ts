@@ -1,13 +1,13 @@
 /** Comma-separated values: RFC 4180 quoting, numbers in the shortest text that reads back as the same number. */
-import { SimError } from '../../sim/error.ts';
+import { notAResult } from '../../sim/error.ts';
 
 /** A field of text, quoted where it must be. */
 export function csvField(text: string): string {
   return /[",\r\n]/.test(text) ? `"${text.replaceAll('"', '""')}"` : text;
 }
 
-/** Errors: SimError when the number is not finite; `where` names its column. */
+/** Errors: throws when the number is not finite; `where` names its column. */
 export function csvNumber(value: number, where: string): string {
-  if (!Number.isFinite(value)) throw new SimError(where, `${value} is not a result`, 'Only finite numbers are written');
+  if (!Number.isFinite(value)) throw notAResult(where, value);
   return String(value);
 }

@@ -1,13 +1,11 @@
 /** JSON that a person can read too: what fits on a line stays on one. */
-import { SimError } from '../../sim/error.ts';
+import { notAResult } from '../../sim/error.ts';
 
 const lineWidth = 120;
 
-/** Indented by two spaces. Errors: SimError that names a number which is not finite. */
+/** Indented by two spaces. Errors: one that names a number which is not finite. */
 export function jsonText(value: unknown, path = 'summary', indent = ''): string {
-  if (typeof value === 'number' && !Number.isFinite(value)) {
-    throw new SimError(path, `${value} is not a result`, 'Only finite numbers are written');
-  }
+  if (typeof value === 'number' && !Number.isFinite(value)) throw notAResult(path, value);
   if (value === null || typeof value !== 'object') return JSON.stringify(value) ?? 'null';
   const entries = Array.isArray(value)
     ? value.map((item, index) => entryText('', item, `${path}.${index}`, indent))

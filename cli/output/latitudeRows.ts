@@ -1,5 +1,5 @@
 /** What the terminal table shows of models with latitude: where and when the extremes are, ice, windows, local lags. */
-import { type Column, findingOf, periodOf, type TimeUnit } from './columns.ts';
+import { type Column, findingOf, periodOf, type TimeUnit, timeDecimals } from './columns.ts';
 import { percent, significant, withError } from './numbers.ts';
 import { type Cell, type Defined, type Row, row } from './row.ts';
 
@@ -66,7 +66,10 @@ function edgeRow(section: string, word: string, side: string): Row {
   return { section, label: `${word} edge at latitude`, alone: `${word} ice edge`, cell };
 }
 
-function lagRows({ symbol, seconds }: TimeUnit): readonly Row[] {
+function lagRows(unit: TimeUnit): readonly Row[] {
+  const { symbol, seconds } = unit;
+  const time = ({ value, plusMinus = 0 }: Defined, column: Column) =>
+    withError(value / seconds, timeDecimals(column, unit), plusMinus / seconds);
   const section = `local lag behind insolation, ${symbol}`;
   return [
     ['equator', 'lagAtEquator'],
@@ -74,9 +77,7 @@ function lagRows({ symbol, seconds }: TimeUnit): readonly Row[] {
     ['45 S', 'lagAt45South'],
     ['north pole', 'lagAtNorthPole'],
     ['south pole', 'lagAtSouthPole'],
-  ].map(([label, name]) =>
-    row(section, label!, name!, ({ value }) => significant(value / seconds, 3), `local lag, ${label}, ${symbol}`),
-  );
+  ].map(([label, name]) => row(section, label!, name!, time, `local lag, ${label}, ${symbol}`));
 }
 
 /** Of each temperature window: how much of the globe, for how long. */

@@ -7,7 +7,7 @@ import { closeSync, openSync } from 'node:fs';
 import { rm } from 'node:fs/promises';
 import { setImmediate } from 'node:timers/promises';
 import type { Dataset, Group } from 'h5wasm/node';
-import { SimError } from '../../sim/error.ts';
+import { notAResult, SimError } from '../../sim/error.ts';
 import { type Hdf5, loadHdf5, withoutClock } from './hdf5.ts';
 
 export type NetcdfAttributes = Readonly<Record<string, string | number>>;
@@ -41,7 +41,7 @@ const plainName = /^[A-Za-z][A-Za-z0-9_]*$/;
 /**
  * Writes `file` as float64 to `path`, where nothing stands yet. Large fields (two dimensions or more) are compressed.
  * The same input gives the same bytes. `checkpoint` is called between chunks and may throw to stop.
- * Errors: SimError that names the variable when a number is not finite, or the path when it cannot be written;
+ * Errors: one that names the variable when a number is not finite; SimError that names the path when it cannot be written;
  *         either way no file is left.
  */
 export async function writeNetcdf(path: string, file: NetcdfFile, checkpoint = () => {}): Promise<void> {
@@ -164,7 +164,7 @@ function setAttributes(object: Group | Dataset, attributes: NetcdfAttributes): v
   }
 }
 
-/** Before anything is written. A number that is not finite is told to the user; the rest is the caller's mistake. */
+/** Before anything is written: all of it would be the caller's mistake. */
 function checkGroup({ attributes, dimensions, variables, groups }: NetcdfGroup, path: string): void {
   for (const name of [attributes, dimensions, variables, groups].flatMap(Object.keys)) checkName(name, path);
   for (const [name, variable] of Object.entries(variables)) checkVariable(`${path}${name}`, name, variable, dimensions);
@@ -183,8 +183,7 @@ function checkVariable(
   const length = dims.reduce((product, dim) => product * (dimensions[dim] ?? Number.NaN), 1);
   if (!(data.length === length && length > 0)) throw new Error(`${path}: ${data.length} values on [${dims}]`);
   const at = data.findIndex((value) => !Number.isFinite(value));
-  if (at !== -1)
-    throw new SimError(path, `${data[at]} at index ${at} is not a result`, 'Only finite numbers are stored');
+  if (at !== -1) throw notAResult(`${path} at index ${at}`, data[at]!);
 }
 
 function checkName(name: string, path: string): void {

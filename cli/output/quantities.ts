@@ -1,6 +1,14 @@
 /** What the terminal table shows of each state, in the order and the words a reader wants them. */
 import type { Window } from '../../sim/world.ts';
-import { type Column, commonTimeUnit, hasLatitudes, isForward, periodOf, type TimeUnit } from './columns.ts';
+import {
+  type Column,
+  commonTimeUnit,
+  hasLatitudes,
+  isForward,
+  periodOf,
+  type TimeUnit,
+  timeDecimals,
+} from './columns.ts';
 import { latitudeRows, latitudeWindowRows } from './latitudeRows.ts';
 import { percent, significant, withError } from './numbers.ts';
 import { type Cell, type Defined, type Row, row } from './row.ts';
@@ -71,10 +79,11 @@ function temperatureRows(ofMean: string): readonly Row[] {
 }
 
 /** Runs from a start count from there, periodic states from periapsis. */
-function timingRows({ symbol, seconds }: TimeUnit, ofMean: string): readonly Row[] {
+function timingRows(unit: TimeUnit, ofMean: string): readonly Row[] {
+  const { symbol, seconds } = unit;
   const section = `maximum${ofMean} comes`;
   const time = ({ value, plusMinus = 0 }: Defined, column: Column) =>
-    withError(value / seconds, decimalsFor(periodOf(column) / seconds), plusMinus / seconds);
+    withError(value / seconds, timeDecimals(column, unit), plusMinus / seconds);
   const timeAfter = (origin: string, counts: (column: Column) => boolean): Row => {
     const shown = row(section, `after ${origin}, ${symbol}`, 'timeOfMax', time, `maximum after ${origin}, ${symbol}`);
     return { ...shown, cell: (column) => (counts(column) ? shown.cell(column) : null) };
@@ -84,11 +93,6 @@ function timingRows({ symbol, seconds }: TimeUnit, ofMean: string): readonly Row
     timeAfter('the start', ({ state }) => isForward(state)),
     row(section, `after the steady maximum, ${symbol}`, 'lagOfMax', time, `lag of maximum, ${symbol}`),
   ];
-}
-
-/** About a ten-thousandth of the orbit. */
-function decimalsFor(period: number): number {
-  return Math.max(0, Math.min(6, 4 - Math.floor(Math.log10(period))));
 }
 
 function responseRows(): readonly Row[] {

@@ -26,7 +26,7 @@ const columns: readonly Column[] = [
   { header: 'steady_temperature_K', variable: 'steadyTemperature', unit: 1 },
 ];
 
-/** The file as text. Errors: SimError when a number in it is not finite. */
+/** The file as text. Errors: throws when a number in it is not finite. */
 export function seriesText(result: RunResult): string {
   const header = ['case', 'state', ...columns.map((column) => column.header)].join(',');
   const blocks = result.cases.flatMap(({ name, states }) =>

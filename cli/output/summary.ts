@@ -5,7 +5,7 @@ import type { CaseResult, RunResult } from '../../sim/run.ts';
 import type { CaseInput } from '../../sim/scenario/types.ts';
 import { jsonText } from './json.ts';
 
-/** The file as text. Errors: SimError when a number in it is not finite. */
+/** The file as text. Errors: throws when a number in it is not finite. */
 export function summaryText(result: RunResult): string {
   return `${jsonText(summaryOf(result))}\n`;
 }

@@ -13,7 +13,7 @@ const columns: readonly { readonly header: string; readonly of: (point: TraceRep
   { header: 'ice_fraction', of: ({ iceFraction }) => iceFraction },
 ];
 
-/** A row for each point, in the order in which its branch runs. Errors: SimError when a number in it is not finite. */
+/** A row for each point, in the order in which its branch runs. Errors: throws when a number in it is not finite. */
 export function traceCsvText({ along, cases }: TraceReport): string {
   const input = inputHeader(along);
   const rows = cases.flatMap(({ name, branches }) =>

@@ -4,7 +4,7 @@
  * and are refused. Fields of many numbers go in single precision, `{ f4: … }`: they are looked at here, and stand in full in
  * their own file.
  */
-import { SimError } from '../error.ts';
+import { notAResult, SimError } from '../error.ts';
 
 /** What stands for a Float64Array in JSON. */
 type PortableArray = { readonly f8: string } | { readonly f4: string };
@@ -20,11 +20,11 @@ const isLittleEndian = new Uint8Array(Uint16Array.of(1).buffer)[0] === 1;
 
 /**
  * A copy of `value` that JSON can hold; anything but typed arrays, plain objects, arrays and primitives is refused.
- * Errors: SimError that names the path of a number that is not finite.
+ * Errors: one that names the path of a number that is not finite; SimError for what cannot be stored.
  */
 export function toPortable(value: unknown, path = 'result'): unknown {
   if (value instanceof Float64Array) return encode(value, path);
-  if (typeof value === 'number' && !Number.isFinite(value)) throw notFinite(path, value);
+  if (typeof value === 'number' && !Number.isFinite(value)) throw notAResult(path, value);
   if (typeof value === 'function') throw new SimError(path, 'a function cannot be stored', 'Keep results plain data');
   if (value === null || typeof value !== 'object') return value;
   if (Array.isArray(value)) return value.map((item, index) => toPortable(item, `${path}.${index}`));
@@ -88,7 +88,7 @@ function isPortableArray(value: object): value is PortableArray {
 
 function encode(data: Float64Array, path: string): PortableArray {
   for (let at = 0; at < data.length; at++) {
-    if (!Number.isFinite(data[at])) throw notFinite(`${path}.${at}`, data[at]!);
+    if (!Number.isFinite(data[at])) throw notAResult(`${path}.${at}`, data[at]!);
   }
   return data.length > longestExact
     ? { f4: btoa(binaryText(singleBytes(data))) }
@@ -145,8 +145,4 @@ function bytesOf(base64: string, each: 4 | 8): Uint8Array<ArrayBuffer> {
 
 function requireWhole(bytes: number, each: 4 | 8): void {
   if (bytes % each !== 0) throw new SimError(`f${each}`, 'the stored numbers are cut short', 'Make the file anew');
-}
-
-function notFinite(path: string, value: number): SimError {
-  return new SimError(path, `${value} is not a result`, 'Only finite numbers are stored');
 }

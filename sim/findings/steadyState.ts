@@ -29,6 +29,19 @@ export function steadyTemperature(surface: Surface, instellation: Flux, temperat
     : settleDownwards(surface, instellation, temperature);
 }
 
+/**
+ * The balance inside the ramp from which a surface at `temperature` is repelled: it lies against the direction of its
+ * heating. Where there is none, the one where it would settle.
+ */
+export function repellingTemperature(surface: Surface, instellation: Flux, temperature: Kelvin): Kelvin {
+  const { ramp } = surface.albedo;
+  if (ramp === null) return steadyTemperature(surface, instellation, temperature);
+  const isHeated = netHeating(surface, instellation, temperature) >= 0;
+  const start = Math.min(ramp.to, Math.max(ramp.from, temperature));
+  const root = firstBalance(surface, instellation, start, isHeated ? ramp.from : ramp.to, isHeated);
+  return root ?? steadyTemperature(surface, instellation, temperature);
+}
+
 /** Subdivisions of the ramp in which a sign change of the heating is looked for. */
 const rampSteps = 24;
 
@@ -40,7 +53,7 @@ function settleUpwards(surface: Surface, instellation: Flux, temperature: Kelvin
   }
   if (temperature < to) {
     const start = Math.max(from, temperature);
-    const root = firstBalance(surface, instellation, start, to);
+    const root = firstBalance(surface, instellation, start, to, true);
     if (root !== null) return root;
   }
   return steadyAtAlbedo(surface, instellation, surface.albedo.warm);
@@ -54,22 +67,27 @@ function settleDownwards(surface: Surface, instellation: Flux, temperature: Kelv
   }
   if (temperature > from) {
     const start = Math.min(to, temperature);
-    const root = firstBalance(surface, instellation, start, from);
+    const root = firstBalance(surface, instellation, start, from, false);
     if (root !== null) return root;
   }
   return steadyAtAlbedo(surface, instellation, surface.albedo.ice);
 }
 
-/** First sign change of the heating on the way from `start` to `end`, strictly inside the ramp; null when there is none. */
-function firstBalance(surface: Surface, instellation: Flux, start: Kelvin, end: Kelvin): Kelvin | null {
+/** Where the heating first loses its sign on the way from `start` to `end`, inside the ramp; null when it never does. */
+function firstBalance(
+  surface: Surface,
+  instellation: Flux,
+  start: Kelvin,
+  end: Kelvin,
+  isHeated: boolean,
+): Kelvin | null {
   if (start === end) return null;
   const heating = (t: Kelvin) => netHeating(surface, instellation, t);
-  const rising = end > start;
   let previous = start;
   for (let i = 1; i <= rampSteps; i++) {
     const next = i === rampSteps ? end : start + ((end - start) * i) / rampSteps;
     const here = heating(next);
-    if (rising ? here < 0 : here > 0) return rootBetween(heating, previous, next);
+    if (isHeated ? here < 0 : here > 0) return rootBetween(heating, previous, next);
     previous = next;
   }
   return null;

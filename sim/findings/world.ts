@@ -5,7 +5,7 @@ import type { Kelvin } from '../si.ts';
 import type { World } from '../world.ts';
 import type { Finding, FindingColumn } from './finding.ts';
 import { orbitMeanClosedForm } from './orbitMean.ts';
-import { steadyTemperature } from './steadyState.ts';
+import { repellingTemperature, steadyTemperature } from './steadyState.ts';
 
 /** The textbook and catalogue number: [f L(1−A)/(4πσa²)]^¼ with the warm albedo and unit emissivity; f = ¼ for a whole sphere. */
 export function textbookTemperature(world: World, absorbingFraction = 0.25): Kelvin {
@@ -25,22 +25,23 @@ export const worldColumns: readonly FindingColumn[] = [
 
 /**
  * Overwrites the first entries of `values`, one for each of `worldColumns`. `near`: the temperature from which, with several
- * balances, the steady values are reached.
+ * balances, the steady values are reached; or repelled, of a state that is not stable.
  */
-export function worldValuesInto(world: World, near: Kelvin, values: Float64Array): void {
+export function worldValuesInto(world: World, near: Kelvin, isStable: boolean, values: Float64Array): void {
   const { star, orbit, surface } = world;
   const meanFlux = orbitMeanClosedForm(world);
-  const fluxMean = steadyTemperature(surface, meanFlux, near);
+  const balance = isStable ? steadyTemperature : repellingTemperature;
+  const fluxMean = balance(surface, meanFlux, near);
   values[0] = orbit.period;
   values[1] = meanFlux;
   values[2] = textbookTemperature(world);
-  values[3] = steadyTemperature(surface, instellation(star.luminosity, orbit.semiMajorAxis), near);
+  values[3] = balance(surface, instellation(star.luminosity, orbit.semiMajorAxis), near);
   values[4] = fluxMean;
   values[5] = surface.heatCapacity / surface.emission.slopeAt(fluxMean);
 }
 
-export function worldFindings(world: World, near: Kelvin): Finding[] {
+export function worldFindings(world: World, near: Kelvin, isStable = true): Finding[] {
   const values = new Float64Array(worldColumns.length);
-  worldValuesInto(world, near, values);
+  worldValuesInto(world, near, isStable, values);
   return worldColumns.map((column, i) => ({ ...column, value: values[i] }));
 }

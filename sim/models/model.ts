@@ -37,6 +37,8 @@ export interface Solution {
   /** Warm first. */
   readonly states: readonly State[];
   readonly warnings: readonly string[];
+  /** States that were looked for and could not be computed, each in the words that say so; the run does not pass. */
+  readonly failures?: readonly string[];
   /** Newton sweeps or steps taken, for the log. */
   readonly iterations: number;
 }

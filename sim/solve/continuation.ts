@@ -21,8 +21,6 @@ export interface BranchPoint {
   readonly logMultiplier: number;
   /** Where p turns back, rather than a regular point. */
   readonly fold: boolean;
-  /** The year map at this point, its history that of the state. */
-  readonly map: YearMap;
 }
 
 export interface BranchOptions {
@@ -36,6 +34,8 @@ export interface BranchOptions {
   readonly longest: number;
   readonly shortest: number;
   readonly maximumPoints: number;
+  /** Told before every step how many points there are and where the last one lies. */
+  readonly told?: (points: number, p: number) => void;
 }
 
 export interface Branch {
@@ -50,9 +50,14 @@ interface Vector {
 }
 
 interface Evaluated {
-  readonly map: YearMap;
   readonly residual: Float64Array;
   readonly tangent: Tangent;
+}
+
+/** The plane in which a correction moves, and ∂R/∂p. */
+interface Border {
+  readonly like: Vector;
+  readonly byParameter: Float64Array;
 }
 
 const vectors = 60;
@@ -69,6 +74,7 @@ export function followBranch(family: Family, start: Vector, options: BranchOptio
   points.push(pointOf(here, first.evaluated, false));
   let step = options.longest / 4;
   while (points.length < options.maximumPoints) {
+    options.told?.(points.length, here.p);
     const guess = advance(here, direction, step, family);
     const bound = guess.p < options.from ? options.from : guess.p > options.to ? options.to : null;
     const last = bound === null ? null : endAt(solver, bound, here, direction, step);
@@ -130,8 +136,8 @@ function roundCorner(solver: Follower, here: Vector, direction: Vector, options:
   return null;
 }
 
-function pointOf(at: Vector, { map, tangent }: Evaluated, fold: boolean): BranchPoint {
-  return { p: at.p, y: at.y, logMultiplier: logDominantMultiplier(tangent), fold, map };
+function pointOf(at: Vector, { tangent }: Evaluated, fold: boolean): BranchPoint {
+  return { p: at.p, y: at.y, logMultiplier: logDominantMultiplier(tangent), fold };
 }
 
 function advance(from: Vector, direction: Vector, step: number, family: Family): Vector {
@@ -154,7 +160,7 @@ function locateFold(
   let high = step;
   let lowSlope = direction.p;
   let highSlope = turned.p;
-  let best: BranchPoint | null = null;
+  let best: { readonly at: Vector; readonly evaluated: Evaluated } | null = null;
   let bestSlope = Number.POSITIVE_INFINITY;
   for (let trial = 0; trial < 12; trial++) {
     const share = lowSlope / (lowSlope - highSlope);
@@ -164,7 +170,7 @@ function locateFold(
     const slope = solver.direction(found.at, found.evaluated, direction);
     if (Math.abs(slope.p) < bestSlope) {
       bestSlope = Math.abs(slope.p);
-      best = pointOf(found.at, found.evaluated, true);
+      best = found;
     }
     // The error of p is the slope times half the interval.
     if (Math.abs(slope.p) * (high - low) < 1e-7) break;
@@ -176,7 +182,7 @@ function locateFold(
       highSlope = slope.p;
     }
   }
-  return best;
+  return best === null ? null : pointOf(best.at, best.evaluated, true);
 }
 
 /** Evaluates, corrects and differentiates; directions are in scaled units with length 1. */
@@ -210,7 +216,7 @@ class Follower {
     if (!map.year(end)) return null;
     const tangent = map.tangent();
     if (tangent === null) return null;
-    return { map, tangent, residual: end.map((value, i) => value - at.y[i]) };
+    return { tangent, residual: end.map((value, i) => value - at.y[i]) };
   }
 
   /** ∂R/∂p by a one-sided difference, taken inside the range. */
@@ -227,10 +233,15 @@ class Follower {
     const { family, options } = this;
     let at = guess;
     let lastChange = Number.POSITIVE_INFINITY;
+    // ∂R/∂p hardly varies within a step: that of the guess serves all iterations.
+    let byParameter: Float64Array | null = null;
     for (let iterations = 1; iterations <= newtonLimit; iterations++) {
       const evaluated = this.evaluate(at);
       if (evaluated === null) return null;
-      const change = this.solveBordered(at, evaluated, direction, evaluated.residual, 0);
+      if (direction !== null) byParameter ??= this.slopeByParameter(at, evaluated.residual);
+      const border = direction === null || byParameter === null ? null : { like: direction, byParameter };
+      if (direction !== null && border === null) return null;
+      const change = this.solveBordered(evaluated.tangent, border, evaluated.residual, 0);
       if (change === null) return null;
       const size = change.y.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
       if (!(size < 20 * Math.max(1, family.yScale)) || size > 50 * lastChange) return null;
@@ -238,7 +249,7 @@ class Follower {
       at = { y: at.y.map((value, i) => value + change.y[i]), p: at.p + change.p };
       if (size <= options.tolerance && Math.abs(change.p) <= 1e-7 * family.pScale) {
         const final = this.evaluate(at);
-        return final === null ? null : { at, evaluated: final, iterations };
+        return final === null ? null : { at, evaluated: final };
       }
     }
     return null;
@@ -247,7 +258,9 @@ class Follower {
   /** Unit tangent of the branch, on the side of `like`. */
   direction(at: Vector, evaluated: Evaluated, like: Vector): Vector {
     const zero = new Float64Array(this.family.size);
-    const solved = this.solveBordered(at, evaluated, like, zero, 1) ?? { y: zero, p: like.p };
+    const byParameter = this.slopeByParameter(at, evaluated.residual);
+    const border = byParameter === null ? null : { like, byParameter };
+    const solved = (border && this.solveBordered(evaluated.tangent, border, zero, 1)) ?? { y: zero, p: like.p };
     const scaled = { y: solved.y.map((value) => value / this.family.yScale), p: solved.p / this.family.pScale };
     const length = Math.sqrt(this.dot(scaled, scaled));
     const sign = this.dot(scaled, like) < 0 ? -1 : 1;
@@ -255,15 +268,9 @@ class Follower {
   }
 
   /**
-   * Solves (1 − M) δy − R_p δp = right, with `like` · (δy, δp) = along in scaled units; δp = 0 when `like` is null.
+   * Solves (1 − M) δy − R_p δp = right, with `like` · (δy, δp) = along in scaled units; δp = 0 where there is no border.
    */
-  private solveBordered(
-    at: Vector,
-    { tangent, residual }: Evaluated,
-    like: Vector | null,
-    right: Float64Array,
-    along: number,
-  ): Vector | null {
+  private solveBordered(tangent: Tangent, border: Border | null, right: Float64Array, along: number): Vector | null {
     const { family } = this;
     const precondition = meanYearPreconditioner(tangent, 0);
     const oneLess = (v: Float64Array): Float64Array => {
@@ -271,9 +278,8 @@ class Follower {
       for (let i = 0; i < end.length; i++) end[i] = v[i] - end[i];
       return end;
     };
-    if (like === null) return { y: gmres(oneLess, precondition, right, vectors, 1e-6).x, p: 0 };
-    const byParameter = this.slopeByParameter(at, residual);
-    if (byParameter === null) return null;
+    if (border === null) return { y: gmres(oneLess, precondition, right, vectors, 1e-6).x, p: 0 };
+    const { like, byParameter } = border;
     const n = family.size;
     // Last unknown: δp/pScale, weighted so that its row is of the size of a temperature.
     const apply = (v: Float64Array): Float64Array => {

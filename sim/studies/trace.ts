@@ -4,10 +4,10 @@
  */
 import { SimError } from '../error.ts';
 import { lumpedTraceModel } from '../models/lumped/traceFamily.ts';
-import type { TraceModel, TraceNumbers } from '../models/traceModel.ts';
+import type { TraceFamily, TraceModel, TraceNumbers } from '../models/traceModel.ts';
 import { zonalTraceModel } from '../models/zonal/traceFamily.ts';
 import type { Kelvin } from '../si.ts';
-import { type Branch, type BranchPoint, type Family, followBranch } from '../solve/continuation.ts';
+import { type Branch, type BranchPoint, followBranch } from '../solve/continuation.ts';
 import { rampAlbedo } from '../surface/albedo/ramp.ts';
 import type { World } from '../world.ts';
 
@@ -39,13 +39,25 @@ export interface TraceOptions {
   readonly to: number;
   /** Relative error of temperature. */
   readonly tolerance: number;
-  /** Told of each branch, counted from 1, when it has been followed. */
-  readonly progress?: (branch: number, points: number) => void;
+  /** Told before every step along a branch, and when the branch has been followed. */
+  readonly progress?: (step: TraceStep) => void;
+}
+
+/** How far a trace is. */
+export interface TraceStep {
+  /** Counted from 1. */
+  readonly branch: number;
+  readonly points: number;
+  /** Of the input at the last point. */
+  readonly value: number;
+  readonly finished: boolean;
 }
 
 /** A stepped albedo is followed as a ramp of this width: its branch then turns where it would have a corner. */
 const narrowRamp: Kelvin = 0.3;
 const maximumPoints = 600;
+/** ln of a multiplier at which a march, good to 1e-8, no longer tells where an unstable year began. */
+const illConditioned = 15;
 /** Two starts closer than this to a branch that is there already belong to it. */
 const onBranch: Kelvin = 0.1;
 
@@ -58,14 +70,17 @@ export function traceClimates(model: string, worldAt: (value: number) => World, 
   const tracer = traceModels[model];
   const stepped = worldAt(from).surface.albedo.ramp !== null && isStep(worldAt(from));
   const smooth = (value: number): World => withoutStep(worldAt(value));
-  const family = tracer.family(smooth, (to - from) / 2, from);
+  const family = tracer.family(smooth, { from, to });
   const branches: TraceBranch[] = [];
   for (const [value, direction] of [
     [to, -1],
     [from, 1],
   ] as const) {
     for (const y of tracer.startsAt(smooth(value), tolerance)) {
-      if (branches.some((branch) => passesThrough(branch, value, y, tracer, smooth, family))) continue;
+      if (branches.some((branch) => passesThrough(branch, value, y, family))) continue;
+      const number = branches.length + 1;
+      const tell = (points: number, at: number, finished: boolean) =>
+        options.progress?.({ branch: number, points, value: at, finished });
       const branch = followBranch(
         family,
         { y, p: value },
@@ -77,10 +92,11 @@ export function traceClimates(model: string, worldAt: (value: number) => World, 
           longest: 0.06,
           shortest: 1e-7,
           maximumPoints,
+          told: (points, p) => tell(points, p, false),
         },
       );
-      branches.push({ ended: branch.ended, points: branch.points.map((point) => describe(tracer, smooth, point)) });
-      options.progress?.(branches.length, branch.points.length);
+      branches.push({ ended: branch.ended, points: branch.points.map((point) => describe(family, point)) });
+      tell(branch.points.length, branch.points.at(-1)?.p ?? value, true);
     }
   }
   return { branches, folds: foldsOf(branches), warnings: warningsOf(branches, stepped) };
@@ -104,28 +120,16 @@ function withoutStep(world: World): World {
   return { ...world, surface: { ...world.surface, albedo: wider } };
 }
 
-function describe(tracer: TraceModel, worldAt: (value: number) => World, point: BranchPoint): TracePoint {
-  return {
-    value: point.p,
-    stable: point.logMultiplier < 0,
-    logMultiplier: point.logMultiplier,
-    fold: point.fold,
-    ...tracer.summarise(worldAt(point.p), point),
-  };
+function describe(family: TraceFamily, { p, y, logMultiplier, fold }: BranchPoint): TracePoint {
+  const numbers = family.summarise(p, y);
+  if (numbers === null) throw new Error(`the year at ${p} was marched before and cannot be now`);
+  return { value: p, stable: logMultiplier < 0, logMultiplier, fold, ...numbers };
 }
 
 /** Whether a start lies on a branch: its mean temperature between two neighbouring points of it, at the same input. */
-function passesThrough(
-  branch: TraceBranch,
-  value: number,
-  y: Float64Array,
-  tracer: TraceModel,
-  worldAt: (value: number) => World,
-  family: Family,
-): boolean {
-  const map = family.at(value);
-  if (!map.year(y.slice())) return false;
-  const here = tracer.summarise(worldAt(value), { p: value, y, logMultiplier: 0, fold: false, map }).temperatureMean;
+function passesThrough(branch: TraceBranch, value: number, y: Float64Array, family: TraceFamily): boolean {
+  const here = family.summarise(value, y)?.temperatureMean;
+  if (here === undefined) return false;
   return branch.points.some((point, i) => {
     const next = branch.points[i + 1];
     if (next === undefined || (point.value - value) * (next.value - value) > 0) return false;
@@ -149,9 +153,19 @@ function warningsOf(branches: readonly TraceBranch[], stepped: boolean): string[
       `The albedo step is followed as a ramp ${narrowRamp} K wide: folds move by about 1e-3 of the input where ice first appears or last melts.`,
     );
   }
-  if (branches.some(({ ended }) => ended !== 'left')) {
+  const unfinished = branches.filter(({ ended }) => ended !== 'left');
+  if (unfinished.length > 0) {
     warnings.push(
       'A branch could not be followed to the end of the range: what lies beyond its last point is not shown.',
+    );
+  }
+  const strongest = Math.max(
+    0,
+    ...unfinished.flatMap(({ points }) => points.map((one) => Math.abs(one.logMultiplier))),
+  );
+  if (strongest > illConditioned) {
+    warnings.push(
+      `The heat store forgets far within a year: disturbances shrink or grow by a factor of up to e^${strongest.toFixed(0)}. An unstable climate is lost there, since a march through the year magnifies its rounding as much; only stable climates can be relied on.`,
     );
   }
   return warnings;

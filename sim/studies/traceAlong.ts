@@ -10,7 +10,7 @@ export function reportedAlong({ key, label, unit, from, to, log }: Along): Trace
   return { key, label, unit, from: inUnit(from, unit), to: inUnit(to, unit), log };
 }
 
-/** Errors: SimError where the scenario is not sound at a value inside the range. */
+/** `progress` is told the input in the user's unit. Errors: SimError where the scenario is not sound at a value inside the range. */
 export function traceAlong(one: CaseAlong, along: Along, progress?: TraceOptions['progress']): TraceReportCase {
   const { name, model, tolerance, warnings } = one;
   const { from, to, unit, log } = along;
@@ -20,9 +20,10 @@ export function traceAlong(one: CaseAlong, along: Along, progress?: TraceOptions
     if (place >= range.to) return to;
     return log ? Math.exp(place) : place;
   };
-  const options = { ...range, tolerance, ...(progress ? { progress } : {}) };
-  const result = traceClimates(model, (place) => one.worldAt(valueAt(place)), options);
   const shown = (place: number) => inUnit(valueAt(place), unit);
+  const told: TraceOptions['progress'] = (step) => progress?.({ ...step, value: shown(step.value) });
+  const options = { ...range, tolerance, progress: told };
+  const result = traceClimates(model, (place) => one.worldAt(valueAt(place)), options);
   return {
     name,
     model,

@@ -31,6 +31,7 @@ async function toldIn(columns: number): Promise<string> {
     columns,
     env: { LANG: 'C.UTF-8' },
     cwd: place.folder,
+    now: () => 0,
     reportTemplate: place.path('page.html'),
   };
   expect(await main(['run', 'corvane.yaml'], io)).toBe(0);
@@ -301,6 +302,7 @@ describe('run', () => {
         },
       ),
       cwd: place.folder,
+      now: () => 0,
       reportTemplate: place.path('page.html'),
     };
     expect(await main(['run', 'corvane.yaml'], io)).toBe(1);

@@ -79,6 +79,7 @@ export function workplace(env: Record<string, string> = { LANG: 'C.UTF-8' }): Wo
         ...undisturbed,
         env,
         cwd: folder,
+        now: () => 0,
         reportTemplate: path('page.html'),
       };
       return { code: await main(words, io), ...printed };

@@ -29,7 +29,9 @@ beforeAll(async () => {
 
 afterAll(() => place.remove());
 
-async function toldIn(columns: number, env: Record<string, string>, isTTY = false) {
+/** `tick`: what the clock gains from one look at it to the next, ms. */
+async function toldIn(columns: number, env: Record<string, string>, isTTY = false, tick = 0) {
+  let clock = 0;
   const printed = { stdout: '', stderr: '' };
   const io = {
     stdout: { write: (text: string) => (printed.stdout += text) },
@@ -39,6 +41,7 @@ async function toldIn(columns: number, env: Record<string, string>, isTTY = fals
     columns,
     env,
     cwd: place.folder,
+    now: () => (clock += tick),
     reportTemplate: place.path('page.html'),
   };
   const code = await main(['trace', 'melaina.yaml', '--along', range, '--only', 'deep sea', '-o', 'narrow'], io);
@@ -129,6 +132,13 @@ describe('trace', () => {
     for (const line of stdout.split('\n')) expect(textWidth(line)).toBeLessThanOrEqual(columns);
     // biome-ignore lint/suspicious/noControlCharactersInRegex: the first of ASCII
     if (env.LANG === 'C') expect(stdout).toMatch(/^[\x00-\x7f]*$/);
+  });
+
+  test('without a terminal, a line after every ten seconds says how far it is', async () => {
+    const { stderr } = await toldIn(80, { LANG: 'C.UTF-8' }, false, 3000);
+    const lines = stderr.split('\n').filter((line) => line.startsWith('deep sea:'));
+    expect(lines.length).toBeGreaterThan(2);
+    for (const line of lines) expect(line).toMatch(/^deep sea: branch 1, \d+ points, at 0\.\d+ Lsun$/);
   });
 
   test('on a terminal, progress goes to standard error', async () => {

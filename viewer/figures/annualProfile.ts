@@ -7,7 +7,7 @@ import { fixed, kelvin, nbsp, unitText } from '../words/number.ts';
 import { type Bands, bandMeans, bandRanges, bandsOf, fieldOf } from './bands.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type ChartLine, traceOf } from './chartLine.ts';
-import type { Figure, FigureStyle, View } from './figure.ts';
+import type { Figure, FigureStyle } from './figure.ts';
 import { insolationGroups } from './insolationMap.ts';
 import { poleToPole } from './latitudeAxis.ts';
 import { latitudeAxisLayout, latitudeMargins, latitudeWords } from './latitudeChart.ts';
@@ -15,6 +15,7 @@ import { namesBesideLines } from './lineNames.ts';
 import { plainLabel } from './plainLabel.ts';
 import { stateLook } from './temperatureLines.ts';
 import type { Theme } from './theme.ts';
+import type { View } from './view.ts';
 import { temperatureBands } from './windowBands.ts';
 import { distinctWindows } from './windowSpans.ts';
 

@@ -1,7 +1,7 @@
 /** A line of a chart, from which its trace, its label beside the line and its legend entry are all made. Pure. */
 import type { Data, ScatterData } from 'plotly.js-dist-min';
-import type { View } from './figure.ts';
 import type { CaseMarker } from './theme.ts';
+import type { View } from './view.ts';
 
 export type Dash = 'solid' | 'dash' | 'dot' | 'dashdot';
 

@@ -8,10 +8,11 @@ import { unitText } from '../words/number.ts';
 import { endsText } from '../words/traceAnswer.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type ChartLine, glyph } from './chartLine.ts';
-import type { Figure, FigureStyle, View } from './figure.ts';
+import type { Figure, FigureStyle } from './figure.ts';
 import { namesBesideLines } from './lineNames.ts';
 import { plainLabel } from './plainLabel.ts';
 import { caseColour, caseMarker } from './theme.ts';
+import type { View } from './view.ts';
 
 interface CaseLook {
   readonly oneCase: TraceCase;

@@ -2,6 +2,7 @@
 import type { Data, Layout } from 'plotly.js-dist-min';
 import type { LegendLine } from './chartLine.ts';
 import type { Theme } from './theme.ts';
+import type { View } from './view.ts';
 
 export interface Figure {
   /** File name of a download, without extension. */
@@ -24,10 +25,4 @@ export interface FigureStyle {
   readonly narrow: boolean;
   /** The part that the reader has zoomed to, so that names and dates stand where they belong; null for the whole. */
   readonly view: View | null;
-}
-
-/** Ends of both axes, in their units. */
-export interface View {
-  readonly x: readonly [number, number];
-  readonly y: readonly [number, number];
 }

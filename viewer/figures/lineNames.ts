@@ -1,8 +1,9 @@
 /** A name beside every line of a chart. Pure. */
 import type { Annotation } from 'plotly.js-dist-min';
 import { type ChartLine, glyph, lastInView, type Owner } from './chartLine.ts';
-import type { FigureStyle, View } from './figure.ts';
+import type { FigureStyle } from './figure.ts';
 import { lineLabels } from './lineLabels.ts';
+import type { View } from './view.ts';
 
 /** A name for every line that the view shows, where the line leaves it. */
 export function namesBesideLines(

@@ -7,12 +7,13 @@ import { duration, fixed, percent, type TimeUnit, timeDecimals } from '../words/
 import { bandsOf } from './bands.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type ChartLine, traceOf } from './chartLine.ts';
-import type { Figure, FigureStyle, View } from './figure.ts';
+import type { Figure, FigureStyle } from './figure.ts';
 import { poleToPole } from './latitudeAxis.ts';
 import { latitudeAxisLayout, latitudeMargins, latitudeWords } from './latitudeChart.ts';
 import { namesBesideLines } from './lineNames.ts';
 import { type LocalLag, localLags } from './localLags.ts';
 import { stateLook } from './temperatureLines.ts';
+import type { View } from './view.ts';
 
 const plotHeight = { wide: 280, narrow: 240 };
 /** Share of the orbit. Where either maximum moves farther than this from one latitude to the next it is another one: no line joins them. */

@@ -3,13 +3,14 @@ import type { Annotation, Data, Layout } from 'plotly.js-dist-min';
 import type { Column } from '../words/columns.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { plotlyScale } from './colourScale.ts';
-import type { Figure, FigureStyle, View } from './figure.ts';
+import type { Figure, FigureStyle } from './figure.ts';
 import { latitudeTicks, poleToPole } from './latitudeAxis.ts';
 import { cellWords, type MapGrid } from './mapGrid.ts';
 import { colourBar, keyHeight, mapKey } from './mapKey.ts';
 import type { Ground, MapLine } from './mapLines.ts';
 import { seasonAxisLayout } from './seasonAxis.ts';
 import { topAxisAnchor } from './topAxis.ts';
+import type { View } from './view.ts';
 
 export interface SeasonMap {
   readonly column: Column;

@@ -6,11 +6,12 @@ import { list, type TimeUnit } from '../words/number.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type ChartLine, traceOf } from './chartLine.ts';
 import { dateAxisLayout } from './dateAxis.ts';
-import type { Figure, FigureStyle, View } from './figure.ts';
+import type { Figure, FigureStyle } from './figure.ts';
 import { namesBesideLines } from './lineNames.ts';
 import { type TemperatureLine, temperatureLines } from './temperatureLines.ts';
 import { topAxisAnchor } from './topAxis.ts';
 import { extremes } from './variables.ts';
+import type { View } from './view.ts';
 import {
   barRowHeight,
   type Drawing,

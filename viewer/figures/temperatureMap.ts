@@ -145,7 +145,11 @@ function caption(
     ...(columns[shown]!.dataset.variables.bandLandTemperature
       ? ['Land and sea of a latitude are shown as their mean.']
       : []),
-    ...(hasIce && shown === 0 ? ['At the edge of the ice half of a band is frozen over.'] : []),
+    ...(hasIce && shown === 0
+      ? [
+          'At the edge of the ice half of a band is frozen over; the edge in the table is that of a cap with as much ice as reaches unbroken from the pole.',
+        ]
+      : []),
     ...(absent.length > 0 ? [`Reached nowhere: ${list(absent)}.`] : []),
   ].join(' ');
 }

@@ -3,11 +3,12 @@ import type { Annotation, Shape } from 'plotly.js-dist-min';
 import type { Window } from '../../sim/world.ts';
 import type { TimeUnit } from '../words/number.ts';
 import type { ChartLine } from './chartLine.ts';
-import type { FigureStyle, View } from './figure.ts';
+import type { FigureStyle } from './figure.ts';
 import { freeCorner } from './freeCorner.ts';
 import { plainLabel } from './plainLabel.ts';
 import type { TemperatureLine } from './temperatureLines.ts';
 import { caseColour } from './theme.ts';
+import type { View } from './view.ts';
 import { distinctWindows, type Stretch, stretchesInside } from './windowSpans.ts';
 
 export interface Drawing {

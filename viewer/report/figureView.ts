@@ -1,7 +1,8 @@
 /** A figure on the page: drawn by Plotly, redrawn as the surroundings change, saved on request. */
 import type { Config, Layout } from 'plotly.js-dist-min';
-import type { Figure, FigureStyle, View } from '../figures/figure.ts';
+import type { Figure, FigureStyle } from '../figures/figure.ts';
 import { lightTheme } from '../figures/theme.ts';
+import type { View } from '../figures/view.ts';
 import { element } from './element.ts';
 import { lineSample } from './lineSample.ts';
 import { plotly } from './plotly.ts';

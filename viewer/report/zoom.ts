@@ -1,6 +1,6 @@
 /** What a reader's mouse asks of a figure. */
 import type { Layout, PlotlyHTMLElement } from 'plotly.js-dist-min';
-import type { View } from '../figures/figure.ts';
+import type { View } from '../figures/view.ts';
 
 export interface ZoomAnswers {
   zoomed(view: View): void;

@@ -1,5 +1,5 @@
 /** How temperatures by latitude were computed, for `method.ts`. Pure. */
-import type { Rule } from './method.ts';
+import type { Rule } from './rule.ts';
 
 /** The physics, after what arrives from the star. */
 export const latitudeRules: readonly Rule[] = [

@@ -1,7 +1,7 @@
 /** How a trace was computed, and what its numbers are not. Pure. */
 import type { TraceReport } from '../../sim/studies/traceReport.ts';
 import { labelInText } from './along.ts';
-import type { Step } from './method.ts';
+import type { Step } from './rule.ts';
 
 export function traceSteps({ cases, along }: TraceReport): Step[] {
   const has = (model: string): boolean => cases.some((oneCase) => oneCase.model === model);

@@ -21,8 +21,8 @@ export function isMoving(swing: Kelvin, mean: Kelvin): boolean {
   return swing > smallestSwing * mean;
 }
 
-export function enterWorld(world: World, near: Kelvin, sheet: Sheet): void {
-  worldValuesInto(world, near, sheet.value);
+export function enterWorld(world: World, near: Kelvin, isStable: boolean, sheet: Sheet): void {
+  worldValuesInto(world, near, isStable, sheet.value);
   for (let i = 0; i < worldColumns.length; i++) enter(sheet, i, sheet.value[i]);
 }
 

@@ -44,7 +44,7 @@ export function lumpedFindingsInto(
   const swing = highest.value - lowest.value;
   const moving = isMoving(swing, mean);
   const error = (temperature: Kelvin) => errorEstimate * temperature;
-  enterWorld(world, mean, sheet);
+  enterWorld(world, mean, (trajectory.logMultiplier ?? -1) < 0, sheet);
   enter(sheet, at.steadyTemperatureMax, steady.highest, 0);
   enter(sheet, at.steadyTemperatureMin, steady.lowest, 0);
   enter(sheet, at.steadyTemperatureMean, steady.mean, 0);

@@ -68,7 +68,7 @@ export function plainFindings(): PlainFindings {
     if (!findMean(scratch) || !findExtremes(scratch)) return false;
     if (wanted.harmonic && !enterHarmonicLag(scratch, sheet)) return false;
     if (wanted.fastest && !enterFastestChanges(scratch, sheet)) return false;
-    if (wanted.world) enterWorld(world, scratch.mean, sheet);
+    if (wanted.world) enterWorld(world, scratch.mean, true, sheet);
     enterTemperatures(scratch, sheet);
     if (wanted.steady) enterSteady(scratch, sheet);
     if (wanted.steadyMean) enter(sheet, at.steadyTemperatureMean, steadyMean(scratch), 0);

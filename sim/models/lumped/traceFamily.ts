@@ -1,10 +1,11 @@
 /** Lumped worlds along one changing input: the unknown is the temperature at periapsis. */
+import type { Kelvin } from '../../si.ts';
 import { banded } from '../../solve/banded.ts';
 import { extremes, integrate } from '../../solve/features.ts';
 import { type March, march } from '../../solve/march.ts';
 import type { YearMap } from '../../solve/periodicMap.ts';
 import type { World } from '../../world.ts';
-import type { TraceModel } from '../traceModel.ts';
+import type { TraceModel, TraceNumbers } from '../traceModel.ts';
 import { findClimates } from './climates.ts';
 import { orbitClock } from './clock.ts';
 import { plainSolver } from './plain.ts';
@@ -19,25 +20,32 @@ export const lumpedTraceModel: TraceModel = {
   startsAt(world, tolerance) {
     return stableTrajectories(world, tolerance).map(({ curve }) => Float64Array.of(curve.value[0]));
   },
-  family: (worldAt, pScale) => ({ size: 1, yScale: 30, pScale, at: (p) => orbitMap(worldAt(p)) }),
-  summarise(world, { y }) {
-    const { curve } = marchOrbit(world, y[0], true);
-    if (curve === null) throw new Error('a kept march has a curve');
-    const clock = orbitClock(world);
-    const mean = (f: (temperature: number) => number) =>
-      integrate(curve, (s, temperature) => f(temperature) * clock.pace(s)) / period;
-    const { albedo } = world.surface;
-    const { highest, lowest } = extremes(curve);
-    const icy = (temperature: number) =>
-      albedo.ice === albedo.warm ? 0 : (albedo.at(temperature) - albedo.warm) / (albedo.ice - albedo.warm);
-    return {
-      temperatureMean: mean((temperature) => temperature),
-      temperatureMax: highest.value,
-      temperatureMin: lowest.value,
-      iceFraction: mean(icy),
-    };
-  },
+  family: (worldAt, { from, to }) => ({
+    size: 1,
+    yScale: 30,
+    pScale: (to - from) / 2,
+    at: (p) => orbitMap(worldAt(p)),
+    summarise: (p, y) => numbersOf(worldAt(p), y[0]),
+  }),
 };
+
+function numbersOf(world: World, start: Kelvin): TraceNumbers | null {
+  const { curve, completed } = marchOrbit(world, start, true);
+  if (curve === null || !completed) return null;
+  const clock = orbitClock(world);
+  const mean = (f: (temperature: Kelvin) => number) =>
+    integrate(curve, (s, temperature) => f(temperature) * clock.pace(s)) / period;
+  const { albedo } = world.surface;
+  const { highest, lowest } = extremes(curve);
+  const icy = (temperature: Kelvin) =>
+    albedo.ice === albedo.warm ? 0 : (albedo.at(temperature) - albedo.warm) / (albedo.ice - albedo.warm);
+  return {
+    temperatureMean: mean((temperature) => temperature),
+    temperatureMax: highest.value,
+    temperatureMin: lowest.value,
+    iceFraction: mean(icy),
+  };
+}
 
 function stableTrajectories(world: World, tolerance: number): Trajectory[] {
   const { albedo, emission } = world.surface;

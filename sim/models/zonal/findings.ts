@@ -166,10 +166,12 @@ function windowFindings(year: ZonalYear, window: Window): Finding[] {
 
 function temperatureWindow(year: ZonalYear, { name, from, to }: Window): Finding[] {
   const identity = (time: number) => time;
-  const shares = year.curves.bands.map((curve) => shareBetween(curve, from, to, identity));
+  const surfaces = surfacesOf(year);
+  const shares = surfaces.map(({ curve }) => shareBetween(curve, from, to, identity));
+  const area = (of: (share: number) => number) =>
+    surfaces.reduce((sum, surface, i) => sum + surface.area * of(shares[i]), 0);
   const seasons = year.curves.bands.map((curve) => longestSeason(curve, from, to));
   const longest = seasons.reduce((best, season, i) => (season > seasons[best] ? i : best), 0);
-  const count = shares.length;
   const none = { value: null, reason: 'no latitude is ever inside' };
   return [
     {
@@ -180,13 +182,13 @@ function temperatureWindow(year: ZonalYear, { name, from, to }: Window): Finding
     },
     {
       name: `habitableFraction.${name}`,
-      value: shares.reduce((sum, share) => sum + share, 0) / count,
+      value: area((share) => share),
       unit: '1',
       label: `Area and time in “${name}”`,
     },
     {
       name: `alwaysFraction.${name}`,
-      value: shares.filter((share) => share >= 1).length / count,
+      value: area((share) => (share >= 1 ? 1 : 0)),
       unit: '1',
       label: `Area in “${name}” all year`,
     },
@@ -203,6 +205,16 @@ function temperatureWindow(year: ZonalYear, { name, from, to }: Window): Finding
       ...(seasons[longest] > 0 ? { value: latitudeDeg(year, longest) } : none),
     },
   ];
+}
+
+/** Sea and land of every band, each with its share of the globe: their temperatures differ. */
+function surfacesOf({ curves: { sea, land }, physics }: ZonalYear): { readonly curve: Curve; readonly area: number }[] {
+  const landShare = (i: number) => physics.land?.fraction[i] ?? 0;
+  const parts = sea.flatMap((curve, i) => [
+    { curve, area: (1 - landShare(i)) / sea.length },
+    ...(land === null ? [] : [{ curve: land[i], area: landShare(i) / sea.length }]),
+  ]);
+  return parts.filter(({ area }) => area > 0);
 }
 
 /** Longest unbroken stay between two temperatures, going round the year. */

@@ -39,9 +39,9 @@ export function zonalModel(): Model {
 }
 
 function solvePeriodic(world: World, globe: Globe, options: SolveOptions, windows: readonly Window[]): Solution {
-  const found = periodicStates(world, globe, globe.bands, options.tolerance);
-  found.forEach(requirePhysical);
-  const halved = periodicStates(world, globe, Math.max(9, Math.floor(globe.bands / 2)), options.tolerance);
+  const [found, failures] = physicalStates(periodicStates(world, globe, globe.bands, options.tolerance));
+  const half = Math.max(9, Math.floor(globe.bands / 2));
+  const [halved] = physicalStates(periodicStates(world, globe, half, options.tolerance));
   const years = found.map((state) => zonalYear(world, globe, state));
   const hasIceFeedback = world.surface.albedo.ramp !== null || globe.frozenHeatCapacity !== null;
   const states = found.map((state, index): State => {
@@ -56,7 +56,7 @@ function solvePeriodic(world: World, globe: Globe, options: SolveOptions, window
       localError: localErrorOf(state, coarse),
     };
     return {
-      label: found.length === 1 ? 'only' : index === 0 ? 'warm' : 'cold',
+      label: found.length + failures.length === 1 ? 'only' : index === 0 ? 'warm' : 'cold',
       stable: state.logMultiplier < 0,
       multiplier: Math.exp(state.logMultiplier),
       stabilityMargin: margin,
@@ -71,29 +71,46 @@ function solvePeriodic(world: World, globe: Globe, options: SolveOptions, window
     states,
     warnings: [
       ...zonalWarnings(world, globe, years),
-      ...spatialWarnings(found, halved),
+      ...(failures.length > 0 ? [] : spatialWarnings(found, halved)),
       ...(found.length > 1
         ? [
             'This orbit allows a warm and a cold climate; the findings are those of the warm one. Which of them a planet is in depends on its past.',
           ]
         : []),
     ],
+    failures,
     iterations: found.reduce((sum, { yearEquivalents }) => sum + yearEquivalents, 0),
   };
 }
 
-/** Where even the finest steps lose a fast band, what is left is no temperature, and no result. */
-function requirePhysical({ history, errorEstimate, logMultiplier, frozenLogMultiplier }: ZonalState): void {
-  const isPhysical = history.value.every((value) => value > 0 && Number.isFinite(value));
-  if (isPhysical && [errorEstimate, logMultiplier, frozenLogMultiplier].every(Number.isFinite)) return;
-  throw new SimError(
-    'planet.heatStore',
-    'the year of this planet cannot be computed: somewhere it heats or cools faster than its shortest time step',
-    'Give a larger heat store, a wider albedo ramp (from, to) or more heatTransport',
-  );
+/**
+ * Those that are results, and what is to be said of the others. Errors: SimError where the warm one is none.
+ */
+function physicalStates([warm, cold]: readonly ZonalState[]): [ZonalState[], string[]] {
+  if (!isPhysical(warm)) {
+    throw new SimError(
+      'planet.heatStore',
+      'the year of this planet cannot be computed: somewhere it heats or cools faster than its shortest time step',
+      'Give a larger heat store, a wider albedo ramp (from, to) or more heatTransport',
+    );
+  }
+  if (cold === undefined) return [[warm], []];
+  if (isPhysical(cold)) return [[warm, cold], []];
+  const failure =
+    'What becomes of a cold start could not be computed: somewhere it heats or cools faster than the shortest time step, or falls below absolute zero. Whether this orbit allows a cold climate beside the warm one is not known.';
+  return [[warm], [failure]];
 }
 
-/** From a hot and a cold start; one state where both end alike, or where nothing depends on ice. */
+/** Where even the finest steps lose a fast band, what is left is no temperature, and no result. */
+export function isPhysical({ history, errorEstimate, logMultiplier, frozenLogMultiplier }: ZonalState): boolean {
+  const isTemperature = history.value.every((value) => value > 0 && Number.isFinite(value));
+  return isTemperature && [errorEstimate, logMultiplier, frozenLogMultiplier].every(Number.isFinite);
+}
+
+/**
+ * From a hot and a cold start; one state where both end alike, or where nothing depends on ice. Either may have failed
+ * (`isPhysical`).
+ */
 export function periodicStates(world: World, globe: Globe, bands: number, tolerance: number): ZonalState[] {
   const grid = zonalGrid(world, globe, bands);
   const start = (temperature: Kelvin) => new Float64Array(bands).fill(temperature);
@@ -123,7 +140,7 @@ function apart(a: ZonalState, b: ZonalState): Kelvin {
   const size = a.system.size;
   let largest = 0;
   for (let i = 0; i < size; i++) largest = Math.max(largest, Math.abs(a.history.value[i] - b.history.value[i]));
-  return largest;
+  return Number.isNaN(largest) ? Number.POSITIVE_INFINITY : largest; // one that failed is like no other
 }
 
 /** Richardson: half the bands are off by three times what the whole number is, at second order. Year means of the area mean. */

@@ -2,7 +2,7 @@
 import { addMeridionalConvergence } from '../../transport/diffusion.ts';
 import type { YearMesh } from './mesh.ts';
 import { bandAlbedo, type LandPhysics, leastLand, seaHeatCapacity, type ZonalPhysics } from './physics.ts';
-import type { ZonalSystem } from './system.ts';
+import type { ZonalSystem } from './systemShape.ts';
 
 const width = 3;
 

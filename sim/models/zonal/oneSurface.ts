@@ -2,7 +2,7 @@
 import { addMeridionalConvergence } from '../../transport/diffusion.ts';
 import type { YearMesh } from './mesh.ts';
 import { seaHeatCapacity, type ZonalPhysics } from './physics.ts';
-import type { ZonalSystem } from './system.ts';
+import type { ZonalSystem } from './systemShape.ts';
 
 export function oneSurface(physics: ZonalPhysics, mesh: YearMesh): ZonalSystem {
   const { bands, conductance, warm, world } = physics;

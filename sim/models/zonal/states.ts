@@ -16,7 +16,8 @@ import { relaxToAnnualBalance } from './annualBalance.ts';
 import { equalAreaBands } from './bands.ts';
 import { type YearMesh, yearMesh } from './mesh.ts';
 import { type ZonalPhysics, zonalPhysics } from './physics.ts';
-import { type ZonalSystem, zonalSystem } from './system.ts';
+import { zonalSystem } from './system.ts';
+import type { ZonalSystem } from './systemShape.ts';
 
 export interface ZonalState {
   readonly system: ZonalSystem;

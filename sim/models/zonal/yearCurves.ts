@@ -5,7 +5,7 @@ import { banded, multiplyBanded } from '../../solve/banded.ts';
 import type { Curve } from '../../solve/curve.ts';
 import type { StageHistory } from '../../solve/rodas4.ts';
 import type { YearMesh } from './mesh.ts';
-import type { ZonalSystem } from './system.ts';
+import type { ZonalSystem } from './systemShape.ts';
 
 export interface YearCurves {
   /** Means over each band's surfaces, south to north; positions are seconds after periapsis, 0 … period. */

@@ -26,6 +26,7 @@ function testIo(): Io & { out: () => string; err: () => string } {
     columns: 100,
     env: { LANG: 'C.UTF-8' },
     cwd: folder,
+    now: () => 0,
     reportTemplate: '',
     out: () => written.out,
     err: () => written.err,

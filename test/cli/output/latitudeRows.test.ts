@@ -45,7 +45,11 @@ describe('the table', () => {
     const [near, far] = cells('northern edge at latitude')![0]!.split(' to ');
     expect(Number(near)).toBeCloseTo(finding('iceEdgeNorthMin'), 1);
     expect(Number(far!.split(' ')[0])).toBeCloseTo(finding('iceEdgeNorthMax'), 1);
-    expect(cells('north pole')).toBeDefined();
+    const lag = result.cases[0]!.states[0]!.findings.find(({ name }) => name === 'lagAtNorthPole')!;
+    const [days, plusMinus] = cells('north pole')![0]!.split(' +/- ').map(Number);
+    expect(Math.abs(days! - lag.value! / 86_400)).toBeLessThanOrEqual(lag.plusMinus! / 86_400);
+    expect(plusMinus!).toBeGreaterThanOrEqual((lag.plusMinus! / 86_400) * (1 - 1e-9));
+    expect(plusMinus!).toBeLessThan(lag.plusMinus! / 86_400 + 0.1);
     expect(cells('stability margin (0 is a fold)')).toBeDefined();
   });
 

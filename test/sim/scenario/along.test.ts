@@ -151,6 +151,19 @@ describe('casesAlong', () => {
     expect(casesAlong(sound, 'x.yaml', along).map(({ name }) => name)).toEqual(['sea', 'stack']);
   });
 
+  test('cases that differ in nothing but the input are one, with both names and a word about it', () => {
+    const twins = sound.replace(/cases:\n/, 'cases:\n  puddle: { planet: { heatStore: { mixedLayer: 1 m } } }\n');
+    const depth = readAlong('planet.heatStore.mixedLayer=1 to 90 m');
+    const [merged, ...others] = casesAlong(twins, 'x.yaml', depth, ['puddle', 'sea']);
+    expect([merged!.name, others]).toEqual(['puddle = sea', []]);
+    expect(merged!.warnings.join()).toContain('“puddle”, “sea” are the same along this input');
+    const light = casesAlong(twins, 'x.yaml', readAlong('star.luminosity=0.3 to 1.3 Lsun'), ['puddle', 'sea']);
+    expect(light.map(({ name, warnings }) => [name, warnings])).toEqual([
+      ['puddle', []],
+      ['sea', []],
+    ]);
+  });
+
   test('an alternative gives way whole; windows ask for nothing', () => {
     const [one] = casesAlong(text, 'x.yaml', readAlong('planet.heatStore.heatCapacity=1e6 to 1e8 J/m2/K'), ['sea']);
     expect(one!.worldAt(1e7).surface.heatCapacity).toBeCloseTo(1e7, 5);

@@ -1,7 +1,8 @@
 /** How it was computed, and what the numbers are not. */
 import type { Origin } from '../../../sim/origin.ts';
 import type { RunResult } from '../../../sim/run.ts';
-import { cautions, methodSteps, type Step } from '../../words/method.ts';
+import { cautions, methodSteps } from '../../words/method.ts';
+import type { Step } from '../../words/rule.ts';
 import { type Child, element } from '../element.ts';
 
 export function methodSection(result: RunResult): HTMLElement {

@@ -24,6 +24,17 @@ describe('a circular orbit with two climates', () => {
     expect(warnings.join()).toContain('3 periodic states');
   });
 
+  // On a circular orbit a state is a balance of the mean flux: its own, the middle one as well, and so is its time constant.
+  test('each with its own steady temperature and time constant', () => {
+    for (const found of states) {
+      const t = finding(found, 'temperatureMean');
+      expect(Math.abs(finding(found, 'fluxMeanTemperature') - t)).toBeLessThan(1e-4);
+      expect(Math.abs(finding(found, 'circularTemperature') - t)).toBeLessThan(1e-4);
+      const timeConstant = of.surface.heatCapacity / (4 * stefanBoltzmann * t ** 3);
+      expect(finding(found, 'radiativeTimeConstant') / timeConstant).toBeCloseTo(1, 5);
+    }
+  });
+
   // At a fixed point the multiplier is exp(P ∂(net heating)/∂T / C): closed form.
   test('each with its own multiplier and margin', () => {
     for (const found of states) {
@@ -48,6 +59,8 @@ describe('an eccentric orbit with two climates', () => {
 
   test('keeps all three', () => {
     expect(states.map(({ label }) => label)).toEqual(['warm', 'middle', 'cold']);
+    const [warm, middle, cold] = states.map((one) => finding(one, 'fluxMeanTemperature'));
+    expect([warm > 266, middle > 264 && middle < 266, cold < 264]).toEqual([true, true, true]);
     expect(states[1].multiplier).toBeGreaterThan(1);
     expect(states[1].stabilityMargin).toBeLessThan(0);
   });

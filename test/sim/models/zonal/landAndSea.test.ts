@@ -1,4 +1,5 @@
 import { expect, test } from 'vitest';
+import { stefanBoltzmann } from '../../../../sim/constants.ts';
 import { equalAreaBands } from '../../../../sim/models/zonal/bands.ts';
 import { zonalModel } from '../../../../sim/models/zonal/index.ts';
 import { yearMesh } from '../../../../sim/models/zonal/mesh.ts';
@@ -127,4 +128,32 @@ test('what fills no part of a band has no climate of its own, also without excha
     expect(largestDifference(temperature(state), temperature(together[i]))).toBeLessThan(0.05);
     expect(Math.log(state.multiplier!)).toBeCloseTo(Math.log(together[i].multiplier!), 2);
   }
+});
+
+// A quarter of every band is land that follows the light at once, three quarters are sea that feels its mean; nothing passes
+// between latitudes. So each surface's time above a temperature is Kepler's: land is above it while r/a < √(its flux over that of
+// the threshold at distance a), for the share (E − e sin E)/π of the year with cos E = (1 − r/a)/e; sea always or never.
+test('area and time in a window count land and sea by their own areas: closed form', () => {
+  const [e, q, bands, threshold, share] = [0.3, 340, 18, 275, 0.25];
+  const globe = { bands, obliquity: 0, heatTransport: 0, land: land(share, 1e3, 0) };
+  const world = zonalWorld({ q, e, heatCapacity: 1e11, emission: greyBody(1), globe });
+  const windows = [{ name: 'mild', of: 'temperature', from: threshold, to: 1e4 } as const];
+  const [only] = model.solve(world, { ...options, tolerance: 1e-6 }, windows).states;
+  const integral = (x: number) => (x * Math.sqrt(1 - x * x) + Math.asin(x)) / 2; // of cos(latitude) by x = sin(latitude)
+  const emitted = stefanBoltzmann * threshold ** 4;
+  let habitable = 0;
+  let always = 0;
+  for (let i = 0; i < bands; i++) {
+    const cosine = (bands / 2) * (integral(-1 + (2 * i + 2) / bands) - integral(-1 + (2 * i) / bands));
+    const atAxis = 0.7 * (4 / Math.PI) * q * cosine;
+    const eccentric = Math.acos(Math.min(1, Math.max(-1, (1 - Math.sqrt(atAxis / emitted)) / e)));
+    const landTime = (eccentric - e * Math.sin(eccentric)) / Math.PI;
+    const seaTime = atAxis / Math.sqrt(1 - e * e) > emitted ? 1 : 0;
+    habitable += (share * landTime + (1 - share) * seaTime) / bands;
+    always += (share * (landTime === 1 ? 1 : 0) + (1 - share) * seaTime) / bands;
+  }
+  // Land lags by its time constant, 1e3 J/m2/K over some 4 W/m2/K: 1e-5 of the year.
+  expect(Math.abs(finding(only, 'habitableFraction.mild') - habitable)).toBeLessThan(2e-5);
+  expect(finding(only, 'alwaysFraction.mild')).toBeCloseTo(always, 9);
+  expect(habitable - always).toBeGreaterThan(0.01); // some land is in it for a part of the year
 });
