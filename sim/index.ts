@@ -2,9 +2,10 @@
 export type { Dataset, Variable } from './dataset/dataset.ts';
 export { fromPortable, toPortable } from './dataset/portable.ts';
 export { SimError } from './error.ts';
-export type { Finding } from './findings/finding.ts';
+export type { Finding, FindingColumn } from './findings/finding.ts';
+export { batchOf } from './models/batchOf.ts';
 export { models } from './models/index.ts';
-export type { EnergyBalance, Model, Solution, State } from './models/model.ts';
+export type { Batch, EnergyBalance, Model, Solution, State } from './models/model.ts';
 export { type CaseResult, type RunResult, runCase, runScenario } from './run.ts';
 export { ScenarioError } from './scenario/problem.ts';
 export { readScenario } from './scenario/read.ts';

@@ -90,6 +90,7 @@ export function turnInto(nodes: Nodes, index: number, piece: Piece, turn: Turn):
   let low = 0;
   let high = 1;
   let x = c1 / (c1 - last);
+  if (!(x >= 0 && x <= 1)) x = 0.5; // slopes of rounding alone may give 0/0
   for (let trial = 0; trial < 60; trial++) {
     const slope = c1 + x * (2 * c2 + x * (3 * c3 + x * (4 * c4 + x * 5 * c5)));
     if (slope > 0 === c1 > 0) low = x;

@@ -1,9 +1,15 @@
+import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
+import { emptySheet } from '../../../../sim/findings/sheet.ts';
+import { orbitClock } from '../../../../sim/models/lumped/clock.ts';
+import { at, lumpedColumns } from '../../../../sim/models/lumped/columns.ts';
+import { lumpedFindingsInto } from '../../../../sim/models/lumped/findings.ts';
+import { lumpedModel } from '../../../../sim/models/lumped/index.ts';
 import { plainSolver } from '../../../../sim/models/lumped/plain.ts';
 import { smoothSolver } from '../../../../sim/models/lumped/smooth.ts';
 import type { Trajectory } from '../../../../sim/models/lumped/trajectory.ts';
 import { curveValuesInto } from '../../../../sim/solve/curve.ts';
-import { world } from './worlds.ts';
+import { periodic, world } from './worlds.ts';
 
 // `tolerance` is a promise: the relative error of temperature at every moment. The reference is the other algorithm
 // (Radau collocation against the two-derivative Padé rule) at a tighter tolerance, compared between the nodes of both.
@@ -55,4 +61,35 @@ test.each([
     const found = plain(of, of.surface.emission.quarticCoefficient!, tolerance);
     expect(largest(temperatures(found), exact)).toBeLessThan(tolerance);
   }
+});
+
+// The findings of plain worlds are read off the nodes; the reference reads the curve of the other algorithm.
+test.each(tolerances)('maximum, minimum and mean keep the tolerance %f', (tolerance) => {
+  const batch = lumpedModel().batch!(
+    { ...periodic, tolerance },
+    [],
+    ['temperatureMax', 'temperatureMin', 'temperatureMean'],
+  );
+  const row = new Float64Array(3);
+  const sheet = emptySheet(lumpedColumns('periodic', []).length);
+  const eccentricity = fc.oneof(
+    { weight: 3, arbitrary: fc.double({ min: 0, max: 0.95, noNaN: true }) },
+    { weight: 1, arbitrary: fc.double({ min: 0.95, max: 0.999, noNaN: true }) },
+  );
+  fc.assert(
+    fc.property(
+      eccentricity,
+      fc.double({ min: -6, max: 4, noNaN: true }),
+      fc.constantFrom(0, 0.1, 50),
+      (e, log, heat) => {
+        const of = world({ e, kappa: 10 ** log, internalHeat: heat });
+        batch.into(of, row);
+        lumpedFindingsInto(of, smooth(of, 1e-10), orbitClock(of), [], sheet);
+        for (const [i, column] of [at.temperatureMax, at.temperatureMin, at.temperatureMean].entries()) {
+          expect(Math.abs(row[i] / sheet.value[column] - 1)).toBeLessThan(tolerance);
+        }
+      },
+    ),
+    { numRuns: 100, seed: 20261201 },
+  );
 });
