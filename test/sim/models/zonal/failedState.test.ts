@@ -41,7 +41,8 @@ describe('a cold state that cannot be computed', () => {
     const scenarioCase: ScenarioCase = { name: 'base', model: 'zonal', world: of, options, ...plain };
     const result = runCase(scenarioCase);
     expect(result.warnings).toContain(failures![0]);
-    expect(result.checks.energyBalance.passed).toBe(true);
+    // land that follows the light within minutes, between steps of a week: 1e-3 off when J f stands for its T″
+    expect(result.checks.energyBalance.relativeDifference).toBeLessThan(1e-6);
     expect(result.passed).toBe(false);
   });
 });
