@@ -11,8 +11,8 @@ import { forcingAt } from '../../orbit/forcing.ts';
 import { forcingPoint } from '../../solve/separable.ts';
 import type { SolveOptions } from '../../world.ts';
 import { globalMean } from './bands.ts';
-import { placeAt } from './mesh.ts';
 import type { ZonalPhysics } from './physics.ts';
+import { placeAt } from './place.ts';
 import type { ZonalYear } from './year.ts';
 
 export function zonalDataset(year: ZonalYear, sampling: Pick<SolveOptions, 'samples' | 'spacing'>): Dataset {

@@ -7,7 +7,7 @@ import { declinationRate, sinDeclination, solarLongitude } from '../../instellat
 import type { Seconds } from '../../si.ts';
 import type { Globe, World } from '../../world.ts';
 import type { Bands } from './bands.ts';
-import { placeAt } from './mesh.ts';
+import { placeAt } from './place.ts';
 
 export interface BandInsolation {
   /** Overwrites `into` by W m⁻² per band at a time after periapsis. */

@@ -1,12 +1,5 @@
 /** Steps of one year, equal in the balanced anomaly, and the insolation of every band at every stage time of every step. */
-import { instellation } from '../../instellation/instellation.ts';
-import {
-  balancedFromMean,
-  distanceRatioFromBalanced,
-  meanFromBalanced,
-  trueFromBalanced,
-} from '../../orbit/balanced.ts';
-import type { Flux, Radians, Seconds } from '../../si.ts';
+import { meanFromBalanced } from '../../orbit/balanced.ts';
 import { stageTimes } from '../../solve/rodas4.ts';
 import type { Globe, World } from '../../world.ts';
 import type { Bands } from './bands.ts';
@@ -49,15 +42,4 @@ export function yearMesh(world: World, globe: Globe, bands: Bands, steps: number
   }
   rowAt(insolation, steps * distinctStages - 1).set(rowAt(insolation, 0));
   return { steps, time, width, insolation, insolationDrift };
-}
-
-/** Where the planet is at a time: true anomaly and instellation. */
-export function placeAt(world: World, time: Seconds): { trueAnomaly: Radians; instellation: Flux } {
-  const { orbit, star } = world;
-  const s = balancedFromMean((2 * Math.PI * time) / orbit.period, orbit.eccentricity);
-  const distance = orbit.semiMajorAxis * distanceRatioFromBalanced(s, orbit.eccentricity);
-  return {
-    trueAnomaly: trueFromBalanced(s, orbit.eccentricity),
-    instellation: instellation(star.luminosity, distance),
-  };
 }

@@ -3,6 +3,8 @@ import { zeroCelsius } from '../../../../sim/constants.ts';
 import { annualMeanLegendre } from '../../../../sim/instellation/annualMean.ts';
 import { legendre } from '../../../../sim/instellation/legendre.ts';
 import { constantAlbedo } from '../../../../sim/surface/albedo/constant.ts';
+import { rampAlbedo } from '../../../../sim/surface/albedo/ramp.ts';
+import { linearEmission } from '../../../../sim/surface/emission/linear.ts';
 import { degrees, firstRow, settled, zonalWorld } from './worlds.ts';
 
 // North (1975) J. Atmos. Sci. 32, 1301: with constant co-albedo a each Legendre mode is T_n = Q a S_n/(B + n(n+1)D). Numbers of one
@@ -94,4 +96,21 @@ test.each([
   // Insolation on P₁ goes as sin Ls: the lag is the phase of the response behind it.
   const lag = (Math.atan2(-cosine, sine) / (2 * Math.PI)) * 365.2422;
   expect(Math.abs(lag - lagDays)).toBeLessThan(0.05);
+});
+
+// Budyko's form, Q = 343, A = 202, B = 1.9, s = 1 − 0.241(3x² − 1), albedos 0.32 and 0.62 with ice below −10 °C: a published university
+// problem set gives ≈ 45 °C at the equator and ≈ −71 °C at the pole without transport, read off its graph; calculated 46.027 and
+// −70.781. Its transport, towards the mean of the globe, is not diffusion: what it does beyond this is no check of ours.
+test('Budyko’s set without transport: equator and pole', () => {
+  const world = zonalWorld({
+    q: 343,
+    emission: linearEmission({ a: 202, b: 1.9 }),
+    albedo: rampAlbedo({ warm: 0.32, ice: 0.62, from: 263.1, to: 263.2 }),
+    globe: { bands: 360, heatTransport: 0, insolation: { legendre: [1, 0, -0.482] } },
+  });
+  const celsius = firstRow(settled(world, 300)).map((kelvin) => kelvin - 273.15);
+  // Half of the last digit, and what the mean over the band adds: 0.723 x² Q (1 − A)/B.
+  const [atEquator, atPole] = [(1 / 180) ** 2 / 3, 1 - (1 - (179 / 180) ** 3) / (3 * (1 / 180))];
+  expect(Math.abs(celsius[180]! - (46.027 - (0.723 * atEquator * 343 * 0.68) / 1.9))).toBeLessThan(6e-4);
+  expect(Math.abs(celsius[359]! - (-70.781 + (0.723 * atPole * 343 * 0.38) / 1.9))).toBeLessThan(6e-4);
 });
