@@ -82,6 +82,32 @@ function program(words: readonly string[], io: Io, outcome: { code: number }): C
       outcome.code = await spread(file, options, { version: packageJson.version, words }, io);
     });
   perilag
+    .command('grid')
+    .description('one or two inputs over ranges: curves or maps of every finding')
+    .argument('<scenario>', 'scenario file, YAML or JSON')
+    .requiredOption(
+      '--along <key=range>',
+      "an input and its range, e.g. 'orbit.eccentricity=0 to 0.9'; may be given twice",
+      collect,
+    )
+    .option('--steps <n>', 'values of each range', wholeNumber('--steps', 2, 1000), 40)
+    .option('--of <names>', 'findings, separated by commas (default: all)')
+    .option('--hold <what>', 'orbitMeanInstellation: the orbit widens as the eccentricity grows, so that it stays')
+    .option(
+      '--workers <n>',
+      'threads (default: as the work asks for); the numbers do not depend on it',
+      wholeNumber('--workers', 1, 512),
+    )
+    .option('--resume', 'go on with what an interrupted run has left')
+    .option('-o, --out <dir>', 'output folder (default: out/<file name without extension>/grid)')
+    .option('--only <case>', 'compute only this case; may be given several times', collect)
+    .option('--json', 'print the summary as JSON on standard output, and nothing else there')
+    .option('--quiet', 'print nothing but errors')
+    .action(async (file: string, options) => {
+      const { grid } = await import('./commands/grid.ts');
+      outcome.code = await grid(file, options, { version: packageJson.version, words }, io);
+    });
+  perilag
     .command('gather')
     .description('join the parts of a spread that were computed apart, to the same bytes as one run')
     .argument('<dir...>', 'output folders of the shards')

@@ -36,7 +36,8 @@ export type NetcdfFile = NetcdfGroup;
  */
 const chunkLength = 131_072;
 const gzipLevel = 4;
-const plainName = /^[A-Za-z][A-Za-z0-9_]*$/;
+/** The one underscore in front is the mark of missing numbers, which the format itself names so. */
+const plainName = /^(?:_FillValue|[A-Za-z][A-Za-z0-9_]*)$/;
 
 /**
  * Writes `file` as float64 to `path`, where nothing stands yet. Large fields (two dimensions or more) are compressed.

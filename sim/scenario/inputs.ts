@@ -70,7 +70,7 @@ function isPeriod(parsed: unknown): parsed is { period: Quantity } {
 }
 
 /** The SI symbol of what a unit measures. */
-function siUnit(symbol: string): string {
+export function siUnit(symbol: string): string {
   const { dimension } = parseUnit(symbol);
   const info = Object.values(dimensions).find(({ exponents }) => exponents.every((power, i) => power === dimension[i]));
   return info?.units.find((unit) => isSi(unit)) ?? '1';

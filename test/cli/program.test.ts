@@ -46,7 +46,7 @@ describe('help', () => {
     expect([asked.code, asked.stderr]).toEqual([0, '']);
     for (const name of ['run', 'trace', 'check', 'new', 'schema'])
       expect(asked.stdout).toMatch(new RegExp(`^  ${name}\\b`, 'm'));
-    for (const name of ['grid', 'dates', 'fit', 'survey']) expect(asked.stdout).not.toContain(name);
+    for (const name of ['dates', 'fit', 'survey']) expect(asked.stdout).not.toContain(name);
   });
 
   test('--version is the one of the package', async () => {

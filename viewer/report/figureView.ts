@@ -14,6 +14,8 @@ export interface FigureView {
   readonly element: HTMLElement;
   /** Call once the element is in the document, and again when the setting has changed. */
   draw(setting: Setting): Promise<void>;
+  /** Call when what `build` makes has changed: words and picture, the whole of it. */
+  refresh(): Promise<void>;
 }
 
 type Build = (style: FigureStyle) => Figure;
@@ -32,8 +34,7 @@ const leastWidth = { wide: 560, narrow: 240 };
 export function figureView(number: number, build: Build): FigureView {
   let setting: Setting | null = null;
   let view: View | null = null;
-  const { title, textAlternative, caption } = build(savedStyle);
-  const plot = element('div', { class: 'plot', role: 'group', 'aria-label': `${title}. ${textAlternative}` });
+  const plot = element('div', { class: 'plot', role: 'group' });
   const legend = element('ul', { class: 'legend' });
   const whole = button('Show all', () => show(null));
   whole.hidden = true;
@@ -41,7 +42,14 @@ export function figureView(number: number, build: Build): FigureView {
     button(`Save ${format.toUpperCase()}`, () => save(build, format)),
   );
   const tools = element('p', { class: 'tools' }, whole, ...saving);
-  const words = element('figcaption', {}, element('b', {}, `Figure ${number}. ${title}. `), caption);
+  const words = element('figcaption', {});
+  describe();
+
+  function describe(): void {
+    const { title, textAlternative, caption } = build(savedStyle);
+    plot.setAttribute('aria-label', `${title}. ${textAlternative}`);
+    words.replaceChildren(element('b', {}, `Figure ${number}. ${title}. `), caption);
+  }
 
   async function show(part: View | null): Promise<void> {
     if (setting === null) return;
@@ -64,6 +72,10 @@ export function figureView(number: number, build: Build): FigureView {
   return {
     element: element('figure', { class: 'chart' }, plot, legend, element('div', { class: 'under' }, words, tools)),
     draw,
+    refresh() {
+      describe();
+      return show(null);
+    },
   };
 }
 

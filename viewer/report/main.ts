@@ -1,8 +1,9 @@
-/** Where the page starts: reads the run or trace that it carries, lays out the words at once, draws figures when Plotly is there. */
+/** Where the page starts: reads what it carries, lays out the words at once, draws figures when Plotly is there. */
 import { element } from './element.ts';
 import type { FigureView } from './figureView.ts';
-import { page } from './page.ts';
-import { readPage } from './readPage.ts';
+import { gridPage } from './gridPage.ts';
+import { type Page, page } from './page.ts';
+import { type Carried, readPage } from './readPage.ts';
 import { PageError } from './readResult.ts';
 import { screenSetting, watchSurroundings } from './surroundings.ts';
 import { tracePage } from './tracePage.ts';
@@ -10,9 +11,9 @@ import { tracePage } from './tracePage.ts';
 function start(): void {
   const block = document.getElementById('perilag-data');
   try {
-    const { trace, result } = readPage(block?.textContent ?? '');
-    const { element: main, figures } = trace === null ? page(result) : tracePage(trace);
-    const { title, file } = (trace ?? result).scenario;
+    const carried = readPage(block?.textContent ?? '');
+    const { element: main, figures } = laidOut(carried);
+    const { title, file } = (carried.grid ?? carried.trace ?? carried.result).scenario;
     document.title = title ?? file;
     document.body.append(main);
     addEventListener('DOMContentLoaded', () => void drawAll(figures));
@@ -22,6 +23,11 @@ function start(): void {
       element('main', { class: 'message' }, element('h1', {}, 'No report'), element('p', {}, error.message)),
     );
   }
+}
+
+function laidOut(carried: Carried): Page {
+  if (carried.grid) return gridPage(carried.grid);
+  return carried.trace === null ? page(carried.result) : tracePage(carried.trace);
 }
 
 /** First one after another, with a breath between, so that the page can be read and moved; then all at once at every change. */

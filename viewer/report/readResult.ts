@@ -48,13 +48,20 @@ function lengthOf(dataset: Dataset | undefined, name: string): number {
   }
 }
 
+/** One of these stands in the data block. */
+interface Block {
+  readonly result?: unknown;
+  readonly trace?: unknown;
+  readonly grid?: unknown;
+}
+
 /** Errors: PageError when the block is empty or is not JSON. */
-export function parsed(text: string): { result?: unknown; trace?: unknown } {
+export function parsed(text: string): Block {
   if (text.trim() === '') {
     throw new PageError('This page holds no run yet. `perilag run` writes a copy of it with the results inside.');
   }
   try {
-    return fromPortableLazily<{ result?: unknown; trace?: unknown } | null>(JSON.parse(text)) ?? {};
+    return fromPortableLazily<Block | null>(JSON.parse(text)) ?? {};
   } catch {
     throw damaged('the data cannot be read');
   }

@@ -5,6 +5,9 @@ import { dateText } from './date.ts';
 import { friendly } from './friendly.ts';
 import { exact, list, withUnit } from './number.ts';
 
+/** What a page of inputs needs of a case. */
+export type InputCase = Pick<CaseResult, 'name' | 'inputs' | 'derived'>;
+
 const periapsisKey = 'orbit.periapsisTime';
 
 export interface InputCell {
@@ -28,7 +31,7 @@ export interface InputLists {
   readonly different: readonly InputRow[];
 }
 
-export function inputLists(cases: readonly CaseResult[]): InputLists {
+export function inputLists(cases: readonly InputCase[]): InputLists {
   const keys = [...new Set(cases.flatMap(({ inputs }) => inputs.map(({ key }) => key)))];
   const rows = keys.map((key) => inputRow(cases, key));
   return { shared: rows.filter(isShared), different: rows.filter((row) => !isShared(row)) };
@@ -42,7 +45,7 @@ export interface DerivedRow {
 }
 
 /** Values that follow from the inputs, in the units of the trade; those that every case shares have one cell. */
-export function derivedRows(cases: readonly CaseResult[]): DerivedRow[] {
+export function derivedRows(cases: readonly InputCase[]): DerivedRow[] {
   const keys = [...new Set(cases.flatMap(({ derived }) => derived.map(({ key }) => key)))];
   return keys.map((key) => {
     const found = cases.map(({ derived }) => derived.find((candidate) => candidate.key === key));
@@ -61,7 +64,7 @@ function derivedText({ key, value, unit }: Derived): string {
   return key === periapsisKey ? dateText(value) : friendly(value, unit);
 }
 
-function inputRow(cases: readonly CaseResult[], key: string): InputRow {
+function inputRow(cases: readonly InputCase[], key: string): InputRow {
   const found = cases.map(({ inputs }) => inputs.find((input) => input.key === key));
   return { key, label: found.find((input) => input !== undefined)!.label, cells: found.map(inputCell) };
 }

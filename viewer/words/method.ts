@@ -1,5 +1,6 @@
 /** How this run was computed: the equations that it used, each with its source; and what its numbers are not. Pure. */
 import type { RunResult } from '../../sim/run.ts';
+import type { CaseInput } from '../../sim/scenario/types.ts';
 import { hasLatitude } from './latitude.ts';
 import { latitudeRules, latitudeSolutionRules } from './latitudeMethod.ts';
 import type { Rule, Step, Used } from './rule.ts';
@@ -103,7 +104,7 @@ const rules: readonly Rule[] = [
     step: { words: 'A run from a start follows the temperature step by step, to the same tolerance.' },
   },
   {
-    when: always,
+    when: ({ accounts }) => accounts,
     step: {
       words: 'The first account compares the orbit-mean instellation with its closed form.',
       equation: '⟨S⟩ = L / (4πa² √(1 − e²))',
@@ -121,31 +122,42 @@ const rules: readonly Rule[] = [
 ];
 
 export function methodSteps(result: RunResult): Step[] {
-  const used = usedBy(result);
+  return stepsFor(usedBy(result));
+}
+
+export function stepsFor(used: Used): Step[] {
   return rules.filter(({ when }) => when(used)).map(({ step }) => step);
 }
 
 function usedBy({ cases }: RunResult): Used {
-  const inputs = cases.flatMap(({ inputs: own }) =>
-    own.map(({ key, text }) => ({ key: key.replace(/\.\d+(?=\.|$)/g, ''), text })),
-  );
-  const keys = inputs.map(({ key }) => key);
   const states = cases.flatMap(({ states: own }) => own);
   const labels = states.map(({ label }) => label);
   return {
-    has: (wanted) => keys.some((key) => key === wanted || key.startsWith(`${wanted}.`)),
-    says: (wanted, text) => inputs.some((input) => input.key === wanted && input.text === text),
+    ...usedInputs(cases.flatMap(({ inputs }) => inputs)),
     byLatitude: states.some(hasLatitude),
     asOne: !states.every(hasLatitude),
     periodic: labels.some((label) => label !== 'forward'),
     forward: labels.includes('forward'),
-    habitableLimits: keys.some((key) => /^windows\..*\.habitable$/.test(key)),
+    accounts: true,
+  };
+}
+
+export function usedInputs(given: readonly CaseInput[]): Pick<Used, 'has' | 'says' | 'habitableLimits'> {
+  const inputs = given.map(({ key, text }) => ({ key: key.replace(/\.\d+(?=\.|$)/g, ''), text }));
+  return {
+    has: (wanted) => inputs.some(({ key }) => key === wanted || key.startsWith(`${wanted}.`)),
+    says: (wanted, text) => inputs.some((input) => input.key === wanted && input.text === text),
+    habitableLimits: inputs.some(({ key }) => /^windows\..*\.habitable$/.test(key)),
   };
 }
 
 /** The usual cautions: they stand beside every page of numbers. */
 export function cautions(result: RunResult): string[] {
-  const { asOne, byLatitude } = usedBy(result);
+  return [...modelCautions(usedBy(result)), ...alwaysSaid];
+}
+
+/** What the models leave out. */
+export function modelCautions({ asOne, byLatitude }: Pick<Used, 'asOne' | 'byLatitude'>): string[] {
   return [
     ...(asOne
       ? [
@@ -157,12 +169,15 @@ export function cautions(result: RunResult): string[] {
           'By latitude, one temperature stands for the whole circle and the whole day: no clouds, no mountains, no weather; winds and currents are a single number D that spreads heat as if it diffused.',
         ]
       : []),
-    ...alwaysSaid,
   ];
 }
 
+/** Stands beside every page of numbers. */
+export const planningCaution =
+  'These are planning figures. They are no basis for qualifying hardware or for anyone’s safety: that is for licensed practice and test.';
+
 const alwaysSaid: readonly string[] = [
-  'These are planning figures. They are no basis for qualifying hardware or for anyone’s safety: that is for licensed practice and test.',
+  planningCaution,
   'Times for observing come from the observatory’s own tools; a date here is as good as the orbit it was made from.',
   'A “±” is the numerical error of the solution and says nothing of how well the inputs are known.',
 ];

@@ -18,6 +18,8 @@ export interface Used {
   readonly periodic: boolean;
   readonly forward: boolean;
   readonly habitableLimits: boolean;
+  /** The page shows the accounts. */
+  readonly accounts: boolean;
 }
 
 export interface Rule {

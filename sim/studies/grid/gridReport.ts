@@ -1,5 +1,7 @@
 /** What `grid` hands to files, terminal and page: plain data. Findings are SI; inputs are in the unit in which they were typed. */
 import type { Origin } from '../../origin.ts';
+import type { CaseInput } from '../../scenario/types.ts';
+import type { UniversalPlace } from './storeNumber.ts';
 
 export interface GridAxis {
   readonly key: string;
@@ -30,7 +32,9 @@ export interface GridCase {
   readonly warnings: readonly string[];
   readonly notes: readonly string[];
   /** The case on the chart of plain lumped worlds; null where it is not one. */
-  readonly universal: { readonly eccentricity: number; readonly storeNumber: number } | null;
+  readonly universal: UniversalPlace | null;
+  /** As the scenario has them; those along an axis are what its own point is made of. */
+  readonly inputs: readonly CaseInput[];
 }
 
 export interface GridReport extends Origin {

@@ -1,4 +1,6 @@
 /** What a grid computes: every case at every node of one or two ranges, straight to its findings. */
+
+import { SimError } from '../../error.ts';
 import type { FindingColumn } from '../../findings/finding.ts';
 import { batchOf } from '../../models/batchOf.ts';
 import { models } from '../../models/index.ts';
@@ -7,7 +9,6 @@ import { type Along, readAlong } from '../../scenario/along.ts';
 import { readHold } from '../../scenario/hold.ts';
 import { type Node, nodesOf } from '../../scenario/nodes.ts';
 import { type CaseOver, casesOver } from '../../scenario/over.ts';
-import { SimError } from '../../error.ts';
 
 /** What the numbers of a grid depend on. Plain data: it crosses to every worker. */
 export interface GridSetup {
@@ -58,7 +59,11 @@ function planCase(over: CaseOver, axes: readonly GridPlanAxis[], of: readonly st
   const known = all.columns.map(({ name }) => name);
   const missing = of?.find((name) => !known.includes(name));
   if (missing !== undefined)
-    throw new SimError('--of', `\`${missing}\` is no finding of case \`${over.name}\``, `Choose from ${known.join(', ')}`);
+    throw new SimError(
+      '--of',
+      `\`${missing}\` is no finding of case \`${over.name}\``,
+      `Choose from ${known.join(', ')}`,
+    );
   const batch = of === null ? all : batchOf(model, over.options, over.windows, template, of);
   return { over, batch, findings: batch.columns };
 }

@@ -1,5 +1,6 @@
 /** From the tables of a spread to what is told of it: a column at a time, so that ten million draws need the room of a few columns. */
 import type { Origin } from '../../origin.ts';
+import { isTimeInOrbit } from '../isTimeInOrbit.ts';
 import { type BandPlace, bandSampler } from './bandSampler.ts';
 import { resamples } from './bootstrap.ts';
 import { summariseTurns, unwrapTurn } from './circular.ts';
@@ -101,7 +102,7 @@ async function summariseFindings(plan: SpreadPlan, index: number, tables: Spread
   const sample: (number | null)[][] = [];
   for (const [f, finding] of findings.entries()) {
     const values = await tables.draws(findingColumn(plan, index, finding.name));
-    const circular = isCircular(finding.name) && drawn.options.start === 'periodic';
+    const circular = isTimeInOrbit(finding.name) && drawn.options.start === 'periodic';
     const line = circular ? circularLine(values, context) : straightLine(values, context);
     told.push({
       ...finding,
@@ -164,11 +165,6 @@ async function importanceReader(
 function findingColumn({ cases, findingColumns }: SpreadPlan, index: number, name: string): string {
   const before = cases.slice(0, index).reduce((sum, { findings }) => sum + findings.length, 0);
   return findingColumns[before + cases[index].findings.findIndex((finding) => finding.name === name)].name;
-}
-
-/** Times after periapsis, which come round with the orbit. */
-function isCircular(name: string): boolean {
-  return /^timeOf|^(hottest|coldest)Time$/.test(name);
 }
 
 function overPeriod(times: Float64Array, periods: Float64Array): Float64Array {

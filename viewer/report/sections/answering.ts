@@ -51,7 +51,7 @@ function grouped(cases: readonly Warned[]): [string, string | null][] {
   });
 }
 
-function notice(kind: string, names: string | null, text: string): HTMLElement {
+export function notice(kind: string, names: string | null, text: string): HTMLElement {
   const who = names === null ? null : userText(names);
   return element('p', { class: 'notice' }, element('b', {}, kind), ' ', who, who ? ': ' : null, text);
 }

@@ -1,8 +1,8 @@
 /** Inputs: what sets the cases apart, what they share, and what follows from both. */
-import type { CaseResult } from '../../../sim/run.ts';
 import {
   type DerivedRow,
   derivedRows,
+  type InputCase,
   type InputCell,
   type InputRow,
   inputLists,
@@ -13,7 +13,7 @@ import { dataTable } from '../dataTable.ts';
 import { type Child, element, userText } from '../element.ts';
 import { caseSample } from '../lineSample.ts';
 
-export function inputsSection(cases: readonly CaseResult[]): HTMLElement {
+export function inputsSection(cases: readonly InputCase[]): HTMLElement {
   const { shared, different } = inputLists(cases);
   const derived = derivedRows(cases);
   return element(
@@ -31,7 +31,7 @@ export function inputsSection(cases: readonly CaseResult[]): HTMLElement {
   );
 }
 
-function differentTable(cases: readonly CaseResult[], rows: readonly InputRow[]): HTMLElement {
+function differentTable(cases: readonly InputCase[], rows: readonly InputRow[]): HTMLElement {
   return dataTable({
     caption: ['What sets the cases apart, as written.'],
     label: 'Inputs that differ between cases',
@@ -41,7 +41,7 @@ function differentTable(cases: readonly CaseResult[], rows: readonly InputRow[])
   });
 }
 
-function sharedTable(rows: readonly InputRow[], cases: readonly CaseResult[]): HTMLElement {
+function sharedTable(rows: readonly InputRow[], cases: readonly InputCase[]): HTMLElement {
   const caseNames = cases.map(({ name }) => name);
   return dataTable({
     caption: [cases.length > 1 ? 'What all cases share.' : 'As written, and in SI.'],
@@ -56,7 +56,7 @@ function sharedTable(rows: readonly InputRow[], cases: readonly CaseResult[]): H
 }
 
 /** One table for what all cases share, one for what differs. */
-function derivedTables(cases: readonly CaseResult[], rows: readonly DerivedRow[]): HTMLElement[] {
+function derivedTables(cases: readonly InputCase[], rows: readonly DerivedRow[]): HTMLElement[] {
   const [same, apart] = [rows.filter(({ cells }) => cells.length === 1), rows.filter(({ cells }) => cells.length > 1)];
   const table = (chosen: readonly DerivedRow[], columns: { head: readonly Child[] }[], caption: string): HTMLElement =>
     dataTable({
@@ -75,7 +75,7 @@ function derivedTables(cases: readonly CaseResult[], rows: readonly DerivedRow[]
   ];
 }
 
-function caseColumns(cases: readonly CaseResult[]): { head: readonly Child[] }[] {
+function caseColumns(cases: readonly InputCase[]): { head: readonly Child[] }[] {
   return cases.map(({ name }, index) => ({ head: [caseSample(index), userText(name)] }));
 }
 

@@ -1,0 +1,173 @@
+/** `perilag grid`: every finding of each case over one or two inputs, as curves or maps and as files. */
+import { readFileSync } from 'node:fs';
+import { availableParallelism } from 'node:os';
+import { basename, extname, join, resolve } from 'node:path';
+import { SimError } from '../../sim/error.ts';
+import { originOf } from '../../sim/origin.ts';
+import type { GridReport } from '../../sim/studies/grid/gridReport.ts';
+import { type GridPlan, type GridSetup, planGrid } from '../../sim/studies/grid/plan.ts';
+import { summariseGrid } from '../../sim/studies/grid/summariseGrid.ts';
+import { csvRecords } from '../csvRecords.ts';
+import { computeTable } from '../engine/compute.ts';
+import type { Job } from '../engine/job.ts';
+import { kinds } from '../engine/kinds.ts';
+import type { TableFiles } from '../engine/table.ts';
+import { exitCode } from '../exit.ts';
+import type { Io } from '../io.ts';
+import { writeFolder } from '../output/folder.ts';
+import { gridCsvText, gridNetcdf, gridSummary } from '../output/gridFiles.ts';
+import { gridLines } from '../output/gridTable.ts';
+import { historyLine } from '../output/history.ts';
+import { jsonText } from '../output/json.ts';
+import { pagePieces } from '../output/report.ts';
+import { scenarioYamlText } from '../output/scenarioYaml.ts';
+import { terminalOf } from '../output/terminal.ts';
+import { hanging } from '../output/text.ts';
+import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
+import { onlyCases } from './only.ts';
+import type { Program } from './run.ts';
+
+export interface GridOptions {
+  readonly along: readonly string[];
+  readonly steps: number;
+  readonly of?: string;
+  readonly hold?: string;
+  readonly workers?: number;
+  readonly resume?: boolean;
+  readonly out?: string;
+  readonly only?: readonly string[];
+  readonly json?: boolean;
+  readonly quiet?: boolean;
+}
+
+/** Below this many nodes of a quick model a thread takes longer to start than the work. */
+const fewNodes = 4000;
+
+/** Gives the exit code. Errors: SimError and ScenarioError for the input's faults; Interrupted after a signal. */
+export async function grid(file: string, options: GridOptions, program: Program, io: Io): Promise<number> {
+  const [item] = onlyCases([readScenarioFile(file, io.cwd)], options.only ?? []);
+  const setup = setupOf(item!, options);
+  const plan = planGrid(setup);
+  const out = outputFolder(file, options.out);
+  const folder = resolve(io.cwd, out);
+  const computed = await computeTable(
+    jobOf(plan, item!, program),
+    {
+      table: 'grid',
+      folder,
+      shard: null,
+      resume: options.resume ?? false,
+      workers: options.workers ?? workersFor(plan),
+      quiet: options.quiet ?? false,
+      words: program.words,
+    },
+    kinds,
+    io,
+  );
+  const report = await reportOf(plan, item!, computed.files!, program);
+  await writeFolder(folder, [
+    { name: 'summary.json', pieces: [`${jsonText(gridSummary(report))}\n`] },
+    { name: 'grid.csv', pieces: [gridCsvText(report)] },
+    {
+      name: 'grid.nc',
+      write: async (path, checkpoint) => {
+        const { writeNetcdf } = await import('../output/netcdf.ts');
+        const history = historyLine(new Date(), program.version, program.words);
+        await writeNetcdf(path, gridNetcdf(report, scenarioYamlText(item!.scenario), history), checkpoint);
+      },
+    },
+    { name: 'scenario.yaml', pieces: [scenarioYamlText(item!.scenario)] },
+    { name: 'report.html', pieces: pagePieces({ grid: report }, io.reportTemplate) },
+  ]);
+  await computed.discardWork();
+  show(report, out, options, io);
+  return exitCode.done;
+}
+
+function setupOf({ text, file, scenario }: ScenarioFile, { along, hold, steps, of, only }: GridOptions): GridSetup {
+  return {
+    text,
+    file,
+    only: only && only.length > 0 ? scenario.cases.map(({ name }) => name) : null,
+    alongs: along,
+    hold: hold ?? null,
+    steps,
+    of: of === undefined ? null : of.split(',').map((name) => name.trim()),
+  };
+}
+
+function outputFolder(file: string, out: string | undefined): string {
+  if (out?.trim() === '')
+    throw new SimError('-o', 'the folder has no name', 'Name one, e.g. `-o results`, or leave -o out');
+  return out ?? join('out', basename(file, extname(file)), 'grid');
+}
+
+function workersFor({ cases, count }: GridPlan): number {
+  return cases.every(({ over }) => over.model === 'lumped') && count < fewNodes ? 1 : availableParallelism();
+}
+
+function jobOf(plan: GridPlan, { sha256 }: ScenarioFile, { version }: Program): Job {
+  const { setup, axes, cases, count } = plan;
+  const { alongs, hold, steps, of, only } = setup;
+  return {
+    kind: 'gridNodes',
+    setup,
+    inputs: axes.map(({ along: { key, unit, label } }) => ({ name: key, unit, label })),
+    findings: cases.flatMap(({ over, findings }) =>
+      findings.map(({ name, unit, label }) => ({
+        name: cases.length === 1 ? name : `${over.name}: ${name}`,
+        unit,
+        label,
+      })),
+    ),
+    rows: count,
+    settings: {
+      scenario: sha256,
+      version,
+      along: alongs.join('\n'),
+      hold,
+      steps,
+      of: of?.join(',') ?? null,
+      cases: only?.join('\n') ?? null,
+    },
+    context: { command: 'grid' },
+  };
+}
+
+async function reportOf(
+  plan: GridPlan,
+  { scenario, file, sha256 }: ScenarioFile,
+  files: TableFiles,
+  { version }: Program,
+): Promise<GridReport> {
+  const { openParquet } = await import('../output/parquetReader.ts');
+  const table = await openParquet(files.path);
+  try {
+    const findings: Float64Array[] = [];
+    for (const name of table.names.slice(1 + plan.axes.length)) findings.push(await table.column(name));
+    return summariseGrid(plan, scenario.cases, originOf({ ...scenario, file }, { sha256, version }), {
+      findings,
+      failures: failuresOf(files.failedPath),
+    });
+  } finally {
+    await table.close();
+  }
+}
+
+function failuresOf(path: string | null): { node: number; message: string }[] {
+  if (path === null) return [];
+  const [, ...records] = csvRecords(readFileSync(path, 'utf8'), path);
+  return records.map(({ fields }) => ({ node: Number(fields[0]), message: fields.at(-1)! }));
+}
+
+function show(report: GridReport, out: string, { json, quiet }: GridOptions, io: Io): void {
+  if (json) io.stdout.write(`${jsonText(gridSummary(report))}\n`);
+  if (quiet) return;
+  const terminal = terminalOf(io);
+  if (!json) io.stdout.write(`${gridLines(report, terminal).join('\n')}\n`);
+  const failed = report.cases.some((one) => one.failed.length > 0) ? ', failed-grid.csv' : '';
+  const listed = `summary.json, grid.csv, grid.nc, grid.parquet${failed}, scenario.yaml beside it`;
+  io.stderr.write(
+    `report  ${terminal.say(join(out, 'report.html'))}\n${hanging('files   ', listed, terminal.width).join('\n')}\n`,
+  );
+}

@@ -1,0 +1,131 @@
+import { existsSync, readFileSync } from 'node:fs';
+import { afterEach, beforeEach, expect, test } from 'vitest';
+import { threeCasesText, type Workplace, workplace, zonalText } from './support.ts';
+
+let place: Workplace;
+beforeEach(() => {
+  place = workplace();
+  place.write('corvane.yaml', threeCasesText);
+});
+afterEach(() => place.remove());
+
+const read = (...names: string[]) => readFileSync(place.path(...names), 'utf8');
+const ranges = ['--along', 'orbit.eccentricity=0 to 0.9', '--along', 'planet.bondAlbedo=0.1 to 0.5'];
+
+/** Rows of grid.csv by their header. */
+function rowsOf(folder: string): Record<string, string>[] {
+  const [header = '', ...lines] = read(folder, 'grid.csv').trim().split('\n');
+  const names = header.split(',');
+  return lines.map((line) => Object.fromEntries(line.split(',').map((field, i) => [names[i]!, field])));
+}
+
+async function grid(file: string, ...words: string[]) {
+  const done = await place.perilag('grid', file, '-o', 'out', '--quiet', ...words);
+  expect(done).toEqual({ code: 0, stdout: '', stderr: '' });
+}
+
+test('every node is what a scenario that says its values gives, to the last bit', async () => {
+  await grid('corvane.yaml', ...ranges, '--steps', '4');
+  const rows = rowsOf('out');
+  expect(rows).toHaveLength(3 * 16);
+  for (const node of [0, 7, 14]) {
+    const row = rows[node]!;
+    const [e, albedo] = [row['orbit.eccentricity']!, row['planet.bondAlbedo']!];
+    place.write(
+      'one.yaml',
+      threeCasesText
+        .replace('eccentricity: 0.62', `eccentricity: ${e}`)
+        .replace('bondAlbedo: 0.3', `bondAlbedo: ${albedo}`),
+    );
+    const run = await place.perilag('run', 'one.yaml', '--json', '--quiet', '-o', 'one');
+    const { findings } = JSON.parse(run.stdout).cases.find(({ name }: { name: string }) => name === row.case);
+    for (const [name, column] of [
+      ['temperatureMax', 'temperatureMax_K'],
+      ['lagOfMax', 'lagOfMax_s'],
+      ['damping', 'damping'],
+      ['fractionInWindow.liquid water at 1 bar', 'fractionInWindow.liquid water at 1 bar'],
+    ] as const) {
+      expect(row[column], `${name} at ${e}, ${albedo}`).toBe(
+        findings[name].value === null ? '' : String(findings[name].value),
+      );
+    }
+  }
+});
+
+test('the mean flux is held where it is asked for: the period follows', async () => {
+  await grid(
+    'corvane.yaml',
+    '--along',
+    'orbit.eccentricity=0 to 0.8',
+    '--hold',
+    'orbitMeanInstellation',
+    '--steps',
+    '3',
+  );
+  const fluxes = rowsOf('out').map((row) => Number(row.orbitMeanInstellation_W_m2));
+  for (const flux of fluxes) expect(flux / fluxes[0]!).toBeCloseTo(1, 13);
+  const periods = rowsOf('out')
+    .slice(0, 3)
+    .map((row) => Number(row.period_s));
+  // a ∝ (1 − e²)^−¼, P ∝ a^1.5
+  expect(periods[2]! / periods[0]!).toBeCloseTo((1 - 0.64) ** -0.375, 12);
+});
+
+test('files and table: only what was asked for, gaps where there is no world', async () => {
+  place.write(
+    'graze.yaml',
+    threeCasesText.replace('mass: 0.85 Msun', 'mass: 0.85 Msun, radius: 0.9 Rsun').replace('0.48 au', '0.02 au'),
+  );
+  const words = [
+    '--along',
+    'orbit.eccentricity=0 to 0.9',
+    '--steps',
+    '10',
+    '--of',
+    'temperatureMax,lagOfMax',
+    '--only',
+    'shallow sea',
+  ];
+  const { code, stdout } = await place.perilag('grid', 'graze.yaml', '-o', 'out', ...words);
+  expect(code).toBe(0);
+  expect(stdout).toContain('nodes have no world that can be computed');
+  const rows = rowsOf('out');
+  expect(Object.keys(rows[0]!)).toEqual(['case', 'orbit.eccentricity', 'temperatureMax_K', 'lagOfMax_s']);
+  // 0.9 Rsun is 0.00419 au: periapsis lies inside the star from e = 0.79 on
+  expect(rows.map((row) => row.temperatureMax_K === '')).toEqual([0, 0, 0, 0, 0, 0, 0, 0, 1, 1].map(Boolean));
+  expect(rows[0]!.lagOfMax_s).toBe(''); // a circle has no maximum to lag behind
+  const { grid: told } = JSON.parse(read('out', 'summary.json'));
+  expect(told.cases[0]).toMatchObject({ name: 'shallow sea', failed: 2, own: [0.62] });
+  for (const name of ['grid.nc', 'grid.parquet', 'failed-grid.csv', 'report.html', 'scenario.yaml'])
+    expect(existsSync(place.path('out', name)), name).toBe(true);
+  expect(existsSync(place.path('out', 'grid.work'))).toBe(false);
+});
+
+test('latitudes too', async () => {
+  place.write('zonal.yaml', zonalText.replace('bands: 36', 'bands: 18'));
+  await grid(
+    'zonal.yaml',
+    '--along',
+    'planet.obliquity=0 to 60 deg',
+    '--steps',
+    '3',
+    '--of',
+    'contrast,temperatureMean',
+  );
+  const contrasts = rowsOf('out').map((row) => Number(row.contrast_K));
+  expect(contrasts[0]).toBeGreaterThan(contrasts[1]!);
+  expect(contrasts[1]).toBeGreaterThan(contrasts[2]!);
+});
+
+test.each([
+  [['--along', 'orbit.eccentricity=0 to 0.9', '--of', 'temperture'], '--of: `temperture` is no finding of case'],
+  [['--along', 'orbit.eccentricity=0 to 0.9', '--hold', 'period'], '--hold: `period` cannot be held'],
+  [['--along', 'orbit.eccentricity=0 to 2'], '--along: orbit.eccentricity'],
+  [[...ranges, '--along', 'star.luminosity=1 to 2 Lsun'], '--along: 3 ranges are given'],
+  [['--along', 'orbit.eccentricity=0 to 0.9', '--steps', '1'], '--steps takes a whole number from 2'],
+])('%j is refused', async (words, message) => {
+  const { code, stderr } = await place.perilag('grid', 'corvane.yaml', '-o', 'out', ...words);
+  expect(code).toBe(2);
+  expect(stderr).toContain(message);
+  expect(existsSync(place.path('out'))).toBe(false);
+});

@@ -1,0 +1,312 @@
+/** Figure: damping and lag of every plain lumped world, with the cases placed among them. Pure. */
+import type { Annotation, Data, Layout, Shape } from 'plotly.js-dist-min';
+import type { GridCase } from '../../sim/studies/grid/gridReport.ts';
+import type { StoreReading } from '../../sim/studies/grid/readBack.ts';
+import type { UniversalPlace } from '../../sim/studies/grid/storeNumber.ts';
+import type { UniversalChart } from '../../sim/studies/grid/universalChart.ts';
+import { exact, fixed, list, nbsp, significant } from '../words/number.ts';
+import { placeText } from '../words/storeReading.ts';
+import { axisStyle, plainLayout } from './chartLayout.ts';
+import type { LegendLine } from './chartLine.ts';
+import { plotlyScale, temperatureScale } from './colourScale.ts';
+import { casedContours, levelContours } from './contourLines.ts';
+import type { Figure, FigureStyle } from './figure.ts';
+import { colourBar } from './mapKey.ts';
+import { plainLabel } from './plainLabel.ts';
+import { spreadLabels } from './spreadLabels.ts';
+import { caseMarker } from './theme.ts';
+import type { View } from './view.ts';
+
+export interface PlacedCase {
+  readonly caseIndex: number;
+  readonly name: string;
+  readonly place: UniversalPlace;
+}
+
+/** What was read back, to be marked. */
+export interface MarkedReading {
+  readonly eccentricity: number;
+  readonly reading: StoreReading;
+}
+
+const plotHeight = { wide: 420, narrow: 330 };
+const plotWidth = { wide: 800, narrow: 300 };
+const margins = { wide: { l: 64, r: 224, t: 16, b: 54 }, narrow: { l: 56, r: 14, t: 14, b: 112 } };
+const narrowAxisRoom = 58;
+/** % of an orbit. */
+const lagLevels = [0.1, 0.3, 1, 2, 5, 10, 15, 20];
+const dampingLevels = [0.9, 0.7, 0.5, 0.3, 0.2, 0.1, 0.05, 0.02];
+const lagRange = [0, 25] as const;
+
+/** Cases of the report that have a place on the chart. */
+export function placedCases(cases: readonly GridCase[]): PlacedCase[] {
+  return cases.flatMap(({ name, universal }, caseIndex) =>
+    universal === null ? [] : [{ caseIndex, name, place: universal }],
+  );
+}
+
+export function universalMap(
+  chart: UniversalChart,
+  placed: readonly PlacedCase[],
+  marked: MarkedReading | null,
+  style: FigureStyle,
+): Figure {
+  const view = style.view ?? wholeView(chart);
+  const lag = contoursOf(chart, chart.lag, 100, lagLevels, (level) => `${exact(level)}${nbsp}%`, view, style);
+  const damping = contoursOf(chart, chart.damping, 1, dampingLevels, (level) => `×${nbsp}${exact(level)}`, view, style);
+  const spots = placed.map(({ place }) => ({ x: Math.log10(place.storeNumber), y: place.eccentricity }));
+  const solid = levelContours(lag, { scale: temperatureScale, range: lagRange }, spots);
+  const dashed = casedContours(damping, solid.taken);
+  return {
+    name: 'damping-and-lag-of-plain-worlds',
+    title: 'Damping and lag of every plain lumped world',
+    textAlternative: finding(placed, marked),
+    caption:
+      'Constant albedo, emission as T⁴ and no heat from inside leave two numbers: the eccentricity, and the heat-store number 2πτ/P, the radiative time over the orbit’s pace. Colours and thin lines: the lag of the maximum behind periapsis, in % of an orbit. Dashed: damping, the share of the steady swing that is left. At the foot, nearly circular orbits answer as atan and 1/√ of the heat-store number.',
+    lines: legend(placed),
+    data: [colours(chart, style), ...solid.data, ...dashed.data, ...markers(placed), ...readingMarks(marked, chart)],
+    layout: layoutOf(chart, placed, [...solid.annotations, ...dashed.annotations], view, style),
+  };
+}
+
+function wholeView({ storeNumbers, eccentricities }: UniversalChart): View {
+  return {
+    x: [Math.log10(storeNumbers[0]!), Math.log10(storeNumbers.at(-1)!)],
+    y: [eccentricities[0]!, eccentricities.at(-1)!],
+  };
+}
+
+function rowsOf({ eccentricities, storeNumbers }: UniversalChart, values: Float64Array, times: number): number[][] {
+  const width = storeNumbers.length;
+  return Array.from(eccentricities, (_, row) =>
+    Array.from(values.subarray(row * width, (row + 1) * width), (value) => times * value),
+  );
+}
+
+function contoursOf(
+  chart: UniversalChart,
+  values: Float64Array,
+  times: number,
+  levels: readonly number[],
+  text: (level: number) => string,
+  view: View,
+  { narrow }: FigureStyle,
+) {
+  return {
+    x: [...chart.storeNumbers],
+    y: [...chart.eccentricities],
+    mesh: {
+      x: Array.from(chart.storeNumbers, Math.log10),
+      y: [...chart.eccentricities],
+      z: rowsOf(chart, values, times),
+    },
+    levels: levels.map((level) => ({ place: level, text: text(level) })),
+    window: {
+      ...view,
+      width: narrow ? plotWidth.narrow : plotWidth.wide,
+      height: narrow ? plotHeight.narrow : plotHeight.wide,
+    },
+  };
+}
+
+function colours(chart: UniversalChart, style: FigureStyle): Data {
+  const lag = rowsOf(chart, chart.lag, 100);
+  const damping = rowsOf(chart, chart.damping, 1);
+  return {
+    type: 'heatmap',
+    name: 'lag',
+    x: midpoints(Array.from(chart.storeNumbers, Math.log10)).map((place) => 10 ** place),
+    y: midpoints([...chart.eccentricities]),
+    z: lag,
+    customdata: lag.map((row, at) =>
+      row.map((value, column) => [
+        `${significant(value, 3)}${nbsp}% of an orbit`,
+        significant(damping[at]![column]!, 3),
+        fixed(chart.eccentricities[at]!, 3),
+        significant(chart.storeNumbers[column]!, 3),
+      ]),
+    ) as unknown as string[][],
+    zmin: lagRange[0],
+    zmax: lagRange[1],
+    colorscale: plotlyScale(temperatureScale),
+    colorbar: colourBar(
+      'Lag (% of an orbit)',
+      style.narrow ? plotHeight.narrow : plotHeight.wide,
+      narrowAxisRoom,
+      style,
+    ),
+    hovertemplate:
+      '<b>lag %{customdata[0]}</b><br>damping %{customdata[1]}<br>eccentricity %{customdata[2]}<br>heat-store number %{customdata[3]}<extra></extra>',
+  } as Data;
+}
+
+/** Bounds of the cells; the outermost nodes end the map. */
+function midpoints(places: readonly number[]): number[] {
+  const between = places.slice(1).map((place, at) => (place + places[at]!) / 2);
+  return [places[0]!, ...between, places.at(-1)!];
+}
+
+function markers(placed: readonly PlacedCase[]): Data[] {
+  return placed.map(({ caseIndex, name, place }) => ({
+    type: 'scatter',
+    mode: 'markers',
+    name: plainLabel(name, 60),
+    x: [place.storeNumber],
+    y: [place.eccentricity],
+    marker: { symbol: caseMarker(caseIndex), size: 12, color: '#ffffff', line: { color: '#000000', width: 1.75 } },
+    cliponaxis: false,
+    hovertemplate: `<b>${plainLabel(name, 60)}</b><br>${placeText(place)}<extra></extra>`,
+  }));
+}
+
+/** A cross at what was read, with a bar for its uncertainty; a side without a limit goes to the edge. */
+function readingMarks(marked: MarkedReading | null, { storeNumbers }: UniversalChart): Data[] {
+  if (marked === null) return [];
+  const { eccentricity, reading } = marked;
+  const low = reading.low ?? storeNumbers[0]!;
+  const high = reading.high ?? storeNumbers.at(-1)!;
+  const bar = { x: [low, high], y: [eccentricity, eccentricity] };
+  return [
+    { type: 'scatter', mode: 'lines', name: 'read back, edge', ...bar, line: { color: '#000000', width: 5 } },
+    { type: 'scatter', mode: 'lines', name: 'read back', ...bar, line: { color: '#ffffff', width: 2.5 } },
+    {
+      type: 'scatter',
+      mode: 'markers',
+      name: 'read back',
+      x: [reading.storeNumber],
+      y: [eccentricity],
+      marker: { symbol: 'x', size: 11, color: '#ffffff', line: { color: '#000000', width: 1.5 } },
+    },
+  ].map((trace) => ({ ...trace, hoverinfo: 'skip' })) as Data[];
+}
+
+function layoutOf(
+  chart: UniversalChart,
+  placed: readonly PlacedCase[],
+  numbers: readonly Partial<Annotation>[],
+  view: View,
+  style: FigureStyle,
+): Partial<Layout> {
+  const { narrow } = style;
+  const margin = narrow ? margins.narrow : margins.wide;
+  const height = narrow ? plotHeight.narrow : plotHeight.wide;
+  const key = narrow ? { shapes: [], annotations: [] } : lineKey(style);
+  return {
+    ...plainLayout(style),
+    height: height + margin.t + margin.b,
+    margin,
+    hovermode: 'closest',
+    xaxis: {
+      ...axisStyle(style),
+      type: 'log',
+      title: { text: 'Heat-store number 2πτ/P', standoff: 8 },
+      range: [...view.x],
+      dtick: decadesShown(chart) > 6 ? 2 : 1,
+      exponentformat: 'power',
+      showgrid: false,
+      mirror: true,
+    },
+    yaxis: {
+      ...axisStyle(style),
+      title: { text: 'Eccentricity', standoff: 10 },
+      range: [...view.y],
+      showgrid: false,
+      mirror: true,
+    },
+    shapes: key.shapes,
+    annotations: [...numbers, ...(narrow ? [] : names(placed, view)), ...key.annotations],
+  };
+}
+
+function decadesShown({ storeNumbers }: UniversalChart): number {
+  return Math.log10(storeNumbers.at(-1)! / storeNumbers[0]!);
+}
+
+/** Beside the markers on paper-white, apart from each other. */
+function names(placed: readonly PlacedCase[], view: View): Partial<Annotation>[] {
+  const pixel = (y: number): number => ((y - view.y[0]) / (view.y[1] - view.y[0])) * plotHeight.wide;
+  const wanted = placed.map(({ place }) => pixel(place.eccentricity));
+  const places = spreadLabels(wanted, 21, 10, plotHeight.wide - 10);
+  return placed.map(({ name, place }, at) => {
+    const x = Math.log10(place.storeNumber);
+    const isRight = x > view.x[0] + 0.72 * (view.x[1] - view.x[0]);
+    return {
+      x,
+      y: place.eccentricity,
+      ax: isRight ? -26 : 26,
+      ay: wanted[at]! - places[at]!,
+      text: plainLabel(name, 24),
+      showarrow: true,
+      arrowhead: 0,
+      arrowwidth: 1,
+      arrowcolor: '#000000',
+      standoff: 6,
+      xanchor: isRight ? 'right' : 'left',
+      yanchor: 'middle',
+      bgcolor: '#ffffff',
+      borderpad: 2,
+      font: { color: '#000000', size: 12 },
+    };
+  });
+}
+
+/** Beside the map: a sample of the dashed line. */
+function lineKey({ theme }: FigureStyle): { shapes: Partial<Shape>[]; annotations: Partial<Annotation>[] } {
+  const sample = {
+    type: 'line',
+    xref: 'paper',
+    yref: 'paper',
+    xsizemode: 'pixel',
+    ysizemode: 'pixel',
+    xanchor: 1,
+    yanchor: 1,
+    x0: 18,
+    x1: 46,
+    y0: -92,
+    y1: -92,
+  } as const;
+  return {
+    shapes: [
+      { ...sample, line: { color: '#000000', width: 3.5 } },
+      { ...sample, line: { color: '#ffffff', width: 1.5, dash: 'dash' } },
+    ],
+    annotations: [
+      {
+        text: 'damping: swing over<br>steady swing',
+        showarrow: false,
+        align: 'left',
+        font: { color: theme.ink, size: 12 },
+        x: 1,
+        xref: 'paper',
+        xanchor: 'left',
+        xshift: 54,
+        y: 1,
+        yref: 'paper',
+        yanchor: 'top',
+        yshift: -83,
+      },
+    ],
+  };
+}
+
+function legend(placed: readonly PlacedCase[]): LegendLine[] {
+  return placed.map(({ caseIndex, name }) => ({
+    plainName: name,
+    colour: 'currentColor',
+    dash: 'solid',
+    marker: { shape: caseMarker(caseIndex), open: true },
+  }));
+}
+
+function finding(placed: readonly PlacedCase[], marked: MarkedReading | null): string {
+  const cases = placed.map(({ name, place }) => `${name}: ${placeText(place)}`);
+  return [
+    'The lag grows with the heat store, up to a quarter of an orbit on a nearly circular one and less on an eccentric one; the damping hardly depends on the eccentricity.',
+    ...(cases.length > 0 ? [`${list(cases)}.`] : []),
+    ...(marked === null
+      ? []
+      : [
+          `Read back at eccentricity ${exact(marked.eccentricity)}: heat-store number ${significant(marked.reading.storeNumber, 3)}.`,
+        ]),
+  ].join(' ');
+}

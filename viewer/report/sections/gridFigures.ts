@@ -1,0 +1,47 @@
+/** The finding that the reader chooses: a map of one case over two inputs, or the curves of all cases along one. */
+import type { GridReport } from '../../../sim/studies/grid/gridReport.ts';
+import { findingCurves } from '../../figures/findingCurves.ts';
+import { findingMap } from '../../figures/findingMap.ts';
+import { offeredFindings } from '../../words/shownFinding.ts';
+import { type Choice, chooser } from '../controls.ts';
+import { element } from '../element.ts';
+import { type FigureView, figureView } from '../figureView.ts';
+
+export interface Chosen {
+  readonly element: HTMLElement;
+  readonly figure: FigureView;
+}
+
+export function findingSection(report: GridReport, number: number): Chosen {
+  const { chief, others } = offeredFindings(report);
+  const choices = (all: typeof chief): Choice[] => all.map(({ name, label }) => ({ value: name, label }));
+  let name = (chief[0] ?? others[0])?.name ?? '';
+  let caseIndex = 0;
+  const isMap = report.axes.length === 2;
+  const figure = figureView(number, (style) =>
+    isMap ? findingMap(report, caseIndex, name, style) : findingCurves(report, name, style),
+  );
+  const groups = [
+    { label: 'Chief findings', choices: choices(chief) },
+    { label: 'All others', choices: choices(others) },
+  ];
+  const findingChooser = chooser('Finding', groups, (value) => {
+    name = value;
+    void figure.refresh();
+  });
+  const cases = report.cases.map(({ name: label }, at) => ({ value: String(at), label }));
+  const caseChooser = chooser('Case', [{ label: null, choices: cases }], (value) => {
+    caseIndex = Number(value);
+    void figure.refresh();
+  });
+  const controls = [findingChooser, ...(isMap && cases.length > 1 ? [caseChooser] : [])];
+  return {
+    element: element(
+      'section',
+      { 'aria-label': 'Finding' },
+      element('div', { class: 'controls', role: 'group', 'aria-label': 'What the figure shows' }, ...controls),
+      figure.element,
+    ),
+    figure,
+  };
+}
