@@ -115,7 +115,7 @@ function barTitle(label: string, symbol: string): string {
   const words = plainLabel(label, 56).split(' ');
   const lines = [''];
   for (const word of [...words, ...unit.trim().split(' ').filter(Boolean)]) {
-    if (`${lines.at(-1)} ${word}`.length > 30) lines.push(word);
+    if (`${lines.at(-1)} ${word}`.length > 24) lines.push(word);
     else lines[lines.length - 1] = `${lines.at(-1)} ${word}`.trim();
   }
   return lines.join('<br>');
