@@ -76,4 +76,9 @@ export interface Model {
    * the order wanted; without it all of them. Errors: SimError for a name that is no finding.
    */
   batch?(options: SolveOptions, windows: readonly Window[], only?: readonly string[]): Batch;
+  /**
+   * The temperature of the globe through a periodic orbit, where the model has a quick way to it: of the warm state, at increasing
+   * balanced anomalies from 0 to 2π, into as many. Returns whether the state kept its tolerance. Errors: as `solve`.
+   */
+  orbitInto?(world: World, options: SolveOptions, positions: Float64Array, into: Float64Array): boolean;
 }

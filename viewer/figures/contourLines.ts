@@ -35,8 +35,8 @@ export function levelContours(contours: Contours, ground: Ground, taken: readonl
 /** Of another quantity: white and dashed with a black edge, to be seen on any colour. */
 export function casedContours(contours: Contours, taken: readonly Spot[] = []): ContourDrawing {
   const lines = [
-    { color: '#000000', width: 3.5, dash: 'solid' },
-    { color: '#ffffff', width: 1.5, dash: 'dash' },
+    { color: '#000000', width: 2.5, dash: 'solid' },
+    { color: '#ffffff', width: 1.25, dash: 'dash' },
   ] as const;
   return drawn(contours, taken, () => ({ lines, ink: '#000000', beneath: '#ffffff' }));
 }

@@ -7,6 +7,7 @@ import { extremesOf, type ShownFinding, shownFinding } from '../words/shownFindi
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type ChartLine, glyph, traceOf } from './chartLine.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { fileName } from './fileName.ts';
 import { axisRange, gridAxisLayout } from './gridAxisLayout.ts';
 import { namesBesideLines } from './lineNames.ts';
 import { plainLabel } from './plainLabel.ts';
@@ -26,7 +27,7 @@ export function findingCurves(report: GridReport, name: string, style: FigureSty
   const lines = report.cases.map((_, at) => lineOf(report, at, shown, style));
   const view = style.view ?? { x: axisRange(axis), y: framed(scale) };
   return {
-    name: `${name.replace(/[^\w-]+/g, '-')}-along-one-input`,
+    name: `${fileName(name)}-along-one-input`,
     title: `${shown.label} against ${labelInText(rangeOf(axis))}`,
     textAlternative: report.cases.map((_, at) => finding(report, at, shown)).join(' '),
     caption: caption(report, shown),

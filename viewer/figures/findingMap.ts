@@ -9,6 +9,7 @@ import { plainLayout } from './chartLayout.ts';
 import { plotlyScale, temperatureScale } from './colourScale.ts';
 import { type ContourDrawing, levelContours } from './contourLines.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { fileName } from './fileName.ts';
 import { axisRange, cellEdges, gridAxisLayout } from './gridAxisLayout.ts';
 import { colourBar } from './mapKey.ts';
 import { plainLabel } from './plainLabel.ts';
@@ -46,8 +47,8 @@ export function findingMap(report: GridReport, caseIndex: number, name: string, 
   const contours = contoursOf(map);
   const hasOwn = ownPoint(map) !== null;
   return {
-    name: `${name.replace(/[^\w-]+/g, '-')}-over-two-inputs${report.cases.length > 1 ? `-${caseIndex + 1}` : ''}`,
-    title: `${shown.label} over ${list(report.axes.map((axis) => labelInText(asLabel(axis))))}${whose}`,
+    name: `${fileName(name)}-over-two-inputs${report.cases.length > 1 ? `-${caseIndex + 1}` : ''}`,
+    title: `${shown.label} over ${list(report.axes.map(labelInText))}${whose}`,
     textAlternative: finding(map),
     caption: caption(map, hasOwn),
     lines: hasOwn ? [ownLegend(map)] : [],
@@ -75,11 +76,7 @@ function mapOf(report: GridReport, caseIndex: number, name: string, style: Figur
   };
 }
 
-function asLabel({ label, unit, key, log, nodes }: GridAxis) {
-  return { label, unit, key, log, from: nodes[0]!, to: nodes.at(-1)! };
-}
-
-function size({ style }: FindingMap): { width: number; height: number } {
+function size({ style }: Pick<FindingMap, 'style'>): { width: number; height: number } {
   return style.narrow
     ? { width: plotWidth.narrow, height: plotHeight.narrow }
     : { width: plotWidth.wide, height: plotHeight.wide };
@@ -105,7 +102,7 @@ function colours({ report, shown, scale, x, y, style }: FindingMap, rows: Findin
     zmax: scale.range[1],
     colorscale: plotlyScale(temperatureScale),
     colorbar: {
-      ...colourBar(barTitle(shown.label, symbol), size({ style } as FindingMap).height, narrowAxisRoom, style),
+      ...colourBar(barTitle(shown.label, symbol), size({ style }).height, narrowAxisRoom, style),
       ...(shown.log ? barTicks(scale, shown) : {}),
     },
     hoverongaps: false,
@@ -119,7 +116,7 @@ function barTitle(label: string, symbol: string): string {
   const words = plainLabel(label, 56).split(' ');
   const lines = [''];
   for (const word of [...words, ...unit.trim().split(' ').filter(Boolean)]) {
-    if (`${lines.at(-1)} ${word}`.length > 30) lines.push(word);
+    if (`${lines.at(-1)} ${word}`.length > 24) lines.push(word);
     else lines[lines.length - 1] = `${lines.at(-1)} ${word}`.trim();
   }
   return lines.join('<br>');
@@ -251,8 +248,7 @@ function finding(map: FindingMap): string {
   const { report, caseIndex, shown, failed } = map;
   const { name, own } = report.cases[caseIndex]!;
   const found = extremesOf(shown.cases[caseIndex]!);
-  if (found === null)
-    return `${name}: ${labelInText(asLabel({ label: shown.label } as GridAxis))} has no value anywhere.`;
+  if (found === null) return `${name}: ${labelInText(shown)} has no value anywhere.`;
   const at = ({ value, node }: { value: number; node: number }): string =>
     `${shown.text(value)} at ${nodeText(report.axes, node)}`;
   const where = report.axes.flatMap((axis, index) => {

@@ -3,9 +3,11 @@ import type { Layout } from 'plotly.js-dist-min';
 import type { GridAxis } from '../../sim/studies/grid/gridReport.ts';
 import { axisTitle } from '../words/along.ts';
 import { axisPlace, rangeOf } from '../words/gridAxes.ts';
+import { exact, raised } from '../words/number.ts';
 import { axisStyle } from './chartLayout.ts';
 import type { FigureStyle } from './figure.ts';
 import { plainLabel } from './plainLabel.ts';
+import { multiples } from './roomyTicks.ts';
 
 export function gridAxisLayout(
   axis: GridAxis,
@@ -18,7 +20,7 @@ export function gridAxisLayout(
     title: { text: plainLabel(axisTitle(rangeOf(axis)), 60), standoff: 8 },
     range: [...range],
     nticks: style.narrow ? 5 : 10,
-    ...(axis.log && spansDecade(range) ? { dtick: decadeStep(range, style) } : {}),
+    ...(axis.log && spansDecades(range) ? decadeTicks(range, style) : {}),
     exponentformat: 'power',
     showgrid: false,
   };
@@ -36,10 +38,20 @@ export function cellEdges(axis: GridAxis): number[] {
   return [places[0]!, ...between, places.at(-1)!].map((place) => (axis.log ? 10 ** place : place));
 }
 
-function spansDecade([from, to]: readonly [number, number]): boolean {
+function spansDecades([from, to]: readonly [number, number]): boolean {
   return Math.floor(to + 1e-9) - Math.ceil(from - 1e-9) >= 2;
 }
 
-function decadeStep([from, to]: readonly [number, number], { narrow }: FigureStyle): number {
-  return Math.max(1, Math.ceil((to - from) / (narrow ? 5 : 10)));
+/** Powers of ten in letters of the common size; Plotly's own are a quarter larger. `range` is in powers. */
+export function decadeTicks(
+  [from, to]: readonly [number, number],
+  { narrow }: FigureStyle,
+): { tickmode: 'array'; tickvals: number[]; ticktext: string[] } {
+  const step = Math.max(1, Math.ceil((to - from) / (narrow ? 5 : 10)));
+  const powers = multiples(step, from, to);
+  return {
+    tickmode: 'array',
+    tickvals: powers.map((power) => 10 ** power),
+    ticktext: powers.map((power) => (Math.abs(power) < 3 ? exact(10 ** power) : `10${raised(power)}`)),
+  };
 }

@@ -11,6 +11,7 @@ import type { LegendLine } from './chartLine.ts';
 import { plotlyScale, temperatureScale } from './colourScale.ts';
 import { casedContours, levelContours } from './contourLines.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { decadeTicks } from './gridAxisLayout.ts';
 import { colourBar } from './mapKey.ts';
 import { plainLabel } from './plainLabel.ts';
 import { spreadLabels } from './spreadLabels.ts';
@@ -62,10 +63,10 @@ export function universalMap(
     title: 'Damping and lag of every plain lumped world',
     textAlternative: finding(placed, marked),
     caption:
-      'Constant albedo, emission as T⁴ and no heat from inside leave two numbers: the eccentricity, and the heat-store number 2πτ/P, the radiative time over the orbit’s pace. Colours and thin lines: the lag of the maximum behind periapsis, in % of an orbit. Dashed: damping, the share of the steady swing that is left. At the foot, nearly circular orbits answer as atan and 1/√ of the heat-store number.',
+      'Constant albedo, emission as T⁴ and no heat from inside leave two numbers: the eccentricity, and the heat-store number 2πτ/P, the radiative time over the orbit’s pace. Colours and thin lines: the lag of the maximum behind periapsis, in % of an orbit. Dashed: damping, the share of the steady swing that is left. Along the foot, where orbits are nearly circular, the lag is atan(2πτ/P)/2π and the damping 1/√(1 + (2πτ/P)²).',
     lines: legend(placed),
     data: [colours(chart, style), ...solid.data, ...dashed.data, ...markers(placed), ...readingMarks(marked, chart)],
-    layout: layoutOf(chart, placed, [...solid.annotations, ...dashed.annotations], view, style),
+    layout: layoutOf(placed, [...solid.annotations, ...dashed.annotations], view, style),
   };
 }
 
@@ -181,7 +182,6 @@ function readingMarks(marked: MarkedReading | null, { storeNumbers }: UniversalC
 }
 
 function layoutOf(
-  chart: UniversalChart,
   placed: readonly PlacedCase[],
   numbers: readonly Partial<Annotation>[],
   view: View,
@@ -201,8 +201,7 @@ function layoutOf(
       type: 'log',
       title: { text: 'Heat-store number 2πτ/P', standoff: 8 },
       range: [...view.x],
-      dtick: decadesShown(chart) > 6 ? 2 : 1,
-      exponentformat: 'power',
+      ...decadeTicks(view.x, style),
       showgrid: false,
       mirror: true,
     },
@@ -216,10 +215,6 @@ function layoutOf(
     shapes: key.shapes,
     annotations: [...numbers, ...(narrow ? [] : names(placed, view)), ...key.annotations],
   };
-}
-
-function decadesShown({ storeNumbers }: UniversalChart): number {
-  return Math.log10(storeNumbers.at(-1)! / storeNumbers[0]!);
 }
 
 /** Beside the markers on paper-white, apart from each other. */
@@ -267,8 +262,8 @@ function lineKey({ theme }: FigureStyle): { shapes: Partial<Shape>[]; annotation
   } as const;
   return {
     shapes: [
-      { ...sample, line: { color: '#000000', width: 3.5 } },
-      { ...sample, line: { color: '#ffffff', width: 1.5, dash: 'dash' } },
+      { ...sample, line: { color: '#000000', width: 2.5 } },
+      { ...sample, line: { color: '#ffffff', width: 1.25, dash: 'dash' } },
     ],
     annotations: [
       {

@@ -29,7 +29,7 @@ export function alongPair(from: number, to: number, along: Along): string {
 }
 
 /** The label as it stands within a sentence. */
-export function labelInText({ label }: Along): string {
+export function labelInText({ label }: Pick<Along, 'label'>): string {
   return /^\p{Lu}\p{Ll}/u.test(label) ? `${label[0]!.toLowerCase()}${label.slice(1)}` : label;
 }
 

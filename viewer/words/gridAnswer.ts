@@ -2,7 +2,7 @@
 import type { GridReport } from '../../sim/studies/grid/gridReport.ts';
 import { nodeText, rangesText } from './gridAxes.ts';
 import { list } from './number.ts';
-import { extremesOf, type ShownFinding, shownFinding } from './shownFinding.ts';
+import { extremesOf, type ShownFinding, shownFinding, spanText } from './shownFinding.ts';
 
 export interface GridAnswer {
   readonly lead: string;
@@ -17,7 +17,7 @@ export function gridAnswer(report: GridReport): GridAnswer {
     return { lead: `${over}, ${caseText(report, 0, mean!, lag!, true)}${failedText(report, 0)}`, details: [] };
   }
   return {
-    lead: `${over}, ${runs('the mean temperature of the cases', mean!, all(mean!))}, ${runs('the lag', lag!, all(lag!))}.`,
+    lead: `${over}, ${runs('the mean temperature of the cases', mean!, all(mean!))}, and ${runs('the lag', lag!, all(lag!))}.`,
     details: report.cases.map(({ name }, at) => {
       const text = caseText(report, at, mean!, lag!, false);
       return { caseIndex: at, name, text: `${text[0]!.toUpperCase()}${text.slice(1)}${failedText(report, at)}` };
@@ -35,15 +35,15 @@ function caseText(report: GridReport, at: number, mean: ShownFinding, lag: Shown
   const warmest = found && `It is warmest on average at ${nodeText(report.axes, found.high.node)}`;
   const coldest = found && `coldest at ${nodeText(report.axes, found.low.node)}`;
   const where = isWhole && found && found.high.value > found.low.value ? ` ${warmest}, ${coldest}.` : '';
-  return `${runs('the mean temperature', mean, values)}, ${runs('the lag', lag, lag.cases[at] ?? [])}.${where}`;
+  return `${runs('the mean temperature', mean, values)}, and ${runs('the lag', lag, lag.cases[at] ?? [])}.${where}`;
 }
 
-/** `the lag from 0.10 to 12.00 % of an orbit`, with its verb. */
+/** `the lag runs from 0.10 to 12.00 % of an orbit`. */
 function runs(what: string, shown: ShownFinding, values: readonly (number | null)[]): string {
   const found = extremesOf(values);
   if (found === null) return `${what} has no value`;
-  const [low, high] = [shown.text(found.low.value), shown.text(found.high.value)];
-  return low === high ? `${what} stays at ${low}` : `${what} runs from ${low} to ${high}`;
+  const span = spanText(shown, found.low.value, found.high.value);
+  return span === null ? `${what} stays at ${shown.text(found.high.value)}` : `${what} runs from ${span}`;
 }
 
 /** ` 3 of 1600 worlds could not be computed.`; nothing where all could. */

@@ -89,7 +89,8 @@ export function list(words: readonly string[]): string {
   return `${words.slice(0, -1).join(', ')} and ${words.at(-1)}`;
 }
 
-function raised(exponent: number): string {
+/** An exponent as it is set in print. */
+export function raised(exponent: number): string {
   return `${exponent < 0 ? '⁻' : ''}${raisedDigits(String(Math.abs(exponent)))}`;
 }
 

@@ -16,8 +16,11 @@ export interface ShownFinding {
   readonly range: readonly [number, number] | null;
   /** A list of nodes for each case of the report; empty where the case has no such finding. */
   readonly cases: readonly (readonly Shown[])[];
-  /** A value with its unit; `short` without idle digits, for labels. */
+  /** A value without its unit. */
+  number(value: number): string;
+  /** A value with its unit. */
   text(value: number): string;
+  /** The same without idle digits, for numbers on lines. */
   short(value: number): string;
 }
 
@@ -43,11 +46,18 @@ export interface Offered {
 
 /** Every finding of any case, once: the chief ones first, in their order, then the rest in the report's. */
 export function offeredFindings({ cases }: Pick<GridReport, 'cases'>): { chief: Offered[]; others: Offered[] } {
-  const all = new Map(cases.flatMap(({ findings }) => findings.map(({ name, label }) => [name, { name, label }])));
+  const all = new Map(
+    cases.flatMap(({ findings }) => findings.map((one) => [one.name, { name: one.name, label: shownLabel(one) }])),
+  );
   const first = chief.flatMap((name) => all.get(name) ?? []);
   const windows = [...all.values()].filter(({ name }) => isWindow(name));
   const leading = [...first, ...windows];
   return { chief: leading, others: [...all.values()].filter((one) => !leading.includes(one)) };
+}
+
+/** What counts in orbits is shown in percent of one. */
+function shownLabel({ label }: GridFinding): string {
+  return label.replace(/, in orbits$/, ', share of an orbit');
 }
 
 /** Over this ratio colours go by the logarithm. */
@@ -57,7 +67,7 @@ const wide = 100;
 export function shownFinding(report: Pick<GridReport, 'cases'>, name: string): ShownFinding {
   const found = report.cases.map((one) => one.findings.find((finding) => finding.name === name));
   const known = found.find((finding) => finding !== undefined);
-  const si = report.cases.map((one, at) => unrolled(found[at], one));
+  const si = unrolled(report.cases, found);
   const finite = si.flat().filter((value) => value !== null);
   const { symbol, per } = readableUnit(name, known?.unit ?? '1', finite);
   const cases = si.map((values) => values.map((value) => (value === null ? null : value / per)));
@@ -66,13 +76,14 @@ export function shownFinding(report: Pick<GridReport, 'cases'>, name: string): S
   const number = numberText(range ?? [0, 1], log);
   return {
     name,
-    label: known?.label ?? name,
+    label: known === undefined ? name : shownLabel(known),
     symbol,
     log,
     range,
     cases,
+    number,
     text: (value) => joined(number(value), symbol),
-    short: (value) => joined(exact(Number(value.toPrecision(4))), symbol),
+    short: (value) => joined(exact(Number(value.toPrecision(4))), symbol.startsWith('%') ? '%' : symbol),
   };
 }
 
@@ -86,17 +97,19 @@ function numberText([low, high]: readonly [number, number], log: boolean): (valu
   const size = Math.max(Math.abs(low), Math.abs(high));
   if (log || size >= 1e5 || (size > 0 && size < 1e-2)) return (value) => significant(value, 3);
   const span = high - low > 1e-9 * size ? high - low : size;
-  const decimals = span > 0 ? Math.max(0, Math.min(6, Math.round(2.2 - Math.log10(span)))) : 0;
+  const decimals = span > 0 ? Math.max(0, Math.min(6, Math.round(2.7 - Math.log10(span)))) : 0;
   return (value) => fixed(value, decimals);
 }
 
 function readableUnit(name: string, unit: string, values: readonly number[]): { symbol: string; per: number } {
-  const middle = Math.abs(values.toSorted((a, b) => Math.abs(a) - Math.abs(b))[values.length >> 1] ?? 0);
+  const most = Math.max(0, ...values.map(Math.abs));
   if (unit === 's') {
-    const { symbol, seconds } = timeUnit(middle);
+    // Over decades days serve best: years would make powers of ten of the short ones.
+    const isWide = Math.min(...values) < most / wide;
+    const { symbol, seconds } = timeUnit(isWide ? Math.min(most, 999 * secondsPerDay) : most);
     return { symbol, per: seconds };
   }
-  if (unit === 'K/s') return middle < 24 / secondsPerDay ? { symbol: 'K d⁻¹', per: 1 / secondsPerDay } : hourly;
+  if (unit === 'K/s') return most < 240 / secondsPerDay ? { symbol: `K${nbsp}d⁻¹`, per: 1 / secondsPerDay } : hourly;
   if (unit === 'rad') return { symbol: '°', per: radiansPerDegree };
   if (unit === 'deg') return { symbol: '°', per: 1 };
   if (name === 'lagOfMaxOrbits') return { symbol: '% of an orbit', per: 0.01 };
@@ -104,26 +117,37 @@ function readableUnit(name: string, unit: string, values: readonly number[]): { 
   return { symbol: unitText(unit), per: 1 };
 }
 
-const hourly = { symbol: 'K h⁻¹', per: 1 / 3600 };
+const hourly = { symbol: `K${nbsp}h⁻¹`, per: 1 / 3600 };
 
 /**
- * Times and angles on a circle, cut where they leave the widest gap free, so that neighbours stay neighbours: what lies behind the
- * cut counts from below zero. Needs the length of the circle at every node; without it they stay as they are.
+ * Times and angles on a circle, cut where all cases together leave the widest gap free, so that neighbours stay neighbours: what
+ * lies behind the cut counts from below zero. Needs the length of the circle at every node; without it they stay as they are.
  */
-function unrolled(finding: GridFinding | undefined, oneCase: GridCase): readonly Shown[] {
-  if (finding === undefined) return [];
-  const { circular, unit, values } = finding;
-  if (!circular) return values;
-  const periods = oneCase.findings.find(({ name }) => name === 'period')?.values;
-  const lengths = values.map((_, at) =>
-    unit === 'rad' ? 2 * Math.PI : unit === 'deg' ? 360 : (periods?.[at] ?? null),
+function unrolled(cases: readonly GridCase[], found: readonly (GridFinding | undefined)[]): (readonly Shown[])[] {
+  if (!found.some((finding) => finding?.circular)) return found.map((finding) => finding?.values ?? []);
+  const lengths = cases.map((one, at) => circleLengths(one, found[at]));
+  const turns = found.map((finding, at) =>
+    (finding?.values ?? []).map((value, node) => share(value, lengths[at]![node])),
   );
-  const turns = values.map((value, at) => (value === null || !lengths[at] ? null : value / lengths[at]!));
-  const cut = widestGap(turns.filter((turn) => turn !== null));
-  return values.map((value, at) => {
-    const turn = turns[at] ?? null;
-    return value !== null && turn !== null && turn > cut ? value - lengths[at]! : value;
-  });
+  const cut = widestGap(turns.flat().filter((turn) => turn !== null));
+  return found.map((finding, at) =>
+    (finding?.values ?? []).map((value, node) => {
+      const turn = turns[at]![node] ?? null;
+      return value !== null && turn !== null && turn > cut ? value - lengths[at]![node]! : value;
+    }),
+  );
+}
+
+function circleLengths({ findings }: GridCase, finding: GridFinding | undefined): readonly Shown[] {
+  if (finding === undefined) return [];
+  const { unit, values } = finding;
+  const periods = findings.find(({ name }) => name === 'period')?.values;
+  if (unit === 'rad' || unit === 'deg') return values.map(() => (unit === 'rad' ? 2 * Math.PI : 360));
+  return values.map((_, node) => periods?.[node] ?? null);
+}
+
+function share(value: Shown, length: Shown | undefined): Shown {
+  return value === null || !length ? null : value / length;
 }
 
 /** The middle of the widest stretch of the circle without a value; 1 where that is at its end. */
@@ -144,6 +168,12 @@ function widestGap(turns: readonly number[]): number {
 export interface Extreme {
   readonly value: number;
   readonly node: number;
+}
+
+/** `290.0 to 357.2 K`, the unit said once; null where the two read alike. */
+export function spanText(shown: ShownFinding, low: number, high: number): string | null {
+  if (shown.text(low) === shown.text(high)) return null;
+  return `${shown.number(low)} to ${shown.text(high)}`;
 }
 
 /** Lowest and highest of a case, and where; null where it has no value. */

@@ -1,5 +1,6 @@
 /** `model: lumped`: one temperature for the whole globe, one heat store. */
 import { findingsOf } from '../../findings/sheet.ts';
+import { curveValuesInto } from '../../solve/curve.ts';
 import type { SolveOptions, World } from '../../world.ts';
 import type { Model, State } from '../model.ts';
 import { lumpedBatch } from './batch.ts';
@@ -39,6 +40,11 @@ export function lumpedModel(): Model {
       };
     },
     batch: lumpedBatch,
+    orbitInto(world, options, positions, into) {
+      const { curve, converged } = solver.warm(world, options);
+      curveValuesInto(curve, positions, into);
+      return converged;
+    },
   };
 }
 

@@ -22,6 +22,8 @@ export interface LumpedSolver {
   states(world: World, options: SolveOptions, windows: readonly Window[]): FoundStates;
   /** The wanted findings of the warm state into `sheet`; returns whether it kept the tolerance. */
   findingsInto(world: World, options: SolveOptions, windows: readonly Window[], wanted: Wanted, sheet: Sheet): boolean;
+  /** The warm state without its findings. */
+  warm(world: World, options: SolveOptions): Trajectory;
 }
 
 export interface FoundStates {
@@ -61,6 +63,12 @@ export function lumpedSolver(): LumpedSolver {
   }
 
   return {
+    warm(world, options) {
+      requireSomeHeat(world);
+      const coefficient = plainCoefficient(world, options);
+      if (coefficient !== null) return plainTrajectory(plainState(world, coefficient, options.tolerance));
+      return trajectories(world, options).all[0];
+    },
     states(world, options, windows) {
       requireSomeHeat(world);
       const columns = lumpedColumns(options.start, windows).length;

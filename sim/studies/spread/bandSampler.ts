@@ -5,9 +5,10 @@
 import type { Dataset } from '../../dataset/dataset.ts';
 import { SimError } from '../../error.ts';
 import { models } from '../../models/index.ts';
+import type { Model } from '../../models/model.ts';
 import { balancedFromMean, meanFromBalanced } from '../../orbit/balanced.ts';
 import type { CaseDrawn } from '../../scenario/drawn.ts';
-import type { World } from '../../world.ts';
+import type { SolveOptions, World } from '../../world.ts';
 
 export interface BandSampler {
   readonly bands: readonly BandPlace[];
@@ -32,6 +33,7 @@ const rows = 240;
 /** Nothing for a run from a start, which is no orbit that repeats. */
 export function bandSampler(drawn: CaseDrawn, centre: readonly number[]): BandSampler {
   if (drawn.options.start !== 'periodic') return { bands: [], columns: [], at: () => new Float64Array(0) };
+  const model = models[drawn.model];
   const world = drawn.worldAt(centre);
   const { eccentricity } = world.orbit;
   const phases = Float64Array.from({ length: places + 1 }, (_, i) => {
@@ -44,14 +46,9 @@ export function bandSampler(drawn: CaseDrawn, centre: readonly number[]): BandSa
     columns: bands.flatMap(({ name, positions }) => Array.from(positions, (_, i) => `${name}.${i}`)),
     at(values) {
       const { world: one, options } = drawn.builtAt(values);
-      const [state] = models[drawn.model].solve(
-        one,
-        { ...options, samples: rows, spacing: 'balancedAnomaly' },
-        [],
-      ).states;
-      if (!state.converged) throw new SimError('solve.tolerance', 'the state is not known to it', 'Raise it');
-      const { dataset } = state;
-      const parts = [throughOrbit(dataset, one, phases), ...(one.globe ? alongLatitude(dataset) : [])];
+      const parts = model.orbitInto
+        ? [throughOrbit(model, one, options, phases)]
+        : fromYear(model, one, options, phases);
       const row = new Float64Array(parts.reduce((sum, { length }) => sum + length, 0));
       let offset = 0;
       for (const part of parts) {
@@ -61,6 +58,25 @@ export function bandSampler(drawn: CaseDrawn, centre: readonly number[]): BandSa
       return row;
     },
   };
+}
+
+function throughOrbit(model: Model, world: World, options: SolveOptions, phases: Float64Array): Float64Array {
+  const { eccentricity } = world.orbit;
+  const positions = phases.map((phase) => balancedFromMean(2 * Math.PI * phase, eccentricity));
+  const temperatures = new Float64Array(phases.length);
+  requireTolerance(model.orbitInto!(world, options, positions, temperatures));
+  return temperatures;
+}
+
+/** From the rows of a year that the model has to compute as a whole. */
+function fromYear(model: Model, world: World, options: SolveOptions, phases: Float64Array): Float64Array[] {
+  const [state] = model.solve(world, { ...options, samples: rows, spacing: 'balancedAnomaly' }, []).states;
+  requireTolerance(state.converged);
+  return [betweenRows(state.dataset, world, phases), ...(world.globe ? alongLatitude(state.dataset) : [])];
+}
+
+function requireTolerance(isKept: boolean): void {
+  if (!isKept) throw new SimError('solve.tolerance', 'the state is not known to it', 'Raise it');
 }
 
 function latitudeBands(count: number): BandPlace[] {
@@ -76,7 +92,7 @@ function latitudeBands(count: number): BandPlace[] {
 }
 
 /** Between rows, equal in the draw's own balanced anomaly, by the cubic through four of them. */
-function throughOrbit({ variables }: Dataset, { orbit }: World, phases: Float64Array): Float64Array {
+function betweenRows({ variables }: Dataset, { orbit }: World, phases: Float64Array): Float64Array {
   const temperatures = variables.temperature.data;
   const count = temperatures.length;
   const row = (i: number) => temperatures[((i % count) + count) % count];

@@ -4,7 +4,7 @@ import { batchOf } from '../../models/batchOf.ts';
 import { models } from '../../models/index.ts';
 import { bandSampler } from './bandSampler.ts';
 import { designPlace } from './indexDesign.ts';
-import { type PlannedCase, planSpread, type SpreadPlan, type SpreadSetup, shownInput } from './plan.ts';
+import { type PlannedCase, planSpread, type SpreadPlan, type SpreadSetup } from './plan.ts';
 
 /** Rows [from, to): a column each, NaN where undefined, and the rows that failed. */
 export interface TableRows {
@@ -116,7 +116,7 @@ function fillInputs(
   for (const [index, { of }] of inputColumns.entries()) {
     const { case: c, input } = of[0];
     const about = cases[c].inputs[input];
-    for (let row = 0; row < into[index].length; row++) into[index][row] = shownInput(about, values[c][row][input]);
+    for (let row = 0; row < into[index].length; row++) into[index][row] = about.shown(values[c][row][input]);
   }
 }
 

@@ -8,7 +8,7 @@ import type { FindingColumn } from '../../findings/finding.ts';
 import { batchOf } from '../../models/batchOf.ts';
 import { models } from '../../models/index.ts';
 import type { Batch } from '../../models/model.ts';
-import { inUnit, type Support, uncertainNumber } from '../../quantity/index.ts';
+import { inUnit, parseUnit, type Support, uncertainNumber } from '../../quantity/index.ts';
 import { type CaseDrawn, casesDrawn, type UncertainInput } from '../../scenario/drawn.ts';
 import { type RowChooser, rowsByWeight, rowsEvenly } from './posteriorRow.ts';
 import { pseudoRandomDraws } from './pseudoRandom.ts';
@@ -40,6 +40,8 @@ export interface PlannedInput extends UncertainInput {
   /** SI value at a number in (0, 1). */
   at(share: number): number;
   readonly truncatedShare: number;
+  /** SI, as tables show it: in the unit in which it was typed. */
+  shown(value: number): number;
 }
 
 export interface PlannedCase {
@@ -131,17 +133,19 @@ function planInput(
   samples: Samples | null,
   chooser: RowChooser | null,
 ): PlannedInput {
+  const unit = parseUnit(input.unit);
+  const shown = (value: number) => inUnit(value, unit);
   if (input.column !== null) {
     const column = samples?.values.get(input.key);
     if (!column || !chooser) throw new Error(`samples of ${input.key} are missing`);
-    return { ...input, dimension: 0, at: (share) => column[chooser(share)], truncatedShare: 0 };
+    return { ...input, dimension: 0, at: (share) => column[chooser(share)], truncatedShare: 0, shown };
   }
   const { quantile, truncatedShare } = uncertainNumber(
     input.key,
     { value: input.centre, distribution: input.distribution },
     supportOf(input),
   );
-  return { ...input, dimension: dimensions.indexOf(input.key), at: quantile, truncatedShare };
+  return { ...input, dimension: dimensions.indexOf(input.key), at: quantile, truncatedShare, shown };
 }
 
 /** Angles come round: those with a whole turn wrap, those between two directions are mirrored at 0° and 180°. */
@@ -177,9 +181,4 @@ function sameDraws(a: UncertainInput, b: UncertainInput): boolean {
     a.column === b.column &&
     JSON.stringify(a.distribution) === JSON.stringify(b.distribution)
   );
-}
-
-/** A value of an input as tables show it. */
-export function shownInput({ unit }: UncertainInput, value: number): number {
-  return inUnit(value, unit);
 }

@@ -7,7 +7,7 @@ import { summariseTurns, unwrapTurn } from './circular.ts';
 import { histogramOf } from './histogram.ts';
 import { importanceByDesign, importanceByRanks, noImportance } from './importance.ts';
 import { percentileLevels, quantilesInto, type Summary, summarise } from './percentiles.ts';
-import { type PlannedCase, type SpreadPlan, shownInput } from './plan.ts';
+import type { PlannedCase, SpreadPlan } from './plan.ts';
 import { type RankOrder, rankOrder } from './rankMeasure.ts';
 import type { Importance, SpreadBand, SpreadCase, SpreadFinding, SpreadInput, SpreadReport } from './spreadReport.ts';
 
@@ -78,7 +78,7 @@ async function summariseInputs(plan: SpreadPlan, index: number, read: ReadColumn
     const isThis = (place: { case: number; input: number }) => place.case === index && place.input === i;
     const values = await read(plan.inputColumns.find(({ of }) => of.some(isThis))!.name);
     const { key, label, unit, text, truncatedShare, column } = input;
-    const centre = shownInput(input, input.centre);
+    const centre = input.shown(input.centre);
     told.push({ key, label, unit, text, centre, summary: summarise(values, scratch), truncatedShare, column });
     sample.push(values.slice(0, scattered));
     if (plan.rowOf !== null) ranks.push(rankOrder(values.slice(0, ranked)));

@@ -1,21 +1,20 @@
 /** Table 1: lowest and highest of every finding on the grid. */
 import type { GridReport } from '../../../sim/studies/grid/gridReport.ts';
+import { axesText } from '../../words/gridAxes.ts';
 import { type ExtremeCell, extremeRows } from '../../words/gridTable.ts';
 import { dataTable } from '../dataTable.ts';
 import { type Child, element, userText } from '../element.ts';
 import { caseSample } from '../lineSample.ts';
 
 export function extremesSection(report: GridReport): HTMLElement {
-  const columns = report.cases.flatMap(({ name }, at) =>
-    ['lowest', 'highest'].map((which) => ({
-      head: [caseSample(at), userText(name), element('small', {}, which)],
-    })),
-  );
   const table = dataTable({
-    caption: [element('b', {}, 'Table 1. '), 'Lowest and highest of every finding on the grid, and where.'],
+    caption: [
+      element('b', {}, 'Table 1. '),
+      `Every finding over the grid, lowest to highest. Beneath, where: ${axesText(report.axes)}.`,
+    ],
     label: 'Extremes over the grid',
     corner: 'Finding',
-    columns,
+    columns: report.cases.map(({ name }, at) => ({ head: [caseSample(at), userText(name)] })),
     rows: extremeRows(report).map(({ label, cells }) => ({ head: [userText(label)], cells: cells.map(content) })),
   });
   const note = element(
@@ -27,6 +26,9 @@ export function extremesSection(report: GridReport): HTMLElement {
   return element('section', { class: 'grid' }, element('h2', {}, 'Over the whole grid'), table, note);
 }
 
-function content({ text, detail }: ExtremeCell): Child[] {
-  return [text, detail === null ? null : element('small', { class: 'detail' }, userText(detail))];
+function content({ text, details }: ExtremeCell): Child[] {
+  return [
+    element('span', { class: 'detail' }, text),
+    ...details.map((detail) => element('small', { class: 'detail' }, detail)),
+  ];
 }

@@ -38,7 +38,8 @@ export function findingSection(report: GridReport, number: number): Chosen {
   return {
     element: element(
       'section',
-      { 'aria-label': 'Finding' },
+      {},
+      element('h2', {}, report.axes.length === 2 ? 'A finding over both inputs' : 'A finding along the input'),
       element('div', { class: 'controls', role: 'group', 'aria-label': 'What the figure shows' }, ...controls),
       figure.element,
     ),
