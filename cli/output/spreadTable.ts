@@ -5,21 +5,28 @@ import { panels } from './grid.ts';
 import type { Terminal } from './terminal.ts';
 import { hanging, wrap } from './text.ts';
 
-/** Shown where a case has them; the files have all. */
-const chief = [
-  'temperatureMax',
-  'temperatureMean',
-  'temperatureMin',
-  'hottestTemperature',
-  'coldestTemperature',
-  'timeOfMax',
-  'lagOfMax',
-  'damping',
-  'equilibriumTemperature',
-  'orbitMeanInstellation',
-  'period',
-  'iceFractionMean',
+interface Chief {
+  readonly name: string;
+  readonly section: string;
+  readonly label: string;
+}
+
+/** Shown where a case has them, in sections; the files have all. */
+const chief: readonly Chief[] = [
+  { name: 'temperatureMax', section: 'temperature, K', label: 'maximum' },
+  { name: 'temperatureMean', section: 'temperature, K', label: 'mean' },
+  { name: 'temperatureMin', section: 'temperature, K', label: 'minimum' },
+  { name: 'hottestTemperature', section: 'temperature, K', label: 'hottest anywhere' },
+  { name: 'coldestTemperature', section: 'temperature, K', label: 'coldest anywhere' },
+  { name: 'equilibriumTemperature', section: 'temperature, K', label: 'textbook equilibrium' },
+  { name: 'timeOfMax', section: 'maximum comes, d', label: 'after periapsis' },
+  { name: 'lagOfMax', section: 'maximum comes, d', label: 'after the steady maximum' },
+  { name: 'damping', section: 'damping', label: '' },
+  { name: 'iceFractionMean', section: 'ice, share of area', label: '' },
+  { name: 'orbitMeanInstellation', section: 'mean instellation, W/m2', label: '' },
+  { name: 'period', section: 'period, d', label: '' },
 ];
+const windowSection = 'share of time in';
 const mostImportant = 3;
 
 /** Lines that fit the terminal, from 40 columns up. */
@@ -36,17 +43,17 @@ export function spreadLines(report: SpreadReport, terminal: Terminal): string[] 
 const samplingWords = { sobol: "scrambled Sobol' points", random: 'pseudo-random', posterior: 'posterior samples' };
 
 function caseLines(one: SpreadCase, terminal: Terminal): string[] {
-  const shown = chief.flatMap((name) => one.findings.filter((finding) => finding.name === name));
-  const windows = one.findings.filter(({ name }) => /^(fractionInWindow|habitableFraction)\./.test(name));
-  const findings = [...shown, ...windows];
+  const rows = rowsOf(one);
   const grid = {
-    headings: ['2.5 %', '16 %', 'median', '84 %', '97.5 %', 'at centre'],
-    rows: findings.map((finding) => {
-      const label = terminal.say(labelOf(finding));
-      return { section: label, label: '', alone: label };
-    }),
-    cells: findings.map(cellsOf),
+    headings: ['2.5 %', '16 %', 'median', '84 %', '97.5 %', 'centre'].map((text) => terminal.say(text)),
+    rows: rows.map(({ section, label }) => ({
+      section: terminal.say(section),
+      label: terminal.say(label),
+      alone: terminal.say(label === '' ? section : `${section}: ${label}`),
+    })),
+    cells: rows.map(({ finding }) => cellsOf(finding)),
   };
+  const findings = rows.map(({ finding }) => finding);
   const name = wrap(terminal.say(`${one.name} (${one.model})`), terminal.width);
   return [
     ...name.map((line) => terminal.paint('bold', line)),
@@ -65,14 +72,16 @@ function caseLines(one: SpreadCase, terminal: Terminal): string[] {
   ];
 }
 
-/** Times in days, instellation in that of the Earth, all else as it is. */
-function shownIn({ unit }: SpreadFinding): string {
-  return unit === 's' ? 'd' : unit === '1' ? '' : unit;
-}
-
-function labelOf(finding: SpreadFinding): string {
-  const unit = shownIn(finding);
-  return unit === '' ? finding.label : `${finding.label}, ${unit}`;
+function rowsOf({ findings }: SpreadCase): { section: string; label: string; finding: SpreadFinding }[] {
+  const named = chief.flatMap(({ name, section, label }) => {
+    const finding = findings.find((one) => one.name === name);
+    return finding ? [{ section, label, finding }] : [];
+  });
+  const windows = findings.flatMap((finding) => {
+    const [, name] = /^(?:fractionInWindow|habitableFraction)\.(.*)$/s.exec(finding.name) ?? [];
+    return name === undefined ? [] : [{ section: windowSection, label: name, finding }];
+  });
+  return [...named, ...windows];
 }
 
 function cellsOf(finding: SpreadFinding): string[] {
@@ -80,7 +89,7 @@ function cellsOf(finding: SpreadFinding): string[] {
   const numbers = percentiles === null ? [null, null, null, null, null] : levels.map((level) => percentiles[level]);
   return [...numbers, finding.atCentre].map((value) => {
     if (value === null) return '—';
-    return formatNumber(finding.unit === 's' ? inUnit(value, 'd') : value, 5);
+    return formatNumber(finding.unit === 's' ? inUnit(value, 'd') : value, 4);
   });
 }
 

@@ -6,19 +6,22 @@ import { spawnSync } from 'node:child_process';
 import { accessSync, constants } from 'node:fs';
 import { delimiter, join } from 'node:path';
 
-export type Tool = 'chromium' | 'scipy' | 'xarray' | 'ncdump';
+export type Tool = 'chromium' | 'scipy' | 'xarray' | 'ncdump' | 'slurm';
 
 const finders: Readonly<Record<Tool, () => string | null>> = {
   chromium: () => onPath(['chromium', 'chromium-browser', 'google-chrome', 'google-chrome-stable']),
   scipy: () => pythonWith('scipy.integrate'),
   xarray: () => pythonWith('xarray, netCDF4'),
   ncdump: () => onPath(['ncdump']),
+  // its own daemons are started, which only root may
+  slurm: () => (process.getuid?.() === 0 && onPath(['slurmctld', 'slurmd']) ? onPath(['sbatch']) : null),
 };
 const packages: Readonly<Record<Tool, string>> = {
   chromium: 'chromium',
   scipy: 'python3-scipy',
   xarray: 'python3-xarray python3-netcdf4',
   ncdump: 'netcdf-bin',
+  slurm: 'slurm-wlm munge (and run as root)',
 };
 
 /** True when the tool is here. Errors: throws when it is not and PERILAG_REQUIRE=all. */
