@@ -8,6 +8,9 @@
  * Never a test: absolute times mean nothing on a shared machine.
  */
 import { spawnSync } from 'node:child_process';
+import { mkdtempSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
 import { lumpedModel } from '../../sim/models/lumped/index.ts';
 import { plainSolver } from '../../sim/models/lumped/plain.ts';
 import { smoothSolver } from '../../sim/models/lumped/smooth.ts';
@@ -224,4 +227,34 @@ function wholeProcess(): void {
     `  two zonal cases with fields.nc / the same import: ${median(pairs.map((pair) => pair.fields / pair.load)).toFixed(2)}`,
   );
   print(`  perilag run / node -e 0: ${median(pairs.map((pair) => pair.run / pair.node)).toFixed(2)}`);
+  manyWorlds(wall);
+}
+
+/** Whole processes of many worlds, against one run of the same scenario. */
+function manyWorlds(wall: (command: string, words: readonly string[]) => number): void {
+  const perilag = (...words: string[]) => {
+    const folder = mkdtempSync(join(tmpdir(), 'perilag-bench-'));
+    const time = wall('node', ['dist/perilag.mjs', ...words, '--only', 'some store', '--quiet', '-o', folder]);
+    rmSync(folder, { recursive: true });
+    return time;
+  };
+  const file = 'configs/six-unknowns.yaml';
+  const run = () => perilag('run', file);
+  const spread = (...words: string[]) => perilag('spread', file, ...words);
+  const grid = () => {
+    const ranges = ['orbit.eccentricity=0 to 0.9', 'planet.heatStore.heatCapacity=1e4 to 1e9 J/m2/K log'];
+    return perilag('grid', file, ...ranges.flatMap((range) => ['--along', range]));
+  };
+  const draws = (workers: number) => spread('--draws', '300000', '--no-indices', '--workers', String(workers));
+  const rounds = Array.from({ length: 5 }, () => ({
+    run: run(),
+    spread: spread('--draws', '100000'),
+    grid: grid(),
+    one: draws(1),
+    two: draws(2),
+  }));
+  print('\nMany worlds, whole processes with all files (wall time, 5 rounds in turn)');
+  print(`  spread of 100,000 draws with indices / run: ${median(rounds.map((r) => r.spread / r.run)).toFixed(1)}`);
+  print(`  grid of 40 × 40 / run: ${median(rounds.map((r) => r.grid / r.run)).toFixed(1)}`);
+  print(`  300,000 draws, one worker / two: ${median(rounds.map((r) => r.one / r.two)).toFixed(2)}`);
 }

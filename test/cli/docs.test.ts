@@ -52,7 +52,11 @@ test('every finding, command and option is named', async () => {
   for (const name of findings) expect(readme).toMatch(new RegExp(`\`${name}[\`.]`));
   const commands = [...(await place.perilag('--help')).stdout.matchAll(/^ {2}(\w+) /gm)].map(([, name]) => name!);
   for (const name of commands.filter((word) => word !== 'help')) expect(readme).toContain(`perilag ${name} `);
-  const options = [...(await place.perilag('run', '--help')).stdout.matchAll(/--[a-z]+/g)].map(([option]) => option);
+  const options: string[] = [];
+  for (const command of ['run', 'spread', 'grid', 'trace']) {
+    const { stdout: help } = await place.perilag(command, '--help');
+    options.push(...[...help.matchAll(/--[a-z]+(?:-[a-z]+)?/g)].map(([option]) => option));
+  }
   for (const option of options.filter((word) => word !== '--help')) expect(readme).toContain(`\`${option}`);
   expect(findings.length * commands.length * options.length).toBeGreaterThan(0);
   place.remove();
