@@ -31,13 +31,9 @@ function forPage(result: RunResult): RunResult {
     })),
     notes: [
       ...result.notes,
-      `The figures of this page are drawn from every ${ordinal(longest)} row of the year; the tables are of the whole, and fields.nc and series.csv hold every row.`,
+      `The figures of this page are drawn from one row of the year in ${longest}, or more; the tables are of the whole, and fields.nc and series.csv hold every row.`,
     ],
   };
-}
-
-function ordinal(count: number): string {
-  return count === 2 ? 'second' : count === 3 ? 'third' : `${count}th`;
 }
 
 /** The page with anything in its data block. */

@@ -44,7 +44,8 @@ export function orbitMeanInside(world: World, window: Window): 0 | 1 {
 }
 
 /**
- * Share of the time between two mean anomalies. The instellation falls from periapsis to apoapsis, so that it exceeds a bound during the share M(E)/π of each half orbit, with 1 − e cos E = √(S_a/bound).
+ * Share of the time between two mean anomalies. The instellation falls from periapsis to apoapsis, so that it exceeds a bound
+ * during the share M(E)/π of each half orbit, with 1 − e cos E = √(S_a/bound).
  */
 export function instellationShare(world: World, window: Window, start: Radians, end: Radians): number {
   const outer = meanAnomalyAt(world, window.from);

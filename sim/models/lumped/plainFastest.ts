@@ -44,7 +44,7 @@ function enterFastest(scratch: Scratch, fastest: Fastest, sign: 1 | -1, column: 
   const { period } = world.orbit;
   const toKelvinPerSecond = (coefficient * fourthPower(scale)) / world.surface.heatCapacity;
   const shift = fourthPower(fastest.value) * (fourthPower(1 + solution.errorEstimate) - 1);
-  enter(sheet, column, sign * fastest.rate * toKelvinPerSecond, shift * toKelvinPerSecond);
+  enter(sheet, column, sign * fastest.rate * toKelvinPerSecond, (shift + fastest.apart) * toKelvinPerSecond);
   enter(sheet, column + 1, (meanFromBalanced(fastest.position, eccentricity) * period) / turn);
 }
 
@@ -86,9 +86,11 @@ function tryPiece(scratch: Scratch, left: number, right: number, sign: 1 | -1, f
   scratch.x = x;
   lookAround(scratch);
   const y = pieceValue(piece, x);
-  const rate = sign * (isSlow(scratch) ? heating(scratch, y) : pieceSlope(piece, x) / (state.rate * point.clock));
-  if (rate > fastest.rate) {
-    fastest.rate = rate;
+  const balance = heating(scratch, y);
+  const known = isSlow(scratch) ? balance : pieceSlope(piece, x) / (state.rate * point.clock);
+  if (sign * known > fastest.rate) {
+    fastest.rate = sign * known;
+    fastest.apart = Math.abs(balance - known);
     fastest.position = piece.left + x * piece.width;
     fastest.value = y;
   }

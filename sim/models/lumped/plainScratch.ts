@@ -49,8 +49,8 @@ export function newScratch(): Scratch {
     turns: { maxima: 0, minima: 0, maximumIn: 0, minimumIn: 0 },
     highest: { index: 0, x: 0.5, position: 0.5, value: 0.5, curvature: 0.5 },
     lowest: { index: 0, x: 0.5, position: 0.5, value: 0.5, curvature: 0.5 },
-    warming: { rate: 0.5, position: 0.5, value: 0.5 },
-    cooling: { rate: 0.5, position: 0.5, value: 0.5 },
+    warming: { rate: 0.5, apart: 0.5, position: 0.5, value: 0.5 },
+    cooling: { rate: 0.5, apart: 0.5, position: 0.5, value: 0.5 },
     evenWave: { cosine: 0.5, sine: 0.5 },
     oddWave: { cosine: 0.5, sine: 0.5 },
     midpoints: new Float64Array(0),
@@ -127,6 +127,8 @@ export interface Wave {
 export interface Fastest {
   /** |N|, dimensionless. */
   rate: number;
+  /** How far it lies from the balance of fluxes there: what interpolation leaves in it. */
+  apart: number;
   position: Radians;
   value: number;
 }

@@ -64,8 +64,11 @@ const finestSteps = 6144;
 const largestStep = 4;
 /** Years on one mesh: fewer on a finer one, so that a world that cannot settle is given up in bounded time. */
 const maximumYears = (steps: number) => Math.min(60, Math.max(12, Math.ceil(20_000 / steps)));
-/** Rodas4 gains 2⁴ by halving its steps; 6 leaves room for the kinks of polar night. */
-const safety = 6;
+/** By how much two meshes differ more than the finer one errs: at most, and where the gain by halving is not known yet. */
+const bestSafety = 4;
+const firstSafety = 2;
+/** Steps beyond so many memories of a band: slopes from f multiply there what the march leaves, and halving gains little. */
+const fastStep = 4;
 
 /** Follows a start, K by band, to its periodic state; steps are doubled until two meshes agree to the tolerance. */
 export function settleZonal(grid: ZonalGrid, bandStart: Float64Array, tolerance: number): ZonalState {
@@ -76,31 +79,45 @@ export function settleZonal(grid: ZonalGrid, bandStart: Float64Array, tolerance:
   const deep = yearOverMemory(grid) < 1;
   const first = deep ? relaxToAnnualBalance(grid.physics, grid.mesh(steps), start) : start;
   const firstStep = deep ? 4 : 1;
-  const onCoarse = () => settleOn(grid, steps, first, { tolerance: 1e-2, firstStep, contraction: 1 });
-  // Steps too coarse for the fastest bands may lose their way: then the way from the start is tried again on finer ones.
-  let previous = onCoarse();
-  while (!previous.settled.converged && 2 * steps <= finestStart) {
+  // Steps too coarse for the fastest bands may lose their way, or end where no finer ones do: then the way from the start is
+  // tried again on finer ones.
+  const fromStart = () => settleOn(grid, steps, first, { tolerance: 1e-2, firstStep, contraction: 1 });
+  let previous = fromStart();
+  let lastDifference = Number.NaN;
+  for (;;) {
     years += previous.settled.years * steps;
     steps *= 2;
-    previous = onCoarse();
-  }
-  years += previous.settled.years * steps;
-  for (;;) {
-    steps *= 2;
-    const { state, contraction } = previous.settled;
+    const { converged: isThere, state, contraction } = previous.settled;
+    if (!isThere && steps <= finestStart) {
+      previous = fromStart();
+      continue;
+    }
     const fine = settleOn(grid, steps, state, {
       tolerance: 0.02 * tolerance * 250,
       firstStep: Number.POSITIVE_INFINITY,
       contraction,
     });
-    years += fine.settled.years * steps;
     const difference = largestDifference(previous, fine);
-    const converged = fine.settled.converged && difference < safety * tolerance;
-    if (converged || 2 * steps > finestSteps || !fine.settled.converged) {
-      return finished(fine, difference / safety, converged, years / steps);
+    const errorEstimate = difference / safety(fine, lastDifference / difference);
+    const converged = fine.settled.converged && errorEstimate < tolerance;
+    const isLost = !fine.settled.converged && 2 * steps > finestStart;
+    if (converged || isLost || 2 * steps > finestSteps) {
+      return finished(fine, errorEstimate, converged, years / steps + fine.settled.years);
     }
+    lastDifference = fine.settled.converged ? difference : Number.NaN;
     previous = fine;
   }
+}
+
+/** Rodas4 gains 2⁴ by halving its steps; kinks of polar night and narrow ramps leave less, as the gain before shows. */
+function safety({ system: { mesh, width }, settled: { tangent } }: OnMesh, gain: number): number {
+  const fastest = tangent === null ? 0 : largestOf(tangent.meanJacobian.diagonals[width]);
+  if (fastest * largestOf(mesh.width) > fastStep) return 1;
+  return Number.isNaN(gain) ? firstSafety : Math.min(bestSafety, Math.max(1, gain - 1));
+}
+
+function largestOf(values: Float64Array): number {
+  return values.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
 }
 
 /** The same temperature on every surface of a band. */

@@ -9,7 +9,7 @@ import { plainSolver } from '../../../../sim/models/lumped/plain.ts';
 import { smoothSolver } from '../../../../sim/models/lumped/smooth.ts';
 import type { Trajectory } from '../../../../sim/models/lumped/trajectory.ts';
 import { curveValuesInto } from '../../../../sim/solve/curve.ts';
-import { periodic, world } from './worlds.ts';
+import { finding, periodic, plusMinus, state, world } from './worlds.ts';
 
 // `tolerance` is a promise: the relative error of temperature at every moment. The reference is the other algorithm
 // (Radau collocation against the two-derivative Padé rule) at a tighter tolerance, compared between the nodes of both.
@@ -91,5 +91,33 @@ test.each(tolerances)('maximum, minimum and mean keep the tolerance %f', (tolera
       },
     ),
     { numRuns: 100, seed: 20261201 },
+  );
+});
+
+test('the fastest changes lie within their own ± of those of a finer solution', () => {
+  const parameters = [
+    fc.double({ min: 0.3, max: 0.97, noNaN: true }),
+    fc.double({ min: -2, max: 1, noNaN: true }),
+  ] as const;
+  const tolerance = fc.double({ min: -6, max: -3, noNaN: true });
+  fc.assert(
+    fc.property(...parameters, tolerance, (e, logKappa, logTolerance) => {
+      const of = world({ e, kappa: 10 ** logKappa });
+      const found = state(of, { tolerance: 10 ** logTolerance });
+      const exact = state(of, { tolerance: 1e-11 });
+      for (const name of ['fastestWarming', 'fastestCooling']) {
+        const error = Math.abs(finding(found, name) - finding(exact, name));
+        expect(error).toBeLessThan(plusMinus(found, name) + plusMinus(exact, name));
+      }
+    }),
+    {
+      numRuns: 300,
+      seed: 20261201,
+      // Where the slope of the curve is read, which interpolation leaves farther off than the temperatures themselves.
+      examples: [
+        [0.8386086893081666, Math.log10(0.5635063807343345), Math.log10(3.122437918492176e-5)],
+        [0.7843463444709777, Math.log10(0.5114146163886266), Math.log10(1.9565476787157337e-6)],
+      ],
+    },
   );
 });
