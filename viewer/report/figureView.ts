@@ -13,6 +13,8 @@ export interface FigureView {
   readonly element: HTMLElement;
   /** Call once the element is in the document, and again when the setting has changed. */
   draw(setting: Setting): Promise<void>;
+  /** After a choice that `build` follows: its words and the whole of it anew. */
+  refresh(): Promise<void>;
 }
 
 type Build = (style: FigureStyle) => Figure;
@@ -27,12 +29,11 @@ const pngScale = 3;
 /** Below this Plotly has no room between its margins, and writes positions that are no numbers. */
 const leastWidth = { wide: 560, narrow: 240 };
 
-/** `build` makes the figure for a style; `number` is its place on the page. */
-export function figureView(number: number, build: Build): FigureView {
+/** `build` makes the figure for a style; `number` is its place on the page; `controls` stand above it. */
+export function figureView(number: number, build: Build, controls: HTMLElement | null = null): FigureView {
   let setting: Setting | null = null;
   let view: View | null = null;
-  const { title, textAlternative, caption } = build(savedStyle);
-  const plot = element('div', { class: 'plot', role: 'group', 'aria-label': `${title}. ${textAlternative}` });
+  const plot = element('div', { class: 'plot', role: 'group' });
   const legend = element('ul', { class: 'legend' });
   const whole = button('Show all', () => show(null));
   whole.hidden = true;
@@ -40,7 +41,14 @@ export function figureView(number: number, build: Build): FigureView {
     button(`Save ${format.toUpperCase()}`, () => save(build, format)),
   );
   const tools = element('p', { class: 'tools' }, whole, ...saving);
-  const words = element('figcaption', {}, element('b', {}, `Figure ${number}. ${title}. `), caption);
+  const words = element('figcaption', controls === null ? {} : { 'aria-live': 'polite' });
+
+  function describe(): void {
+    const { title, textAlternative, caption } = build(savedStyle);
+    plot.setAttribute('aria-label', `${title}. ${textAlternative}`);
+    const finding = controls === null ? [] : [textAlternative, ' '];
+    words.replaceChildren(element('b', {}, `Figure ${number}. ${title}. `), ...finding, caption);
+  }
 
   async function show(part: View | null): Promise<void> {
     if (setting === null) return;
@@ -60,9 +68,23 @@ export function figureView(number: number, build: Build): FigureView {
     new ResizeObserver(() => void followWidth(plot, setting!)).observe(plot);
   }
 
+  async function refresh(): Promise<void> {
+    describe();
+    await show(null);
+  }
+
+  describe();
   return {
-    element: element('figure', { class: 'chart' }, plot, legend, element('div', { class: 'under' }, words, tools)),
+    element: element(
+      'figure',
+      { class: 'chart' },
+      controls,
+      plot,
+      legend,
+      element('div', { class: 'under' }, words, tools),
+    ),
     draw,
+    refresh,
   };
 }
 

@@ -1,18 +1,19 @@
-/** Where the page starts: reads the run or trace that it carries, lays out the words at once, draws figures when Plotly is there. */
+/** Where the page starts: reads what it carries, lays out the words at once, draws figures when Plotly is there. */
+import type { Origin } from '../../sim/origin.ts';
 import { element } from './element.ts';
 import type { FigureView } from './figureView.ts';
-import { page } from './page.ts';
-import { readPage } from './readPage.ts';
+import { type Page, page } from './page.ts';
+import { type Carried, readPage } from './readPage.ts';
 import { PageError } from './readResult.ts';
+import { spreadPage } from './spreadPage.ts';
 import { screenSetting, watchSurroundings } from './surroundings.ts';
 import { tracePage } from './tracePage.ts';
 
 function start(): void {
   const block = document.getElementById('perilag-data');
   try {
-    const { trace, result } = readPage(block?.textContent ?? '');
-    const { element: main, figures } = trace === null ? page(result) : tracePage(trace);
-    const { title, file } = (trace ?? result).scenario;
+    const { scenario, element: main, figures } = laidOut(readPage(block?.textContent ?? ''));
+    const { title, file } = scenario;
     document.title = title ?? file;
     document.body.append(main);
     addEventListener('DOMContentLoaded', () => void drawAll(figures));
@@ -22,6 +23,12 @@ function start(): void {
       element('main', { class: 'message' }, element('h1', {}, 'No report'), element('p', {}, error.message)),
     );
   }
+}
+
+function laidOut(carried: Carried): Page & Pick<Origin, 'scenario'> {
+  if ('trace' in carried) return { ...tracePage(carried.trace), scenario: carried.trace.scenario };
+  if ('spread' in carried) return { ...spreadPage(carried.spread), scenario: carried.spread.scenario };
+  return { ...page(carried.result), scenario: carried.result.scenario };
 }
 
 /** First one after another, with a breath between, so that the page can be read and moved; then all at once at every change. */

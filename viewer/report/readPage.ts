@@ -1,18 +1,21 @@
-/** What the page carries: a run, or the trace of climates as one input changes. Pure. */
+/** What the page carries: a run, the trace of climates as one input changes, or the spread of uncertain inputs. Pure. */
 import type { RunResult } from '../../sim/run.ts';
+import type { SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
 import type { TraceReport } from '../../sim/studies/traceReport.ts';
 import { checkedRun, damaged, parsed } from './readResult.ts';
+import { checkedSpread } from './readSpread.ts';
 
 export type Carried =
-  | { readonly result: RunResult; readonly trace: null }
-  | { readonly trace: TraceReport; readonly result: null };
+  | { readonly result: RunResult }
+  | { readonly trace: TraceReport }
+  | { readonly spread: SpreadReport };
 
 /** Errors: PageError when the block holds nothing that this page can show. */
 export function readPage(text: string): Carried {
-  const { trace, result } = parsed(text);
-  return trace === undefined
-    ? { result: checkedRun(result), trace: null }
-    : { trace: checkedTrace(trace), result: null };
+  const { trace, spread, result } = parsed(text);
+  if (trace !== undefined) return { trace: checkedTrace(trace) };
+  if (spread !== undefined) return { spread: checkedSpread(spread) };
+  return { result: checkedRun(result) };
 }
 
 function checkedTrace(value: unknown): TraceReport {

@@ -48,13 +48,20 @@ function lengthOf(dataset: Dataset | undefined, name: string): number {
   }
 }
 
+/** What a block may hold, not yet checked. */
+export interface Parsed {
+  readonly result?: unknown;
+  readonly trace?: unknown;
+  readonly spread?: unknown;
+}
+
 /** Errors: PageError when the block is empty or is not JSON. */
-export function parsed(text: string): { result?: unknown; trace?: unknown } {
+export function parsed(text: string): Parsed {
   if (text.trim() === '') {
     throw new PageError('This page holds no run yet. `perilag run` writes a copy of it with the results inside.');
   }
   try {
-    return fromPortableLazily<{ result?: unknown; trace?: unknown } | null>(JSON.parse(text)) ?? {};
+    return fromPortableLazily<Parsed | null>(JSON.parse(text)) ?? {};
   } catch {
     throw damaged('the data cannot be read');
   }

@@ -38,8 +38,8 @@ interface Warned {
   readonly warnings: readonly string[];
 }
 
-export function cautionNotices(cases: readonly Warned[]): HTMLElement[] {
-  return grouped(cases).map(([text, names]) => notice('Caution', names, text));
+export function cautionNotices(cases: readonly Warned[], kind = 'Caution'): HTMLElement[] {
+  return grouped(cases).map(([text, names]) => notice(kind, names, text));
 }
 
 /** A warning that several cases share is said once; one that all share needs no names. */
@@ -51,7 +51,7 @@ function grouped(cases: readonly Warned[]): [string, string | null][] {
   });
 }
 
-function notice(kind: string, names: string | null, text: string): HTMLElement {
+export function notice(kind: string, names: string | null, text: string): HTMLElement {
   const who = names === null ? null : userText(names);
   return element('p', { class: 'notice' }, element('b', {}, kind), ' ', who, who ? ': ' : null, text);
 }
