@@ -132,7 +132,7 @@ function answerOf({ albedo, eccentricity, luminosity, heatCapacity }: World): An
       lagOfMax: damping < 0.12 ? Number.NaN : lag * period,
       damping,
       radiativeTimeConstant: timeConstant,
-      'fractionInWindow.temperate': Math.min(1, Math.max(0, (390 - mean) / 60)),
+      'fractionInWindow.temperate': Math.min(1, Math.max(0, (320 - mean) / 40)),
     },
   };
 }

@@ -7,11 +7,12 @@ import {
   importancesOf,
   importanceText,
   inText,
+  ledBy,
   type Ranks,
   type Shares,
   wholePercent,
 } from '../words/importance.ts';
-import { fixed } from '../words/number.ts';
+import { fixed, keptPercents } from '../words/number.ts';
 import type { SharedFinding } from '../words/spreadFindings.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import type { LegendLine } from './chartLine.ts';
@@ -33,10 +34,10 @@ interface Block {
 
 /** Inputs shown of a case: the rest matters less than all of them. */
 export const mostInputs = 8;
-const rowHeight = { wide: 44, narrow: 54 };
+const rowHeight = { wide: 50, narrow: 62 };
 const totalOpacity = 0.3;
-/** Half the height of a bar, in rows; and how far the two of a row stand from its middle. */
-const bar = { thickness: 0.26, apart: 0.15 };
+/** How thick a bar is, in rows; how far the two of a row stand from its middle; how far down a name above them moves them. */
+const bar = { thickness: 0.27, apart: 0.16, below: 0.14 };
 
 export function importanceBars(shared: SharedFinding, report: SpreadReport, style: FigureStyle): Figure {
   const { name, label, inCases } = shared;
@@ -47,7 +48,7 @@ export function importanceBars(shared: SharedFinding, report: SpreadReport, styl
     name: `what-matters-most-${name}`,
     title: `What matters most: ${what}`,
     textAlternative: inCases
-      .map(({ oneCase, finding }) => `${oneCase.name}: ${importanceText(oneCase, finding, what)}`)
+      .map(({ oneCase, finding }) => ledBy(oneCase.name, importanceText(oneCase, finding, what), report.cases))
       .join(' '),
     caption: captionOf(
       kinds,
@@ -59,7 +60,7 @@ export function importanceBars(shared: SharedFinding, report: SpreadReport, styl
   };
 }
 
-function blocksOf({ inCases }: SharedFinding, { cases }: SpreadReport, { theme }: FigureStyle): Block[] {
+function blocksOf({ inCases }: SharedFinding, { cases }: SpreadReport, { theme, narrow }: FigureStyle): Block[] {
   let next = 0;
   return inCases.map(({ oneCase, caseIndex, finding }) => {
     const found = cut(importancesOf(oneCase, finding));
@@ -67,7 +68,7 @@ function blocksOf({ inCases }: SharedFinding, { cases }: SpreadReport, { theme }
     const first = cases.length > 1 || found.kind === 'none' ? head + 0.85 : head;
     const count = found.kind === 'none' ? 0 : found.inputs.length;
     next = first + count + (cases.length > 1 ? 0.35 : 0);
-    const rows = Array.from({ length: count }, (_, at) => first + at + 0.5);
+    const rows = Array.from({ length: count }, (_, at) => first + at + 0.5 + (narrow ? bar.below : 0));
     return { name: oneCase.name, caseIndex, colour: caseColour(theme, caseIndex), head, rows, found };
   });
 }
@@ -200,7 +201,9 @@ function blockNames(
   { theme, narrow }: FigureStyle,
 ): Partial<Annotation>[] {
   const at = { showarrow: false, xref: 'paper', yref: 'y' } as const;
-  const left = narrow ? ({ x: 0, xanchor: 'left' } as const) : ({ x: 0, xanchor: 'right', xshift: -10 } as const);
+  const left = narrow
+    ? ({ x: 0, xref: 'x', xanchor: 'left', xshift: 3 } as const)
+    : ({ x: 0, xanchor: 'right', xshift: -10 } as const);
   const heading = `${caseSign(caseMarker(caseIndex), colour)} <b>${plainLabel(name, 28)}</b>`;
   return [
     ...(several ? [{ ...at, ...left, y: head + 0.45, yanchor: 'middle' as const, text: heading }] : []),
@@ -220,7 +223,7 @@ function blockNames(
       : found.inputs.map(({ input }, place) => ({
           ...at,
           ...left,
-          y: rows[place]! - (narrow ? 0.33 : 0),
+          y: rows[place]! - (narrow ? bar.apart + bar.below : 0),
           yanchor: narrow ? ('bottom' as const) : ('middle' as const),
           text: plainLabel(input.label, narrow ? 44 : 30),
           font: { color: theme.ink, size: 13 },
@@ -266,7 +269,7 @@ function legend(kinds: ReadonlySet<string>, { theme }: FigureStyle): LegendLine[
 }
 
 function captionOf(kinds: ReadonlySet<string>, isCut: boolean): string {
-  return [
+  const sentences = [
     ...(kinds.has('shares')
       ? [
           'Full bar: the share of the variance that knowing this input alone would remove (first order). Pale bar: the share that would be left if all others were known (total); what it has beyond the full one comes from inputs acting together. Thin lines: 95 % intervals of the estimate, rather too wide than too narrow.',
@@ -278,5 +281,6 @@ function captionOf(kinds: ReadonlySet<string>, isCut: boolean): string {
         ]
       : []),
     ...(isCut ? [`The ${mostInputs} that matter most are shown.`] : []),
-  ].join(' ');
+  ];
+  return keptPercents(sentences.join(' '));
 }

@@ -1,8 +1,10 @@
 /** Figure: a curve with its spread, as nested bands around the median, a panel for each case. Pure. */
 import type { Annotation, Data, Layout, ScatterData, Shape } from 'plotly.js-dist-min';
 import type { SpreadBand, SpreadCase, SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
-import { list, unitText } from '../words/number.ts';
+import { ledBy } from '../words/importance.ts';
+import { keptPercents, list, unitText } from '../words/number.ts';
 import { bandSentence } from '../words/spreadBand.ts';
+import { periodsText } from '../words/spreadNumber.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type LegendLine, lastInView } from './chartLine.ts';
 import type { Figure, FigureStyle, View } from './figure.ts';
@@ -58,7 +60,9 @@ export function spreadBands(group: BandGroup, report: SpreadReport, style: Figur
   return {
     name: fileName(what),
     title: `${what}, with its spread`,
-    textAlternative: members.map(({ oneCase, band }) => bandSentence(oneCase.name, band)).join(' '),
+    textAlternative: members
+      .map(({ oneCase, band }) => ledBy(oneCase.name, bandSentence(band), report.cases))
+      .join(' '),
     caption: captionOf(group, report),
     lines: legend(drawn[0]!, style),
     data: drawn.flatMap((one) => tracesOf(one, group, style)),
@@ -218,11 +222,12 @@ function layoutOf(
   };
 }
 
-function orbitAxis(_: View, { columns }: PanelGrid, style: FigureStyle): Partial<Layout['xaxis']> {
+function orbitAxis({ x }: View, { columns }: PanelGrid, style: FigureStyle): Partial<Layout['xaxis']> {
+  const isWhole = x[1] - x[0] > 0.9;
   return {
     ...axisStyle(style),
     title: { text: columns > 2 ? 'Share of the orbit' : 'Share of the orbit since periapsis', standoff: 8 },
-    nticks: columns > 1 || style.narrow ? 5 : 9,
+    ...(isWhole ? { tickvals: [-0.25, 0, 0.25, 0.5, 0.75], ticktext: ['−¼', '0', '¼', '½', '¾'] } : { nticks: 5 }),
     showgrid: false,
     unifiedhovertitle: { text: '%{x:.3~f} of the orbit' },
   };
@@ -297,5 +302,9 @@ function captionOf({ along, members }: BandGroup, { draws }: SpreadReport): stri
     along === 'orbit'
       ? 'One whole orbit, from a quarter before periapsis; each draw is read at shares of its own period.'
       : 'Equal lengths along the axis are equal areas.';
-  return `Line: the median. Darker and lighter band: 68 % and 95 % of the draws, at each point by itself. Dashed: the run with every input at its centre. From ${from}. ${where}`;
+  const period = along === 'orbit' ? periodsText(members.map(({ oneCase }) => oneCase)) : null;
+  const long = period === null ? '' : ` The median orbit takes ${period}.`;
+  return keptPercents(
+    `Line: the median. Darker and lighter band: 68 % and 95 % of the draws, at each point by itself. Dashed: the run with every input at its centre. From ${from}. ${where}${long}`,
+  );
 }

@@ -1,8 +1,8 @@
 /** Figure: how the draws of one finding are distributed, case by case, with the textbook's value and the run's. Pure. */
 import type { Annotation, Data, Layout, Shape } from 'plotly.js-dist-min';
 import type { Histogram, SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
-import { inText } from '../words/importance.ts';
-import { nbsp, percent } from '../words/number.ts';
+import { inText, ledBy } from '../words/importance.ts';
+import { keptPercents, nbsp, percent } from '../words/number.ts';
 import type { FindingInCase, SharedFinding } from '../words/spreadFindings.ts';
 import { findingOf, findingWording, labelWithSymbol, scaleOf, turnOf, type Wording } from '../words/spreadNumber.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
@@ -20,6 +20,8 @@ interface Bars {
   readonly words: Wording;
   readonly marks: readonly Mark[];
 }
+
+type Range = readonly [number, number];
 
 interface Mark {
   readonly label: string;
@@ -50,7 +52,7 @@ export function spreadHistogram(shared: SharedFinding, report: SpreadReport, sty
   return {
     name: `histogram-${name}`,
     title: `The draws: ${inText(label)}`,
-    textAlternative: inCases.map((one) => sentence(one, report)).join(' '),
+    textAlternative: inCases.map((one) => ledBy(one.oneCase.name, sentence(one, report), report.cases)).join(' '),
     caption: captionOf(shared, bars),
     lines: [],
     data: bars.map(traceOf),
@@ -147,7 +149,7 @@ function layoutOf(
   const { theme, narrow } = style;
   const several = bars.length > 1;
   const margin = narrow ? { l: 48, r: 14, t: several ? 28 : 40, b: 48 } : { l: 64, r: 24, t: several ? 30 : 42, b: 52 };
-  const range: readonly [number, number] = bars.length > 0 ? (style.view?.x ?? rangeOf(bars)) : [0, 1];
+  const range: Range = bars.length > 0 ? (style.view?.x ?? rangeOf(bars)) : [0, 1];
   const title = plainLabel(labelWithSymbol(label, scaleOf({ name, unit }, report.cases)), narrow ? 46 : 80);
   return {
     ...plainLayout(style),
@@ -187,14 +189,14 @@ function layoutOf(
   };
 }
 
-function isWithin(value: number, [from, to]: readonly [number, number]): boolean {
+function isWithin(value: number, [from, to]: Range): boolean {
   return value >= from && value <= to;
 }
 
 function markLine(
   { value, label, dash }: Mark,
   { panel }: Bars,
-  range: readonly [number, number],
+  range: Range,
   { theme }: FigureStyle,
 ): Partial<Shape> | null {
   if (!isWithin(value, range)) return null;
@@ -213,37 +215,38 @@ function markLine(
 }
 
 /** Beside their lines, each on the side away from the other; at the edge, with an arrow, where the line lies beyond it. */
-function markNames(
-  { marks, panel }: Bars,
-  range: readonly [number, number],
-  { theme, narrow }: FigureStyle,
-): Partial<Annotation>[] {
+function markNames({ marks, panel }: Bars, [from, to]: Range, { theme, narrow }: FigureStyle): Partial<Annotation>[] {
   const inOrder = marks.toSorted((a, b) => a.value - b.value);
-  const [from, to] = range;
-  return inOrder.map((mark, place) => {
-    const beyond = mark.value < from ? '← ' : mark.value > to ? '→ ' : '';
-    const at = Math.min(to, Math.max(from, mark.value));
+  const places = inOrder.map(({ value }) => Math.min(to, Math.max(from, value)));
+  const needed = narrow ? 0.36 : 0.2;
+  const onLeft = places.map((at, place) => {
     const share = (at - from) / (to - from);
-    const prefersLeft = inOrder.length > 1 && place === 0;
-    const needed = narrow ? 0.34 : 0.16;
-    const isLeft = prefersLeft ? share > needed : share > 1 - needed;
-    const collides = inOrder.length > 1 && place === 1 && isLeft;
-    return {
-      text: `${beyond}${narrow ? mark.short : mark.label} <b>${mark.text}</b>`,
-      showarrow: false,
-      x: at,
-      xref: panel.x,
-      xanchor: isLeft ? 'right' : 'left',
-      xshift: isLeft ? -5 : 5,
-      y: panel.yDomain[1],
-      yref: 'paper',
-      yanchor: 'top',
-      yshift: collides ? -18 : 0,
-      bgcolor: translucent(theme.paper, 0.75),
-      borderpad: 1,
-      font: { color: theme.ink, size: 12 },
-    };
+    return inOrder.length > 1 && place === 0 ? share > needed : share > 1 - needed;
   });
+  return inOrder.map((mark, place) => ({
+    text: `${arrow(mark.value, from, to)}${narrow ? mark.short : mark.label} <b>${mark.text}</b>`,
+    showarrow: false,
+    x: places[place]!,
+    xref: panel.x,
+    xanchor: onLeft[place] ? 'right' : 'left',
+    xshift: onLeft[place] ? -5 : 5,
+    y: panel.yDomain[1],
+    yref: 'paper',
+    yanchor: 'top',
+    // On the same side as the first: a line lower.
+    yshift: place > 0 && onLeft[place] === onLeft[0] && isCrowded(places, from, to, narrow) ? -18 : 0,
+    bgcolor: translucent(theme.paper, 0.75),
+    borderpad: 1,
+    font: { color: theme.ink, size: 12 },
+  }));
+}
+
+function arrow(value: number, from: number, to: number): string {
+  return value < from ? '← ' : value > to ? '→ ' : '';
+}
+
+function isCrowded([one, other]: readonly number[], from: number, to: number, narrow: boolean): boolean {
+  return Math.abs(other! - one!) < (narrow ? 0.5 : 0.25) * (to - from);
 }
 
 function emptyNote({ theme }: FigureStyle): Partial<Annotation> {
@@ -262,21 +265,22 @@ function sentence({ oneCase, finding }: FindingInCase, { cases }: SpreadReport):
   const { percentiles, defined, reason } = finding.summary;
   const words = findingWording(finding, cases);
   const exists = defined < 1 ? ` ${percent(defined)} of the draws have it.` : '';
-  if (percentiles === null) return `${oneCase.name}: none; ${reason ?? 'not defined'}.`;
+  if (percentiles === null) return `none; ${reason ?? 'not defined'}.`;
   const marks = marksOf({ oneCase, finding, caseIndex: 0 }, words).map(({ label, text }) => `${label} ${text}`);
   const beside = marks.length > 0 ? `; ${marks.join(', ')}` : '';
-  return `${oneCase.name}: median ${words.text(percentiles['50'])}, 68${nbsp}% within ${words.interval(percentiles['16'], percentiles['84'])}, 95${nbsp}% within ${words.interval(percentiles['2.5'], percentiles['97.5'])}${beside}.${exists}`;
+  return `median ${words.text(percentiles['50'])}, 68${nbsp}% within ${words.interval(percentiles['16'], percentiles['84'])}, 95${nbsp}% within ${words.interval(percentiles['2.5'], percentiles['97.5'])}${beside}.${exists}`;
 }
 
 function captionOf({ inCases }: SharedFinding, bars: readonly Bars[]): string {
   const hasTextbook = bars.some(({ marks }) => marks.some(({ short }) => short === 'textbook'));
   const beyond = bars.some(({ histogram }) => histogram.beyond > 0);
   const isCircular = inCases.some(({ finding }) => finding.circular);
-  return [
+  const sentences = [
     'Share of the draws in bins of equal width; darkest within the 68 % interval, palest beyond the 95 % interval.',
     `Solid line: the run with every input at its centre.${hasTextbook ? ' Dashed: the textbook equilibrium temperature there.' : ''}`,
     ...(bars.length > 1 ? ['Each case has its own height.'] : []),
     ...(isCircular ? ['Below 0: before periapsis, at the end of the turn before.'] : []),
     ...(beyond ? ['A few draws lie beyond the bins shown.'] : []),
-  ].join(' ');
+  ];
+  return keptPercents(sentences.join(' '));
 }

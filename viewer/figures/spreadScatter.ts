@@ -2,7 +2,7 @@
 import type { Data, Layout } from 'plotly.js-dist-min';
 import { unwrapTurn } from '../../sim/studies/spread/circular.ts';
 import type { SpreadCase, SpreadFinding, SpreadInput, SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
-import { inText } from '../words/importance.ts';
+import { inText, ledBy } from '../words/importance.ts';
 import { fixed, nbsp, unitText } from '../words/number.ts';
 import { rankCorrelation } from '../words/rankCorrelation.ts';
 import type { FindingInCase, SharedFinding } from '../words/spreadFindings.ts';
@@ -27,7 +27,7 @@ interface Cloud {
 export const mostPoints = 1500;
 const panelHeights = { alone: 400, beside: 320, narrow: 260 };
 /** Inputs that span more than this are shown by their logarithm. */
-const widestLinear = 30;
+const widestLinear = 10;
 
 export function spreadScatter(
   shared: SharedFinding,
@@ -44,7 +44,9 @@ export function spreadScatter(
   return {
     name: `scatter-${shared.name}-${inputKey}`.replaceAll(/[^A-Za-z0-9.-]+/g, '-'),
     title: `${shared.label} against ${inText(label)}`,
-    textAlternative: clouds.map(sentence).join(' ') || 'No case has draws of both.',
+    textAlternative:
+      clouds.map((cloud) => ledBy(cloud.member.oneCase.name, sentence(cloud), report.cases)).join(' ') ||
+      'No case has draws of both.',
     caption: `A point for each draw, the first ${Math.max(0, ...shown)} that have the number. The open sign: every input at its centre. A narrow cloud along a line: this input alone sets the finding; a round one: others do.`,
     lines: [],
     data: clouds.flatMap((cloud, at) => tracesOf(cloud, grid, at, style)),
@@ -107,7 +109,7 @@ function tracesOf(
       name: plainLabel(member.oneCase.name, 60),
       x: [...x],
       y: [...y],
-      marker: { color: translucent(colour, 0.45), size: 4.5 },
+      marker: { color: translucent(colour, 0.55), size: 5 },
       hovertemplate: words,
     },
     ...(centre === null
@@ -198,10 +200,10 @@ function withAir(values: readonly number[]): [number, number] {
 /** How closely the two go together, by ranks: no unit and no logarithm matters. */
 function sentence({ member, input, x, y }: Cloud): string {
   const correlation = rankCorrelation(x, y);
-  if (correlation === null) return `${member.oneCase.name}: one of the two does not vary.`;
+  if (correlation === null) return 'one of the two does not vary.';
   const size = Math.abs(correlation);
   const way = correlation < 0 ? 'falls' : 'rises';
   const words =
     size < 0.1 ? 'hardly goes with' : `${way} ${size > 0.8 ? 'closely ' : size > 0.4 ? '' : 'a little '}with`;
-  return `${member.oneCase.name}: ${inText(member.finding.label)} ${words} ${inText(input.label)} (rank correlation ${fixed(correlation, 2)} in ${x.length}${nbsp}draws).`;
+  return `${inText(member.finding.label)} ${words} ${inText(input.label)} (rank correlation ${fixed(correlation, 2)} in ${x.length}${nbsp}draws).`;
 }

@@ -1,7 +1,7 @@
 /** Which input matters to a finding, and how sure that is. Pure. */
 import type { SobolIndex } from '../../sim/studies/spread/sobolIndices.ts';
 import type { SpreadCase, SpreadFinding, SpreadInput } from '../../sim/studies/spread/spreadReport.ts';
-import { fixed, list, nbsp } from './number.ts';
+import { fixed, nbsp } from './number.ts';
 
 /** Independent inputs: shares of the variance. */
 export interface Shares {
@@ -65,7 +65,7 @@ function ranksText({ inputs }: Ranks, what: string): string {
   const lead = `The ${inText(most!.input.label)} tells most about ${what}: D${nbsp}=${nbsp}${fixed(most!.value, 2)}, where chance alone stays below ${chanceText(most!.chanceLevel)}`;
   const isTelling = next !== undefined && next.value > next.chanceLevel;
   const then = isTelling ? `; next comes the ${inText(next.input.label)}, ${fixed(next.value, 2)}.` : '.';
-  return `${lead}${then} Inputs that go together in the samples share this between them.`;
+  return `${lead}${then}`;
 }
 
 export function chanceText(level: number): string {
@@ -86,6 +86,7 @@ export function inText(label: string): string {
   return /^\p{Lu}\p{Ll}/u.test(label) && !/^Bond\b/.test(label) ? `${label[0]!.toLowerCase()}${label.slice(1)}` : label;
 }
 
-export function labelList(labels: readonly string[]): string {
-  return list(labels.map(inText));
+/** A sentence about a case with its name before it; a case that stands alone needs no name. */
+export function ledBy(caseName: string, sentence: string, cases: readonly unknown[]): string {
+  return cases.length > 1 ? `${caseName}: ${sentence}` : `${sentence[0]!.toUpperCase()}${sentence.slice(1)}`;
 }

@@ -137,7 +137,7 @@ function apart(count: number): string {
 }
 
 function overlapping(count: number): string {
-  return `The ${at95} intervals of ${count === 2 ? 'the two cases' : 'these two'} overlap: the inputs leave open what separates them.`;
+  return `The ${at95} intervals of ${count === 2 ? 'the two cases' : 'these two'} overlap; where both share an uncertain input, their difference is surer than that.`;
 }
 
 /** What stands beside the answer: draws that failed. Null where none did. */

@@ -6,7 +6,7 @@ import { fixed, nbsp, unitText } from './number.ts';
 import { wordingOf } from './spreadNumber.ts';
 
 /** Where the median is highest, how wide the band is there, and where it is widest. */
-export function bandSentence(caseName: string, { along, positions, unit, levels }: SpreadBand): string {
+export function bandSentence({ along, positions, unit, levels }: SpreadBand): string {
   const [low, , median, , high] = levels as [Float64Array, Float64Array, Float64Array, Float64Array, Float64Array];
   const widths = high.map((value, at) => value - low[at]!);
   const [peak, widest] = [highest(median), highest(widths)];
@@ -18,7 +18,7 @@ export function bandSentence(caseName: string, { along, positions, unit, levels 
   const place = (at: number): string =>
     along === 'latitude' ? `at ${latitudeText(positions[at]!)}` : `${orbitShare(positions[at]!)} periapsis`;
   const interval = words.interval(low[peak]!, high[peak]!);
-  return `${caseName}: the median is highest ${place(peak)}, ${words.text(median[peak]!)} (95${nbsp}%: ${interval}); the 95${nbsp}% band is widest ${place(widest)}, ${words.text(widths[widest]!)}.`;
+  return `the median is highest ${place(peak)}, ${words.text(median[peak]!)} (95${nbsp}%: ${interval}); the 95${nbsp}% band is widest ${place(widest)}, ${words.text(widths[widest]!)}.`;
 }
 
 /** `12 % of an orbit after`; in the last quarter the next periapsis is nearer to mind. */

@@ -1,12 +1,14 @@
 /** The uncertain inputs as they were drawn. Pure. */
 import type { SpreadInput, SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
 import type { Cell } from './cells.ts';
-import { list, nbsp, percent } from './number.ts';
+import { list, nbsp, percent, unitText } from './number.ts';
 import { inputWording } from './spreadNumber.ts';
 
 export interface DrawnRow {
   readonly key: string;
   readonly label: string;
+  /** In which all its numbers are; empty for a pure number. */
+  readonly symbol: string;
   /** Cases that draw it so; null where all do. */
   readonly caseNames: readonly string[] | null;
   readonly cells: readonly Cell[];
@@ -23,7 +25,7 @@ export const largestCut = 0.05;
 
 export function drawnColumns({ sampling }: SpreadReport): string[] {
   const source = sampling === 'posterior' ? 'From' : 'As written';
-  return [source, 'Centre', 'Median drawn', '68 %', '95 %', 'Cut away'];
+  return [source, 'Centre', 'Median drawn', 'Cut away'];
 }
 
 /** Each input once for all cases that draw it alike. */
@@ -40,6 +42,7 @@ export function drawnRows({ cases }: SpreadReport): DrawnRow[] {
   return [...alike.values()].map(({ input, names }) => ({
     key: input.key,
     label: input.label,
+    symbol: unitText(input.unit),
     caseNames: names.length === cases.length ? null : names,
     cells: cellsOf(input),
   }));
@@ -52,10 +55,10 @@ function cellsOf(input: SpreadInput): Cell[] {
   const none: Cell = { text: '—', reason: summary.reason ?? 'no draw' };
   return [
     { text: column === null ? text : `column “${column}”` },
-    { text: words.text(centre) },
-    levels === null ? none : { text: words.text(levels['50']) },
-    levels === null ? { text: '—' } : { text: words.interval(levels['16'], levels['84']) },
-    levels === null ? { text: '—' } : { text: words.interval(levels['2.5'], levels['97.5']) },
+    { text: words.number(centre) },
+    levels === null
+      ? none
+      : { text: words.number(levels['50']), detail: `68${nbsp}%: ${words.interval(levels['16'], levels['84'])}` },
     cutCell(truncatedShare),
   ];
 }

@@ -11,7 +11,7 @@ export function spreadSteps(report: SpreadReport): Step[] {
     ...samplingSteps[report.sampling],
     {
       words:
-        'Each draw is a world of its own and runs through the model as `perilag run` would run it; that command’s report gives every equation. The cases share their draws: draw k of one has the luck of draw k of another.',
+        'Each draw is a world of its own and goes through the model as in a plain run, whose report gives every equation.',
     },
     ...(has('lumped') ? [lumpedStep] : []),
     ...(has('zonal') ? [zonalStep] : []),

@@ -3,7 +3,7 @@ import { radiansPerDegree } from '../../sim/constants.ts';
 import type { Seconds } from '../../sim/si.ts';
 import type { Summary } from '../../sim/studies/spread/percentiles.ts';
 import type { SpreadCase, SpreadFinding, SpreadInput } from '../../sim/studies/spread/spreadReport.ts';
-import { fixed, nbsp, significant, type TimeUnit, timeUnit, unitText } from './number.ts';
+import { duration, exact, fixed, list, nbsp, type TimeUnit, timesPower, timeUnit, unitText } from './number.ts';
 
 /** What one of the shown unit is in the unit of the number, and its sign. */
 export interface Scale {
@@ -38,6 +38,12 @@ export function spreadTimeUnit(cases: readonly SpreadCase[]): TimeUnit | null {
   return periods.length === 0 ? null : timeUnit(periods[Math.floor(periods.length / 2)]!);
 }
 
+/** `93.4 d`, or one for each case; null without periods. */
+export function periodsText(cases: readonly SpreadCase[]): string | null {
+  const periods = cases.flatMap((one) => periodOfCase(one) ?? []).map((period) => duration(period));
+  return periods.length === 0 ? null : list([...new Set(periods)]);
+}
+
 /** A share of one, which reads best in percent. */
 export function isShare(name: string): boolean {
   return /^(fractionInWindow|habitableFraction|alwaysFraction)\./.test(name) || /[iI]ceFraction/.test(name);
@@ -64,8 +70,9 @@ export function findingWording(finding: SpreadFinding, cases: readonly SpreadCas
   return wordingOf(finding.summary, finding.atCentre, scaleOf(finding, cases));
 }
 
-export function inputWording({ summary, centre, unit }: SpreadInput): Wording {
-  return wordingOf(summary, centre, { one: 1, symbol: unit === 'deg' ? '°' : unitText(unit) });
+/** Without its unit, which stands by itself. */
+export function inputWording({ summary, centre }: SpreadInput): Wording {
+  return wordingOf(summary, centre, { one: 1, symbol: '' });
 }
 
 /** Two significant digits of half the 68 % interval; five of the number itself where it does not spread. */
@@ -74,18 +81,31 @@ export function wordingOf(summary: Summary, alone: number | null, scale: Scale):
   const half = percentiles === null ? 0 : (percentiles['84'] - percentiles['16']) / 2 / scale.one;
   const sizes = percentiles === null ? [alone ?? 0] : [percentiles['2.5'], percentiles['97.5']];
   const size = Math.max(...sizes.map(Math.abs)) / scale.one;
-  const decimals = half > 1e-9 * size ? 1 - magnitude(half) : 4 - magnitude(size);
-  const isPlain = size === 0 || (size < 1e5 && decimals <= 6);
-  const digits = Math.max(2, Math.min(9, magnitude(size) + 1 + decimals));
-  const number = (value: number): string =>
-    isPlain ? fixed(value / scale.one, Math.max(0, Math.min(6, decimals))) : significant(value / scale.one, digits);
+  if (!(half > 1e-9 * size)) return alike(scale);
+  const decimals = 1 - magnitude(half);
+  if (size < 1e5 && decimals <= 6) return spelt(scale, (value) => fixed(value, Math.max(0, decimals)), 0);
+  const power = magnitude(Math.abs(percentiles!['50']) / scale.one || size);
+  const kept = Math.max(0, Math.min(8, decimals + power));
+  return spelt(scale, (value) => fixed(value / 10 ** power, kept), power);
+}
+
+/** For what does not spread: five digits, without idle zeros. */
+function alike(scale: Scale): Wording {
+  return spelt(scale, (value) => exact(Number(value.toPrecision(5))), 0);
+}
+
+/** A power of ten is common to all numbers, so that they can be compared at a glance: `(1.3 to 11.9) × 10⁷`. */
+function spelt(scale: Scale, digits: (value: number) => string, power: number): Wording {
+  const powered = (number: string): string => (power === 0 ? number : timesPower(number, power));
+  const short = (value: number): string => digits(value / scale.one);
+  const number = (value: number): string => powered(short(value));
   const text = (value: number): string => withSymbol(number(value), scale.symbol);
-  return {
-    scale,
-    number,
-    text,
-    interval: (from, to) => (number(from) === number(to) ? text(from) : `${number(from)} to ${text(to)}`),
+  const interval = (from: number, to: number): string => {
+    if (short(from) === short(to)) return text(from);
+    const pair = `${short(from)} to ${short(to)}`;
+    return withSymbol(power === 0 ? pair : powered(`(${pair})`), scale.symbol);
   };
+  return { scale, number, text, interval };
 }
 
 export function withSymbol(number: string, symbol: string): string {

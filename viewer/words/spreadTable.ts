@@ -45,7 +45,7 @@ function groupOf({ name, label, inCases }: SharedFinding, report: SpreadReport):
 function cellsOf({ finding }: FindingInCase, { cases }: SpreadReport): Cell[] {
   const { summary, atCentre } = finding;
   const words = findingWording(finding, cases);
-  const centre = atCentre === null ? 'none at the centre' : `at the centre ${words.text(atCentre)}`;
+  const centre = atCentre === null ? 'none at centre' : `centre ${words.text(atCentre)}`;
   const share = summary.defined < 1 ? { detail: `exists in ${percent(summary.defined)} of the draws` } : {};
   if (summary.mean === null || summary.percentiles === null) {
     const reason = summary.reason ?? 'not defined';

@@ -1,6 +1,8 @@
 /** Table 1 of a spread: the findings with their intervals; all of them on request. */
 import type { SpreadReport } from '../../../sim/studies/spread/spreadReport.ts';
 import type { Cell } from '../../words/cells.ts';
+import { keptPercents } from '../../words/number.ts';
+import { periodsText } from '../../words/spreadNumber.ts';
 import { type FindingGroup, findingColumns, findingTables } from '../../words/spreadTable.ts';
 import { dataTable } from '../dataTable.ts';
 import { type Child, element, userText } from '../element.ts';
@@ -12,7 +14,7 @@ export function spreadFindingsSection(report: SpreadReport): HTMLElement {
   const several = report.cases.length > 1;
   const caption = [
     element('b', {}, 'Table 1. '),
-    'The chief findings: mean, median, and the intervals that hold 68 % and 95 % of the draws.',
+    keptPercents('The chief findings: mean, median, and the intervals that hold 68 % and 95 % of the draws.'),
   ];
   return element(
     'section',
@@ -24,7 +26,7 @@ export function spreadFindingsSection(report: SpreadReport): HTMLElement {
       findingsTable(chief, several, caption, 'The chief findings'),
       everyFinding(sections, several),
     ),
-    notes(),
+    notes(report),
   );
 }
 
@@ -69,13 +71,14 @@ function everyFinding(sections: ReturnType<typeof findingTables>['sections'], se
 
 export function content({ text, detail, reason }: Cell): Child[] {
   return [
-    userText(text),
+    text,
     detail === undefined ? null : element('small', { class: 'detail' }, detail),
     reason === undefined ? null : element('small', { class: 'reason' }, reason),
   ];
 }
 
-function notes(): HTMLElement {
+function notes({ cases }: SpreadReport): HTMLElement {
+  const period = periodsText(cases);
   return element(
     'aside',
     {},
@@ -87,8 +90,14 @@ function notes(): HTMLElement {
     element(
       'p',
       {},
-      '“At the centre” is what `perilag run` gives: every input at its central value. It need not be the median.',
+      '“Centre” is what a plain run gives, every input at its central value. It need not be the median.',
     ),
-    element('p', {}, 'Times of the orbit below 0 are before periapsis, at the end of the turn before.'),
+    period === null
+      ? null
+      : element(
+          'p',
+          {},
+          `Times that come round with the orbit are counted in the median orbit, ${period}. Below 0 is before periapsis, at the end of the turn before.`,
+        ),
   );
 }

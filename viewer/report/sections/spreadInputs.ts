@@ -16,9 +16,9 @@ export function spreadInputsSection(report: SpreadReport): HTMLElement {
     label: 'The uncertain inputs as drawn',
     corner: 'Input',
     columns: drawnColumns(report).map((name) => ({ head: [name] })),
-    rows: rows.map(({ key, label, caseNames, cells }) => ({
-      head: keyed(label, key, caseNames === null ? null : list(caseNames)),
-      cells: cells.map(content),
+    rows: rows.map(({ key, label, symbol, caseNames, cells }) => ({
+      head: [...keyed(label, key, caseNames === null ? null : list(caseNames)), unitNote(symbol)],
+      cells: cells.map((cell, at) => (at === 0 ? [userText(cell.text)] : content(cell))),
     })),
   });
   return element(
@@ -34,7 +34,7 @@ export function spreadInputsSection(report: SpreadReport): HTMLElement {
         {},
         'Centre is what a plain run uses. Cut away is the share of the stated spread that lies beyond what is physical.',
       ),
-      element('p', {}, 'Inputs without a spread are fixed, and stand in the report of `perilag run`.'),
+      element('p', {}, 'Inputs without a spread are fixed; the report of a plain run lists them.'),
     ),
   );
 }
@@ -58,6 +58,10 @@ function keyed(label: string, key: string, caseNames: string | null): Child[] {
     element('small', {}, element('code', {}, key)),
     caseNames === null ? null : element('small', { class: 'tag' }, 'only ', userText(caseNames)),
   ];
+}
+
+function unitNote(symbol: string): Child {
+  return symbol === '' ? null : element('small', {}, `in ${symbol}`);
 }
 
 export function drawsSection(report: SpreadReport): HTMLElement {
