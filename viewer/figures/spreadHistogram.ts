@@ -233,8 +233,7 @@ function markNames({ marks, panel }: Bars, [from, to]: Range, { theme, narrow }:
     y: panel.yDomain[1],
     yref: 'paper',
     yanchor: 'top',
-    // On the same side as the first: a line lower.
-    yshift: place > 0 && onLeft[place] === onLeft[0] && isCrowded(places, from, to, narrow) ? -18 : 0,
+    yshift: place > 0 && meets(places, onLeft, needed * (to - from)) ? -18 : 0,
     bgcolor: translucent(theme.paper, 0.75),
     borderpad: 1,
     font: { color: theme.ink, size: 12 },
@@ -245,8 +244,11 @@ function arrow(value: number, from: number, to: number): string {
   return value < from ? '← ' : value > to ? '→ ' : '';
 }
 
-function isCrowded([one, other]: readonly number[], from: number, to: number, narrow: boolean): boolean {
-  return Math.abs(other! - one!) < (narrow ? 0.5 : 0.25) * (to - from);
+/** Whether two names would meet on one line; `width` is the room of one. */
+function meets([one, other]: readonly number[], [oneOnLeft, otherOnLeft]: readonly boolean[], width: number): boolean {
+  const gap = other! - one!;
+  if (oneOnLeft === otherOnLeft) return gap < width;
+  return !oneOnLeft && gap < 2 * width;
 }
 
 function emptyNote({ theme }: FigureStyle): Partial<Annotation> {

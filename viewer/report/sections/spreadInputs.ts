@@ -25,7 +25,12 @@ export function spreadInputsSection(report: SpreadReport): HTMLElement {
     'section',
     { class: 'grid' },
     element('h2', {}, 'Inputs as drawn'),
-    element('div', { class: 'tables' }, table, idle.length > 0 ? idleTable(idle) : null),
+    element(
+      'div',
+      { class: 'tables' },
+      rows.length > 0 ? table : element('p', { class: 'words' }, 'No input was drawn.'),
+      idle.length > 0 ? idleTable(idle) : null,
+    ),
     element(
       'aside',
       {},
