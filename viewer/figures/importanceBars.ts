@@ -47,9 +47,7 @@ export function importanceBars(shared: SharedFinding, report: SpreadReport, styl
   return {
     name: `what-matters-most-${name}`,
     title: `What matters most: ${what}`,
-    textAlternative: inCases
-      .map(({ oneCase, finding }) => ledBy(oneCase.name, importanceText(oneCase, finding, what), report.cases))
-      .join(' '),
+    textAlternative: sentences(shared, report, what),
     caption: captionOf(
       kinds,
       inCases.some(({ oneCase }) => oneCase.inputs.length > mostInputs),
@@ -58,6 +56,13 @@ export function importanceBars(shared: SharedFinding, report: SpreadReport, styl
     data: blocks.flatMap((block) => tracesOf(block, style)),
     layout: layoutOf(blocks, kinds, style),
   };
+}
+
+/** Said once where it holds for every case. */
+function sentences({ inCases }: SharedFinding, { cases }: SpreadReport, what: string): string {
+  const texts = inCases.map(({ oneCase, finding }) => importanceText(oneCase, finding, what));
+  if (texts.length > 1 && texts.every((text) => text === texts[0])) return `In every case: ${texts[0]}`;
+  return texts.map((text, at) => ledBy(inCases[at]!.oneCase.name, text, cases)).join(' ');
 }
 
 function blocksOf({ inCases }: SharedFinding, { cases }: SpreadReport, { theme, narrow }: FigureStyle): Block[] {
@@ -139,6 +144,7 @@ function layoutOf(blocks: readonly Block[], kinds: ReadonlySet<string>, style: F
   const end = Math.max(1.4, last === undefined ? 0 : (last.rows.at(-1) ?? last.head + 0.9) + 0.5);
   const margin = narrow ? { l: 14, r: 22, t: 10, b: 48 } : { l: 220, r: 190, t: 12, b: 52 };
   const isRanks = kinds.has('ranks');
+  const isEmpty = !isRanks && !kinds.has('shares');
   return {
     ...plainLayout(style),
     height: end * (narrow ? rowHeight.narrow : rowHeight.wide) + margin.t + margin.b,
@@ -147,6 +153,7 @@ function layoutOf(blocks: readonly Block[], kinds: ReadonlySet<string>, style: F
     hovermode: 'closest',
     xaxis: {
       ...axisStyle(style),
+      visible: !isEmpty,
       range: rangeOf(blocks),
       tickformat: isRanks ? '' : '.0%',
       nticks: narrow ? 5 : 11,
@@ -204,7 +211,7 @@ function blockNames(
   const left = narrow
     ? ({ x: 0, xref: 'x', xanchor: 'left', xshift: 3 } as const)
     : ({ x: 0, xanchor: 'right', xshift: -10 } as const);
-  const heading = `${caseSign(caseMarker(caseIndex), colour)} <b>${plainLabel(name, 28)}</b>`;
+  const heading = `${caseSign(caseMarker(caseIndex), colour)} <b>${plainLabel(name, narrow ? 34 : 23)}</b>`;
   return [
     ...(several ? [{ ...at, ...left, y: head + 0.45, yanchor: 'middle' as const, text: heading }] : []),
     ...(found.kind === 'none'
@@ -225,7 +232,7 @@ function blockNames(
           ...left,
           y: rows[place]! - (narrow ? bar.apart + bar.below : 0),
           yanchor: narrow ? ('bottom' as const) : ('middle' as const),
-          text: plainLabel(input.label, narrow ? 44 : 30),
+          text: plainLabel(input.label, narrow ? 44 : 28),
           font: { color: theme.ink, size: 13 },
         }))),
   ];

@@ -176,9 +176,7 @@ function layoutOf(
         gridcolor: theme.hairline,
       },
     })),
-    shapes: bars
-      .flatMap((one) => one.marks.map((mark) => markLine(mark, one, range, style)))
-      .filter((shape) => shape !== null),
+    shapes: bars.flatMap((one) => one.marks.flatMap((mark) => markLines(mark, one, range, style))),
     annotations: [
       ...(several
         ? bars.map(({ panel, member }) => panelName(panel, member.oneCase.name, member.caseIndex, style))
@@ -193,25 +191,27 @@ function isWithin(value: number, [from, to]: Range): boolean {
   return value >= from && value <= to;
 }
 
-function markLine(
+/** With an edge of paper, so that it stands out from bars of its own colour. */
+function markLines(
   { value, label, dash }: Mark,
   { panel }: Bars,
   range: Range,
   { theme }: FigureStyle,
-): Partial<Shape> | null {
-  if (!isWithin(value, range)) return null;
-  return {
+): Partial<Shape>[] {
+  if (!isWithin(value, range)) return [];
+  const line = (name: string, color: string, width: number, dashed: Mark['dash']): Partial<Shape> => ({
     type: 'line',
-    name: label,
+    name,
     xref: panel.x,
     x0: value,
     x1: value,
     yref: `${panel.y} domain` as 'y',
     y0: 0,
     y1: 1,
-    line: { color: theme.ink, width: 1.5, dash },
+    line: { color, width, dash: dashed },
     layer: 'above',
-  };
+  });
+  return [line(`edge of ${label}`, theme.paper, 4, 'solid'), line(label, theme.ink, 2, dash)];
 }
 
 /** Beside their lines, each on the side away from the other; at the edge, with an arrow, where the line lies beyond it. */
