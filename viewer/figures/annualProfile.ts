@@ -15,6 +15,7 @@ import { namesBesideLines } from './lineNames.ts';
 import { plainLabel } from './plainLabel.ts';
 import { stateLook } from './temperatureLines.ts';
 import type { Theme } from './theme.ts';
+import { translucent } from './translucent.ts';
 import type { View } from './view.ts';
 import { temperatureBands } from './windowBands.ts';
 import { distinctWindows } from './windowSpans.ts';
@@ -103,7 +104,7 @@ function rangeTraces({ line, low, high }: Profile): Data[] {
     }) as Data;
   return [
     edge('lowest', low, {}),
-    edge('highest', high, { fill: 'tonexty', fillcolor: translucent(line.colour) } as Partial<Data>),
+    edge('highest', high, { fill: 'tonexty', fillcolor: translucent(line.colour, 0.16) } as Partial<Data>),
   ];
 }
 
@@ -111,11 +112,6 @@ function meanTrace({ line, low, high }: Profile): Data {
   const range = low.map((least, band) => [least, high[band]!]);
   const hover = '%{y:.1f} K (%{customdata[0]:.1f} to %{customdata[1]:.1f} K)';
   return { ...traceOf(line, hover), customdata: range } as Data;
-}
-
-function translucent(colour: string): string {
-  const channels = [1, 3, 5].map((at) => Number.parseInt(colour.slice(at, at + 2), 16));
-  return `rgba(${channels.join(', ')}, 0.16)`;
 }
 
 function frameOf(profiles: readonly Profile[]): [number, number] {

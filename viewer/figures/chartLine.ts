@@ -71,7 +71,10 @@ export function glyph({ shape, open }: Marker): string {
 }
 
 /** Where the line leaves the view on the right, or ends within it; null where it does so out of sight. */
-export function lastInView({ x, y }: ChartLine, view: View): number | null {
+export function lastInView(
+  { x, y }: { readonly x: readonly number[]; readonly y: readonly number[] },
+  view: View,
+): number | null {
   const [left, right] = view.x;
   const beyond = x.findIndex((at) => at > right);
   const last = beyond < 0 ? x.length - 1 : beyond;

@@ -30,8 +30,8 @@ const pngScale = 3;
 /** Below this Plotly has no room between its margins, and writes positions that are no numbers. */
 const leastWidth = { wide: 560, narrow: 240 };
 
-/** `build` makes the figure for a style; `number` is its place on the page. */
-export function figureView(number: number, build: Build): FigureView {
+/** `build` makes the figure for a style; `number` is its place on the page; `controls` stand above it. */
+export function figureView(number: number, build: Build, controls: HTMLElement | null = null): FigureView {
   let setting: Setting | null = null;
   let view: View | null = null;
   const plot = element('div', { class: 'plot', role: 'group' });
@@ -42,13 +42,13 @@ export function figureView(number: number, build: Build): FigureView {
     button(`Save ${format.toUpperCase()}`, () => save(build, format)),
   );
   const tools = element('p', { class: 'tools' }, whole, ...saving);
-  const words = element('figcaption', {});
-  describe();
+  const words = element('figcaption', controls === null ? {} : { 'aria-live': 'polite' });
 
   function describe(): void {
     const { title, textAlternative, caption } = build(savedStyle);
     plot.setAttribute('aria-label', `${title}. ${textAlternative}`);
-    words.replaceChildren(element('b', {}, `Figure ${number}. ${title}. `), caption);
+    const finding = controls === null ? [] : [textAlternative, ' '];
+    words.replaceChildren(element('b', {}, `Figure ${number}. ${title}. `), ...finding, caption);
   }
 
   async function show(part: View | null): Promise<void> {
@@ -69,13 +69,23 @@ export function figureView(number: number, build: Build): FigureView {
     new ResizeObserver(() => void followWidth(plot, setting!)).observe(plot);
   }
 
+  async function refresh(): Promise<void> {
+    describe();
+    await show(null);
+  }
+
+  describe();
   return {
-    element: element('figure', { class: 'chart' }, plot, legend, element('div', { class: 'under' }, words, tools)),
+    element: element(
+      'figure',
+      { class: 'chart' },
+      controls,
+      plot,
+      legend,
+      element('div', { class: 'under' }, words, tools),
+    ),
     draw,
-    refresh() {
-      describe();
-      return show(null);
-    },
+    refresh,
   };
 }
 

@@ -1,19 +1,20 @@
 /** Where the page starts: reads what it carries, lays out the words at once, draws figures when Plotly is there. */
+import type { Origin } from '../../sim/origin.ts';
 import { element } from './element.ts';
 import type { FigureView } from './figureView.ts';
 import { gridPage } from './gridPage.ts';
 import { type Page, page } from './page.ts';
 import { type Carried, readPage } from './readPage.ts';
 import { PageError } from './readResult.ts';
+import { spreadPage } from './spreadPage.ts';
 import { screenSetting, watchSurroundings } from './surroundings.ts';
 import { tracePage } from './tracePage.ts';
 
 function start(): void {
   const block = document.getElementById('perilag-data');
   try {
-    const carried = readPage(block?.textContent ?? '');
-    const { element: main, figures } = laidOut(carried);
-    const { title, file } = (carried.grid ?? carried.trace ?? carried.result).scenario;
+    const { scenario, element: main, figures } = laidOut(readPage(block?.textContent ?? ''));
+    const { title, file } = scenario;
     document.title = title ?? file;
     document.body.append(main);
     addEventListener('DOMContentLoaded', () => void drawAll(figures));
@@ -25,9 +26,11 @@ function start(): void {
   }
 }
 
-function laidOut(carried: Carried): Page {
-  if (carried.grid) return gridPage(carried.grid);
-  return carried.trace === null ? page(carried.result) : tracePage(carried.trace);
+function laidOut(carried: Carried): Page & Pick<Origin, 'scenario'> {
+  if ('trace' in carried) return { ...tracePage(carried.trace), scenario: carried.trace.scenario };
+  if ('grid' in carried) return { ...gridPage(carried.grid), scenario: carried.grid.scenario };
+  if ('spread' in carried) return { ...spreadPage(carried.spread), scenario: carried.spread.scenario };
+  return { ...page(carried.result), scenario: carried.result.scenario };
 }
 
 /** First one after another, with a breath between, so that the page can be read and moved; then all at once at every change. */

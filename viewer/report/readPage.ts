@@ -1,22 +1,28 @@
-/** What the page carries: a run, the trace of climates as one input changes, or a grid over one or two. Pure. */
+/**
+ * What the page carries: a run, the trace of climates as one input changes, the spread of uncertain inputs, or a grid over one
+ * or two. Pure.
+ */
 import type { RunResult } from '../../sim/run.ts';
 import type { GridReport } from '../../sim/studies/grid/gridReport.ts';
+import type { SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
 import type { TraceReport } from '../../sim/studies/traceReport.ts';
 import { checkedGrid } from './readGrid.ts';
 import { checkedRun, damaged, parsed } from './readResult.ts';
+import { checkedSpread } from './readSpread.ts';
 
 export type Carried =
-  | { readonly result: RunResult; readonly trace: null; readonly grid?: undefined }
-  | { readonly trace: TraceReport; readonly result: null; readonly grid?: undefined }
-  | { readonly grid: GridReport; readonly trace: null; readonly result: null };
+  | { readonly result: RunResult }
+  | { readonly trace: TraceReport }
+  | { readonly spread: SpreadReport }
+  | { readonly grid: GridReport };
 
 /** Errors: PageError when the block holds nothing that this page can show. */
 export function readPage(text: string): Carried {
-  const { trace, result, grid } = parsed(text);
-  if (grid !== undefined) return { grid: checkedGrid(grid), trace: null, result: null };
-  return trace === undefined
-    ? { result: checkedRun(result), trace: null }
-    : { trace: checkedTrace(trace), result: null };
+  const { trace, spread, grid, result } = parsed(text);
+  if (trace !== undefined) return { trace: checkedTrace(trace) };
+  if (spread !== undefined) return { spread: checkedSpread(spread) };
+  if (grid !== undefined) return { grid: checkedGrid(grid) };
+  return { result: checkedRun(result) };
 }
 
 function checkedTrace(value: unknown): TraceReport {

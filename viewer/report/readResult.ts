@@ -53,6 +53,7 @@ interface Block {
   readonly result?: unknown;
   readonly trace?: unknown;
   readonly grid?: unknown;
+  readonly spread?: unknown;
 }
 
 /** Errors: PageError when the block is empty or is not JSON. */

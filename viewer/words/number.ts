@@ -18,7 +18,7 @@ export function significant(value: number, digits: number): string {
   if (value === 0) return '0';
   const [mantissa, power] = value.toExponential(digits - 1).split('e') as [string, string];
   const exponent = Number(power);
-  if (exponent < -3 || exponent > 5) return `${withRealMinus(mantissa)}${nbsp}×${nbsp}10${raised(exponent)}`;
+  if (exponent < -3 || exponent > 5) return timesPower(withRealMinus(mantissa), exponent);
   return withRealMinus(Number(`${mantissa}e${power}`).toFixed(Math.max(0, digits - 1 - exponent)));
 }
 
@@ -28,9 +28,19 @@ export function exact(value: number): string {
   const size = Math.abs(trimmed);
   if (size !== 0 && (size < 1e-3 || size >= 1e6)) {
     const [mantissa, power] = trimmed.toExponential().split('e') as [string, string];
-    return `${withRealMinus(mantissa)}${nbsp}×${nbsp}10${raised(Number(power))}`;
+    return timesPower(withRealMinus(mantissa), Number(power));
   }
   return withRealMinus(String(trimmed));
+}
+
+/** `1.2 × 10⁻⁹`. */
+export function timesPower(number: string, exponent: number): string {
+  return `${number}${nbsp}×${nbsp}10${raised(exponent)}`;
+}
+
+/** A text whose numbers stay with their percent signs. */
+export function keptPercents(text: string): string {
+  return text.replaceAll(/(\d) %/g, `$1${nbsp}%`);
 }
 
 /** `W/m2/K` as `W m⁻² K⁻¹`, a pure number as nothing. */

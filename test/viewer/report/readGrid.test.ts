@@ -14,7 +14,7 @@ const changed = (change: (grid: Draft) => void): string => {
 
 describe('a page that carries a grid', () => {
   test('comes back as it was written, over one input and over two', () => {
-    for (const grid of [curveGrid(), mapGrid()]) expect(readPage(written(grid)).grid).toEqual(grid);
+    for (const grid of [curveGrid(), mapGrid()]) expect(readPage(written(grid))).toEqual({ grid });
   });
 
   test.each<[string, (grid: Draft) => void]>([

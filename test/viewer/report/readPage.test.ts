@@ -9,8 +9,8 @@ const written = (data: object): string => JSON.stringify(toPortable(data));
 describe('what a page carries', () => {
   test('a trace comes back as it was written, a run as a run', () => {
     const trace = traceOf([plainCase()]);
-    expect(readPage(written({ trace }))).toEqual({ trace, result: null });
-    expect(readPage(written({ result: plainRun() })).trace).toBeNull();
+    expect(readPage(written({ trace }))).toEqual({ trace });
+    expect(Object.keys(readPage(written({ result: plainRun() })))).toEqual(['result']);
   });
 
   test('a damaged trace is answered in words', () => {

@@ -38,8 +38,8 @@ interface Warned {
   readonly warnings: readonly string[];
 }
 
-export function cautionNotices(cases: readonly Warned[]): HTMLElement[] {
-  return grouped(cases).map(([text, names]) => notice('Caution', names, text));
+export function cautionNotices(cases: readonly Warned[], kind = 'Caution'): HTMLElement[] {
+  return grouped(cases).map(([text, names]) => notice(kind, names, text));
 }
 
 /** A warning that several cases share is said once; one that all share needs no names. */
