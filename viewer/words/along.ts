@@ -28,9 +28,12 @@ export function alongPair(from: number, to: number, along: Along): string {
   return unitText(along.unit) === '' ? `${labelInText(along)} ${pair}` : pair;
 }
 
+/** People keep their capital within a sentence. */
+const isNamed = /^(?:Bond|Sobol)\b/;
+
 /** The label as it stands within a sentence. */
 export function labelInText({ label }: Pick<Along, 'label'>): string {
-  return /^\p{Lu}\p{Ll}/u.test(label) ? `${label[0]!.toLowerCase()}${label.slice(1)}` : label;
+  return /^\p{Lu}\p{Ll}/u.test(label) && !isNamed.test(label) ? `${label[0]!.toLowerCase()}${label.slice(1)}` : label;
 }
 
 /** The label with its unit, for an axis. */

@@ -1,6 +1,8 @@
 /** Which input matters to a finding, and how sure that is. Pure. */
+
 import type { SobolIndex } from '../../sim/studies/spread/sobolIndices.ts';
 import type { SpreadCase, SpreadFinding, SpreadInput } from '../../sim/studies/spread/spreadReport.ts';
+import { labelInText } from './along.ts';
 import { fixed, nbsp } from './number.ts';
 
 /** Independent inputs: shares of the variance. */
@@ -83,7 +85,7 @@ function wholeInterval(from: number, to: number): string {
 
 /** The label as it stands within a sentence. */
 export function inText(label: string): string {
-  return /^\p{Lu}\p{Ll}/u.test(label) && !/^Bond\b/.test(label) ? `${label[0]!.toLowerCase()}${label.slice(1)}` : label;
+  return labelInText({ label });
 }
 
 /** A sentence about a case with its name before it; a case that stands alone needs no name. */
