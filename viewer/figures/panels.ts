@@ -30,7 +30,8 @@ export interface PanelGrid {
 
 /** Room between rows: the name of a panel stands in it. */
 const rowGap = 42;
-const columnGap = 0.035;
+/** Of the width: the last tick of one panel and the first of the next keep clear of each other. */
+const columnGap = 0.055;
 
 /** At most `across` beside each other where there is width, one below another where there is not. */
 export function panelGrid(count: number, across: number, panelHeight: number, { narrow }: FigureStyle): PanelGrid {

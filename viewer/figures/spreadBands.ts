@@ -67,7 +67,7 @@ export function spreadBands(group: BandGroup, report: SpreadReport, style: Figur
     caption: captionOf(group, report),
     lines: legend(drawn[0]!, style),
     data: drawn.flatMap((one) => tracesOf(one, group, style)),
-    layout: layoutOf(drawn, group, grid, view, style),
+    layout: layoutOf(drawn, group, grid, view, report.cases.length > 1, style),
   };
 }
 
@@ -176,13 +176,13 @@ function legend({ colour }: Drawn, { theme }: FigureStyle): LegendLine[] {
 
 function layoutOf(
   drawn: readonly Drawn[],
-  { along, label, unit, members }: BandGroup,
+  { along, label, unit }: BandGroup,
   grid: PanelGrid,
   view: View,
+  isNamed: boolean,
   style: FigureStyle,
 ): Partial<Layout> {
   const { theme, narrow } = style;
-  const several = members.length > 1;
   const margin = narrow ? { l: 56, r: 14, t: 30, b: 48 } : { l: 64, r: 190, t: 30, b: 52 };
   const symbol = unitText(unit);
   const short = narrow
@@ -214,7 +214,7 @@ function layoutOf(
     })),
     shapes: along === 'orbit' ? drawn.flatMap(({ panel }) => apsides(panel, style)) : [],
     annotations: [
-      ...(several
+      ...(isNamed
         ? drawn.map(({ panel, member }) => panelName(panel, member.oneCase.name, member.caseIndex, style))
         : []),
       ...(along === 'orbit' ? drawn.flatMap(({ panel }) => apsisNames(panel, style)) : []),

@@ -148,7 +148,8 @@ function layoutOf(
 ): Partial<Layout> {
   const { theme, narrow } = style;
   const several = bars.length > 1;
-  const margin = narrow ? { l: 48, r: 14, t: several ? 28 : 40, b: 48 } : { l: 64, r: 24, t: several ? 30 : 42, b: 52 };
+  const isNamed = report.cases.length > 1;
+  const margin = narrow ? { l: 48, r: 14, t: isNamed ? 28 : 40, b: 48 } : { l: 64, r: 24, t: isNamed ? 30 : 42, b: 52 };
   const range: Range = bars.length > 0 ? (style.view?.x ?? rangeOf(bars)) : [0, 1];
   const title = plainLabel(labelWithSymbol(label, scaleOf({ name, unit }, report.cases)), narrow ? 46 : 80);
   return {
@@ -178,7 +179,7 @@ function layoutOf(
     })),
     shapes: bars.flatMap((one) => one.marks.flatMap((mark) => markLines(mark, one, range, style))),
     annotations: [
-      ...(several
+      ...(isNamed
         ? bars.map(({ panel, member }) => panelName(panel, member.oneCase.name, member.caseIndex, style))
         : []),
       ...bars.flatMap((one) => markNames(one, range, style)),

@@ -136,9 +136,8 @@ function layoutOf(
   style: FigureStyle,
 ): Partial<Layout> {
   const { theme, narrow } = style;
-  const margin = narrow
-    ? { l: 56, r: 14, t: clouds.length > 1 ? 30 : 12, b: 48 }
-    : { l: 72, r: 24, t: clouds.length > 1 ? 30 : 14, b: 52 };
+  const isNamed = cases.length > 1;
+  const margin = narrow ? { l: 56, r: 14, t: isNamed ? 30 : 12, b: 48 } : { l: 72, r: 24, t: isNamed ? 30 : 14, b: 52 };
   const input = clouds[0]?.input;
   const isLog = spansDecades(clouds);
   const symbol = unitText(input?.unit ?? '1');
@@ -170,10 +169,9 @@ function layoutOf(
         title: { text: panel.isLeft ? plainLabel(yTitle, narrow ? 32 : 46) : '', standoff: 10 },
       },
     })),
-    annotations:
-      clouds.length > 1
-        ? clouds.map(({ member }, at) => panelName(grid.panels[at]!, member.oneCase.name, member.caseIndex, style))
-        : [],
+    annotations: isNamed
+      ? clouds.map(({ member }, at) => panelName(grid.panels[at]!, member.oneCase.name, member.caseIndex, style))
+      : [],
   };
 }
 

@@ -1,7 +1,7 @@
 /** Numbers of a spread: one scale a quantity, and as many digits as its spread leaves a meaning. Pure. */
 import { radiansPerDegree } from '../../sim/constants.ts';
 import type { Seconds } from '../../sim/si.ts';
-import type { Summary } from '../../sim/studies/spread/percentiles.ts';
+import type { Percentiles, Summary } from '../../sim/studies/spread/percentiles.ts';
 import type { SpreadCase, SpreadFinding, SpreadInput } from '../../sim/studies/spread/spreadReport.ts';
 import { duration, exact, fixed, list, nbsp, type TimeUnit, timesPower, timeUnit, unitText } from './number.ts';
 
@@ -82,11 +82,24 @@ export function wordingOf(summary: Summary, alone: number | null, scale: Scale):
   const sizes = percentiles === null ? [alone ?? 0] : [percentiles['2.5'], percentiles['97.5']];
   const size = Math.max(...sizes.map(Math.abs)) / scale.one;
   if (!(half > 1e-9 * size)) return alike(scale);
+  if (spansDecades(percentiles!)) return spelt(scale, ownDigits, 0);
   const decimals = 1 - magnitude(half);
   if (size < 1e5 && decimals <= 6) return spelt(scale, (value) => fixed(value, Math.max(0, decimals)), 0);
   const power = magnitude(Math.abs(percentiles!['50']) / scale.one || size);
   const kept = Math.max(0, Math.min(8, decimals + power));
   return spelt(scale, (value) => fixed(value / 10 ** power, kept), power);
+}
+
+/** Steps of one size would round the low end to nothing. */
+function spansDecades(percentiles: Percentiles): boolean {
+  return percentiles['2.5'] > 0 && percentiles['97.5'] > 100 * percentiles['2.5'];
+}
+
+/** Two significant digits of each number for itself. */
+function ownDigits(value: number): string {
+  const power = magnitude(Math.abs(value));
+  if (power < -3 || power > 4) return timesPower(fixed(value / 10 ** power, 1), power);
+  return fixed(Number(value.toPrecision(2)), Math.max(0, 1 - power));
 }
 
 /** For what does not spread: five digits, without idle zeros. */
@@ -113,9 +126,9 @@ export function withSymbol(number: string, symbol: string): string {
   return symbol === '°' ? `${number}°` : `${number}${nbsp}${symbol}`;
 }
 
-/** Power of ten of the first digit; 0 for nothing. */
+/** Power of ten of the first digit, as it is shown: that of 9.9999 is 1; 0 for nothing. */
 function magnitude(value: number): number {
-  return value > 0 && Number.isFinite(value) ? Math.floor(Math.log10(value)) : 0;
+  return value > 0 && Number.isFinite(value) ? Math.floor(Math.log10(Number(value.toPrecision(3)))) : 0;
 }
 
 /** `Maximum temperature (K)`. */

@@ -287,6 +287,8 @@ describe('spreadScatter', () => {
     const panels = (key: string) => spreadScatter(shared('temperatureMax', both), key, both, wide).data.length / 2;
     expect(panels('planet.bondAlbedo')).toBe(1);
     expect(panels('orbit.eccentricity')).toBe(2);
+    const alone = spreadScatter(shared('temperatureMax', both), 'planet.bondAlbedo', both, wide);
+    expect(alone.layout.annotations!.map(({ text }) => text)).toEqual([expect.stringContaining('shallow sea')]);
   });
 
   test('more points than the page can bear are cut, and their number is said', () => {

@@ -32,10 +32,18 @@ describe('numbers of a spread', () => {
   });
 
   test('large and small numbers share one power of ten', () => {
-    const words = wordingOf(summaryOf(8e6, 1.3e7, 4e7, 1.19e8, 1.8e8), null, { one: 1, symbol: 'J' });
+    const words = wordingOf(summaryOf(8e6, 1.3e7, 4e7 - 1e-6, 1.19e8, 1.8e8), null, { one: 1, symbol: 'J' });
     expect(plain(words.interval(1.3e7, 1.19e8))).toBe('(1.3 to 11.9) × 10⁷ J');
     const small = wordingOf(summaryOf(1e-9, 2e-9, 3e-9, 4e-9, 5e-9), null, { one: 1, symbol: '' });
     expect(plain(small.text(3e-9))).toBe('3.0 × 10⁻⁹');
+  });
+
+  test('over decades each number has digits of its own, and the low end is not nothing', () => {
+    const words = wordingOf(summaryOf(1.3e5, 4.3e5, 1e7 - 1e-3, 2.3e8, 7.9e8), null, { one: 1, symbol: 'J' });
+    expect(plain(words.interval(4.3e5, 2.3e8))).toBe('4.3 × 10⁵ to 2.3 × 10⁸ J');
+    expect(plain(words.text(1e7 - 1e-3))).toBe('1.0 × 10⁷ J');
+    const times = wordingOf(summaryOf(0.052, 0.193, 4.33, 13.59, 15.18), null, { one: 1, symbol: 'd' });
+    expect(plain(times.interval(0.052, 15.18))).toBe('0.052 to 15 d');
   });
 
   test('each kind of finding in its own unit', () => {
