@@ -133,6 +133,15 @@ export function landAndSea(physics: ZonalPhysics, land: LandPhysics, mesh: YearM
     },
     jacobianInto,
     frozenJacobianInto: jacobian(true),
+    transportRatesInto(y, into) {
+      split(y);
+      for (const s of surfaces) {
+        for (let i = 0; i < count; i++) {
+          const leaves = (conductance[i - 1] ?? 0) + (conductance[i] ?? 0);
+          into[2 * i + s.which] = (leaves * s.share[i]) / capacityOf(s, i);
+        }
+      }
+    },
     driftInto(step, y, into) {
       split(y);
       for (const s of surfaces) warm.into(s.temperature, s.warm);

@@ -83,6 +83,11 @@ export function oneSurface(physics: ZonalPhysics, mesh: YearMesh): ZonalSystem {
     },
     jacobianInto: jacobianInto(false),
     frozenJacobianInto: jacobianInto(true),
+    transportRatesInto(y, into) {
+      for (let i = 0; i < size; i++) {
+        into[i] = ((conductance[i - 1] ?? 0) + (conductance[i] ?? 0)) / seaHeatCapacity(physics, y[i]);
+      }
+    },
     driftInto(step, y, into) {
       warm.into(y, share);
       if (varyingCapacity !== 0) fluxInto(step * 5 * size, y);

@@ -110,10 +110,17 @@ export function settleZonal(grid: ZonalGrid, bandStart: Float64Array, tolerance:
 }
 
 /** Rodas4 gains 2⁴ by halving its steps; kinks of polar night and narrow ramps leave less, as the gain before shows. */
-function safety({ system: { mesh, width }, settled: { tangent } }: OnMesh, gain: number): number {
-  const fastest = tangent === null ? 0 : largestOf(tangent.meanJacobian.diagonals[width]);
-  if (fastest * largestOf(mesh.width) > fastStep) return 1;
+function safety({ system, map, settled: { tangent } }: OnMesh, gain: number): number {
+  if (tangent !== null && fastestRate(system, map, tangent) * largestOf(system.mesh.width) > fastStep) return 1;
   return Number.isNaN(gain) ? firstSafety : Math.min(bestSafety, Math.max(1, gain - 1));
+}
+
+/** 1 over the shortest memory of a store, in the mean of the year: transport between fine bands is stiff, but forgets nothing. */
+function fastestRate(system: ZonalSystem, { history }: ZonalYearMap, { meanJacobian }: SteppedTangent): number {
+  const rates = new Float64Array(system.size);
+  system.transportRatesInto(history.value.subarray(0, system.size), rates);
+  const main = meanJacobian.diagonals[system.width];
+  return largestOf(rates.map((rate, i) => rate + main[i]));
 }
 
 function largestOf(values: Float64Array): number {

@@ -13,4 +13,6 @@ export interface ZonalSystem extends StageSystem {
   frozenJacobianInto(step: number, y: Float64Array, matrix: Banded): void;
   /** ∂f/∂t at the start of step `step`. */
   driftInto(step: number, y: Float64Array, drift: Float64Array): void;
+  /** What transport alone contributes to −∂f_i/∂y_i at these temperatures, s⁻¹: stiff on fine bands, and no memory of a store. */
+  transportRatesInto(y: Float64Array, into: Float64Array): void;
 }

@@ -104,7 +104,10 @@ function weightedSum(curves: readonly Curve[], weights: readonly number[]): Curv
   return sum;
 }
 
-/** Above this |∂f/∂T| h a store is fast: J f would multiply what the march leaves of error by (|∂f/∂T| h)²/64 between the steps. */
+/**
+ * Above this |∂f/∂T| h, transport apart, a store is fast: J f would multiply what the march leaves of error by (|∂f/∂T| h)²/64
+ * between the steps.
+ */
 const fast = 4;
 
 /** T″ at every step end, J f + ∂f/∂t, or for a fast store the difference of T′ about it; the last is the first, the year being closed. */
@@ -115,11 +118,13 @@ function secondDerivatives(system: ZonalSystem, history: StageHistory): Float64A
   const jacobian = banded(size, system.width);
   const main = jacobian.diagonals[system.width];
   const drift = new Float64Array(size);
+  const transport = new Float64Array(size);
   for (let step = 0; step < steps; step++) {
     const row = (values: Float64Array, at: number) => values.subarray(at * size, (at + 1) * size);
     const here = row(history.rate, step);
     system.jacobianInto(step, row(history.value, step), jacobian);
     system.driftInto(step, row(history.value, step), drift);
+    system.transportRatesInto(row(history.value, step), transport);
     const into = row(second, step);
     multiplyBanded(jacobian, here, into);
     const previous = (step + steps - 1) % steps;
@@ -127,7 +132,7 @@ function secondDerivatives(system: ZonalSystem, history: StageHistory): Float64A
     const [a, b] = [width[previous], width[step]];
     const longest = Math.max(a, b);
     for (let i = 0; i < size; i++) {
-      if (Math.abs(main[i]) * longest < fast) into[i] += drift[i];
+      if (Math.abs(main[i] + transport[i]) * longest < fast) into[i] += drift[i];
       else into[i] = ((here[i] - before[i]) * (b / a) + (after[i] - here[i]) * (a / b)) / (a + b);
     }
   }
