@@ -9,7 +9,8 @@ import type { Io } from '../io.ts';
 import { readSamples } from '../posteriorFile.ts';
 import type { ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
-import { finishSpread, type SpreadContext, type SpreadTableFiles } from './spreadFiles.ts';
+import type { SpreadContext } from './spreadContext.ts';
+import { finishSpread, type SpreadTableFiles } from './spreadFiles.ts';
 
 export interface GatherOptions {
   readonly out: string;

@@ -13,7 +13,8 @@ import { readSamples } from '../posteriorFile.ts';
 import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
 import type { Program } from './run.ts';
-import { finishSpread, type SpreadContext, type SpreadTableFiles } from './spreadFiles.ts';
+import type { SpreadContext } from './spreadContext.ts';
+import { finishSpread, type SpreadTableFiles } from './spreadFiles.ts';
 import { spreadJobs } from './spreadJobs.ts';
 
 export interface SpreadOptions {

@@ -19,22 +19,8 @@ import { terminalOf } from '../output/terminal.ts';
 import { hanging } from '../output/text.ts';
 import { samplesFrom } from '../posteriorFile.ts';
 import type { ScenarioFile } from '../scenarioFile.ts';
+import type { SpreadContext } from './spreadContext.ts';
 import { bandDrawsOf, indexRowsOf } from './spreadJobs.ts';
-
-/** What a spread was asked for: kept beside its rows, so that `gather` can go on. */
-export interface SpreadContext {
-  readonly command: 'spread';
-  readonly file: string;
-  readonly text: string;
-  readonly sha256: string;
-  readonly version: string;
-  readonly samplesSha256: string | null;
-  readonly only: readonly string[] | null;
-  readonly draws: number;
-  readonly seed: number;
-  readonly sampling: 'sobol' | 'random';
-  readonly indices: boolean;
-}
 
 export interface SpreadTableFiles {
   readonly draws: TableFiles;

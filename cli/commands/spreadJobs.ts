@@ -4,7 +4,7 @@ import { furtherRuns } from '../../sim/studies/spread/indexDesign.ts';
 import type { SpreadPlan } from '../../sim/studies/spread/plan.ts';
 import { bandColumnName } from '../../sim/studies/spread/summariseSpread.ts';
 import type { Column, Job } from '../engine/job.ts';
-import type { SpreadContext } from './spreadFiles.ts';
+import type { SpreadContext } from './spreadContext.ts';
 
 export interface SpreadJob {
   readonly table: 'draws' | 'bands' | 'indices';
