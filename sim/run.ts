@@ -32,7 +32,7 @@ export interface CaseResult {
   /** `tolerance` of this case and the limit both accounts must keep: max(1e-9, 10 × tolerance). */
   readonly tolerance: number;
   readonly accountLimit: number;
-  /** Those of the warm-start state. */
+  /** Those of the first state: the warm one, unless its start ended in no climate. */
   readonly findings: readonly Finding[];
   /** Warm first; each with its Dataset. */
   readonly states: readonly State[];

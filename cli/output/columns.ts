@@ -26,10 +26,10 @@ export function columnsOf(result: RunResult): readonly Column[] {
   );
 }
 
-/** The case's name, and which of its states where there is a choice. */
+/** The case's name, and which of its states where there is a choice; a cold one without its warm one is told, too. */
 function headingOf({ name, states }: CaseResult, { label, stable }: State): string {
   const tags = [
-    ...(states.length > 1 || label === 'forward' ? [label] : []),
+    ...(states.length > 1 || label === 'forward' || label === 'cold' ? [label] : []),
     ...(stable === false ? ['unstable'] : []),
   ];
   return tags.length === 0 ? name : `${name} (${tags.join(', ')})`;

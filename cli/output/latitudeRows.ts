@@ -1,4 +1,5 @@
 /** What the terminal table shows of models with latitude: where and when the extremes are, ice, windows, local lags. */
+import type { Finding } from '../../sim/findings/finding.ts';
 import { type Column, findingOf, periodOf, type TimeUnit, timeDecimals } from './columns.ts';
 import { percent, significant, withError } from './numbers.ts';
 import { type Cell, type Defined, type Row, row } from './row.ts';
@@ -61,9 +62,16 @@ function edgeRow(section: string, word: string, side: string): Row {
     if (!mayFreeze(column) || least === undefined || greatest === undefined) return null;
     if (least.value === null || greatest.value === null) return { reason: least.reason ?? 'not defined' };
     const [near, far] = [least.value, greatest.value].toSorted((a, b) => Math.abs(a) - Math.abs(b)).map(latitudeText);
-    return { text: near === far ? near! : `${near!.split(' ')[0]} to ${far}` };
+    const edge = near === far ? near! : `${near!.split(' ')[0]} to ${far}`;
+    return { text: `${edge}${ofTheYear(findingOf(column.state, `iceCap${side}Fraction`))}` };
   };
   return { section, label: `${word} edge at latitude`, alone: `${word} ice edge`, cell };
+}
+
+/** An edge is known only of the days that have a cap. */
+function ofTheYear(fraction: Finding | undefined): string {
+  const share = fraction?.value ?? 1;
+  return share < 1 ? `, ${percent(share)} % of the year` : '';
 }
 
 function lagRows(unit: TimeUnit): readonly Row[] {

@@ -31,11 +31,11 @@ function solvedOneByOne(
   return {
     columns,
     into(world, row) {
-      const [warm] = model.solve(world, options, windows).states;
+      const [first] = model.solve(world, options, windows).states;
       for (const [i, { name }] of columns.entries()) {
-        row[i] = warm.findings.find((finding) => finding.name === name)?.value ?? Number.NaN;
+        row[i] = first.findings.find((finding) => finding.name === name)?.value ?? Number.NaN;
       }
-      return warm.converged;
+      return first.converged && first.label !== 'cold';
     },
   };
 }

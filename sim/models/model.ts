@@ -34,7 +34,7 @@ export interface EnergyBalance {
 }
 
 export interface Solution {
-  /** Warm first. */
+  /** Warm first; one that a start did not reach is missing, and among the failures. */
   readonly states: readonly State[];
   readonly warnings: readonly string[];
   /** States that were looked for and could not be computed, each in the words that say so; the run does not pass. */
@@ -59,7 +59,7 @@ export interface Batch {
   readonly columns: readonly FindingColumn[];
   /**
    * Overwrites `row` (columns.length) by the findings of a world's warm state, to the last bit those of `solve`; NaN where
-   * one is undefined. Returns whether the state kept its tolerance. Errors: as `solve`.
+   * one is undefined. Returns whether the state kept its tolerance; not so where only the cold start ended in a climate. Errors: as `solve`.
    */
   into(world: World, row: Float64Array): boolean;
 }

@@ -168,6 +168,8 @@ function zonalFindings(dataset: Dataset): Finding[] {
     of('iceEdgeNorthMax', 68.7, 'deg'),
     of('iceEdgeSouthMin', null, 'deg'),
     of('iceEdgeSouthMax', null, 'deg'),
+    of('iceCapNorthFraction', 0.625, '1'),
+    of('iceCapSouthFraction', 0, '1'),
     of('iceFractionMean', 0.21, '1'),
     of('habitableFraction.liquid water at 1 bar', 0.73, '1'),
     of('alwaysFraction.liquid water at 1 bar', 0.51, '1'),

@@ -62,6 +62,8 @@ function timing(column: Column, unit: TimeUnit): string {
   const late = timeText(lag.value, column, unit);
   if (when === `${late} after periapsis`)
     return `It is hottest ${late} after periapsis and the peak of the steady value.`;
+  if (lag.value < 0)
+    return `It is hottest ${when}, ${timeText(-lag.value, column, unit)} before the peak of the steady value.`;
   return `It is hottest ${when}, ${late} behind the peak of the steady value.`;
 }
 

@@ -17,7 +17,7 @@ export interface Column {
   readonly caseIndex: number;
   /** Place of the state in its case, warm first. */
   readonly stateIndex: number;
-  /** Words for the state, e.g. `cold state`; null where the case has one. */
+  /** Words for the state, e.g. `cold state`; null where the case has one that is not the cold. */
   readonly stateName: string | null;
   readonly isForwardRun: boolean;
   readonly state: State;
@@ -34,7 +34,7 @@ export function columnsOf(result: RunResult): Column[] {
       caseName: oneCase.name,
       caseIndex,
       stateIndex,
-      stateName: oneCase.states.length > 1 ? stateName(state) : null,
+      stateName: oneCase.states.length > 1 || state.label === 'cold' ? stateName(state) : null,
       isForwardRun: state.label === 'forward',
       state,
       dataset: state.dataset,

@@ -74,7 +74,9 @@ function iceEdge(column: Column, side: 'North' | 'South'): Cell {
   const ends = [degreesOf(least), degreesOf(finding(column, `iceEdge${side}Max`))];
   const [from, to] = ends;
   if (from === null || to === null || from === undefined || to === undefined) return without(least);
-  return { text: edgeText(from, to) };
+  const ofYear = findingValue(column, `iceCap${side}Fraction`) ?? 1;
+  // An edge is known only of the days that have a cap.
+  return { text: edgeText(from, to), ...(ofYear < 1 ? { detail: `${percent(ofYear)} of the year` } : {}) };
 }
 
 /** Without a ramp of the albedo there is no ice to speak of. */

@@ -173,6 +173,8 @@ function temperatureWindow(year: ZonalYear, { name, from, to }: Window): Finding
   const seasons = year.curves.bands.map((curve) => longestSeason(curve, from, to));
   const longest = seasons.reduce((best, season, i) => (season > seasons[best] ? i : best), 0);
   const none = { value: null, reason: 'no latitude is ever inside' };
+  const allYear = seasons.filter((season) => season >= year.world.orbit.period * (1 - 1e-9)).length;
+  const several = { value: null, reason: 'all year at several latitudes' };
   return [
     {
       name: `fractionInWindow.${name}`,
@@ -202,7 +204,7 @@ function temperatureWindow(year: ZonalYear, { name, from, to }: Window): Finding
       name: `longestSeasonLatitude.${name}`,
       unit: 'deg',
       label: `Latitude of the longest season in “${name}”`,
-      ...(seasons[longest] > 0 ? { value: latitudeDeg(year, longest) } : none),
+      ...(seasons[longest] > 0 ? (allYear > 1 ? several : { value: latitudeDeg(year, longest) }) : none),
     },
   ];
 }

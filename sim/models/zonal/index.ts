@@ -6,7 +6,8 @@ import { instellation } from '../../instellation/instellation.ts';
 import type { Kelvin } from '../../si.ts';
 import type { Globe, SolveOptions, Window, World } from '../../world.ts';
 import type { Model, Solution, State } from '../model.ts';
-import { areaMeanOf, bandMeansOf } from './areaMeans.ts';
+import { bandMeansOf } from './areaMeans.ts';
+import { type Climate, climatesOf, yearMean } from './climates.ts';
 import { zonalDataset } from './dataset.ts';
 import { zonalEnergyBalance } from './energy.ts';
 import { zonalFindings } from './findings.ts';
@@ -39,16 +40,17 @@ export function zonalModel(): Model {
 }
 
 function solvePeriodic(world: World, globe: Globe, options: SolveOptions, windows: readonly Window[]): Solution {
-  const [found, failures] = physicalStates(periodicStates(world, globe, globe.bands, options.tolerance));
+  const starts = periodicStates(world, globe, globe.bands, options.tolerance);
+  const { found, failures } = climatesOf(starts, options.tolerance);
   const half = Math.max(9, Math.floor(globe.bands / 2));
-  const [halved] = physicalStates(periodicStates(world, globe, half, options.tolerance));
-  const years = found.map((state) => zonalYear(world, globe, state));
+  const { found: halved } = climatesOf(periodicStates(world, globe, half, options.tolerance), options.tolerance);
+  const years = found.map(({ state }) => zonalYear(world, globe, state));
   const hasIceFeedback = world.surface.albedo.ramp !== null || globe.frozenHeatCapacity !== null;
-  const states = found.map((state, index): State => {
+  const states = found.map(({ label, state }, index): State => {
     const year = years[index];
     const dataset = zonalDataset(year, options);
     const margin = marginOf(state, hasIceFeedback);
-    const coarse = halved[Math.min(index, halved.length - 1)];
+    const coarse = (halved.find((one) => one.label === label) ?? halved[0]).state;
     const stability = {
       margin,
       errorEstimate: state.errorEstimate,
@@ -56,7 +58,7 @@ function solvePeriodic(world: World, globe: Globe, options: SolveOptions, window
       localError: localErrorOf(state, coarse),
     };
     return {
-      label: found.length + failures.length === 1 ? 'only' : index === 0 ? 'warm' : 'cold',
+      label,
       stable: state.logMultiplier < 0,
       multiplier: Math.exp(state.logMultiplier),
       stabilityMargin: margin,
@@ -79,37 +81,13 @@ function solvePeriodic(world: World, globe: Globe, options: SolveOptions, window
         : []),
     ],
     failures,
-    iterations: found.reduce((sum, { yearEquivalents }) => sum + yearEquivalents, 0),
+    iterations: starts.reduce((sum, { yearEquivalents }) => sum + yearEquivalents, 0),
   };
 }
 
 /**
- * Those that are results, and what is to be said of the others. Errors: SimError where the warm one is none.
- */
-function physicalStates([warm, cold]: readonly ZonalState[]): [ZonalState[], string[]] {
-  if (!isPhysical(warm)) {
-    throw new SimError(
-      'planet.heatStore',
-      'the year of this planet cannot be computed: somewhere it heats or cools faster than its shortest time step',
-      'Give a larger heat store, a wider albedo ramp (from, to) or more heatTransport',
-    );
-  }
-  if (cold === undefined) return [[warm], []];
-  if (isPhysical(cold)) return [[warm, cold], []];
-  const failure =
-    'What becomes of a cold start could not be computed: somewhere it heats or cools faster than the shortest time step, or falls below absolute zero. Whether this orbit allows a cold climate beside the warm one is not known.';
-  return [[warm], [failure]];
-}
-
-/** Where even the finest steps lose a fast band, what is left is no temperature, and no result. */
-export function isPhysical({ history, errorEstimate, logMultiplier, frozenLogMultiplier }: ZonalState): boolean {
-  const isTemperature = history.value.every((value) => value > 0 && Number.isFinite(value));
-  return isTemperature && [errorEstimate, logMultiplier, frozenLogMultiplier].every(Number.isFinite);
-}
-
-/**
- * From a hot and a cold start; one state where both end alike, or where nothing depends on ice. Either may have failed
- * (`isPhysical`).
+ * From a hot and a cold start; one state where both end alike, or where nothing depends on ice. Either may be no climate
+ * (`climatesOf`).
  */
 export function periodicStates(world: World, globe: Globe, bands: number, tolerance: number): ZonalState[] {
   const grid = zonalGrid(world, globe, bands);
@@ -145,7 +123,7 @@ function apart(a: ZonalState, b: ZonalState): Kelvin {
 
 /** Richardson: half the bands are off by three times what the whole number is, at second order. Year means of the area mean. */
 function bandErrorOf(fine: ZonalState, coarse: ZonalState): Kelvin {
-  return Math.abs(areaMean(fine) - areaMean(coarse)) / 3;
+  return Math.abs(yearMean(fine) - yearMean(coarse)) / 3;
 }
 
 /** Of the extremes in place and time: a wider band hides more of the pole in it, so that these gain by the first order only. */
@@ -166,17 +144,7 @@ function localRange({ history, system }: ZonalState): { readonly highest: Kelvin
   return { highest, lowest };
 }
 
-function areaMean({ history, system }: ZonalState): Kelvin {
-  const { size, mesh } = system;
-  let sum = 0;
-  for (let step = 0; step < mesh.steps; step++) {
-    const rows = [step, step + 1].map((row) => history.value.subarray(row * size, (row + 1) * size));
-    for (const row of rows) sum += (mesh.width[step] / 2) * areaMeanOf(system.physics, row);
-  }
-  return sum / mesh.time[mesh.steps];
-}
-
-function spatialWarnings(found: readonly ZonalState[], halved: readonly ZonalState[]): string[] {
+function spatialWarnings(found: readonly Climate[], halved: readonly Climate[]): string[] {
   if (found.length === halved.length) return [];
   return [
     `With half the bands ${halved.length} periodic state${halved.length > 1 ? 's are' : ' is'} found instead of ${found.length}: the number of climates is not settled at this resolution; raise planet.bands.`,

@@ -29,7 +29,7 @@ export function lagFindings(year: ZonalYear, dataset: Dataset, errorEstimate: nu
   const timeOfMax = when('timeOfMax', 'Time of maximum, after periapsis', highest);
   const timeOfMin = when('timeOfMin', 'Time of minimum, after periapsis', lowest);
   const steady = localMaxima(dataset.variables.steadyTemperature.data, dataset.variables.time.data, period);
-  const behind = timeOfMax.value === null ? null : nearestBefore(steady, timeOfMax.value, period);
+  const behind = timeOfMax.value === null ? null : lagBehind(steady, timeOfMax.value, period);
   const base = { name: 'lagOfMax', unit: 's', label: 'Lag of the maximum behind the steady maximum' };
   const reason = timeOfMax.reason ?? 'the steady value does not vary';
   const plusMinus = timeOfMax.plusMinus ?? 0;
@@ -69,10 +69,7 @@ function harmonicLag(dataset: Dataset, period: Seconds, still: boolean): Finding
   return { ...base, value: (folded / (2 * Math.PI)) * period };
 }
 
-/**
- * Local lag: the year's hottest moment of a latitude behind the nearest insolation maximum before it; below zero where transport
- * brings it on up to a quarter of a year early.
- */
+/** Local lag: the year's hottest moment of a latitude behind the maximum of its own insolation, by the rule of `lagBehind`. */
 export function localLags(year: ZonalYear): Finding[] {
   const { latitude } = year.physics.bands;
   const nearest = (degreesNorth: number): number => {
@@ -103,10 +100,10 @@ export function localLags(year: ZonalYear): Finding[] {
     const { highest, lowest } = extremes(year.curves.bands[band]);
     const maxima = localMaxima(insolation[k], times, period);
     const varies = highest.value - lowest.value > 1e-6 * highest.value;
-    const lag = varies ? nearestBefore(maxima, highest.position, period) : null;
+    const lag = varies ? lagBehind(maxima, highest.position, period) : null;
     return lag === null
       ? { ...base, value: null, reason: 'insolation or temperature does not vary there' }
-      : { ...base, value: lag > 0.75 * period ? lag - period : lag, plusMinus: period / samples };
+      : { ...base, value: lag, plusMinus: period / samples };
   });
 }
 
@@ -128,12 +125,18 @@ export function localMaxima(values: Float64Array, times: Float64Array, period: S
   return found;
 }
 
-/** Time since the nearest of `times` before `moment`, going round the year; null when there is none. */
-function nearestBefore(times: readonly Seconds[], moment: Seconds, period: Seconds): Seconds | null {
+/**
+ * Lag of a moment, going round the year: time since the nearest of `times` before it; but where that is more than half an orbit ago
+ * and the next of them less than a quarter of an orbit away, the moment leads that one, and its lag is below zero.
+ * Null when there are none.
+ */
+export function lagBehind(times: readonly Seconds[], moment: Seconds, period: Seconds): Seconds | null {
   if (times.length === 0) return null;
-  const since = times.map((time) => moment - time - period * Math.floor((moment - time + 1e-9 * period) / period));
-  return Math.max(
-    0,
-    since.reduce((a, b) => Math.min(a, b)),
-  );
+  const since = times.map((time) => {
+    const turns = Math.floor((moment - time + 1e-9 * period) / period);
+    return Math.max(0, moment - time - period * turns);
+  });
+  const behind = since.reduce((a, b) => Math.min(a, b));
+  const ahead = period - since.reduce((a, b) => Math.max(a, b));
+  return behind > period / 2 && ahead < period / 4 ? -ahead : behind;
 }

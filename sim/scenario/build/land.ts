@@ -11,7 +11,11 @@ type Fraction = Land['fraction'];
 export function buildLand(given: Given, ground: GroundSetting | null): { land: Land | null } | null {
   given.use('planet.landFraction');
   const written = given.keys.planet?.landFraction;
-  if (!written) return given.has('planet.landFraction') ? null : { land: null };
+  if (!written) {
+    if (given.has('planet.landFraction')) return null;
+    warnUnused(given);
+    return { land: null };
+  }
   const fraction =
     'latitudes' in written
       ? given.once('planet.landFraction', () => readTable(given, written))
@@ -22,6 +26,15 @@ export function buildLand(given: Given, ground: GroundSetting | null): { land: L
   const heatCapacity = buildHeatStore(given, ground, 'landHeatStore');
   const exchange = value.every((share) => share === 1) ? 0 : buildExchange(given);
   return heatCapacity === null || exchange === null ? null : { land: { fraction, heatCapacity, exchange } };
+}
+
+/** What is said of land means nothing where no land is. */
+function warnUnused(given: Given): void {
+  for (const key of ['landHeatStore', 'landSeaExchange']) {
+    if (given.has(`planet.${key}`)) {
+      given.warn(() => `planet.${key} is not used: planet.landFraction is not given.`);
+    }
+  }
 }
 
 /** No sea at any latitude. */

@@ -79,3 +79,23 @@ test('the accounts tell the error in time from that of the bands, and the notes 
   expect(text).toMatch(/as one: instellation \S+, energy \S+, error < \S+: pass/);
   expect(text).toContain('By latitude: means over longitude and day; heat moves by diffusion');
 });
+
+test('an ice edge that is not there all year says for how much of it', () => {
+  const share = finding('iceCapNorthFraction');
+  expect(share).toBeGreaterThan(0);
+  expect(share).toBeLessThanOrEqual(1);
+  const withShare = (value: number): RunResult => {
+    const [first, ...others] = result.cases;
+    const states = first!.states.map((state) => ({
+      ...state,
+      findings: state.findings.map((one) => (one.name === 'iceCapNorthFraction' ? { ...one, value } : one)),
+    }));
+    return { ...result, cases: [{ ...first!, states }, ...others] };
+  };
+  const edge = (run: RunResult) =>
+    tableLines(run, terminalOf({ columns: 120, env: {}, isTTY: false }), false).find((line) =>
+      line.trimStart().startsWith('northern edge at latitude'),
+    );
+  expect(edge(withShare(0.062))).toMatch(/\d N, 6\.2 % of the year/);
+  expect(edge(withShare(1))).not.toContain('of the year');
+});

@@ -73,6 +73,15 @@ describe('the globe', () => {
     const wet = onlyCase(globe({}, '  landFraction: 0', ...land));
     expect(wet.world.globe!.land).toBeNull();
     expect(idle(wet)).toEqual(['planet.landHeatStore.heatCapacity', 'planet.landSeaExchange']);
+    expect(wet.warnings).toEqual([]); // a share that is written, if none
+  });
+
+  test('what is said of land without a share of it is warned about', () => {
+    expect(onlyCase(globe({}, ...land)).warnings).toEqual([
+      'planet.landHeatStore is not used: planet.landFraction is not given.',
+      'planet.landSeaExchange is not used: planet.landFraction is not given.',
+    ]);
+    expect(onlyCase(globe({}, '  landFraction: 0.3', ...land)).warnings).toEqual([]);
   });
 });
 

@@ -38,6 +38,9 @@ describe('the answering sentence', () => {
     expect(leadFor({ lagOfMax: 11 * day })).toContain(
       'hottest 14.5 d after periapsis, 11.0 d behind the peak of the steady value.',
     );
+    expect(leadFor({ lagOfMax: -3 * day })).toContain(
+      'hottest 14.5 d after periapsis, 3.0 d before the peak of the steady value.',
+    );
   });
 
   test('a lag that is not defined says why', () => {

@@ -70,7 +70,7 @@ describe('rows by latitude', () => {
   });
 
   test('ice edges: from where to where, or why not', () => {
-    expect(cell(icy(), 'Northern ice edge')).toEqual({ text: '51.2° to 68.7° N' });
+    expect(cell(icy(), 'Northern ice edge')).toEqual({ text: '51.2° to 68.7° N', detail: '62.5 % of the year' });
     expect(cell(icy(), 'Southern ice edge')).toEqual({
       text: '—',
       reason: 'no ice at this pole in any part of the year',

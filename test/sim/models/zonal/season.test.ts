@@ -143,6 +143,19 @@ test('nothing in a finding or a row is ever not a number', () => {
   }
 });
 
+test('a longest season has a latitude where just one has it, none where several have all year', () => {
+  const world = zonalWorld({ heatCapacity: 5e7, globe: { bands: 18 } });
+  const of = (from: number, to: number) =>
+    model.solve(world, options, [{ name: 'it', of: 'temperature', from, to }]).states[0].findings;
+  const latitude = (from: number, to: number) => of(from, to).find(({ name }) => name === 'longestSeasonLatitude.it')!;
+  expect(latitude(100, 400)).toMatchObject({ value: null, reason: 'all year at several latitudes' });
+  expect(latitude(390, 400)).toMatchObject({ value: null, reason: 'no latitude is ever inside' });
+  const { hottestTemperature, hottestLatitude } = Object.fromEntries(
+    of(100, 400).map(({ name, value }) => [name, value!]),
+  );
+  expect(latitude(hottestTemperature - 0.1, 400).value).toBeCloseTo(hottestLatitude, 9);
+});
+
 test('the ± of a local extreme covers what twice the bands find', () => {
   const [coarse] = solve(zonalWorld({ globe: { bands: 20 } })).states;
   const [fine] = solve(zonalWorld({ globe: { bands: 40 } })).states;
