@@ -21,7 +21,11 @@ function program(words: readonly string[], io: Io, outcome: { code: number }): C
     .description('How hot a planet on an eccentric orbit gets, when, and how late behind periapsis.')
     .version(packageJson.version)
     .exitOverride()
-    .configureOutput({ writeOut: (text) => io.stdout.write(text), writeErr: (text) => io.stderr.write(text) })
+    .configureOutput({
+      writeOut: (text) => io.stdout.write(text),
+      writeErr: (text) => io.stderr.write(text),
+      outputError: (text, write) => write(ownWords(text, words[0])),
+    })
     .configureHelp({ helpWidth: Math.min(io.columns, 120) })
     .addHelpText('after', '\nStart with `perilag new planet.yaml`, then `perilag run planet.yaml`.');
   perilag
@@ -49,7 +53,7 @@ function program(words: readonly string[], io: Io, outcome: { code: number }): C
     .command('trace')
     .description('follow the climates of each case as one input changes: where they end, and where there are two')
     .argument('<scenario>', 'scenario file, YAML or JSON')
-    .requiredOption('--along <key=range>', "the input and its range, e.g. 'star.luminosity=0.8 to 1.3 Lsun'")
+    .requiredOption('--along <key=range>', "the input and its range, e.g. 'star.luminosity=0.8 to 1.3 Lsun'", collect)
     .option('-o, --out <dir>', 'output folder (default: out/<file name without extension>/trace)')
     .option('--only <case>', 'follow only this case; may be given several times', collect)
     .option('--json', 'print the summary as JSON on standard output, and nothing else there')
@@ -134,6 +138,20 @@ function program(words: readonly string[], io: Io, outcome: { code: number }): C
       outcome.code = schema(io);
     });
   return perilag;
+}
+
+const completeCommands: Readonly<Record<string, string>> = {
+  trace: "perilag trace planet.yaml --along 'star.luminosity=0.8 to 1.3 Lsun'",
+  grid: "perilag grid planet.yaml --along 'orbit.eccentricity=0 to 0.9'",
+  gather: 'perilag gather part-1 part-2 -o whole',
+};
+
+/** An option that a command cannot do without, in the form of our own errors; everything else as Commander tells it. */
+function ownWords(text: string, command = ''): string {
+  const [, flags] = /required option '([^']+)' not specified/.exec(text) ?? [];
+  const complete = completeCommands[command];
+  if (flags === undefined || complete === undefined) return text;
+  return `${command}: ${flags} is missing. Write e.g. \`${complete}\`.\n`;
 }
 
 /** Reads a whole number of an option. Errors: as Commander tells them. */

@@ -24,7 +24,7 @@ import { onlyCases } from './only.ts';
 import type { Program } from './run.ts';
 
 export interface TraceCommandOptions {
-  readonly along: string;
+  readonly along: readonly string[];
   readonly out?: string;
   readonly only?: readonly string[];
   readonly json?: boolean;
@@ -33,7 +33,7 @@ export interface TraceCommandOptions {
 
 /** Gives the exit code. Errors: SimError and ScenarioError for the input's faults. */
 export async function trace(file: string, options: TraceCommandOptions, program: Program, io: Io): Promise<number> {
-  const along = readAlong(options.along);
+  const along = readAlong(onlyRange(options.along));
   const [item] = onlyCases([readScenarioFile(file, io.cwd)], options.only ?? []);
   const folder = outputFolder(file, options.out);
   const names = item!.scenario.cases.map(({ name }) => name);
@@ -47,6 +47,14 @@ export async function trace(file: string, options: TraceCommandOptions, program:
   return tellUnfinished(report, io) ? exitCode.notWithinTolerance : exitCode.done;
 }
 
+/** Errors: SimError for several: a trace follows one input. */
+function onlyRange(ranges: readonly string[]): string {
+  const [range, ...more] = ranges;
+  if (more.length === 0) return range!;
+  const what = `${ranges.length} ranges are given, and climates are followed along one input`;
+  throw new SimError('--along', what, 'Keep one of them; `perilag grid` takes two');
+}
+
 function outputFolder(file: string, out: string | undefined): string {
   if (out?.trim() === '')
     throw new SimError('-o', 'the folder has no name', 'Name one, e.g. `-o results`, or leave -o out');
@@ -56,7 +64,7 @@ function outputFolder(file: string, out: string | undefined): string {
 function follow(one: CaseAlong, along: Along, progress: Progress): TraceReportCase {
   progress.milestone(`${one.name}: following its climates`);
   return traceAlong(one, along, ({ branch, points, value, finished }) => {
-    const counted = `${one.name}: branch ${branch}, ${points} points`;
+    const counted = `${one.name}: branch ${branch}, ${points} ${points === 1 ? 'point' : 'points'}`;
     if (finished) progress.milestone(counted);
     else progress.beat(() => `${counted}, at ${formatNumber(value)}${along.unit === '1' ? '' : ` ${along.unit}`}`);
   });

@@ -18,9 +18,19 @@ export function listInputs(tree: Branch, keys: CaseKeys, used: ReadonlySet<strin
       text: leaf.text,
       isDefault: leaf.isDefault ?? false,
       used: key === 'model' || path.some((_, depth) => used.has(path.slice(0, depth + 1).join('.'))),
-      label: path[0] === 'windows' ? path.slice(1).join(', ') : labelOf(path),
+      label: inputLabel(path),
     };
   });
+}
+
+/** Land and frozen sea have stores of the same forms as the sea: said before the form, to tell them apart. */
+const storeOwners: Readonly<Record<string, string>> = { landHeatStore: 'Land', frozenHeatStore: 'Frozen sea' };
+
+function inputLabel(path: readonly string[]): string {
+  if (path[0] === 'windows') return path.slice(1).join(', ');
+  const owner = path[0] === 'planet' ? storeOwners[path[1] ?? ''] : undefined;
+  const label = labelOf(path);
+  return owner === undefined || path.length < 3 ? label : `${owner}: ${label[0]!.toLowerCase()}${label.slice(1)}`;
 }
 
 function* leaves(tree: Tree, path: readonly string[] = []): Generator<{ path: readonly string[]; leaf: Leaf }> {

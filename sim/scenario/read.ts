@@ -12,7 +12,7 @@ import { readPosterior } from './posterior.ts';
 import { ScenarioError } from './problem.ts';
 import { spreadWarnings } from './spreads.ts';
 import { shorten } from './syntax.ts';
-import { type Branch, placeOf, subtree } from './tree.ts';
+import { type Branch, isNull, placeOf, subtree } from './tree.ts';
 import type { Problem, Scenario, ScenarioCase } from './types.ts';
 import { type Fault, validateCase, validateHead } from './validate.ts';
 
@@ -39,7 +39,7 @@ export function readWithTrees(text: string, file: string): { scenario: Scenario;
     ...[...faults, ...headFaults, ...posteriorFaults].map((fault) => problemAt(root, fault, file)),
     ...baseFaults(base).map((fault) => problemAt(base, fault, file)),
     ...read.flatMap(({ tree, keyFaults }) => keyFaults.map((fault) => problemAt(tree, fault, file))),
-    ...namingCases(read, file),
+    ...namingCases(read, root, file),
   ];
   if (problems.length) throw new ScenarioError(inOrder(problems));
   const understoodWith = (samples: string) => understood(root, withSamples(head, samples), base, read);
@@ -114,13 +114,14 @@ function printable(text: string): string {
 }
 
 /** A fault of some cases only names them, unless it already points into the case. */
-function namingCases(read: readonly ReadCase[], file: string): Problem[] {
+function namingCases(read: readonly ReadCase[], root: Branch, file: string): Problem[] {
   const names = new Map<string, { problem: Problem; isInside: boolean; cases: string[] }>();
   for (const { name, tree, caseFaults } of read) {
     for (const fault of caseFaults) {
-      const problem = problemAt(tree, fault, file);
+      const removal = removalOf(root, name, fault);
+      const problem = removal ? problemAt(root, { ...fault, path: removal }, file) : problemAt(tree, fault, file);
       const id = identity(problem);
-      const isInside = placeOf(tree, fault.path, fault.atKey).path[0] === 'cases';
+      const isInside = removal !== null || placeOf(tree, fault.path, fault.atKey).path[0] === 'cases';
       const known = names.get(id) ?? { problem, isInside, cases: [] };
       if (!known.cases.includes(name)) known.cases.push(name);
       names.set(id, known);
@@ -131,6 +132,13 @@ function namingCases(read: readonly ReadCase[], file: string): Problem[] {
     const shown = cases.map((name) => `\`${shorten(printable(name))}\``).join(', ');
     return { ...problem, what: `${problem.what} (${cases.length > 1 ? 'cases' : 'case'} ${shown})` };
   });
+}
+
+/** Where the case says null to a key that it then lacks, or to the section of the key; null where it does not. */
+function removalOf(root: Branch, name: string, { lacking = [] }: Fault): readonly string[] | null {
+  const ways = lacking.flatMap(([section, key]) => [[section!], [section!, key!]]);
+  const removals = ways.map((way) => ['cases', name, ...way]);
+  return removals.find((path) => isNull(subtree(root, path))) ?? null;
 }
 
 function identity({ line, column, key, what }: Problem): string {

@@ -18,6 +18,8 @@ export interface Fault {
   readonly meant?: readonly string[];
   /** A key that its section needs is not there. */
   readonly isMissing?: true;
+  /** Keys of which one would do, had a case not removed it. */
+  readonly lacking?: readonly (readonly string[])[];
 }
 
 export interface ValidCase {

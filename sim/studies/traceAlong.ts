@@ -7,7 +7,12 @@ import type { TraceReport, TraceReportCase } from './traceReport.ts';
 
 /** The range with its ends in the user's unit. */
 export function reportedAlong({ key, label, unit, from, to, log }: Along): TraceReport['along'] {
-  return { key, label, unit, from: inUnit(from, unit), to: inUnit(to, unit), log };
+  return { key, label, unit, from: asTyped(from, unit), to: asTyped(to, unit), log };
+}
+
+/** An end of the range without the rounding of its way to SI and back: 1.6, not 1.5999999999999999. */
+function asTyped(end: number, unit: string): number {
+  return Number(inUnit(end, unit).toPrecision(15));
 }
 
 /** `progress` is told the input in the user's unit. Errors: SimError where the scenario is not sound at a value inside the range. */
@@ -20,7 +25,10 @@ export function traceAlong(one: CaseAlong, along: Along, progress?: TraceOptions
     if (place >= range.to) return to;
     return log ? Math.exp(place) : place;
   };
-  const shown = (place: number) => inUnit(valueAt(place), unit);
+  const shown = (place: number) => {
+    const value = valueAt(place);
+    return value === from || value === to ? asTyped(value, unit) : inUnit(value, unit);
+  };
   const told: TraceOptions['progress'] = (step) => progress?.({ ...step, value: shown(step.value) });
   const options = { ...range, tolerance, progress: told };
   const result = traceClimates(model, (place) => one.worldAt(valueAt(place)), options);

@@ -165,7 +165,7 @@ test('nothing uncertain, a lost file of rows, numbers that are none: said, with 
   place.write('exact.yaml', quarterText.replace('0.5 to 1.5 Lsun', '1 Lsun').replace('0.1 to 0.5', '0.3'));
   const exact = await place.perilag('spread', 'exact.yaml', '-o', 'out');
   expect(exact.code).toBe(2);
-  expect(exact.stderr).toContain('no input has a spread');
+  expect(exact.stderr).toContain('exact.yaml: no input has a spread. ');
   expect(existsSync(place.path('out'))).toBe(false);
   const wrong = await place.perilag('spread', 'quarter.yaml', '--draws', '1');
   expect(wrong.code).toBe(2);

@@ -160,7 +160,14 @@ describe('what trace refuses: exit 2, and nothing is written', () => {
     ],
     [['--along', range, '--only', 'deep see'], '--only: there is no case `deep see`. Did you mean `deep sea`?\n'],
     [['--along', range, '-o', ' '], /^-o: the folder has no name/],
-    [[], /required option '--along <key=range>' not specified/],
+    [
+      [],
+      "trace: --along <key=range> is missing. Write e.g. `perilag trace planet.yaml --along 'star.luminosity=0.8 to 1.3 Lsun'`.\n",
+    ],
+    [
+      ['--along', range, '--along', 'orbit.eccentricity=0 to 0.5'],
+      '--along: 2 ranges are given, and climates are followed along one input. Keep one of them; `perilag grid` takes two.\n',
+    ],
   ])('%j', async (words, message) => {
     const empty = workplace();
     empty.write('melaina.yaml', scenario);

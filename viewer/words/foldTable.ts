@@ -1,10 +1,11 @@
-/** The table of folds: a column for each place where a branch turns back. Pure. */
+/** The table of folds: a row for each place where a climate ends. Pure. */
 import type { TraceReport } from '../../sim/studies/traceReport.ts';
-import { alongText } from './along.ts';
+import { type Along, alongText } from './along.ts';
+import type { TraceCase } from './arcs.ts';
 import { type ClimateEnd, climateEnds, foldsOf } from './climates.ts';
 import { fixed, kelvin, percent, withUnit } from './number.ts';
 
-export interface FoldColumn {
+export interface FoldRow {
   readonly caseIndex: number;
   readonly caseName: string;
   /** What ends there. */
@@ -14,43 +15,50 @@ export interface FoldColumn {
 
 export interface FoldTable {
   readonly labels: readonly string[];
-  readonly columns: readonly FoldColumn[];
+  readonly rows: readonly FoldRow[];
+  /** Folds at which no climate ends, each with its case; in the order of the cases. */
+  readonly unstable: readonly { readonly caseName: string; readonly values: readonly string[] }[];
 }
 
 export function foldTable({ cases, along }: TraceReport): FoldTable {
   const labels = [
     `${along.label} at the fold`,
-    'Mean temperature at the fold',
-    'Highest area mean of the year',
-    'Lowest area mean of the year',
-    'Ice fraction at the fold',
-    'The climate exists for',
-    'Mean temperature of the climate that is left',
+    'Mean temperature there',
+    'Lowest and highest area mean',
+    'Ice there',
+    'It exists for',
+    'Mean of the climate that is left',
   ];
-  const columns = cases.flatMap((oneCase, caseIndex) => {
-    const ends = climateEnds(oneCase, along);
-    return foldsOf(oneCase, along)
-      .toSorted((a, b) => a.value - b.value)
-      .map((point) => {
-        const end = ends.find((one) => one.point === point);
-        const { temperatureMean, temperatureMax, temperatureMin, iceFraction } = point;
-        return {
-          caseIndex,
-          caseName: oneCase.name,
-          words: end === undefined ? 'two unstable states meet' : `${end.name} climate ends`,
-          cells: [
-            alongText(point.value, along),
-            ...[temperatureMean, temperatureMax, temperatureMin].map((value) => withUnit(fixed(value, 2), 'K')),
-            percent(iceFraction),
-            ...beyond(end),
-          ],
-        };
-      });
-  });
-  return { labels, columns };
+  const rows = cases.flatMap((oneCase, caseIndex) =>
+    climateEnds(oneCase, along)
+      .toSorted((a, b) => a.point.value - b.point.value)
+      .map((end) => ({
+        caseIndex,
+        caseName: oneCase.name,
+        words: `${end.name} climate ends`,
+        cells: cellsOf(end, along),
+      })),
+  );
+  const unstable = cases
+    .map((oneCase) => ({ caseName: oneCase.name, values: unstableFolds(oneCase, along) }))
+    .filter(({ values }) => values.length > 0);
+  return { labels, rows, unstable };
 }
 
-function beyond(end: ClimateEnd | undefined): string[] {
-  if (end === undefined) return ['—', '—'];
-  return [end.liesAbove ? 'higher values' : 'lower values', end.next === null ? 'none found' : kelvin(end.next)];
+function cellsOf({ point, liesAbove, next }: ClimateEnd, along: Along): string[] {
+  const { temperatureMean, temperatureMax, temperatureMin, iceFraction } = point;
+  return [
+    alongText(point.value, along),
+    withUnit(fixed(temperatureMean, 2), 'K'),
+    `${fixed(temperatureMin, 2)} to ${withUnit(fixed(temperatureMax, 2), 'K')}`,
+    percent(iceFraction),
+    liesAbove ? 'higher values' : 'lower values',
+    next === null ? 'none found' : kelvin(next),
+  ];
+}
+
+function unstableFolds(oneCase: TraceCase, along: Along): string[] {
+  const ends = climateEnds(oneCase, along).map(({ point }) => point);
+  const others = foldsOf(oneCase, along).filter((point) => !ends.includes(point));
+  return others.toSorted((a, b) => a.value - b.value).map(({ value }) => alongText(value, along));
 }

@@ -77,7 +77,9 @@ export function desk(tree: Branch, keys: CaseKeys, broken: ReadonlySet<string>):
     wrong: (key, what, mend) => fault(key.split('.'), false, what, mend),
     missing: (section, names, what, mend) => {
       const isExcused = names.some((name) => isBroken(`${section}.${name}`));
-      return isExcused ? null : fault([section], true, what, mend);
+      if (isExcused) return null;
+      faults.push({ path: [section], atKey: true, what, mend, lacking: names.map((name) => [section, name]) });
+      return null;
     },
     attempt: (make) => {
       try {

@@ -39,7 +39,7 @@ function buildAlbedo(given: Given): Albedo | null {
     const { warm, ice, from, to } = ramp;
     given.use('planet.albedo.warm', 'planet.albedo.ice', 'planet.albedo.from', 'planet.albedo.to');
     if (from.value > to.value) {
-      const what = `from ${from.text} is above to ${to.text}`;
+      const what = `\`from\` ${from.text} is above \`to\` ${to.text}`;
       return given.wrong('planet.albedo.from', what, 'All ice at `from` and below, none at `to` and above: swap them');
     }
     if (ice.value < warm.value) {

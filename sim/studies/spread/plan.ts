@@ -81,7 +81,7 @@ export function planSpread(setup: SpreadSetup): SpreadPlan {
     ...new Set(drawn.flatMap(({ inputs }) => inputs.filter(({ column }) => column === null).map(({ key }) => key))),
   ];
   const dimensions = setup.samples === null ? keys : [rowDimension, ...keys];
-  if (drawn.every(({ inputs }) => inputs.length === 0)) throw nothingUncertain(drawn);
+  if (drawn.every(({ inputs }) => inputs.length === 0)) throw nothingUncertain(drawn, setup.file);
   const chooser = setup.samples && rowChooser(setup.samples);
   const cases = drawn.map((one) => planCase(one, dimensions, setup.samples, chooser));
   const draws = setup.sampling === 'sobol' ? sobolDraws(setup.seed) : pseudoRandomDraws(setup.seed);
@@ -98,14 +98,14 @@ export function planSpread(setup: SpreadSetup): SpreadPlan {
   };
 }
 
-function nothingUncertain(drawn: readonly CaseDrawn[]): SimError {
+function nothingUncertain(drawn: readonly CaseDrawn[], file: string): SimError {
   const idle = drawn.flatMap((one) => one.idle.map(({ key, reason }) => `${key}: ${reason}`));
   const what =
     idle.length > 0
       ? `no uncertain input changes a finding (${[...new Set(idle)].join('; ')})`
       : 'no input has a spread';
   return new SimError(
-    'scenario',
+    file,
     what,
     'Write one as `0.62 ± 0.03`, `0.1 to 0.5` or `< 0.12 (95%)`, or name posterior samples',
   );

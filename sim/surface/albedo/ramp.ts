@@ -27,7 +27,7 @@ export function rampAlbedo({ warm, ice, from, to }: RampOptions): Albedo {
   if (from > to) {
     throw new SimError(
       'planet.albedo',
-      `from (${from} K) is above to (${to} K)`,
+      `\`from\` (${from} K) is above \`to\` (${to} K)`,
       'Ice lies at `from` and below: swap them',
     );
   }

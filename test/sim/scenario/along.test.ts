@@ -194,7 +194,7 @@ describe('casesAlong', () => {
     ],
     [
       'planet.albedo.from=250 K to 280 K',
-      '--along: case `sea` is not sound at planet.albedo.from = 280 K: planet.albedo.from: from 280 K is above to 273 K. All ice at `from` and below, none at `to` and above: swap them.',
+      '--along: case `sea` is not sound at planet.albedo.from = 280 K: planet.albedo.from: `from` 280 K is above `to` 273 K. All ice at `from` and below, none at `to` and above: swap them.',
     ],
   ])('refuses `%s` in this scenario', (along, message) => {
     expect(messageOf(() => casesAlong(sound, 'x.yaml', readAlong(along)))).toBe(message);

@@ -568,7 +568,7 @@ const table: readonly Broken[] = [
     name: 'ramp turned',
     text: edited(['bondAlbedo: 0.3', 'albedo: { warm: 0.3, ice: 0.6, from: 280 K, to: 273 K }']),
     says: [
-      'p.yaml:9:40: planet.albedo.from: from 280 K is above to 273 K. All ice at `from` and below, none at `to` and above: swap them.',
+      'p.yaml:9:40: planet.albedo.from: `from` 280 K is above `to` 273 K. All ice at `from` and below, none at `to` and above: swap them.',
     ],
   },
   {
@@ -956,7 +956,7 @@ const table: readonly Broken[] = [
     name: 'case removes',
     text: `${sound}cases:\n  dry: {}\n  bald: { planet: { heatStore: null } }\n`,
     says: [
-      'p.yaml:8:1: planet: no heat store is given (case `bald`). Write heatStore, e.g. { mixedLayer: 20 m }, { heatCapacity: 4e7 J/m2/K }, or an atmosphere or ground.',
+      'p.yaml:13:21: cases.bald.planet.heatStore: no heat store is given. Write heatStore, e.g. { mixedLayer: 20 m }, { heatCapacity: 4e7 J/m2/K }, or an atmosphere or ground.',
     ],
   },
   {

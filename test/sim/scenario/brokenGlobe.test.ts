@@ -59,7 +59,7 @@ const table: readonly (readonly [name: string, text: string, ...says: string[]])
   [
     'a ramp turned round',
     globe({ '258 K, to: 273 K': '273 K, to: 258 K' }),
-    'p.yaml:5:41: planet.albedo.from: from 273 K is above to 258 K. All ice at `from` and below, none at `to` and above: swap them.',
+    'p.yaml:5:41: planet.albedo.from: `from` 273 K is above `to` 258 K. All ice at `from` and below, none at `to` and above: swap them.',
   ],
   [
     'poles brighter than white',

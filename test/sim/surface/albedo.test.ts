@@ -59,6 +59,6 @@ test('errors', () => {
     expect(() => rampAlbedo({ warm: bad, ice: 0.6, from: 250, to: 270 })).toThrow('planet.albedo.warm');
     expect(() => rampAlbedo({ warm: 0.3, ice: bad, from: 250, to: 270 })).toThrow('planet.albedo.ice');
   }
-  expect(() => rampAlbedo({ warm: 0.3, ice: 0.6, from: 280, to: 270 })).toThrow('from (280 K) is above to (270 K)');
+  expect(() => rampAlbedo({ warm: 0.3, ice: 0.6, from: 280, to: 270 })).toThrow('`from` (280 K) is above `to` (270 K)');
   expect(() => rampAlbedo({ warm: 0.3, ice: 0.6, from: 0, to: 270 })).toThrow(SimError);
 });

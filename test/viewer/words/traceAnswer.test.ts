@@ -60,10 +60,11 @@ test('traceAnswer: every case with a choice; an instellation is in S₀', () => 
   expect(lead(trace)).toMatch(/^Both cases allow more than one climate somewhere between 0\.8 and 1\.35 S₀\./);
 });
 
-test('foldTable: a column for each fold, with the end that it is', () => {
-  const { labels, columns } = foldTable(traceOf([loopCase(), plainCase()]));
-  expect(columns.map(({ words }) => words)).toEqual(['warm climate ends', 'cold climate ends']);
-  expect(columns.every(({ cells }) => cells.length === labels.length)).toBe(true);
+test('foldTable: a row for each end of a climate', () => {
+  const { labels, rows, unstable } = foldTable(traceOf([loopCase(), plainCase()]));
+  expect(rows.map(({ words }) => words)).toEqual(['warm climate ends', 'cold climate ends']);
+  expect(rows.every(({ cells }) => cells.length === labels.length)).toBe(true);
+  expect(unstable).toEqual([]);
   // s = 1/√3 of the cubic: 255 + 32/√3 = 273.475 K.
-  expect(columns[0]!.cells[1]).toBe('273.48\u00a0K');
+  expect(rows[0]!.cells[1]).toBe('273.48\u00a0K');
 });
