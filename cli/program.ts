@@ -120,7 +120,7 @@ function program(words: readonly string[], io: Io, outcome: { code: number }): C
     .option('--quiet', 'print nothing but errors')
     .action(async (folders: string[], options) => {
       const { gather } = await import('./commands/gather.ts');
-      outcome.code = await gather(folders, options, io);
+      outcome.code = await gather(folders, options, { version: packageJson.version }, io);
     });
   perilag
     .command('new')

@@ -4,11 +4,14 @@ import { SimError } from '../../sim/error.ts';
 import { readScenario } from '../../sim/scenario/read.ts';
 import { planSpread } from '../../sim/studies/spread/plan.ts';
 import { gatherTable } from '../engine/gather.ts';
-import { tablesIn } from '../engine/store.ts';
+import { settingsApart } from '../engine/manifest.ts';
+import { findStore, tablesIn, workFolder } from '../engine/store.ts';
 import type { Io } from '../io.ts';
 import { readSamples } from '../posteriorFile.ts';
 import type { ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
+
+import type { Program } from './run.ts';
 import type { SpreadContext } from './spreadContext.ts';
 import { finishSpread, type SpreadTableFiles } from './spreadFiles.ts';
 
@@ -19,10 +22,16 @@ export interface GatherOptions {
 }
 
 /** Gives the exit code. Errors: SimError that names the folders when parts are missing, stand twice, or are of different runs. */
-export async function gather(folders: readonly string[], options: GatherOptions, io: Io): Promise<number> {
+export async function gather(
+  folders: readonly string[],
+  options: GatherOptions,
+  program: Pick<Program, 'version'>,
+  io: Io,
+): Promise<number> {
   if (options.out.trim() === '') throw new SimError('-o', 'the folder has no name', 'Name one, e.g. `-o results`');
   const paths = folders.map((folder) => resolve(io.cwd, folder));
   const tables = tablesOf(paths[0]!, folders[0]!);
+  refuseMixture(paths[0]!, tables, program);
   const out = resolve(io.cwd, options.out);
   const gathered = [];
   for (const table of tables) gathered.push({ table, ...(await gatherTable(paths, table, out)) });
@@ -47,6 +56,21 @@ function tablesOf(path: string, named: string): readonly string[] {
   const tables = foundTables(path);
   if (tables.includes('draws')) return tables;
   throw new SimError(named, 'no rows of draws are kept there', 'Name the output folders of the shards');
+}
+
+/** The tables of one folder are of one run, and of this program: else what is told of the draws is not what made them. */
+function refuseMixture(path: string, tables: readonly string[], { version }: Pick<Program, 'version'>): void {
+  const stores = tables.map((table) => findStore(workFolder(path, table))!);
+  const { job } = stores[tables.indexOf('draws')]!.manifest;
+  for (const { folder, manifest } of stores) {
+    const found = settingsApart(job, manifest.job, ['in the draws', 'here']);
+    if (found.length === 0) continue;
+    const what = `these rows are of another run than the draws beside them (${found.join('; ')})`;
+    throw new SimError(folder, what, 'Remove the rows that are not wanted, or compute them again');
+  }
+  if (job.settings.version === version) return;
+  const what = `its rows are of perilag ${job.settings.version}, and this is ${version}`;
+  throw new SimError(path, what, 'Gather them with the program that computed them');
 }
 
 function foundTables(path: string): readonly string[] {

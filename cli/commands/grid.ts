@@ -4,6 +4,7 @@ import { availableParallelism } from 'node:os';
 import { basename, extname, join, resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
 import { originOf } from '../../sim/origin.ts';
+import { findingColumns } from '../../sim/studies/columnName.ts';
 import type { GridReport } from '../../sim/studies/grid/gridReport.ts';
 import { type GridPlan, type GridSetup, planGrid } from '../../sim/studies/grid/plan.ts';
 import { summariseGrid } from '../../sim/studies/grid/summariseGrid.ts';
@@ -23,6 +24,7 @@ import { pagePieces } from '../output/report.ts';
 import { scenarioYamlText } from '../output/scenarioYaml.ts';
 import { terminalOf } from '../output/terminal.ts';
 import { hanging } from '../output/text.ts';
+import { samplesFrom } from '../posteriorFile.ts';
 import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
 import type { Program } from './run.ts';
@@ -65,6 +67,7 @@ export async function grid(file: string, options: GridOptions, program: Program,
     io,
   );
   const report = await reportOf(plan, item!, computed.files!, program);
+  const scenarioYaml = scenarioYamlText(item!.scenario, samplesFrom(folder, item!, io.cwd));
   await writeFolder(folder, [
     { name: 'summary.json', pieces: [`${jsonText(gridSummary(report))}\n`] },
     { name: 'grid.csv', pieces: [gridCsvText(report)] },
@@ -73,10 +76,10 @@ export async function grid(file: string, options: GridOptions, program: Program,
       write: async (path, checkpoint) => {
         const { writeNetcdf } = await import('../output/netcdf.ts');
         const history = historyLine(new Date(), program.version, program.words);
-        await writeNetcdf(path, gridNetcdf(report, scenarioYamlText(item!.scenario), history), checkpoint);
+        await writeNetcdf(path, gridNetcdf(report, scenarioYaml, history), checkpoint);
       },
     },
-    { name: 'scenario.yaml', pieces: [scenarioYamlText(item!.scenario)] },
+    { name: 'scenario.yaml', pieces: [scenarioYaml] },
     { name: 'report.html', pieces: pagePieces({ grid: report }, io.reportTemplate) },
   ]);
   await computed.discardWork();
@@ -92,7 +95,7 @@ function setupOf({ text, file, scenario }: ScenarioFile, { along, hold, steps, o
     alongs: along,
     hold: hold ?? null,
     steps,
-    of: of === undefined ? null : of.split(',').map((name) => name.trim()),
+    of: of === undefined ? null : [...new Set(of.split(',').map((name) => name.trim()))],
   };
 }
 
@@ -113,13 +116,7 @@ function jobOf(plan: GridPlan, { sha256 }: ScenarioFile, { version }: Program): 
     kind: 'gridNodes',
     setup,
     inputs: axes.map(({ along: { key, unit, label } }) => ({ name: key, unit, label })),
-    findings: cases.flatMap(({ over, findings }) =>
-      findings.map(({ name, unit, label }) => ({
-        name: cases.length === 1 ? name : `${over.name}: ${name}`,
-        unit,
-        label,
-      })),
-    ),
+    findings: findingColumns(cases.map(({ over: { name }, findings }) => ({ name, findings }))),
     rows: count,
     settings: {
       scenario: sha256,

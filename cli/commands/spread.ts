@@ -81,9 +81,14 @@ async function whatToDraw(
   };
 }
 
-/** The scenario's own, or 1. */
+/** The scenario's own, or 1. Errors: SimError where cases have different ones: all take the same draws. */
 function seedOf({ scenario }: ScenarioFile): number {
-  return scenario.cases[0]!.inputs.find(({ key }) => key === 'solve.seed')?.value ?? 1;
+  const [seed, ...others] = new Set(
+    scenario.cases.map(({ inputs }) => inputs.find(({ key }) => key === 'solve.seed')?.value ?? 1),
+  );
+  if (others.length === 0) return seed!;
+  const what = `the cases have different ones (${[seed, ...others].join(', ')}), and all take the same draws`;
+  throw new SimError('solve.seed', what, 'Write one for all, or give --seed');
 }
 
 function outputFolder(file: string, out: string | undefined): string {

@@ -3,12 +3,12 @@ import { SimError } from '../../sim/error.ts';
 import { Interrupted } from '../exit.ts';
 import type { Io } from '../io.ts';
 import { commandLine } from '../output/history.ts';
+import { grouped, type RowProgress, showProgress } from '../output/progressBar.ts';
 import { writingFault } from '../output/writingFault.ts';
 import { type Interruption, listen } from './interruption.ts';
 import { columnsOf, fingerprintOf, type Job, type Kinds, type Range, recordOf } from './job.ts';
 import { countRows, missing, planChunks, type Shard, shardRange } from './plan.ts';
 import { inThisThread, type Pool, threads } from './pool.ts';
-import { grouped, type Progress, showProgress } from './progress.ts';
 import { findStore, openStore, type Store, workFolder } from './store.ts';
 import { finishedTable, type TableFiles, writeTable } from './table.ts';
 
@@ -132,7 +132,7 @@ async function runLanes(
   store: Store,
   gaps: readonly Range[],
   workers: number,
-  progress: Progress,
+  progress: RowProgress,
   interruption: Interruption,
 ): Promise<void> {
   const plan = planChunks(gaps, workers);

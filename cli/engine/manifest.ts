@@ -54,15 +54,23 @@ export function differences(
   second: JobRecord,
   words: readonly [string, string] = ['there', 'now'],
 ): readonly string[] {
-  const told = (name: string, a: unknown, b: unknown) =>
-    a === b ? [] : [`${name}: ${shown(a)} ${words[0]}, ${shown(b)} ${words[1]}`];
-  const names = [...new Set([...Object.keys(first.settings), ...Object.keys(second.settings)])];
-  const found = [
-    ...told('kind', first.kind, second.kind),
-    ...names.flatMap((name) => told(name, first.settings[name], second.settings[name])),
-  ];
+  const found = [...apart('kind', first.kind, second.kind, words), ...settingsApart(first, second, words)];
   if (found.length > 0 || fingerprintOf(first) === fingerprintOf(second)) return found;
-  return first.rows === second.rows ? ['other columns'] : told('rows', first.rows, second.rows);
+  return first.rows === second.rows ? ['other columns'] : apart('rows', first.rows, second.rows, words);
+}
+
+/** In which settings two jobs differ, whatever they compute from them: the tables of one run have the same. */
+export function settingsApart(
+  first: JobRecord,
+  second: JobRecord,
+  words: readonly [string, string],
+): readonly string[] {
+  const names = [...new Set([...Object.keys(first.settings), ...Object.keys(second.settings)])];
+  return names.flatMap((name) => apart(name, first.settings[name], second.settings[name], words));
+}
+
+function apart(name: string, a: unknown, b: unknown, words: readonly [string, string]): readonly string[] {
+  return a === b ? [] : [`${name}: ${shown(a)} ${words[0]}, ${shown(b)} ${words[1]}`];
 }
 
 /** Checksums are told by their beginning. */

@@ -1,9 +1,9 @@
 /** From rows in pieces to the files of a table: the Parquet file, and a list of the draws that failed. */
-import { closeSync, openSync, writeSync } from 'node:fs';
+import { closeSync, existsSync, openSync, writeSync } from 'node:fs';
 import { rm } from 'node:fs/promises';
 import { join } from 'node:path';
 import { setImmediate } from 'node:timers/promises';
-import { csvField } from '../output/csv.ts';
+import { csvField, csvHeader } from '../output/csv.ts';
 import { makeFolder } from '../output/makeFolder.ts';
 import {
   type Column,
@@ -63,7 +63,7 @@ export async function writeTable(
   });
 }
 
-/** The files of this very table, when an earlier run has finished them; else null. */
+/** The files of this very table, when an earlier run has finished them and all are there; else null. */
 export async function finishedTable(folder: string, table: string, job: JobRecord): Promise<TableFiles | null> {
   const { openParquet } = await import('../output/parquetReader.ts');
   const { path, failedPath } = tablePaths(folder, table);
@@ -72,6 +72,7 @@ export async function finishedTable(folder: string, table: string, job: JobRecor
   await file.close();
   if (file.metadata.fingerprint !== fingerprintOf(job)) return null;
   const failed = Number(file.metadata.failed);
+  if (failed > 0 && !existsSync(failedPath)) return null;
   return { path, rows: file.rows, failed, failedPath: failed === 0 ? null : failedPath };
 }
 
@@ -120,12 +121,7 @@ function copyInto({ from, columns, failures }: Group, piece: Piece): void {
 }
 
 function failedHeader(inputs: readonly Column[]): string {
-  return `${['draw', ...inputs.map(headerOf), 'message'].map(csvField).join(',')}\n`;
-}
-
-/** `star.luminosity_Lsun`; a pure number has no unit behind it. */
-function headerOf({ name, unit }: Column): string {
-  return unit === '1' ? name : `${name}_${unit.replace(/[^A-Za-z0-9.^]+/g, '_')}`;
+  return `${['draw', ...inputs.map(({ name, unit }) => csvHeader(name, unit)), 'message'].map(csvField).join(',')}\n`;
 }
 
 /** An input that could not even be drawn is empty. */

@@ -4,7 +4,7 @@ import { siUnit } from '../../sim/scenario/inputs.ts';
 import type { GridAxis, GridCase, GridFinding, GridReport } from '../../sim/studies/grid/gridReport.ts';
 import { snakeCase } from './cfAttributes.ts';
 import { cfUnit } from './cfUnit.ts';
-import { csvField, csvNumber } from './csv.ts';
+import { csvField, csvHeader, csvNumber } from './csv.ts';
 import { groupNames } from './groupNames.ts';
 import type { NetcdfFile, NetcdfGroup, NetcdfVariable } from './netcdf.ts';
 
@@ -13,8 +13,8 @@ export function gridCsvText({ axes, cases }: GridReport): string {
   const findings = [...new Map(cases.flatMap((one) => one.findings.map((finding) => [finding.name, finding.unit])))];
   const header = [
     'case',
-    ...axes.map(({ key, unit }) => headerOf(key, unit)),
-    ...findings.map(([name, unit]) => headerOf(name, unit)),
+    ...axes.map(({ key, unit }) => csvHeader(key, unit)),
+    ...findings.map(([name, unit]) => csvHeader(name, unit)),
   ];
   const lines = [header.map(csvField).join(',')];
   for (const one of cases) {
@@ -29,11 +29,6 @@ export function gridCsvText({ axes, cases }: GridReport): string {
     }
   }
   return `${lines.join('\n')}\n`;
-}
-
-/** `star.luminosity_Lsun`; a pure number has no unit behind it. */
-function headerOf(name: string, unit: string): string {
-  return unit === '1' ? name : `${name}_${unit.replace(/[^A-Za-z0-9.^]+/g, '_')}`;
 }
 
 function nodeCount(axes: readonly GridAxis[]): number {

@@ -13,7 +13,10 @@ export interface Progress {
 const silence = 10_000;
 
 /** `quiet` says nothing at all. The clock is the Io's: a beat costs one look at it. */
-export function progressOf({ stderr, isTTY, now }: Pick<Io, 'stderr' | 'isTTY' | 'now'>, quiet = false): Progress {
+export function progressOf(
+  { stderr, stderrIsTTY, now }: Pick<Io, 'stderr' | 'stderrIsTTY' | 'now'>,
+  quiet = false,
+): Progress {
   if (quiet) return { milestone: () => undefined, beat: () => undefined };
   let last = now();
   const say = (text: string) => {
@@ -22,7 +25,7 @@ export function progressOf({ stderr, isTTY, now }: Pick<Io, 'stderr' | 'isTTY' |
   };
   return {
     milestone(text) {
-      if (isTTY) say(text);
+      if (stderrIsTTY) say(text);
     },
     beat(text) {
       if (now() - last >= silence) say(text());

@@ -1,5 +1,6 @@
-import { existsSync, readFileSync } from 'node:fs';
+import { existsSync, readFileSync, rmSync } from 'node:fs';
 import { afterEach, beforeEach, expect, test } from 'vitest';
+import { readScenarioFile } from '../../cli/scenarioFile.ts';
 import { threeCasesText, type Workplace, workplace, zonalText } from './support.ts';
 
 let place: Workplace;
@@ -99,6 +100,28 @@ test('files and table: only what was asked for, gaps where there is no world', a
   for (const name of ['grid.nc', 'grid.parquet', 'failed-grid.csv', 'report.html', 'scenario.yaml'])
     expect(existsSync(place.path('out', name)), name).toBe(true);
   expect(existsSync(place.path('out', 'grid.work'))).toBe(false);
+});
+
+test('the scenario beside a grid finds its samples again; a finding that is asked for twice is there once', async () => {
+  place.write('chain.csv', 'ecc\n0.6\n');
+  place.write(
+    'sampled.yaml',
+    `${threeCasesText}posterior: { file: chain.csv, columns: { ecc: orbit.eccentricity } }\n`,
+  );
+  const twice = ['--of', 'temperatureMax, temperatureMax'];
+  await grid('sampled.yaml', '--along', 'planet.bondAlbedo=0.1 to 0.5', '--steps', '2', ...twice);
+  expect(readScenarioFile('out/scenario.yaml', place.folder).scenario.posterior?.file).toBe('../chain.csv');
+  expect(Object.keys(rowsOf('out')[0]!)).toEqual(['case', 'planet.bondAlbedo', 'temperatureMax_K']);
+});
+
+test('a finished grid whose list of failed nodes is lost is computed again', async () => {
+  place.write('graze.yaml', threeCasesText.replace('mass: 0.85 Msun', 'mass: 0.85 Msun, radius: 0.9 Rsun'));
+  const words = ['--along', 'orbit.eccentricity=0 to 0.995', '--steps', '3', '--of', 'temperatureMax'];
+  await grid('graze.yaml', ...words);
+  const list = read('out', 'failed-grid.csv');
+  rmSync(place.path('out', 'failed-grid.csv'));
+  await grid('graze.yaml', ...words, '--resume');
+  expect(read('out', 'failed-grid.csv')).toBe(list);
 });
 
 test('latitudes too', async () => {

@@ -1,7 +1,8 @@
-import { existsSync, readFileSync } from 'node:fs';
+import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
+import { fingerprintOf } from '../../cli/engine/job.ts';
 import { readColumn } from '../../cli/output/parquetReader.ts';
-import { type Workplace, workplace } from './support.ts';
+import { type Workplace, workplace, zonalText } from './support.ts';
 
 /** A fast world: its temperature is the steady one, T ∝ (L (1 − A))^¼, up to its small store. */
 const quarterText = `title: Corvane b, a rock that answers at once
@@ -140,8 +141,80 @@ test('a seed gives its draws again; another gives others', async () => {
   await spread('quarter.yaml', 'b', ...draws, '--seed', '8');
   await spread('quarter.yaml', 'c', ...draws, '--seed', '7', '--random');
   const column = async (folder: string) => readColumn(place.path(folder, 'draws.parquet'), 'star.luminosity');
+  await spread('quarter.yaml', 'again', ...draws, '--seed', '7');
+  expect(await column('again')).toEqual(await column('a'));
   expect(await column('a')).not.toEqual(await column('b'));
   expect(await column('a')).not.toEqual(await column('c'));
+});
+
+test('cases have one seed among them, or are told so', async () => {
+  place.write('seeds.yaml', twoCasesText.replace('sea: {}', 'sea: { solve: { seed: 2 } }'));
+  const apart = await place.perilag('spread', 'seeds.yaml', '-o', 'out');
+  expect(apart.code).toBe(2);
+  expect(apart.stderr).toContain('solve.seed: the cases have different ones (2, 1)');
+  await spread('seeds.yaml', 'out', '--draws', '4', '--no-indices', '--seed', '3');
+  await spread('seeds.yaml', 'sea', '--draws', '4', '--no-indices', '--only', 'sea');
+  expect([summary('out').spread.seed, summary('sea').spread.seed]).toEqual([3, 2]);
+});
+
+describe('gather', () => {
+  const part = (index: number, ...words: string[]) =>
+    spread('two.yaml', `part${index}`, '--draws', '3', '--shard', `${index}/5`, ...words);
+
+  test('more shards than draws, without indices', async () => {
+    for (let index = 1; index <= 5; index++) await part(index, '--no-indices');
+    await spread('two.yaml', 'one', '--draws', '3', '--no-indices');
+    const parts = [1, 2, 3, 4, 5].map((index) => `part${index}`);
+    const gathered = await place.perilag('gather', ...parts, '-o', 'whole', '--quiet');
+    expect(gathered).toEqual({ code: 0, stdout: '', stderr: '' });
+    for (const file of ['draws.parquet', 'bands.parquet', 'summary.json'])
+      expect(bytes('whole', file).equals(bytes('one', file)), file).toBe(true);
+    expect(existsSync(place.path('whole', 'indices.parquet'))).toBe(false);
+  });
+
+  test('rows of an earlier run beside the draws, and those of another program, are refused', async () => {
+    const shard = ['two.yaml', 'part', '--draws', '4', '--shard', '1/1'] as const;
+    await spread(...shard, '--seed', '1');
+    for (const table of ['draws', 'bands']) rmSync(place.path('part', `${table}.work`), { recursive: true });
+    await spread(...shard, '--seed', '2', '--no-indices');
+    const mixed = await place.perilag('gather', 'part', '-o', 'whole');
+    expect(mixed.code).toBe(2);
+    expect(mixed.stderr).toContain('another run than the draws beside them (seed: 2 in the draws, 1 here)');
+    expect(existsSync(place.path('whole'))).toBe(false);
+    rmSync(place.path('part', 'indices.work'), { recursive: true });
+    const path = place.path('part', 'draws.work', 'manifest.json');
+    const manifest = JSON.parse(readFileSync(path, 'utf8'));
+    manifest.job.settings.version = '0.0.0';
+    manifest.fingerprint = fingerprintOf(manifest.job);
+    writeFileSync(path, JSON.stringify(manifest));
+    rmSync(place.path('part', 'bands.work'), { recursive: true });
+    const old = await place.perilag('gather', 'part', '-o', 'whole');
+    expect(old.code).toBe(2);
+    expect(old.stderr).toContain('its rows are of perilag 0.0.0, and this is ');
+  });
+});
+
+test('names that would make one column of two findings are told', async () => {
+  const cases = 'cases: { A: { windows: { "x: period": 250 K to 300 K } }, "A: fractionInWindow.x": {} }';
+  place.write('colon.yaml', `${quarterText}${cases}\n`);
+  for (const words of [['spread'], ['grid', '--along', 'planet.bondAlbedo=0.1 to 0.5']]) {
+    const { code, stderr } = await place.perilag(words[0]!, 'colon.yaml', '-o', 'out', ...words.slice(1));
+    expect(stderr).toContain('two findings would both stand in column `A: fractionInWindow.x: period`');
+    expect(code).toBe(2);
+  }
+});
+
+test('samples of an angle around the centre have their median there, whichever way they were written', async () => {
+  place.write('chain.csv', 'ls\n358\n359\n0\n1\n2\n');
+  place.write(
+    'zonal.yaml',
+    `${zonalText.replace('bands: 36', 'bands: 18').replace('120 deg', '0 deg')}posterior: { file: chain.csv, columns: { ls: { key: planet.solarLongitudeOfPeriapsis, unit: deg } } }\n`,
+  );
+  await spread('zonal.yaml', 'out', '--draws', '16');
+  const { mean, percentiles } = summary('out').spread.cases[0].inputs['planet.solarLongitudeOfPeriapsis'];
+  expect(Math.abs(mean)).toBeLessThan(0.5); // 16 draws take one of five samples once more than the others
+  expect(percentiles['2.5']).toBeCloseTo(-2, 9);
+  expect(percentiles['97.5']).toBeCloseTo(2, 9);
 });
 
 test('draws that are no planets are listed with their inputs, and many of them end with 3', async () => {

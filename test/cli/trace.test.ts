@@ -38,6 +38,7 @@ async function toldIn(columns: number, env: Record<string, string>, isTTY = fals
     stderr: { write: (text: string) => (printed.stderr += text) },
     isTTY,
     ...undisturbed,
+    stderrIsTTY: isTTY,
     columns,
     env,
     cwd: place.folder,

@@ -43,6 +43,7 @@ function summariseCase(
   columns: readonly Float64Array[],
   failures: GridRows['failures'],
 ): GridCase {
+  const names = cases.map((one) => one.over.name);
   return {
     name: over.name,
     model,
@@ -56,7 +57,7 @@ function summariseCase(
       return value === null || value < from || value > to ? null : inUnit(value, unit);
     }),
     failed: failures.flatMap(({ node, message }) =>
-      messageOf(over.name, message, cases.length).map((text) => ({ node, message: text })),
+      messagesOf(message, names, over.name).map((text) => ({ node, message: text })),
     ),
     warnings: over.warnings,
     notes: over.notes,
@@ -65,9 +66,17 @@ function summariseCase(
   };
 }
 
-/** Of one case, without its name. */
-function messageOf(name: string, message: string, count: number): string[] {
-  if (count === 1) return [message];
-  const own = message.split('; ').filter((part) => part.startsWith(`${name}: `));
-  return own.map((part) => part.slice(name.length + 2));
+/**
+ * What a message says of one case, without its name. A part begins with the name of a case; a semicolon within one ends nothing, and of
+ * two names that fit the longer is meant.
+ */
+function messagesOf(message: string, names: readonly string[], wanted: string): string[] {
+  if (names.length === 1) return [message];
+  const parts: { name: string; text: string }[] = [];
+  for (const piece of message.split('; ')) {
+    const [name] = names.filter((one) => piece.startsWith(`${one}: `)).sort((a, b) => b.length - a.length);
+    if (name !== undefined) parts.push({ name, text: piece.slice(name.length + 2) });
+    else if (parts.length > 0) parts.at(-1)!.text += `; ${piece}`;
+  }
+  return parts.filter(({ name }) => name === wanted).map(({ text }) => text);
 }

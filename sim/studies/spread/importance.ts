@@ -1,5 +1,6 @@
 /** Which input matters to a finding: by Sobol' indices where inputs are drawn apart, by ranks where posterior samples keep them together. */
 import type { Resamples } from './bootstrap.ts';
+import { designValues } from './indexDesign.ts';
 import { type RankOrder, rankMeasure } from './rankMeasure.ts';
 import { sobolIndices } from './sobolIndices.ts';
 import type { Importance } from './spreadReport.ts';
@@ -20,11 +21,8 @@ export function noImportance(reason: string): Importance {
 
 /** One index for each dimension of `own`. */
 export function importanceByDesign({ draws, further, dimensions, own }: DesignColumns, again: Resamples): Importance {
-  const runs = dimensions + 1;
-  const rows = further.length / runs;
-  const block = (which: number) => Float64Array.from({ length: rows }, (_, row) => further[row * runs + which]);
-  const values = { a: draws.subarray(0, rows), b: block(0), ab: own.map((dimension) => block(dimension + 1)) };
-  const { first, total, reason } = sobolIndices(values, again);
+  const { a, b, ab } = designValues(draws, further, dimensions);
+  const { first, total, reason } = sobolIndices({ a, b, ab: own.map((dimension) => ab[dimension]) }, again);
   return { first, total, ranks: null, ...(reason === undefined ? {} : { reason }) };
 }
 

@@ -10,6 +10,7 @@ import { models } from '../../models/index.ts';
 import type { Batch } from '../../models/model.ts';
 import { inUnit, parseUnit, type Support, uncertainNumber } from '../../quantity/index.ts';
 import { type CaseDrawn, casesDrawn, type UncertainInput } from '../../scenario/drawn.ts';
+import { columnName, findingColumns } from '../columnName.ts';
 import { type RowChooser, rowsByWeight, rowsEvenly } from './posteriorRow.ts';
 import { pseudoRandomDraws } from './pseudoRandom.ts';
 import { sobolDraws } from './sobol.ts';
@@ -40,7 +41,7 @@ export interface PlannedInput extends UncertainInput {
   /** SI value at a number in (0, 1). */
   at(share: number): number;
   readonly truncatedShare: number;
-  /** SI, as tables show it: in the unit in which it was typed. */
+  /** From SI to what tables show: in the unit in which it was typed, an angle of the samples near the centre. */
   shown(value: number): number;
 }
 
@@ -92,9 +93,7 @@ export function planSpread(setup: SpreadSetup): SpreadPlan {
     rowOf: chooser && ((draw) => chooser(draws.at(draw, 0))),
     dimensions,
     inputColumns: inputColumns(cases),
-    findingColumns: cases.flatMap(({ drawn: { name }, findings }) =>
-      findings.map((finding) => ({ ...finding, name: columnName(cases, name, finding.name) })),
-    ),
+    findingColumns: findingColumns(cases.map(({ drawn: { name }, findings }) => ({ name, findings }))),
   };
 }
 
@@ -138,7 +137,8 @@ function planInput(
   if (input.column !== null) {
     const column = samples?.values.get(input.key);
     if (!column || !chooser) throw new Error(`samples of ${input.key} are missing`);
-    return { ...input, dimension: 0, at: (share) => column[chooser(share)], truncatedShare: 0, shown };
+    const near = (value: number) => shown(nearCentre(value, input));
+    return { ...input, dimension: 0, at: (share) => column[chooser(share)], truncatedShare: 0, shown: near };
   }
   const { quantile, truncatedShare } = uncertainNumber(
     input.key,
@@ -148,16 +148,16 @@ function planInput(
   return { ...input, dimension: dimensions.indexOf(input.key), at: quantile, truncatedShare, shown };
 }
 
+/** Samples of an angle that comes round, within half a turn of the centre: 359° and 1° are neighbours, and their median is not 180°. */
+function nearCentre(value: number, { period, centre }: UncertainInput): number {
+  return period === null ? value : value - period * Math.floor((value - centre) / period + 0.5);
+}
+
 /** Angles come round: those with a whole turn wrap, those between two directions are mirrored at 0° and 180°. */
 function supportOf({ bounds, period, centre }: UncertainInput): Support {
   if (period !== null) return { kind: 'wrapped', from: centre - period / 2, period };
   const { low, high } = bounds ?? { low: Number.NEGATIVE_INFINITY, high: Number.POSITIVE_INFINITY };
   return { kind: low === 0 && high === Math.PI ? 'folded' : 'bounded', low, high };
-}
-
-/** `case: name`; with a single case the name alone. */
-function columnName(cases: readonly unknown[], caseName: string, name: string): string {
-  return cases.length === 1 ? name : `${caseName}: ${name}`;
 }
 
 function inputColumns(cases: readonly PlannedCase[]): SpreadPlan['inputColumns'] {
@@ -166,7 +166,7 @@ function inputColumns(cases: readonly PlannedCase[]): SpreadPlan['inputColumns']
   for (const { input, case: c, i } of all) {
     const alike = all.filter((other) => other.input.key === input.key);
     const isShared = alike.every((other) => sameDraws(other.input, input));
-    const name = isShared ? input.key : columnName(cases, cases[c].drawn.name, input.key);
+    const name = isShared ? input.key : columnName(cases.length, cases[c].drawn.name, input.key);
     const there = columns.find((column) => column.name === name);
     if (there) there.of.push({ case: c, input: i });
     else columns.push({ name, unit: input.unit, label: input.label, of: [{ case: c, input: i }] });

@@ -40,6 +40,12 @@ const leastRows = 64;
 const negligible = 1e-10;
 
 /**
+ * Share of the variance that every resample must have. One without the few odd rows of a finding that is else constant has none: an
+ * index would be the accident of these rows, and its interval 0/0.
+ */
+const leastOfVariance = 1e-9;
+
+/**
  * Shape:  values of one finding; again: resamples of as many rows, shared by all findings.
  * Units:  any in, 1 out.
  */
@@ -50,15 +56,14 @@ export function sobolIndices(values: DesignValues, again: Resamples): SobolIndic
   if (rows < leastRows) return noIndices(leftOut, `fewer than ${leastRows} rows of runs have this finding throughout`);
   const columns = estimatorColumns(values, whole, rows);
   if (columns === null) return noIndices(leftOut, 'the finding is the same in every run');
-  const once = estimates(
-    columns.map((column) => column.reduce((sum, x) => sum + x, 0)),
-    0,
-    values.ab.length,
-  );
+  const totals = columns.map((column) => column.reduce((sum, x) => sum + x, 0));
+  const once = estimates(totals, 0, values.ab.length);
   const sums = resampledSums(again, columns);
-  const replicates = Array.from({ length: again.replicates }, (_, replicate) =>
-    estimates(sums, replicate * columns.length, values.ab.length),
-  );
+  const starts = Array.from({ length: again.replicates }, (_, replicate) => replicate * columns.length);
+  const least = leastOfVariance * varianceOf(totals, 0);
+  if (starts.some((from) => !(varianceOf(sums, from) > least)))
+    return noIndices(leftOut, 'the finding is the same in nearly every run');
+  const replicates = starts.map((from) => estimates(sums, from, values.ab.length));
   const withInterval = (kind: 'first' | 'total') =>
     once[kind].map((value, input) =>
       interval(
@@ -95,10 +100,16 @@ function estimatorColumns({ a, b, ab }: DesignValues, whole: Float64Array, rows:
   return [whole, both, squares, ...first, ...total];
 }
 
+/** V from the columns' sums, which begin at `from`. */
+function varianceOf(sums: ArrayLike<number>, from: number): number {
+  const runs = 2 * sums[from];
+  return sums[from + 2] / runs - (sums[from + 1] / runs) ** 2;
+}
+
 /** The indices of all inputs from the columns' sums, which begin at `from`. */
 function estimates(sums: ArrayLike<number>, from: number, inputs: number): { first: number[]; total: number[] } {
   const rows = sums[from];
-  const variance = sums[from + 2] / (2 * rows) - (sums[from + 1] / (2 * rows)) ** 2;
+  const variance = varianceOf(sums, from);
   const shares = (begin: number) =>
     Array.from({ length: inputs }, (_, input) => sums[from + begin + input] / (rows * variance));
   return { first: shares(3), total: shares(3 + inputs) };

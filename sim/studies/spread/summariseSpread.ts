@@ -1,5 +1,7 @@
 /** From the tables of a spread to what is told of it: a column at a time, so that ten million draws need the room of a few columns. */
+import { SimError } from '../../error.ts';
 import type { Origin } from '../../origin.ts';
+import { columnName } from '../columnName.ts';
 import { isTimeInOrbit } from '../isTimeInOrbit.ts';
 import { type BandPlace, bandSampler } from './bandSampler.ts';
 import { resamples } from './bootstrap.ts';
@@ -129,12 +131,19 @@ function straightLine(values: Float64Array, { scratch }: FindingContext): Line {
 }
 
 /** Turns are unwrapped around their mean, and told in seconds of an orbit of the median period. */
-function circularLine(values: Float64Array, { periods, scratch }: FindingContext): Line {
+function circularLine(times: Float64Array, { periods, scratch }: FindingContext): Line {
   const period = summarise(periods, scratch).percentiles?.['50'] ?? 1;
-  const turns = summariseTurns(overPeriod(values, periods), scratch);
-  const bring = (times: Float64Array, own: Float64Array) =>
-    overPeriod(times, own).map((turn) => (Number.isNaN(turn) ? turn : period * unwrapTurn(turn, turns.mean ?? 0.5)));
-  return { summary: inSeconds(turns, period), values: bring(values, periods), bring };
+  const values = overPeriod(times, periods);
+  const turns = summariseTurns(values, scratch);
+  const unwrap = (column: Float64Array) => {
+    for (let i = 0; i < column.length; i++) column[i] = period * unwrapTurn(column[i], turns.mean ?? 0.5); // NaN stays
+    return column;
+  };
+  return {
+    summary: inSeconds(turns, period),
+    values: unwrap(values), // in place: ten million draws take 80 MB a column
+    bring: (others, own) => unwrap(overPeriod(others, own)),
+  };
 }
 
 /** From a finding to which inputs matter to it. */
@@ -178,22 +187,36 @@ function inSeconds(turns: Summary, period: number): Summary {
   return { ...turns, mean: mean * period, percentiles: scaled as typeof percentiles };
 }
 
-/** Findings with every input at its centre; null where that is no sound planet. */
+/** Findings with every input at its centre; null where they are not known to the tolerance. */
 function atCentre({ drawn, batch }: PlannedCase): Float64Array | null {
   const row = new Float64Array(batch.columns.length);
-  return batch.into(drawn.worldAt(drawn.inputs.map(({ centre }) => centre)), row) ? row : null;
+  return orNull(() => batch.into(drawn.worldAt(drawn.inputs.map(({ centre }) => centre)), row)) ? row : null;
 }
 
+/** Null where the centre is no planet that can be computed: the draws are there all the same. */
+function orNull<T>(work: () => T): T | null {
+  try {
+    return work();
+  } catch (error) {
+    if (error instanceof SimError) return null;
+    throw error;
+  }
+}
+
+/** None where no draw has a curve, or the centre has none to stand beside them. */
 async function bandsOf(plan: SpreadPlan, index: number, read: ReadColumn): Promise<SpreadBand[]> {
   const { drawn } = plan.cases[index];
   const centres = drawn.inputs.map(({ centre }) => centre);
   const sampler = bandSampler(drawn, centres);
   if (sampler.bands.length === 0) return [];
-  const middle = sampler.at(centres);
+  const middle = orNull(() => sampler.at(centres));
+  if (middle === null) return [];
   const bands: SpreadBand[] = [];
   let offset = 0;
   for (const place of sampler.bands) {
-    bands.push(await bandOf(plan, index, place, read, middle.subarray(offset, offset + place.positions.length)));
+    const band = await bandOf(plan, index, place, read, middle.subarray(offset, offset + place.positions.length));
+    if (band === null) return [];
+    bands.push(band);
     offset += place.positions.length;
   }
   return bands;
@@ -205,24 +228,20 @@ async function bandOf(
   place: BandPlace,
   read: ReadColumn,
   atCentre: Float64Array,
-): Promise<SpreadBand> {
+): Promise<SpreadBand | null> {
   const { name, label, along, positions } = place;
-  const levels = percentileLevels.map(() => new Float64Array(positions.length));
+  const shares = percentileLevels.map((level) => Number(level) / 100);
+  const levels = shares.map(() => new Float64Array(positions.length));
   for (let i = 0; i < positions.length; i++) {
     const values = (await read(bandColumnName(plan, index, `${name}.${i}`))).filter((value) => !Number.isNaN(value));
-    const quantiles =
-      values.length === 0
-        ? levels.map(() => atCentre[i])
-        : quantilesInto(
-            values,
-            percentileLevels.map((level) => Number(level) / 100),
-          );
+    if (values.length === 0) return null;
+    const quantiles = quantilesInto(values, shares);
     for (const [k, value] of quantiles.entries()) levels[k][i] = value;
   }
   return { label, along, positions, unit: 'K', levels, atCentre: atCentre.slice() };
 }
 
-/** `case: name`; with a single case the name alone. */
+/** Name of the column of a place on a case's curve: `orbit.17`. */
 export function bandColumnName({ cases }: SpreadPlan, index: number, name: string): string {
-  return cases.length === 1 ? name : `${cases[index].drawn.name}: ${name}`;
+  return columnName(cases.length, cases[index].drawn.name, name);
 }

@@ -2,11 +2,11 @@
 import { expect, test } from 'vitest';
 import { progressOf } from '../../../cli/output/progress.ts';
 
-function told(isTTY: boolean, quiet = false) {
+function told(stderrIsTTY: boolean, quiet = false) {
   const lines: string[] = [];
   const clock = { ms: 5_000_000 };
   const stderr = { write: (text: string) => lines.push(text) };
-  return { lines, clock, progress: progressOf({ stderr, isTTY, now: () => clock.ms }, quiet) };
+  return { lines, clock, progress: progressOf({ stderr, stderrIsTTY, now: () => clock.ms }, quiet) };
 }
 
 test.each([true, false])('a beat is said when nothing was for ten seconds; a terminal: %s', (isTTY) => {

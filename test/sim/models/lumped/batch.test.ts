@@ -12,8 +12,7 @@ import { linearEmission } from '../../../../sim/surface/emission/linear.ts';
 import type { SolveOptions, Window, World } from '../../../../sim/world.ts';
 import { periodic, world } from './worlds.ts';
 
-const model = lumpedModel();
-const batchOf = model.batch!;
+const batchOf = lumpedModel().batch!;
 const windows: Window[] = [
   { name: 'mild', of: 'temperature', from: 250, to: 290 },
   { name: 'temperate', of: 'instellation', from: 700, to: 1600 },
@@ -48,9 +47,9 @@ const rampWorld = fc
   .tuple(fc.double({ min: 0, max: 0.6, noNaN: true }), fc.double({ min: 6, max: 9, noNaN: true }), ramp)
   .map(([e, log, a]) => world({ e, heatCapacity: 10 ** log, axisAu: 0.92, albedo: a }));
 
-/** What `solve` says, NaN where undefined. */
+/** What `solve` of a model that has seen nothing else says, NaN where undefined. */
 function single(of: World, options: SolveOptions) {
-  const [warm] = model.solve(of, options, windows).states;
+  const [warm] = lumpedModel().solve(of, options, windows).states;
   for (const { value } of warm.findings) expect(value === null || Number.isFinite(value)).toBe(true);
   return { row: warm.findings.map(({ value }) => value ?? Number.NaN), warm };
 }

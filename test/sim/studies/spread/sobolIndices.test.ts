@@ -157,6 +157,23 @@ describe('what is left out, and what has no indices', () => {
     expectNone(sobolIndices(valuesOf({ ...known, of: () => 0 }, draws, rows), again), 'the same in every run');
   });
 
+  test('a finding that differs in one run of many has no indices, and no interval of 0/0', () => {
+    const rows = 256;
+    const column = () => new Float64Array(rows);
+    const values = { a: column(), b: column(), ab: [column(), column()] };
+    values.a[3] = 1;
+    values.ab[0][3] = 1;
+    const { first, total, reason } = sobolIndices(values, resamples(rows, 1));
+    expect([first, total]).toEqual([null, null]);
+    expect(reason).toBe('the finding is the same in nearly every run');
+    // a few dozen are enough
+    for (let row = 0; row < rows; row += 8) values.a[row] = values.ab[0][row] = 1;
+    const some = sobolIndices(values, resamples(rows, 1));
+    expect(some.total![1].value).toBeGreaterThan(0.9);
+    for (const { percentiles } of [...some.first!, ...some.total!])
+      for (const value of Object.values(percentiles)) expect(Number.isFinite(value)).toBe(true);
+  });
+
   test('a finding that hardly ever exists has no indices', () => {
     const rare = { ...known, of: (u: readonly number[]) => (u[0] < 0.1 ? u[1] : Number.NaN) };
     expectNone(sobolIndices(valuesOf(rare, draws, rows), again), 'fewer than 64 rows');

@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { duration, grouped, showProgress } from '../../../cli/engine/progress.ts';
+import { duration, grouped, showProgress } from '../../../cli/output/progressBar.ts';
 
 function watched(stderrIsTTY: boolean, options: Partial<Parameters<typeof showProgress>[0]> = {}, stderrColumns = 100) {
   const told = { text: '' };

@@ -1,15 +1,16 @@
-/** How far a run has come, how fast, and how long it will take: a bar on a terminal, a line every ten seconds elsewhere. */
+/** How far a table of rows has come, how fast, and how long it will take: a bar on a terminal, a line every ten seconds elsewhere. */
 import type { Io } from '../io.ts';
-import { printable } from '../output/text.ts';
+import { progressOf } from './progress.ts';
+import { printable } from './text.ts';
 
-export interface Progress {
+export interface RowProgress {
   /** So many more rows are there. */
   landed(rows: number): void;
   /** Takes the bar away: something else is printed now, or all is done. */
   clear(): void;
 }
 
-export interface ProgressOptions {
+export interface RowProgressOptions {
   readonly label: string;
   readonly total: number;
   /** Rows that an earlier run computed. */
@@ -17,39 +18,44 @@ export interface ProgressOptions {
   readonly quiet: boolean;
 }
 
+type BarIo = Pick<Io, 'stderr' | 'stderrIsTTY' | 'stderrColumns' | 'now'>;
+
 const barWidth = 24;
-const secondsPerLine = 10;
 const secondsPerDraw = 0.1;
 /** A run that ends sooner shows no bar. */
 const patience = 0.5;
 const eraseLine = '\r\u001b[2K';
 
-export function showProgress(
-  { label, total, already, quiet }: ProgressOptions,
-  io: Pick<Io, 'stderr' | 'stderrIsTTY' | 'stderrColumns' | 'now'>,
-): Progress {
+export function showProgress({ label, total, already, quiet }: RowProgressOptions, io: BarIo): RowProgress {
   const start = io.now();
-  const wait = io.stderrIsTTY ? secondsPerDraw : secondsPerLine;
+  const seconds = () => (io.now() - start) / 1000;
   let rows = already;
-  let next = io.stderrIsTTY ? patience : secondsPerLine;
-  let drawn = false;
-  const write = (seconds: number) => {
-    const words = progressWords(rows, total, (rows - already) / seconds);
-    if (!io.stderrIsTTY) return io.stderr.write(`${printable(label)}: ${words}\n`);
-    const line = `${printable(label)} ${bar(rows / total)} ${words}`;
-    drawn = true;
-    return io.stderr.write(`${eraseLine}${line.slice(0, io.stderrColumns - 1)}`);
-  };
+  const words = () => progressWords(rows, total, (rows - already) / seconds());
+  const shown = quiet || !io.stderrIsTTY ? null : lineOnTerminal(io, seconds);
+  const lines = progressOf(io, quiet || shown !== null);
   return {
     landed: (more) => {
       rows += more;
-      const seconds = (io.now() - start) / 1000;
-      if (quiet || seconds < next) return;
-      next = seconds + wait;
-      write(seconds);
+      shown?.draw(() => `${printable(label)} ${bar(rows / total)} ${words()}`);
+      lines.beat(() => `${label}: ${words()}`);
+    },
+    clear: () => shown?.clear(),
+  };
+}
+
+/** A line that is drawn over itself, not too often. */
+function lineOnTerminal({ stderr, stderrColumns }: BarIo, seconds: () => number) {
+  let next = patience;
+  let drawn = false;
+  return {
+    draw: (text: () => string) => {
+      if (seconds() < next) return;
+      next = seconds() + secondsPerDraw;
+      drawn = true;
+      stderr.write(`${eraseLine}${text().slice(0, stderrColumns - 1)}`);
     },
     clear: () => {
-      if (drawn) io.stderr.write(eraseLine);
+      if (drawn) stderr.write(eraseLine);
       drawn = false;
     },
   };

@@ -1,0 +1,71 @@
+import { expect, test } from 'vitest';
+import { SimError } from '../../../../sim/error.ts';
+import { originOf } from '../../../../sim/origin.ts';
+import { readScenario } from '../../../../sim/scenario/read.ts';
+import { designPlace, furtherRuns } from '../../../../sim/studies/spread/indexDesign.ts';
+import { planSpread, type SpreadPlan } from '../../../../sim/studies/spread/plan.ts';
+import { type SpreadTables, summariseSpread } from '../../../../sim/studies/spread/summariseSpread.ts';
+
+const text = `star: { luminosity: 0.52 Lsun, mass: 0.85 Msun }
+orbit: { semiMajorAxis: 0.48 au, eccentricity: 0.3 to 0.6 }
+planet: { bondAlbedo: 0.1 to 0.5, heatStore: { mixedLayer: 20 m } }
+`;
+const draws = 512;
+const plan = planSpread({ text, file: 'one.yaml', only: null, draws, seed: 1, sampling: 'sobol', samples: null });
+const origin = originOf(readScenario(text, 'one.yaml'), { sha256: '', version: '1' });
+
+/** Every column is 1, but for those that are told. */
+function tables(told: Partial<SpreadTables>): SpreadTables {
+  const ones = async () => new Float64Array(draws).fill(1);
+  return { draws: ones, bands: null, indices: null, failed: 0, bandDraws: draws, indexRows: draws, ...told };
+}
+
+test('a centre that is not known, and curves that no draw has: the draws are told all the same', async () => {
+  const one = plan.cases[0]!;
+  const fault = () => {
+    throw new SimError('solve.tolerance', 'the state is not known to it', 'Raise it');
+  };
+  const lost: SpreadPlan = {
+    ...plan,
+    cases: [{ ...one, drawn: { ...one.drawn, builtAt: fault }, batch: { ...one.batch, into: fault } }],
+  };
+  const ones = async () => new Float64Array(draws).fill(1);
+  const [told] = (await summariseSpread(lost, origin, tables({ bands: ones }))).cases;
+  expect(told!.findings.every(({ atCentre, summary }) => atCentre === null && summary.defined === 1)).toBe(true);
+  expect(told!.findings.find(({ name }) => name === 'temperatureMean')!.summary.mean).toBe(1);
+  expect(told!.bands).toEqual([]);
+  const none = async () => new Float64Array(draws).fill(Number.NaN);
+  expect((await summariseSpread(plan, origin, tables({ bands: none }))).cases[0]!.bands).toEqual([]);
+  expect((await summariseSpread(plan, origin, tables({ bands: ones }))).cases[0]!.bands).toHaveLength(1);
+});
+
+test('times on both sides of periapsis lie on one line, those of the further runs too', async () => {
+  const period = 400;
+  // 10 s before periapsis to 10 s after, by the first input alone
+  const timeAt = (share: number) => (period + 20 * (share - 0.5)) % period;
+  const column = (rows: number, timeOf: (row: number) => number) => async (name: string) =>
+    Float64Array.from({ length: rows }, (_, row) => (name === 'timeOfMax' ? timeOf(row) : period));
+  const further = furtherRuns(draws, 2);
+  const report = await summariseSpread(
+    plan,
+    origin,
+    tables({
+      draws: column(draws, (row) => timeAt(plan.draws.at(row, 0))),
+      indices: column(further, (run) => {
+        const { row, changed } = designPlace(run, 2);
+        return timeAt(plan.draws.at(row, changed === 'all' || changed === 0 ? 2 : 0));
+      }),
+    }),
+  );
+  const { summary, circular, histogram, importance } = report.cases[0]!.findings.find(
+    ({ name }) => name === 'timeOfMax',
+  )!;
+  expect(circular).toBe(true);
+  expect(Math.min(summary.mean!, period - summary.mean!)).toBeLessThan(0.1); // the mean itself lies in [0, period)
+  const { '2.5': low, '97.5': high } = summary.percentiles!;
+  expect(high - low).toBeCloseTo(19, 1); // 95 % of 20 s; 512 points in equal intervals
+  expect(histogram!.to - histogram!.from).toBeLessThan(20);
+  const [first, second] = importance.total!;
+  expect(first!.value).toBeCloseTo(1, 1);
+  expect(Math.abs(second!.value)).toBeLessThan(1e-9);
+});
