@@ -130,7 +130,11 @@ function profileLayout(
   const total = style.narrow ? plotHeight.narrow : plotHeight.wide;
   const margin = style.narrow ? latitudeMargins.narrow : latitudeMargins.wide;
   const height = (panels.temperature[1] - panels.temperature[0]) * total;
-  const windows = temperatureBands(distinctWindows(columns, 'temperature'), { lines, view, height }, style);
+  const windows = temperatureBands(
+    distinctWindows(columns, 'temperature'),
+    { lines, topNames: [], view, height },
+    style,
+  );
   const axis = { ...axisStyle(style), gridcolor: style.theme.hairline };
   return {
     ...plainLayout(style),

@@ -8,6 +8,9 @@ export interface Box {
   readonly high: number;
 }
 
+/** Where something runs that a name must keep clear of. */
+export type Course = Pick<ChartLine, 'x' | 'y'>;
+
 export interface Corner {
   readonly side: 'left' | 'right';
   readonly edge: 'top' | 'bottom';
@@ -21,7 +24,7 @@ const corners: readonly Corner[] = [
 ];
 
 /** The corner of `band` in which a label of this width and height, in data units, is crossed the least. */
-export function freeCorner(lines: readonly ChartLine[], band: Box, width: number, height: number): Corner {
+export function freeCorner(lines: readonly Course[], band: Box, width: number, height: number): Corner {
   const crowds = corners.map((corner) => crowd(lines, cornerBox(corner, band, width, height)));
   return corners[crowds.indexOf(Math.min(...crowds))]!;
 }
@@ -36,7 +39,7 @@ function cornerBox({ side, edge }: Corner, band: Box, width: number, height: num
 }
 
 /** How much of the box's width the lines in it cover, all together. */
-function crowd(lines: readonly ChartLine[], box: Box): number {
+function crowd(lines: readonly Course[], box: Box): number {
   return lines.reduce((sum, { x, y }) => {
     const covered = x.slice(1).map((end, at) => {
       const isBeside = Math.max(y[at]!, y[at + 1]!) < box.low || Math.min(y[at]!, y[at + 1]!) > box.high;

@@ -28,8 +28,8 @@ export interface SeasonMap {
   readonly style: FigureStyle;
 }
 
-/** What the time axis takes under the map on a phone, before the colour bar begins. */
-const narrowAxisRoom = 52;
+/** What the time axis takes under the map on a phone, before the colour bar begins, and a line more: a redrawn bar can stand higher by its title. */
+const narrowAxisRoom = 68;
 
 export function seasonMapFigure(
   map: SeasonMap,

@@ -87,8 +87,9 @@ function temperatureLayout(chart: TemperatureChart, lines: readonly ChartLine[],
   const below = rows.length * barRowHeight;
   const total = height + below;
   const margin = margins(style);
+  const topNames = chart.moments.map(({ at, label }) => ({ text: label, x: at / unit.seconds }));
   const drawings = [
-    temperatureBands(temperatureWindows(chart), { lines, view, height }, style),
+    temperatureBands(temperatureWindows(chart), { lines, topNames, view, height }, style),
     instellationBars(rows, total, unit, style),
     momentLines(chart),
   ];

@@ -9,12 +9,12 @@ import { distinctWindows } from './windowSpans.ts';
 
 export type TemperatureLevel = Level;
 
-/** Windows after freezing, which is solid. */
-const windowDashes: readonly Dash[] = ['dash', 'dot', 'dashdot'];
+/** None is solid: that is the edge of the ice. Freezing has the long dashes, windows the others first. */
+const windowDashes: readonly Dash[] = ['dot', 'dashdot', 'dash'];
 /** Ends closer than this are one line. */
 const sameTemperature = 0.005;
 const longestName = 16;
-const freezing: Bound = { value: zeroCelsius, words: 'freezing', label: 'freezing', dash: 'solid' };
+const freezing: Bound = { value: zeroCelsius, words: 'freezing', label: 'freezing', dash: 'dash' };
 
 interface Bound {
   readonly value: number;
@@ -53,7 +53,7 @@ function levelOf(group: readonly Bound[]): TemperatureLevel {
   return {
     value,
     dash,
-    width: dash === 'solid' ? 2 : 1.5,
+    width: group.includes(freezing) ? 2 : 1.5,
     plainName: `${temperature} (${list(group.map(({ words }) => words))})`,
     labels: [temperature, ...group.map(({ label }) => label)],
   };

@@ -17,6 +17,7 @@ import { type TemperatureLevel, temperatureLevels } from './temperatureLevels.ts
 import { extremes } from './variables.ts';
 
 const kinds = ['hottest', 'coldest'] as const;
+const iceName = 'edge of the ice (solid)';
 
 /** `columns` with latitude, which share the scale of colours; `shown` is the place of the one that this figure shows. */
 export function temperatureMap(columns: readonly Column[], shown: number, style: FigureStyle): Figure {
@@ -60,12 +61,7 @@ function sharedRange(columns: readonly Column[]): [Kelvin, Kelvin] {
 function iceLine(ice: number[][], grid: MapGrid, ground: Ground): MapLine {
   const [low, high] = ground.range;
   const beneath = colourAt(ground.scale, Math.min(high, Math.max(low, zeroCelsius)), ground.range);
-  return casedLine(
-    { value: 0.5, plainName: 'edge of the ice', labels: ['edge of the ice'], width: 2 },
-    ice,
-    grid,
-    beneath,
-  );
+  return casedLine({ value: 0.5, plainName: iceName, labels: [iceName], width: 2 }, ice, grid, beneath);
 }
 
 /** Two triangles. */
@@ -147,7 +143,7 @@ function caption(
       : []),
     ...(hasIce && shown === 0
       ? [
-          'At the edge of the ice half of a band is frozen over; the edge in the table is that of a cap with as much ice as reaches unbroken from the pole.',
+          'Dashed and dotted: temperatures. Solid, with a black rim: the edge of the ice, at which half of a band is frozen over; the edge in the table is that of a cap with as much ice as reaches unbroken from the pole.',
         ]
       : []),
     ...(absent.length > 0 ? [`Reached nowhere: ${list(absent)}.`] : []),

@@ -2,9 +2,8 @@
 import type { Annotation, Shape } from 'plotly.js-dist-min';
 import type { Window } from '../../sim/world.ts';
 import type { TimeUnit } from '../words/number.ts';
-import type { ChartLine } from './chartLine.ts';
 import type { FigureStyle } from './figure.ts';
-import { freeCorner } from './freeCorner.ts';
+import { type Course, freeCorner } from './freeCorner.ts';
 import { plainLabel } from './plainLabel.ts';
 import type { TemperatureLine } from './temperatureLines.ts';
 import { caseColour } from './theme.ts';
@@ -23,7 +22,9 @@ export interface Frame {
 
 /** What the bands share a chart with. */
 export interface Surround {
-  readonly lines: readonly ChartLine[];
+  readonly lines: readonly Course[];
+  /** Written at the upper edge, to the right of where it begins. */
+  readonly topNames: readonly { readonly text: string; readonly x: number }[];
   readonly view: View;
   /** Pixels that stand for the view's height. */
   readonly height: number;
@@ -52,16 +53,18 @@ export function temperatureBands(windows: readonly Window[], surround: Surround,
 }
 
 function bandName(window: Window, surround: Surround, style: FigureStyle): Partial<Annotation> {
-  const { lines, view, height } = surround;
+  const { lines, topNames, view, height } = surround;
   const frame = frameOf(view);
   const label = plainLabel(window.name, longestName(style));
   const low = Math.max(window.from, frame.low);
   const high = Math.min(window.to, frame.high);
   const plotWidth = style.narrow ? 300 : 800;
-  const labelWidth = ((label.length * letterWidth) / plotWidth) * (view.x[1] - view.x[0]);
+  const widthOf = (text: string): number => ((text.length * letterWidth) / plotWidth) * (view.x[1] - view.x[0]);
   const labelHeight = (lineHeight / height) * (frame.high - frame.low);
+  const top = frame.high - labelHeight / 2;
+  const names = topNames.map(({ text, x }): Course => ({ x: [x, x + widthOf(text)], y: [top, top] }));
   const band = { left: view.x[0], right: view.x[1], low, high };
-  const { side, edge } = freeCorner(lines, band, labelWidth, labelHeight);
+  const { side, edge } = freeCorner([...lines, ...names], band, widthOf(label), labelHeight);
   return {
     ...quietText(label, style, side),
     y: edge === 'top' ? high : low,

@@ -75,7 +75,7 @@ describe('temperature by latitude and season', () => {
       [300, 300],
     ]);
     expect(plain(levels[0]!.name!)).toBe('273.15 K (freezing and “liquid water at 1 bar” begins)');
-    expect(levels.map(({ line }) => line?.dash)).toEqual(['solid', 'dot', 'dot']);
+    expect(levels.map(({ line }) => line?.dash)).toEqual(['dash', 'dashdot', 'dashdot']);
     expect(plain(figure.caption)).toContain('Reached nowhere: 373.15 K (“liquid water at 1 bar” ends).');
   });
 
@@ -95,6 +95,8 @@ describe('temperature by latitude and season', () => {
   test('the edge of the ice is where half of a band is frozen, drawn to the poles', () => {
     const edges = contours(figureOf()).filter(({ contours: own }) => own?.start === 0.5);
     expect(edges.map(({ line }) => line?.color)).toEqual(['#000000', '#ffffff']);
+    expect(edges.map(({ line }) => line?.dash)).toEqual(['solid', 'solid']);
+    expect(plain(figureOf().caption)).toContain('Solid, with a black rim: the edge of the ice');
     const { y, z } = edges[0]!;
     expect([y[0], y.at(-1)]).toEqual([-1, 1]);
     expect(z.at(-1)).toEqual(z.at(-2));
@@ -197,7 +199,7 @@ describe('temperature by latitude and season', () => {
     expect(figure.layout.shapes).toEqual([]);
     expect(figure.lines.map(({ plainName }) => plain(plainName))).toEqual([
       '273.15 K (freezing and “liquid water at 1 bar” begins)',
-      'edge of the ice',
+      'edge of the ice (solid)',
     ]);
     expect(heatmap(figure).colorbar).toMatchObject({ orientation: 'h', x: 0.5 });
   });

@@ -103,6 +103,12 @@ describe('temperature through the orbit', () => {
     expect(figure.caption).toContain('Shaded: temperature windows.');
   });
 
+  test.each([wide, narrow])('the name of a window keeps clear of those of periapsis and apoapsis', (style) => {
+    const { layout } = figureOf({ windows: [{ ...temperateWindow, from: 200, to: 900 }] }, style);
+    const name = layout.annotations!.find(({ text }) => text === temperateWindow.name)!;
+    expect(name.yanchor === 'top' && name.xanchor === 'right').toBe(false);
+  });
+
   test('a window outside the temperatures shown is not silently dropped', () => {
     const molten = { name: 'molten', of: 'temperature', from: 2000, to: 3000 } as const;
     const figure = figureOf({ windows: [molten] });
