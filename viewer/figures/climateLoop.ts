@@ -11,6 +11,7 @@ import { type ChartLine, glyph } from './chartLine.ts';
 import type { Figure, FigureStyle } from './figure.ts';
 import { namesBesideLines } from './lineNames.ts';
 import { plainLabel } from './plainLabel.ts';
+import { spreadLabels } from './spreadLabels.ts';
 import { caseColour, caseMarker } from './theme.ts';
 import type { View } from './view.ts';
 
@@ -212,68 +213,101 @@ function loopLayout(looks: readonly CaseLook[], along: Along, view: View, style:
     shapes: spans?.shapes ?? [],
     annotations: [
       ...(spans?.annotations ?? []),
-      ...looks.flatMap((look) => foldLabels(look, looks.length === 1, along, view, style)),
+      ...foldLabels(looks, along, view, style),
       ...(narrow ? [] : namesBesideLines(named, view, height, style)),
     ],
   };
 }
 
-function foldLabels(
-  look: CaseLook,
-  alone: boolean,
+function foldLabels(looks: readonly CaseLook[], along: Along, view: View, style: FigureStyle): Partial<Annotation>[] {
+  const ends = looks.flatMap((look) => climateEnds(look.oneCase, along).map((end): LookedEnd => ({ end, look })));
+  if (looks.length > 1) return uprightLabels(ends, along, view, style);
+  return ends.map(({ end }) => ({ ...foldAnchor(end, along, style), ...labelBeside(end, along, view, style) }));
+}
+
+function foldAnchor({ point }: ClimateEnd, along: Along, { theme }: FigureStyle): Partial<Annotation> {
+  const font = { color: theme.ink, size: 12 };
+  return { x: place(point.value, along), xref: 'x', y: point.temperatureMean, yref: 'y', showarrow: false, font };
+}
+
+/** On the outer side of the fold, where no line runs; where there is no room outside, in the free corner, with a leader. */
+function labelBeside(
+  { point, liesAbove, next, name }: ClimateEnd,
+  along: Along,
+  view: View,
+  style: FigureStyle,
+): Partial<Annotation> {
+  const needed = style.narrow ? 0.3 : 0.16;
+  const share = (place(point.value, along) - view.x[0]) / (view.x[1] - view.x[0]);
+  const text = `${name} climate ends<br><b>${plainLabel(alongText(point.value, along))}</b>`;
+  const side = liesAbove ? 'left' : 'right';
+  if ((liesAbove ? share : 1 - share) < needed) {
+    const room = (liesAbove ? share : 1 - share) * roughWidth(style) - 6;
+    return { text, align: side, xanchor: side, ...toEdge({ point, next }, view, style), ax: liesAbove ? -room : room };
+  }
+  const away = liesAbove ? 'right' : 'left';
+  return { text, align: away, xanchor: away, yanchor: 'middle', xshift: liesAbove ? -10 : 10 };
+}
+
+/** Several cases: upright at the edge of the panel away from the jump, spread so that neighbours keep clear of each other. */
+function uprightLabels(
+  ends: readonly LookedEnd[],
   along: Along,
   view: View,
   style: FigureStyle,
 ): Partial<Annotation>[] {
-  return climateEnds(look.oneCase, along).map((end) => ({
-    x: place(end.point.value, along),
-    xref: 'x',
-    y: end.point.temperatureMean,
-    yref: 'y',
-    showarrow: false,
-    font: { color: style.theme.ink, size: 12 },
-    ...(alone ? labelBeside(end, along, view, style) : labelUpright(end, look, along, view, style)),
-  }));
+  const width = roughWidth(style);
+  return [true, false].flatMap((down) => {
+    const row = ends.filter(({ end }) => jumpsDown(end) === down);
+    const wanted = row.map(
+      ({ end }) => ((place(end.point.value, along) - view.x[0]) / (view.x[1] - view.x[0])) * width,
+    );
+    const places = spreadLabels(wanted, 20, 8, width - 8);
+    return row.map(({ end, look: { colour, shape } }, at) => ({
+      ...foldAnchor(end, along, style),
+      text: `<span style="color:${colour}">${glyph({ shape, open: true })}</span> ${plainLabel(alongText(end.point.value, along))}`,
+      textangle: -90,
+      xanchor: 'center',
+      ...inwards(toEdge(end, view, style), jumpsDown(end) ? 38 : -38),
+      ax: places[at]! - wanted[at]!,
+      arrowcolor: colour,
+    }));
+  });
 }
 
-/** On the outer side of the fold, where no line runs; within, where there is no room outside. */
-function labelBeside(
-  { point, liesAbove, name }: ClimateEnd,
-  along: Along,
-  view: View,
-  { narrow }: FigureStyle,
-): Partial<Annotation> {
-  const needed = narrow ? 0.3 : 0.16;
-  const share = (place(point.value, along) - view.x[0]) / (view.x[1] - view.x[0]);
-  const onLeft = liesAbove ? share > needed : 1 - share < needed;
-  return {
-    text: `${name} climate ends<br><b>${plainLabel(alongText(point.value, along))}</b>`,
-    align: onLeft ? 'right' : 'left',
-    xanchor: onLeft ? 'right' : 'left',
-    yanchor: 'middle',
-    xshift: onLeft ? -10 : 10,
-  };
+/** Held by its middle, which turned text keeps. */
+function inwards(leader: Partial<Annotation>, pixels: number): Partial<Annotation> {
+  return { ...leader, yanchor: 'middle', ay: Number(leader.ay) + pixels };
 }
 
-/** Several cases: away from the jump, one narrow line a fold, so that neighbours keep clear of each other. */
-function labelUpright(
-  { point, next }: ClimateEnd,
-  { colour, shape }: CaseLook,
-  along: Along,
-  view: View,
-  { theme }: FigureStyle,
-): Partial<Annotation> {
-  const share = (point.temperatureMean - view.y[0]) / (view.y[1] - view.y[0]);
-  const jumpsDown = next === null || next < point.temperatureMean;
-  const isAbove = jumpsDown ? share < 0.78 : share < 0.22;
+interface LookedEnd {
+  readonly end: ClimateEnd;
+  readonly look: CaseLook;
+}
+
+/** Rough width of the plot in pixels: for the room between labels only. */
+function roughWidth({ narrow }: FigureStyle): number {
+  return narrow ? 290 : 780;
+}
+
+function jumpsDown({ point, next }: Pick<ClimateEnd, 'point' | 'next'>): boolean {
+  return next === null || next < point.temperatureMean;
+}
+
+/** A leader from the fold to the upper edge of the panel, to the lower one from a fold that jumps up. */
+function toEdge(end: Pick<ClimateEnd, 'point' | 'next'>, view: View, style: FigureStyle): Partial<Annotation> {
+  const total = style.narrow ? plotHeight.narrow : plotHeight.wide;
+  const height = (panels.temperature[1] - panels.temperature[0]) * total;
+  const share = (end.point.temperatureMean - view.y[0]) / (view.y[1] - view.y[0]);
+  const isUp = jumpsDown(end);
   return {
-    text: `<span style="color:${colour}">${glyph({ shape, open: true })}</span> ${plainLabel(alongText(point.value, along))}`,
-    textangle: -90,
-    xanchor: 'center',
-    yanchor: isAbove ? 'bottom' : 'top',
-    yshift: isAbove ? 10 : -10,
-    bgcolor: theme.paper,
-    borderpad: 1,
+    showarrow: true,
+    arrowhead: 0,
+    arrowwidth: 0.75,
+    arrowcolor: style.theme.quiet,
+    standoff: 6,
+    yanchor: isUp ? 'top' : 'bottom',
+    ay: isUp ? 4 - (1 - share) * height : share * height - 4,
   };
 }
 

@@ -3,6 +3,7 @@ import { describe, expect, test } from 'vitest';
 import type { Figure, FigureStyle } from '../../../viewer/figures/figure.ts';
 import { temperatureThroughOrbit } from '../../../viewer/figures/temperatureThroughOrbit.ts';
 import { darkTheme, lightTheme } from '../../../viewer/figures/theme.ts';
+import { temperatureBands } from '../../../viewer/figures/windowBands.ts';
 import { columnsOf } from '../../../viewer/words/columns.ts';
 import { instellationWindow, plainRun, type RunChoices, temperateWindow } from '../fixture.ts';
 
@@ -103,10 +104,12 @@ describe('temperature through the orbit', () => {
     expect(figure.caption).toContain('Shaded: temperature windows.');
   });
 
-  test.each([wide, narrow])('the name of a window keeps clear of those of periapsis and apoapsis', (style) => {
-    const { layout } = figureOf({ windows: [{ ...temperateWindow, from: 200, to: 900 }] }, style);
-    const name = layout.annotations!.find(({ text }) => text === temperateWindow.name)!;
-    expect(name.yanchor === 'top' && name.xanchor === 'right').toBe(false);
+  test('the name of a window keeps clear of names at the upper edge', () => {
+    const surround = { lines: [], view: { x: [0, 100], y: [273.15, 373.15] } as const, height: 300 };
+    const edge = (topNames: readonly { text: string; x: number }[]) =>
+      temperatureBands([temperateWindow], { ...surround, topNames }, narrow).annotations[0]!;
+    expect(edge([])).toMatchObject({ xanchor: 'left', yanchor: 'top' });
+    expect(edge([{ text: 'apoapsis', x: 10 }])).toMatchObject({ xanchor: 'left', yanchor: 'bottom' });
   });
 
   test('a window outside the temperatures shown is not silently dropped', () => {
