@@ -26,7 +26,10 @@ const chief: readonly Chief[] = [
   { name: 'orbitMeanInstellation', section: 'mean instellation, W/m2', label: '' },
   { name: 'period', section: 'period, d', label: '' },
 ];
-const windowSection = 'share of time in';
+const windowSections: Readonly<Record<string, string>> = {
+  fractionInWindow: 'share of time in',
+  habitableFraction: 'share of area and time in',
+};
 const mostImportant = 3;
 
 /** Lines that fit the terminal, from 40 columns up. */
@@ -36,13 +39,13 @@ export function spreadLines(report: SpreadReport, terminal: Terminal): string[] 
   return [
     ...title.map((line) => terminal.paint('bold', line)),
     ...wrap(terminal.say(head), terminal.width).map((line) => terminal.paint('dim', line)),
-    ...report.cases.flatMap((one) => ['', ...caseLines(one, terminal)]),
+    ...report.cases.flatMap((one) => ['', ...caseLines(one, report.draws, terminal)]),
   ];
 }
 
 const samplingWords = { sobol: "scrambled Sobol' points", random: 'pseudo-random', posterior: 'posterior samples' };
 
-function caseLines(one: SpreadCase, terminal: Terminal): string[] {
+function caseLines(one: SpreadCase, draws: number, terminal: Terminal): string[] {
   const rows = rowsOf(one);
   const grid = {
     headings: ['2.5 %', '16 %', 'median', '84 %', '97.5 %', 'centre'].map((text) => terminal.say(text)),
@@ -58,7 +61,7 @@ function caseLines(one: SpreadCase, terminal: Terminal): string[] {
   return [
     ...name.map((line) => terminal.paint('bold', line)),
     ...panels(grid, terminal).flatMap((panel, index) => (index === 0 ? panel : ['', ...panel])),
-    ...undefinedLines(findings, terminal),
+    ...undefinedLines(findings, (draws - one.failed) / draws, terminal),
     ...importanceLines(one, terminal),
     ...one.inputs
       .filter(({ truncatedShare }) => truncatedShare > 0.05)
@@ -78,8 +81,8 @@ function rowsOf({ findings }: SpreadCase): { section: string; label: string; fin
     return finding ? [{ section, label, finding }] : [];
   });
   const windows = findings.flatMap((finding) => {
-    const [, name] = /^(?:fractionInWindow|habitableFraction)\.(.*)$/s.exec(finding.name) ?? [];
-    return name === undefined ? [] : [{ section: windowSection, label: name, finding }];
+    const [, kind, name] = /^(fractionInWindow|habitableFraction)\.(.*)$/s.exec(finding.name) ?? [];
+    return kind === undefined ? [] : [{ section: windowSections[kind]!, label: name!, finding }];
   });
   return [...named, ...windows];
 }
@@ -95,11 +98,12 @@ function cellsOf(finding: SpreadFinding): string[] {
 
 const levels = ['2.5', '16', '50', '84', '97.5'] as const;
 
-function undefinedLines(findings: readonly SpreadFinding[], terminal: Terminal): string[] {
+/** Findings that some of the sound draws lack; draws that failed are told once, at the end. */
+function undefinedLines(findings: readonly SpreadFinding[], sound: number, terminal: Terminal): string[] {
   return findings.flatMap(({ label, summary }) => {
     if (summary.reason !== undefined)
       return hanging('          ', terminal.say(`${label}: ${summary.reason}`), terminal.width);
-    if (summary.defined === 1) return [];
+    if (summary.defined >= sound) return [];
     const text = `${label}: defined in ${(100 * summary.defined).toFixed(1)} % of the draws`;
     return hanging('          ', terminal.say(text), terminal.width);
   });

@@ -1,5 +1,6 @@
 /** The sentences that answer a grid: what the range of the inputs does to the chief findings. Plain text; pure. */
 import type { GridReport } from '../../sim/studies/grid/gridReport.ts';
+import { labelInText } from './along.ts';
 import { nodeText, rangesText } from './gridAxes.ts';
 import { list } from './number.ts';
 import { extremesOf, type ShownFinding, shownFinding, spanText } from './shownFinding.ts';
@@ -11,31 +12,48 @@ export interface GridAnswer {
 }
 
 export function gridAnswer(report: GridReport): GridAnswer {
-  const [mean, lag] = ['temperatureMean', 'lagOfMaxOrbits'].map((name) => shownFinding(report, name));
+  const told = chosen(report);
   const over = `Over ${rangesText(report)}`;
   if (report.cases.length === 1) {
-    return { lead: `${over}, ${caseText(report, 0, mean!, lag!, true)}${failedText(report, 0)}`, details: [] };
+    return { lead: `${over}, ${caseText(report, 0, told, true)}${failedText(report, 0)}`, details: [] };
   }
+  const all = told.map(({ what, shown }, i) =>
+    runs(i === 0 ? `${what} of the cases` : what, shown, shown.cases.flat()),
+  );
   return {
-    lead: `${over}, ${runs('the mean temperature of the cases', mean!, all(mean!))}, and ${runs('the lag', lag!, all(lag!))}.`,
+    lead: `${over}, ${all.join(', and ')}.`,
     details: report.cases.map(({ name }, at) => {
-      const text = caseText(report, at, mean!, lag!, false);
+      const text = caseText(report, at, told, false);
       return { caseIndex: at, name, text: `${text[0]!.toUpperCase()}${text.slice(1)}${failedText(report, at)}` };
     }),
   };
 }
 
-function all({ cases }: ShownFinding): (number | null)[] {
-  return cases.flat();
+interface Told {
+  readonly name: string;
+  readonly what: string;
+  readonly shown: ShownFinding;
 }
 
-function caseText(report: GridReport, at: number, mean: ShownFinding, lag: ShownFinding, isWhole: boolean): string {
-  const values = mean.cases[at] ?? [];
-  const found = extremesOf(values);
-  const warmest = found && `It is warmest on average at ${nodeText(report.axes, found.high.node)}`;
-  const coldest = found && `coldest at ${nodeText(report.axes, found.low.node)}`;
-  const where = isWhole && found && found.high.value > found.low.value ? ` ${warmest}, ${coldest}.` : '';
-  return `${runs('the mean temperature', mean, values)}, and ${runs('the lag', lag, lag.cases[at] ?? [])}.${where}`;
+const chief: Readonly<Record<string, string>> = { temperatureMean: 'the mean temperature', lagOfMaxOrbits: 'the lag' };
+const most = 2;
+
+/** The chief findings; where they were not asked for, the first of those that were. */
+function chosen(report: GridReport): Told[] {
+  const asked = report.cases.flatMap(({ findings }) => findings.map(({ name }) => name));
+  const names = [...Object.keys(chief).filter((name) => asked.includes(name)), ...asked];
+  return [...new Set(names)].slice(0, most).map((name) => {
+    const shown = shownFinding(report, name);
+    return { name, what: chief[name] ?? `the ${labelInText(shown)}`, shown };
+  });
+}
+
+function caseText(report: GridReport, at: number, told: readonly Told[], isWhole: boolean): string {
+  const text = told.map(({ what, shown }) => runs(what, shown, shown.cases[at] ?? [])).join(', and ');
+  const found = extremesOf(told.find(({ name }) => name === 'temperatureMean')?.shown.cases[at] ?? []);
+  if (!isWhole || found === null || found.high.value === found.low.value) return `${text}.`;
+  const warmest = `It is warmest on average at ${nodeText(report.axes, found.high.node)}`;
+  return `${text}. ${warmest}, coldest at ${nodeText(report.axes, found.low.node)}.`;
 }
 
 /** `the lag runs from 0.10 to 12.00 % of an orbit`. */

@@ -14,7 +14,9 @@ export function drawsText({ draws, seed, sampling, indexRows, failed, cases }: S
     `${draws} ${kinds[sampling]} of seed ${seed}; the same seed gives the same draws.`,
     indexRows > 0
       ? `What matters most rests on ${indexRows} rows of further runs.`
-      : 'No indices of what matters most were asked for.',
+      : sampling === 'posterior'
+        ? 'Indices suppose inputs that are drawn apart; for samples that go together a dependence by ranks stands in their place.'
+        : 'No indices of what matters most were asked for.',
     `Percentiles are of all draws; this page carries the first ${rows} for its scatter, and draws.parquet holds every one.`,
     failed === 0 ? 'None failed.' : 'Failed draws are in no number here; failed.csv lists them with their inputs.',
   ].join(' ');

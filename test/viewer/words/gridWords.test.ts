@@ -56,6 +56,17 @@ describe('shownFinding', () => {
 });
 
 describe('gridAnswer', () => {
+  test('tells of what was asked for, where the chief findings were not', () => {
+    const report = oneCase();
+    const kept = report.cases.map((one) => ({
+      ...one,
+      findings: one.findings.filter(({ name }) => name === 'temperatureMax'),
+    }));
+    const { lead } = gridAnswer({ ...report, cases: kept });
+    expect(plain(lead)).toMatch(/, the maximum temperature runs from \d+ to \d+ K\./);
+    expect(lead).not.toContain('no value');
+  });
+
   // (1−0.9²)^−⅛ · 290 K and atan(2.308)/2π · (1−e)^0.8 at e = 0.9 and 0.03, by hand.
   test('one case: over which range, from where to where, and where it is warmest', () => {
     const { lead, details } = gridAnswer(oneCase());
