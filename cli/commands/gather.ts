@@ -10,7 +10,7 @@ import type { Io } from '../io.ts';
 import { readSamples } from '../posteriorFile.ts';
 import type { ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
-
+import { requireName } from './outputFolder.ts';
 import type { Program } from './run.ts';
 import type { SpreadContext } from './spreadContext.ts';
 import { finishSpread, type SpreadTableFiles } from './spreadFiles.ts';
@@ -28,7 +28,7 @@ export async function gather(
   program: Pick<Program, 'version'>,
   io: Io,
 ): Promise<number> {
-  if (options.out.trim() === '') throw new SimError('-o', 'the folder has no name', 'Name one, e.g. `-o results`');
+  requireName(options.out, 'Name one, e.g. `-o results`');
   const paths = folders.map((folder) => resolve(io.cwd, folder));
   const tables = tablesOf(paths[0]!, folders[0]!);
   refuseMixture(paths[0]!, tables, program);

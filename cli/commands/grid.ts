@@ -1,8 +1,7 @@
 /** `perilag grid`: every finding of each case over one or two inputs, as curves or maps and as files. */
 import { readFileSync } from 'node:fs';
 import { availableParallelism } from 'node:os';
-import { basename, extname, join, resolve } from 'node:path';
-import { SimError } from '../../sim/error.ts';
+import { join, resolve } from 'node:path';
 import { originOf } from '../../sim/origin.ts';
 import { findingColumns } from '../../sim/studies/columnName.ts';
 import type { GridReport } from '../../sim/studies/grid/gridReport.ts';
@@ -27,6 +26,7 @@ import { hanging } from '../output/text.ts';
 import { samplesFrom } from '../posteriorFile.ts';
 import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
+import { outputFolder } from './outputFolder.ts';
 import type { Program } from './run.ts';
 
 export interface GridOptions {
@@ -50,7 +50,7 @@ export async function grid(file: string, options: GridOptions, program: Program,
   const [item] = onlyCases([readScenarioFile(file, io.cwd)], options.only ?? []);
   const setup = setupOf(item!, options);
   const plan = planGrid(setup);
-  const out = outputFolder(file, options.out);
+  const out = outputFolder(file, 'grid', options.out);
   const folder = resolve(io.cwd, out);
   const computed = await computeTable(
     jobOf(plan, item!, program),
@@ -97,12 +97,6 @@ function setupOf({ text, file, scenario }: ScenarioFile, { along, hold, steps, o
     steps,
     of: of === undefined ? null : [...new Set(of.split(',').map((name) => name.trim()))],
   };
-}
-
-function outputFolder(file: string, out: string | undefined): string {
-  if (out?.trim() === '')
-    throw new SimError('-o', 'the folder has no name', 'Name one, e.g. `-o results`, or leave -o out');
-  return out ?? join('out', basename(file, extname(file)), 'grid');
 }
 
 function workersFor({ cases, count }: GridPlan): number {

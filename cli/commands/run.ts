@@ -21,6 +21,7 @@ import { hanging, printable } from '../output/text.ts';
 import { samplesFrom } from '../posteriorFile.ts';
 import { readScenarioFiles, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
+import { requireName } from './outputFolder.ts';
 
 export interface RunOptions {
   readonly out?: string;
@@ -89,8 +90,7 @@ function fieldsOf(scenario: Scenario, result: RunResult, { version, words }: Pro
 
 /** `-o` itself for one scenario, a folder in it for each of several; without it, folders in `out/`. */
 function outputFolders(items: readonly ScenarioFile[], out: string | undefined): readonly string[] {
-  if (out?.trim() === '')
-    throw new SimError('-o', 'the folder has no name', 'Name one, e.g. `-o results`, or leave -o out');
+  requireName(out);
   if (items.length === 1 && out !== undefined) return [out];
   const names = items.map(({ file }) => basename(file, extname(file)));
   const twice = names.find((name, index) => names.indexOf(name) !== index);

@@ -1,6 +1,6 @@
 /** `perilag spread`: the uncertain inputs of a scenario drawn many times, as percentiles, as tables, and which of them matters most. */
 import { availableParallelism } from 'node:os';
-import { basename, extname, join, resolve } from 'node:path';
+import { resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
 import { planSpread, type SpreadSetup } from '../../sim/studies/spread/plan.ts';
 import { type Computed, computeTable } from '../engine/compute.ts';
@@ -12,6 +12,7 @@ import { commandLine } from '../output/history.ts';
 import { readSamples } from '../posteriorFile.ts';
 import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
+import { outputFolder } from './outputFolder.ts';
 import type { Program } from './run.ts';
 import type { SpreadContext } from './spreadContext.ts';
 import { finishSpread, type SpreadTableFiles } from './spreadFiles.ts';
@@ -37,7 +38,7 @@ export async function spread(file: string, options: SpreadOptions, program: Prog
   const [item] = onlyCases([readScenarioFile(file, io.cwd)], options.only ?? []);
   const { context, setup } = await whatToDraw(item!, options, program, io);
   const plan = planSpread(setup);
-  const out = outputFolder(file, options.out);
+  const out = outputFolder(file, 'spread', options.out);
   const jobs = spreadJobs(plan, context);
   const compute = (job: Job, table: string) =>
     computeTable(job, { ...engineOptions(options, out, program, io), table }, kinds, io);
@@ -89,12 +90,6 @@ function seedOf({ scenario }: ScenarioFile): number {
   if (others.length === 0) return seed!;
   const what = `the cases have different ones (${[seed, ...others].join(', ')}), and all take the same draws`;
   throw new SimError('solve.seed', what, 'Write one for all, or give --seed');
-}
-
-function outputFolder(file: string, out: string | undefined): string {
-  if (out?.trim() === '')
-    throw new SimError('-o', 'the folder has no name', 'Name one, e.g. `-o results`, or leave -o out');
-  return out ?? join('out', basename(file, extname(file)), 'spread');
 }
 
 function engineOptions(options: SpreadOptions, out: string, program: Program, io: Io) {

@@ -1,5 +1,5 @@
 /** `perilag trace`: the climates of each case as one input changes, as a table and as files. */
-import { basename, extname, join, resolve } from 'node:path';
+import { join, resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
 import { originOf } from '../../sim/origin.ts';
 import { formatNumber } from '../../sim/quantity/index.ts';
@@ -21,6 +21,7 @@ import { traceLines } from '../output/traceTable.ts';
 import { samplesFrom } from '../posteriorFile.ts';
 import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
+import { outputFolder } from './outputFolder.ts';
 import type { Program } from './run.ts';
 
 export interface TraceCommandOptions {
@@ -35,7 +36,7 @@ export interface TraceCommandOptions {
 export async function trace(file: string, options: TraceCommandOptions, program: Program, io: Io): Promise<number> {
   const along = readAlong(onlyRange(options.along));
   const [item] = onlyCases([readScenarioFile(file, io.cwd)], options.only ?? []);
-  const folder = outputFolder(file, options.out);
+  const folder = outputFolder(file, 'trace', options.out);
   const names = item!.scenario.cases.map(({ name }) => name);
   const cases = casesAlong(item!.text, file, along, names);
   const progress = progressOf(io, options.quiet);
@@ -53,12 +54,6 @@ function onlyRange(ranges: readonly string[]): string {
   if (more.length === 0) return range!;
   const what = `${ranges.length} ranges are given, and climates are followed along one input`;
   throw new SimError('--along', what, 'Keep one of them; `perilag grid` takes two');
-}
-
-function outputFolder(file: string, out: string | undefined): string {
-  if (out?.trim() === '')
-    throw new SimError('-o', 'the folder has no name', 'Name one, e.g. `-o results`, or leave -o out');
-  return out ?? join('out', basename(file, extname(file)), 'trace');
 }
 
 function follow(one: CaseAlong, along: Along, progress: Progress): TraceReportCase {

@@ -2,6 +2,7 @@
 import { fromUnit } from '../../sim/quantity/index.ts';
 import { siUnit } from '../../sim/scenario/inputs.ts';
 import type { GridAxis, GridCase, GridFinding, GridReport } from '../../sim/studies/grid/gridReport.ts';
+import { nodePlaces } from '../../sim/studies/grid/nodePlaces.ts';
 import { snakeCase } from './cfAttributes.ts';
 import { cfUnit } from './cfUnit.ts';
 import { csvField, csvHeader, csvNumber } from './csv.ts';
@@ -35,15 +36,11 @@ function nodeCount(axes: readonly GridAxis[]): number {
   return axes.reduce((product, { nodes }) => product * nodes.length, 1);
 }
 
-/** Places on the axes; the last runs fastest. */
 function placesOf(axes: readonly GridAxis[], node: number): number[] {
-  const places: number[] = [];
-  let rest = node;
-  for (const { nodes } of axes.toReversed()) {
-    places.unshift(rest % nodes.length);
-    rest = Math.floor(rest / nodes.length);
-  }
-  return places;
+  return nodePlaces(
+    axes.map(({ nodes }) => nodes.length),
+    node,
+  );
 }
 
 /** NetCDF's own mark of a number that is not there (netcdf.h, NC_FILL_DOUBLE). */

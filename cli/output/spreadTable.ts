@@ -1,5 +1,6 @@
 /** What `spread` shows of each case: the chief findings with their intervals, what matters most, what was not drawn. */
 import { formatNumber, inUnit } from '../../sim/quantity/index.ts';
+import { percentileLevels } from '../../sim/studies/spread/percentiles.ts';
 import type { SpreadCase, SpreadFinding, SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
 import { panels } from './grid.ts';
 import type { Terminal } from './terminal.ts';
@@ -89,14 +90,13 @@ function rowsOf({ findings }: SpreadCase): { section: string; label: string; fin
 
 function cellsOf(finding: SpreadFinding): string[] {
   const { percentiles } = finding.summary;
-  const numbers = percentiles === null ? [null, null, null, null, null] : levels.map((level) => percentiles[level]);
+  const numbers =
+    percentiles === null ? [null, null, null, null, null] : percentileLevels.map((level) => percentiles[level]);
   return [...numbers, finding.atCentre].map((value) => {
     if (value === null) return '—';
     return formatNumber(finding.unit === 's' ? inUnit(value, 'd') : value, 4);
   });
 }
-
-const levels = ['2.5', '16', '50', '84', '97.5'] as const;
 
 /** Findings that some of the sound draws lack; draws that failed are told once, at the end. */
 function undefinedLines(findings: readonly SpreadFinding[], sound: number, terminal: Terminal): string[] {

@@ -3,6 +3,8 @@
  * in a growing space, and each residual, preconditioned, is the space's next direction.
  * Source: Davidson (1975) J. Comput. Phys. 17, 87; Morgan & Scott (1986) SIAM J. Sci. Stat. Comput. 7, 817 for any preconditioner.
  */
+import { dot, length } from './vectors.ts';
+
 export interface Eigenpair {
   readonly value: number;
   /** Of length 1. */
@@ -133,16 +135,6 @@ function solveDense(rows: number[][], right: readonly number[]): number[] {
     x[k] /= rows[k][k];
   }
   return x;
-}
-
-function dot(a: Float64Array, b: Float64Array): number {
-  let sum = 0;
-  for (let i = 0; i < a.length; i++) sum += a[i] * b[i];
-  return sum;
-}
-
-function length(a: Float64Array): number {
-  return Math.sqrt(dot(a, a));
 }
 
 /** In place. */

@@ -2,6 +2,8 @@
  * Restart-free GMRES with a right preconditioner: A P⁻¹ u = b, x = P⁻¹ u. For small numbers of vectors.
  * Source: Saad & Schultz (1986) SIAM J. Sci. Stat. Comput. 7, 856; Givens rotations as in Kelley (1995), §3.
  */
+import { dot, length } from './vectors.ts';
+
 export interface LinearSolve {
   readonly x: Float64Array;
   /** |b − A x| / |b|, as the recurrence has it. */
@@ -65,16 +67,6 @@ function rotate(column: Float64Array, k: number, cosine: number, sine: number): 
   const lower = column[k + 1];
   column[k] = cosine * upper + sine * lower;
   column[k + 1] = cosine * lower - sine * upper;
-}
-
-function dot(a: Float64Array, b: Float64Array): number {
-  let sum = 0;
-  for (let i = 0; i < a.length; i++) sum += a[i] * b[i];
-  return sum;
-}
-
-function length(a: Float64Array): number {
-  return Math.sqrt(dot(a, a));
 }
 
 /** a −= factor × b. */

@@ -9,6 +9,7 @@ import { type Along, readAlong } from '../../scenario/along.ts';
 import { readHold } from '../../scenario/hold.ts';
 import { type Node, nodesOf } from '../../scenario/nodes.ts';
 import { type CaseOver, casesOver } from '../../scenario/over.ts';
+import { nodePlaces } from './nodePlaces.ts';
 
 /** What the numbers of a grid depend on. Plain data: it crosses to every worker. */
 export interface GridSetup {
@@ -86,11 +87,9 @@ function firstSound(over: CaseOver, axes: readonly GridPlanAxis[]): number[] {
 
 /** SI values of the axes at a node; the second axis runs fastest. */
 export function valuesAt(axes: readonly GridPlanAxis[], node: number): number[] {
-  const values: number[] = [];
-  let rest = node;
-  for (const { nodes } of axes.toReversed()) {
-    values.unshift(nodes[rest % nodes.length].value);
-    rest = Math.floor(rest / nodes.length);
-  }
-  return values;
+  const places = nodePlaces(
+    axes.map(({ nodes }) => nodes.length),
+    node,
+  );
+  return axes.map(({ nodes }, k) => nodes[places[k]].value);
 }

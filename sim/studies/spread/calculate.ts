@@ -1,10 +1,8 @@
 /** The arithmetic of a spread's tables: rows from their numbers alone, so that any worker may compute any of them. */
-import { SimError } from '../../error.ts';
-import { batchOf } from '../../models/batchOf.ts';
-import { models } from '../../models/index.ts';
+import { caught, rowSolver } from '../rowSolver.ts';
 import { bandSampler } from './bandSampler.ts';
 import { designPlace } from './indexDesign.ts';
-import { type PlannedCase, planSpread, type SpreadPlan, type SpreadSetup } from './plan.ts';
+import { planSpread, type SpreadPlan, type SpreadSetup } from './plan.ts';
 
 /** Rows [from, to): a column each, NaN where undefined, and the rows that failed. */
 export interface TableRows {
@@ -17,7 +15,7 @@ export type CalculateRows = (from: number, to: number) => TableRows;
 /** The draws: inputs, then findings of every case. */
 export function drawsCalculator(setup: SpreadSetup): CalculateRows {
   const plan = planSpread(setup);
-  const solve = plan.cases.map(caseSolver);
+  const solve = plan.cases.map(({ drawn, batch }) => rowSolver(drawn, batch));
   return (from, to) => {
     const table = emptyTable(plan, to - from);
     const failed = failureList(plan);
@@ -39,7 +37,7 @@ export function drawsCalculator(setup: SpreadSetup): CalculateRows {
  */
 export function indicesCalculator(setup: SpreadSetup): CalculateRows {
   const plan = planSpread(setup);
-  const solve = plan.cases.map(caseSolver);
+  const solve = plan.cases.map(({ drawn, batch }) => rowSolver(drawn, batch));
   const count = plan.dimensions.length;
   return (from, to) => {
     const table = emptyTable(plan, to - from);
@@ -117,32 +115,6 @@ function fillInputs(
     const { case: c, input } = of[0];
     const about = cases[c].inputs[input];
     for (let row = 0; row < into[index].length; row++) into[index][row] = about.shown(values[c][row][input]);
-  }
-}
-
-/** Writes the findings at a case's inputs into a row of its columns; gives why there are none. */
-function caseSolver({ drawn, batch }: PlannedCase) {
-  const row = new Float64Array(batch.columns.length);
-  return (values: Float64Array, columns: readonly Float64Array[], at: number): string | null => {
-    const kept = caught(() => {
-      if (!drawn.windowsVary) return batch.into(drawn.worldAt(values), row);
-      const { world, options, windows } = drawn.builtAt(values);
-      return batchOf(models[drawn.model], options, windows, world).into(world, row);
-    });
-    if (typeof kept === 'string') return kept;
-    if (!kept) return `the state is not known to the tolerance of ${drawn.options.tolerance}`;
-    for (let i = 0; i < columns.length; i++) columns[i][at] = row[i];
-    return null;
-  };
-}
-
-/** What the work gives, or in words why a draw is no sound planet. Other errors are our own, and pass. */
-function caught<T>(work: () => T): T | string {
-  try {
-    return work();
-  } catch (error) {
-    if (error instanceof SimError) return `${error.where}: ${error.what}`;
-    throw error;
   }
 }
 
