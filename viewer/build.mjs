@@ -35,6 +35,23 @@ async function styleSheet() {
   return themeCss() + css.outputFiles[0].text;
 }
 
+/**
+ * Plotly keeps the worker of its street maps as one string of half a megabyte. No figure here is a street map, and the policy
+ * would forbid it the network: the string is left empty.
+ */
+function withoutMapWorker(script) {
+  const start = ".exports='var ";
+  const at = script.indexOf(start);
+  const from = at + start.length - 'var '.length;
+  const end = /(?<!\\)(?:\\\\)*'/g;
+  end.lastIndex = from;
+  const found = at < 0 ? null : end.exec(script);
+  if (!found || script.indexOf(start, from) >= 0 || end.lastIndex - from < 400_000) {
+    throw new Error("Plotly's map worker is not where it was: look at viewer/build.mjs");
+  }
+  return script.slice(0, from) + script.slice(end.lastIndex - 1);
+}
+
 /** Nothing in a script may look like its end or like a comment: both stand inside strings or patterns, where \x3C is the same. */
 function inlined(script) {
   return script.replaceAll(/<(?=\/script|!--)/gi, '\\x3C');
@@ -64,10 +81,10 @@ function filled(html, place, content) {
 }
 
 const plotly = await readFile(createRequire(import.meta.url).resolve('plotly.js-dist-min/plotly.min.js'), 'utf8');
-const scripts = [await pageScript(), plotly].map(inlined);
+const scripts = [await pageScript(), withoutMapWorker(plotly)].map(inlined);
 let html = await readFile(here('./template.html'), 'utf8');
 html = filled(html, '<style></style>', `<style>${await styleSheet()}</style>`);
-html = filled(html, '<script id="page"></script>', `<script>${scripts[0]}</script>`);
+html = filled(html, '<script id="page"></script>', `<script id="page">${scripts[0]}</script>`);
 html = filled(html, '<script id="plotly"></script>', `<script>${scripts[1]}</script>`);
 const charset = '<meta charset="utf-8">';
 html = filled(html, charset, `${charset}\n<meta http-equiv="Content-Security-Policy" content="${policy(scripts)}">`);

@@ -73,7 +73,7 @@ function filesOf(
     { name: 'series.csv', pieces: [seriesText(result)] },
     ...(hasFields(result) ? [fieldsOf(scenario, result, program)] : []),
     { name: 'scenario.yaml', pieces: [scenarioYamlText(scenario, samplesFrom(folder, item, io.cwd))] },
-    { name: 'report.html', pieces: reportPieces(result, io.reportTemplate) },
+    { name: 'report.html', pieces: reportPieces({ result, tree: scenario.tree }, io.reportTemplate) },
   ];
 }
 

@@ -1,33 +1,37 @@
 /** `report.html`: the page that the build made, with this run's results in its one data block. */
 import { readFileSync } from 'node:fs';
+import { forPage, pageStride } from '../../sim/dataset/forPage.ts';
 import { toPortable } from '../../sim/dataset/portable.ts';
-import { everyRow, rowStride } from '../../sim/dataset/thin.ts';
 import { SimError } from '../../sim/error.ts';
 import type { RunResult } from '../../sim/run.ts';
+import { toPortableTree } from '../../sim/scenario/portableTree.ts';
+import type { Branch } from '../../sim/scenario/tree.ts';
 
 const dataBlock = '<script type="application/json" id="perilag-data"></script>';
 const blockEnd = '</script>';
 
-/** The page of a run in pieces, ready to write. Errors: SimError when the template is missing or is not a report. */
-export function reportPieces(result: RunResult, template: string): readonly (string | Uint8Array)[] {
-  return pagePieces({ result: forPage(result) }, template);
+/** What the page of a run carries: the numbers, and the scenario whose numbers its reader may move. */
+interface Reported {
+  readonly result: RunResult;
+  /** Null for a page that only shows. */
+  readonly tree: Branch | null;
 }
 
-/** Numbers of a field in a page, which goes by mail: some 200 by 90, more than a screen shows. */
-const largestField = 18_000;
+/** The page of a run in pieces, ready to write. Errors: SimError when the template is missing or is not a report. */
+export function reportPieces({ result, tree }: Reported, template: string): readonly (string | Uint8Array)[] {
+  return pagePieces({ result: thinned(result), tree: tree === null ? null : toPortableTree(tree) }, template);
+}
 
 /** The result with fields of fewer rows, and a note that says so. */
-function forPage(result: RunResult): RunResult {
-  const strides = result.cases.flatMap(({ states }) => states.map(({ dataset }) => rowStride(dataset, largestField)));
-  const longest = Math.max(...strides);
+function thinned(result: RunResult): RunResult {
+  const datasets = result.cases.flatMap(({ states }) => states.map(({ dataset }) => dataset));
+  const longest = Math.max(...datasets.map(pageStride));
   if (longest === 1) return result;
   return {
     ...result,
     cases: result.cases.map((one) => ({
       ...one,
-      states: one.states.map((state) => {
-        return { ...state, dataset: everyRow(state.dataset, rowStride(state.dataset, largestField)) };
-      }),
+      states: one.states.map((state) => ({ ...state, dataset: forPage(state.dataset) })),
     })),
     notes: [
       ...result.notes,

@@ -2,6 +2,7 @@
 import type { Distribution } from '../quantity/types.ts';
 import type { SolveOptions, Window, World } from '../world.ts';
 import type { Posterior } from './posterior.ts';
+import type { Branch } from './tree.ts';
 
 /** One input as this case uses it. */
 export interface CaseInput {
@@ -51,6 +52,8 @@ export interface Scenario {
   /** Samples that `spread` draws from; null without. */
   readonly posterior: Posterior | null;
   readonly cases: readonly ScenarioCase[];
+  /** The file as a tree: what changes its numbers starts from here. */
+  readonly tree: Branch;
   /** `scenario.yaml` of the contract: every default shown, the user's own number text kept; running it again gives the same numbers. */
   readonly asUnderstood: string;
   /** The same with another path to the file of samples, for a file that stands elsewhere. */

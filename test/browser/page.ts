@@ -5,6 +5,7 @@ import { fileURLToPath, pathToFileURL } from 'node:url';
 import { type Browser, type BrowserContextOptions, chromium, type Page } from 'playwright-core';
 import { reportPieces } from '../../cli/output/report.ts';
 import type { RunResult } from '../../sim/run.ts';
+import type { Branch } from '../../sim/scenario/tree.ts';
 import { toolPath } from '../support/require.ts';
 
 /** The page that `npm run build` makes. */
@@ -29,9 +30,14 @@ export interface OpenReport {
 }
 
 /** Writes a report as the command line does. */
-export async function reportFile(folder: string, name: string, result: RunResult): Promise<string> {
+export async function reportFile(
+  folder: string,
+  name: string,
+  result: RunResult,
+  tree: Branch | null = null,
+): Promise<string> {
   const path = join(folder, `${name}.html`);
-  await writeFile(path, reportPieces(result, fileURLToPath(builtPage)));
+  await writeFile(path, reportPieces({ result, tree }, fileURLToPath(builtPage)));
   return path;
 }
 

@@ -8,7 +8,7 @@ import { type ChartLine, traceOf } from './chartLine.ts';
 import { dateAxisLayout } from './dateAxis.ts';
 import type { Figure, FigureStyle } from './figure.ts';
 import { namesBesideLines } from './lineNames.ts';
-import { type TemperatureLine, temperatureLines } from './temperatureLines.ts';
+import { originalLine, type TemperatureLine, temperatureLines } from './temperatureLines.ts';
 import { topAxisAnchor } from './topAxis.ts';
 import { extremes } from './variables.ts';
 import type { View } from './view.ts';
@@ -32,6 +32,8 @@ export interface Moment {
 
 export interface TemperatureChart {
   readonly lines: readonly TemperatureLine[];
+  /** What some of the lines were before: thin, and named by hovering alone. */
+  readonly originals?: readonly TemperatureLine[];
   readonly from: Seconds;
   readonly to: Seconds;
   readonly unit: TimeUnit;
@@ -48,14 +50,15 @@ export function temperatureFigure(
   chart: TemperatureChart,
   words: Pick<Figure, 'name' | 'title' | 'textAlternative' | 'caption'>,
 ): Figure {
-  const { unit, style } = chart;
+  const { unit, style, originals = [] } = chart;
   const lines = temperatureLines(chart.lines, unit, style.theme);
-  const whole = temperatureFrame(chart.lines);
+  const whole = temperatureFrame([...chart.lines, ...originals]);
   const view = style.view ?? {
     x: [chart.from / unit.seconds, chart.to / unit.seconds],
     y: [whole.low, whole.high],
   };
-  const traces = lines.map((line) => traceOf(line, '%{y:.1f} K'));
+  const before = originals.map((line) => originalLine(line, unit, style.theme));
+  const traces = [...before, ...lines].map((line) => traceOf(line, '%{y:.1f} K'));
   const layout = temperatureLayout(chart, lines, view);
   const dates = chart.zeroDate === null ? null : { zero: chart.zeroDate, unit, atMost: style.narrow ? 3 : 7 };
   return {

@@ -5,6 +5,7 @@ import type { ChartLine, Owner } from './chartLine.ts';
 import type { Span } from './orbitSpan.ts';
 import { plainLabel } from './plainLabel.ts';
 import { caseColour, caseMarker, type Theme } from './theme.ts';
+import { translucent } from './translucent.ts';
 import { values } from './variables.ts';
 
 export interface TemperatureLine {
@@ -23,6 +24,21 @@ export function temperatureLines(lines: readonly TemperatureLine[], unit: TimeUn
 
 function stateLine({ column, span }: TemperatureLine, unit: TimeUnit, theme: Theme): ChartLine {
   return { ...stateLook(column, theme), x: inUnit(span, unit), y: along(column, span, 'temperature') };
+}
+
+/** A state as it was before its numbers were moved. */
+export function originalLine({ column, span }: TemperatureLine, unit: TimeUnit, theme: Theme): ChartLine {
+  const { colour, dash } = stateLook(column, theme);
+  return {
+    ...names(`${columnName(column)}, before`),
+    colour: translucent(colour, 0.55),
+    dash,
+    width: 1.25,
+    marker: null,
+    referenceFor: [],
+    x: inUnit(span, unit),
+    y: along(column, span, 'temperature'),
+  };
 }
 
 /** Solid for the first state of a case, dash-dotted for further stable ones, dotted for unstable; dashes mean steady. */

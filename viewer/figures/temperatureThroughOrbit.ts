@@ -6,14 +6,20 @@ import { hasLatitude } from '../words/latitude.ts';
 import type { Figure, FigureStyle } from './figure.ts';
 import { orbitSpan, quarterBefore } from './orbitSpan.ts';
 import { type Moment, type TemperatureChart, temperatureFigure } from './temperatureChart.ts';
+import type { TemperatureLine } from './temperatureLines.ts';
 
-/** Columns of periodic states only; at least one. */
-export function temperatureThroughOrbit(columns: readonly Column[], style: FigureStyle): Figure {
+/** Columns of periodic states only; at least one. `originals` are what some of them were: thin lines beside. */
+export function temperatureThroughOrbit(
+  columns: readonly Column[],
+  style: FigureStyle,
+  originals: readonly Column[] = [],
+): Figure {
   const periods = columns.map(periodOf);
   const longest = Math.max(...periods);
   const unit = commonTimeUnit(columns);
   const chart: TemperatureChart = {
-    lines: columns.map((column, index) => ({ column, span: orbitSpan(column.dataset, periods[index]!) })),
+    lines: columns.map(lineOf),
+    originals: originals.map(lineOf),
     from: -quarterBefore * longest,
     to: (1 - quarterBefore) * longest,
     unit,
@@ -26,8 +32,14 @@ export function temperatureThroughOrbit(columns: readonly Column[], style: Figur
     name: 'temperature-through-the-orbit',
     title: columns.some(hasLatitude) ? 'Area-mean temperature through the orbit' : 'Temperature through the orbit',
     textAlternative: columns.map((column) => `${columnName(column)}: ${answerFor(column, unit)}`).join(' '),
-    caption: caption(columns, periods),
+    caption: [caption(columns, periods), ...(originals.length > 0 ? [thinLines] : [])].join(' '),
   });
+}
+
+const thinLines = 'Thin: the same cases before their numbers were moved.';
+
+function lineOf(column: Column): TemperatureLine {
+  return { column, span: orbitSpan(column.dataset, periodOf(column)) };
 }
 
 /** Half an orbit after periapsis, where every case agrees on it. */

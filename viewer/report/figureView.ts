@@ -16,9 +16,11 @@ export interface FigureView {
   draw(setting: Setting): Promise<void>;
   /** Call when what `build` makes has changed: words and picture, the whole of it. */
   refresh(): Promise<void>;
+  /** Another place and other numbers behind the same figure: its words at once, its picture with the next `draw`. */
+  renew(number: number, build: Build): void;
 }
 
-type Build = (style: FigureStyle) => Figure;
+export type Build = (style: FigureStyle) => Figure;
 
 /** A double click is answered by the page: Plotly would go back to the last view that it was given. */
 const config: Partial<Config> = { displayModeBar: false, doubleClick: false, showTips: false };
@@ -31,7 +33,9 @@ const pngScale = 3;
 const leastWidth = { wide: 560, narrow: 240 };
 
 /** `build` makes the figure for a style; `number` is its place on the page; `controls` stand above it. */
-export function figureView(number: number, build: Build, controls: HTMLElement | null = null): FigureView {
+export function figureView(first: number, made: Build, controls: HTMLElement | null = null): FigureView {
+  let number = first;
+  let build = made;
   let setting: Setting | null = null;
   let view: View | null = null;
   const plot = element('div', { class: 'plot', role: 'group' });
@@ -74,6 +78,12 @@ export function figureView(number: number, build: Build, controls: HTMLElement |
     await show(null);
   }
 
+  function renew(place: number, next: Build): void {
+    number = place;
+    build = next;
+    describe();
+  }
+
   describe();
   return {
     element: element(
@@ -86,6 +96,7 @@ export function figureView(number: number, build: Build, controls: HTMLElement |
     ),
     draw,
     refresh,
+    renew,
   };
 }
 

@@ -11,18 +11,19 @@ import { checkedRun, damaged, parsed } from './readResult.ts';
 import { checkedSpread } from './readSpread.ts';
 
 export type Carried =
-  | { readonly result: RunResult }
+  /** `tree` is the scenario whose numbers may be moved, as `toPortableTree` gave it; null for a page that only shows. */
+  | { readonly result: RunResult; readonly tree: unknown }
   | { readonly trace: TraceReport }
   | { readonly spread: SpreadReport }
   | { readonly grid: GridReport };
 
 /** Errors: PageError when the block holds nothing that this page can show. */
 export function readPage(text: string): Carried {
-  const { trace, spread, grid, result } = parsed(text);
+  const { trace, spread, grid, result, tree = null } = parsed(text);
   if (trace !== undefined) return { trace: checkedTrace(trace) };
   if (spread !== undefined) return { spread: checkedSpread(spread) };
   if (grid !== undefined) return { grid: checkedGrid(grid) };
-  return { result: checkedRun(result) };
+  return { result: checkedRun(result), tree };
 }
 
 function checkedTrace(value: unknown): TraceReport {

@@ -51,6 +51,7 @@ function lengthOf(dataset: Dataset | undefined, name: string): number {
 /** One of these stands in the data block. */
 interface Block {
   readonly result?: unknown;
+  readonly tree?: unknown;
   readonly trace?: unknown;
   readonly grid?: unknown;
   readonly spread?: unknown;

@@ -32,6 +32,26 @@ export function caseTable(columns: readonly Column[]): TableRow[] {
   ];
 }
 
+/** Each cell with what stood there before, where a reader has moved the case and that changed it. */
+export function withBefore(
+  rows: readonly TableRow[],
+  columns: readonly Column[],
+  originals: readonly Column[],
+): readonly TableRow[] {
+  const befores = columns.map((column) =>
+    originals.findIndex((one) => one.caseName === column.caseName && one.stateIndex === column.stateIndex),
+  );
+  if (befores.every((at, i) => at < 0 || originals[at]!.state === columns[i]!.state)) return rows;
+  const before = new Map(caseTable(originals).map(({ label, cells }) => [label, cells]));
+  return rows.map(({ label, cells }) => ({
+    label,
+    cells: cells.map((cell, i) => {
+      const was = before.get(label)?.[befores[i]!]?.text;
+      return was === undefined || was === cell.text ? cell : { ...cell, was };
+    }),
+  }));
+}
+
 /** True where every column has the same steady values, so that one column can show them for all. */
 export function steadyIsShared(rows: readonly TableRow[]): boolean {
   return rows.every(({ cells }) => cells.every(({ steady }) => steady === cells[0]!.steady));

@@ -13,6 +13,8 @@ export interface Cell {
   readonly detail?: string;
   /** The same quantity of the instantaneous steady value, where it has one. */
   readonly steady?: string;
+  /** What stood here before the reader moved a number of the case. */
+  readonly was?: string;
 }
 
 export interface TableRow {

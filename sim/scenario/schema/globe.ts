@@ -56,6 +56,7 @@ export const globeShape = {
       title: 'Heat transport',
       description: 'D of the diffusion of heat between latitudes',
       examples: ['0.65 W/m2/K', '0.2 to 2 W/m2/K log'],
+      usual: '0 to 5 W/m2/K',
     },
   ).optional(),
   frozenHeatStore: heatStore({
@@ -79,6 +80,7 @@ export const globeShape = {
       title: 'Exchange between land and sea',
       description: 'Heat that passes from one to the other within a latitude, over the area of both',
       examples: ['1 W/m2/K'],
+      usual: '0 to 30 W/m2/K',
     },
   ).optional(),
 };

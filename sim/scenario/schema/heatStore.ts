@@ -43,21 +43,41 @@ export const oneStore = z
   .strictObject({
     heatCapacity: quantity(
       { dimension: 'arealHeatCapacity', positive: true },
-      { title: 'Heat capacity', description: 'Per area of surface', examples: ['4e7 J/m2/K', '1e5 to 1e9 J/m2/K log'] },
+      {
+        title: 'Heat capacity',
+        description: 'Per area of surface',
+        examples: ['4e7 J/m2/K', '1e5 to 1e9 J/m2/K log'],
+        usual: '1e3 to 1e10 J/m2/K log',
+      },
     ).optional(),
     mixedLayer: quantity(
       { dimension: 'length', positive: true },
-      { title: 'Mixed layer depth', description: 'Depth of sea water that is stirred', examples: ['20 m'] },
+      {
+        title: 'Mixed layer depth',
+        description: 'Depth of sea water that is stirred',
+        examples: ['20 m'],
+        usual: '0.1 to 1000 m log',
+      },
     ).optional(),
     atmosphere: z
       .strictObject({
         surfacePressure: quantity(
           { dimension: 'pressure', positive: true },
-          { title: 'Surface pressure', description: 'Weight of the air', examples: ['5 bar'] },
+          {
+            title: 'Surface pressure',
+            description: 'Weight of the air',
+            examples: ['5 bar'],
+            usual: '0.001 to 1000 bar log',
+          },
         ),
         specificHeat: quantity(
           { dimension: 'specificHeat', positive: true },
-          { title: 'Specific heat of air', description: 'At constant pressure', examples: ['1004 J/kg/K'] },
+          {
+            title: 'Specific heat of air',
+            description: 'At constant pressure',
+            examples: ['1004 J/kg/K'],
+            usual: '500 to 15000 J/kg/K log',
+          },
         ),
         gravity: quantity(
           { dimension: 'acceleration', positive: true },
@@ -65,6 +85,7 @@ export const oneStore = z
             title: 'Surface gravity',
             description: 'May be left out where planet.mass and planet.radius are given',
             examples: ['11 m/s2'],
+            usual: '0.1 to 100 m/s2 log',
           },
         ).optional(),
       })
@@ -82,6 +103,7 @@ export const oneStore = z
             title: 'Thermal inertia',
             description: '√(k ρ c) of the ground',
             examples: ['2200 J/m2/K/s^0.5', '250 tiu'],
+            usual: '5 to 5000 J/m2/K/s^0.5 log',
           },
         ),
         cycle,

@@ -45,7 +45,7 @@ function properties(schema: z.ZodObject): Json {
       const about = z.globalRegistry.get(zodSchema) as About | undefined;
       if (about?.examples) jsonSchema.examples = [...about.examples];
       if (about?.takes) asText(jsonSchema as Json, about.takes);
-      for (const ours of ['takes', 'numbers', 'cut']) Reflect.deleteProperty(jsonSchema, ours);
+      for (const ours of ['takes', 'numbers', 'usual', 'cut']) Reflect.deleteProperty(jsonSchema, ours);
       if (alone.has(zodSchema)) Object.assign(jsonSchema, { minProperties: 1, maxProperties: 1 });
     },
   });

@@ -13,6 +13,8 @@ export interface About {
   readonly takes?: QuantitySpec | 'text';
   /** What its numbers are, where it takes words, too. */
   readonly numbers?: QuantitySpec;
+  /** The range over which a reader may move it, written as a range of a scenario; where there is none, what the bounds leave. */
+  readonly usual?: string;
   /** Closer ends of a spread than the bounds of the key, SI. */
   readonly cut?: { readonly low?: number; readonly high?: number };
 }

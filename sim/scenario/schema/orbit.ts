@@ -11,11 +11,21 @@ export const orbitSchema = z
   .strictObject({
     semiMajorAxis: quantity(
       { dimension: 'length', positive: true },
-      { title: 'Semi-major axis', description: 'Half the line from periapsis to apoapsis', examples: ['0.48 au'] },
+      {
+        title: 'Semi-major axis',
+        description: 'Half the line from periapsis to apoapsis',
+        examples: ['0.48 au'],
+        usual: '0.01 to 30 au log',
+      },
     ).optional(),
     period: quantity(
       { dimension: 'time', positive: true },
-      { title: 'Orbital period', description: 'Time from periapsis to periapsis', examples: ['130 d'] },
+      {
+        title: 'Orbital period',
+        description: 'Time from periapsis to periapsis',
+        examples: ['130 d'],
+        usual: '0.5 to 50000 d log',
+      },
     ).optional(),
     scaledSemiMajorAxis: quantity(
       { dimension: 'number', above: 1 },
@@ -23,6 +33,7 @@ export const orbitSchema = z
         title: 'Scaled semi-major axis',
         description: 'Semi-major axis over the radius of the star, a/R*; needs star.radius',
         examples: [112],
+        usual: '2 to 5000 log',
       },
     ).optional(),
     instellation: quantity(
@@ -31,6 +42,7 @@ export const orbitSchema = z
         title: 'Instellation at distance a',
         description: 'Flux from the star at a distance of one semi-major axis; the luminosity then gives a',
         examples: ['1.3 S0'],
+        usual: '0.05 to 5000 S0 log',
       },
     ).optional(),
     eccentricity: quantity(
@@ -39,6 +51,7 @@ export const orbitSchema = z
         title: 'Eccentricity',
         description: `0 is a circle; solved up to ${mostEccentric}`,
         examples: [0.62, '0.62 ± 0.03'],
+        usual: '0 to 0.97',
         cut: { high: mostEccentric },
       },
     ).optional(),

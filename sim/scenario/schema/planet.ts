@@ -46,11 +46,21 @@ export function showRotation(rotation: RotationPeriod): string {
 const commonKeys = z.strictObject({
   radius: quantity(
     { dimension: 'length', positive: true },
-    { title: 'Planet radius', description: 'With mass it gives the gravity', examples: ['2.1 Rearth'] },
+    {
+      title: 'Planet radius',
+      description: 'With mass it gives the gravity',
+      examples: ['2.1 Rearth'],
+      usual: '0.1 to 25 Rearth log',
+    },
   ).optional(),
   mass: quantity(
     { dimension: 'mass', min: 0 },
-    { title: 'Planet mass', description: "Counts in Kepler's third law; 0 unless given", examples: ['4 Mearth'] },
+    {
+      title: 'Planet mass',
+      description: "Counts in Kepler's third law; 0 unless given",
+      examples: ['4 Mearth'],
+      usual: '0.01 to 5000 Mearth log',
+    },
   ).optional(),
   ...surfaceShape,
   absorbingFraction: quantity(
@@ -64,7 +74,12 @@ const commonKeys = z.strictObject({
   ).optional(),
   internalHeat: quantity(
     { dimension: 'flux', min: 0 },
-    { title: 'Internal heat', description: 'Heat from inside the planet', examples: ['0 W/m2'] },
+    {
+      title: 'Internal heat',
+      description: 'Heat from inside the planet',
+      examples: ['0 W/m2'],
+      usual: '0 to 100 W/m2',
+    },
   ).optional(),
   heatStore: heatStoreSchema.optional(),
   rotationPeriod: rotationPeriod.optional(),

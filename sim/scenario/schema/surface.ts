@@ -3,10 +3,13 @@ import * as z from 'zod';
 import { quantity } from './leaf.ts';
 
 const albedo = (title: string, description: string, example: number) =>
-  quantity({ dimension: 'number', min: 0, below: 1 }, { title, description, examples: [example] });
+  quantity({ dimension: 'number', min: 0, below: 1 }, { title, description, examples: [example], usual: '0 to 0.95' });
 
 const meltTemperature = (title: string, description: string, example: string) =>
-  quantity({ dimension: 'temperature', positive: true }, { title, description, examples: [example] });
+  quantity(
+    { dimension: 'temperature', positive: true },
+    { title, description, examples: [example], usual: '200 to 300 K' },
+  );
 
 /** One emission law. */
 export const emissionSchema = z
@@ -17,17 +20,28 @@ export const emissionSchema = z
         title: 'Infrared optical depth',
         description: 'Grey atmosphere over the surface (Eddington): σT⁴/(1 + ¾τ)',
         examples: [0.83],
+        usual: '0 to 10',
       },
     ).optional(),
     linear: z
       .strictObject({
         a: quantity(
           { dimension: 'flux', positive: true },
-          { title: 'Emitted at 0 °C', description: 'A of A + B T, T in °C', examples: ['203.3 W/m2'] },
+          {
+            title: 'Emitted at 0 °C',
+            description: 'A of A + B T, T in °C',
+            examples: ['203.3 W/m2'],
+            usual: '150 to 300 W/m2',
+          },
         ),
         b: quantity(
           { dimension: 'heatTransferCoefficient', positive: true },
-          { title: 'Slope of emission', description: 'B of A + B T', examples: ['2.09 W/m2/K'] },
+          {
+            title: 'Slope of emission',
+            description: 'B of A + B T',
+            examples: ['2.09 W/m2/K'],
+            usual: '1 to 4 W/m2/K',
+          },
         ),
       })
       .meta({
@@ -72,7 +86,7 @@ export const surfaceShape = {
     .optional(),
   emissivity: quantity(
     { dimension: 'number', above: 0, max: 1 },
-    { title: 'Emissivity', description: 'Of a grey surface that sees space: ε σ T⁴', examples: [1] },
+    { title: 'Emissivity', description: 'Of a grey surface that sees space: ε σ T⁴', examples: [1], usual: '0.5 to 1' },
   ).optional(),
   emission: emissionSchema.optional(),
 };

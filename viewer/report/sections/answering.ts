@@ -5,12 +5,14 @@ import { type Column, columnName } from '../../words/columns.ts';
 import { element, userText } from '../element.ts';
 import { columnSample } from '../lineSample.ts';
 
-export function answering(result: RunResult): HTMLElement {
+/** `moves` says what the reader has moved; null for a run as it was made. */
+export function answering(result: RunResult, moves: string | null = null): HTMLElement {
   const { lead, details } = answer(result);
   const list = details.map(({ column, text }) => detail(column, text));
   return element(
     'section',
     { class: 'answer', 'aria-label': 'Answer' },
+    moves === null ? null : element('p', { class: 'moves' }, element('b', {}, 'Moved by hand: '), userText(moves)),
     element('p', { class: 'lead' }, lead),
     list.length > 0 ? element('ul', { class: 'details' }, ...list) : null,
     ...notices(result),

@@ -1,7 +1,7 @@
 /** Table 1: the cases beside the steady value. */
 
 import type { CaseResult } from '../../../sim/run.ts';
-import { caseTable, steadyIsShared } from '../../words/caseTable.ts';
+import { caseTable, steadyIsShared, withBefore } from '../../words/caseTable.ts';
 import type { Cell, TableRow } from '../../words/cells.ts';
 import type { Column } from '../../words/columns.ts';
 import { hasLatitude } from '../../words/latitude.ts';
@@ -10,8 +10,13 @@ import { columnHead } from '../columnHead.ts';
 import { dataTable } from '../dataTable.ts';
 import { type Child, element } from '../element.ts';
 
-export function casesSection(cases: readonly CaseResult[], columns: readonly Column[]): HTMLElement {
-  const rows = caseTable(columns);
+/** `originals` are the columns of the file's own cases. */
+export function casesSection(
+  cases: readonly CaseResult[],
+  columns: readonly Column[],
+  originals: readonly Column[],
+): HTMLElement {
+  const rows = withBefore(caseTable(columns), columns, originals);
   const shared = steadyIsShared(rows);
   const steadyMeaning = columns.some(hasLatitude)
     ? 'the temperature that would emit at once what the area absorbs and what comes from inside'
@@ -37,9 +42,10 @@ export function casesSection(cases: readonly CaseResult[], columns: readonly Col
   return element('section', { class: 'grid' }, element('h2', {}, 'The cases'), table, notes(cases, rows));
 }
 
-function content({ text, reason, steady, detail }: Cell, showSteady: boolean): Child[] {
+function content({ text, reason, steady, detail, was }: Cell, showSteady: boolean): Child[] {
   return [
     text,
+    was === undefined ? null : element('small', { class: 'was' }, `was ${was}`),
     showSteady && steady !== undefined ? element('small', {}, `steady ${steady}`) : null,
     detail === undefined ? null : element('small', { class: 'detail' }, detail),
     reason === undefined ? null : element('small', { class: 'reason' }, reason),

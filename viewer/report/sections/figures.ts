@@ -9,37 +9,43 @@ import { temperatureMap } from '../../figures/temperatureMap.ts';
 import { temperatureThroughOrbit } from '../../figures/temperatureThroughOrbit.ts';
 import type { Column } from '../../words/columns.ts';
 import { hasLatitude } from '../../words/latitude.ts';
-import { type FigureView, figureView } from '../figureView.ts';
+import type { FigureBuilder } from '../figureList.ts';
 
 type Builder = (style: FigureStyle) => Figure;
 
-export function figureViews(columns: readonly Column[]): FigureView[] {
+/** `originals` are columns as they were before a reader moved them: thin lines beside the others. */
+export function figureBuilders(columns: readonly Column[], originals: readonly Column[]): FigureBuilder[] {
   const periodic = columns.filter(({ isForwardRun }) => !isForwardRun);
   const forward = columns.filter(({ isForwardRun }) => isForwardRun);
-  const builders: Builder[] = [
-    ...(periodic.length > 0 ? [(style: FigureStyle) => temperatureThroughOrbit(periodic, style)] : []),
+  return [
+    ...(periodic.length > 0
+      ? [
+          figure('temperature', (style) =>
+            temperatureThroughOrbit(
+              periodic,
+              style,
+              originals.filter(({ isForwardRun }) => !isForwardRun),
+            ),
+          ),
+        ]
+      : []),
     ...latitudeFigures(periodic.filter(hasLatitude)),
-    ...(forward.length > 0 ? [(style: FigureStyle) => temperatureAfterStart(forward, style)] : []),
+    ...(forward.length > 0 ? [figure('run', (style) => temperatureAfterStart(forward, style))] : []),
   ];
-  return builders.map((build, index) => figureView(index + 1, build));
+}
+
+function figure(id: string, build: Builder): FigureBuilder {
+  return { id, build };
 }
 
 /** Of the columns that tell latitudes apart. */
-function latitudeFigures(columns: readonly Column[]): Builder[] {
+function latitudeFigures(columns: readonly Column[]): FigureBuilder[] {
   if (columns.length === 0) return [];
   const groups = insolationGroups(columns);
   return [
-    ...columns.map(
-      (_, shown): Builder =>
-        (style) =>
-          temperatureMap(columns, shown, style),
-    ),
-    ...groups.map(
-      (_, shown): Builder =>
-        (style) =>
-          insolationMap(groups, shown, style),
-    ),
-    (style) => annualProfile(columns, style),
-    (style) => localLag(columns, style),
+    ...columns.map((_, shown) => figure(`map${shown}`, (style) => temperatureMap(columns, shown, style))),
+    ...groups.map((_, shown) => figure(`insolation${shown}`, (style) => insolationMap(groups, shown, style))),
+    figure('profile', (style) => annualProfile(columns, style)),
+    figure('localLag', (style) => localLag(columns, style)),
   ];
 }

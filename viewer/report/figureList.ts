@@ -1,0 +1,85 @@
+/** The figures of a page, each with a name by which it is known again when the numbers behind it have moved. */
+import type { Figure, FigureStyle } from '../figures/figure.ts';
+import { element } from './element.ts';
+import { type FigureView, figureView } from './figureView.ts';
+import type { Setting } from './surroundings.ts';
+
+export interface FigureBuilder {
+  readonly id: string;
+  readonly build: (style: FigureStyle) => Figure;
+}
+
+export interface FigureList {
+  readonly element: HTMLElement;
+  /** All that are there now. */
+  views(): readonly FigureView[];
+  /** Other numbers: figures in view are drawn at once, the others when they come into view. */
+  show(builders: readonly FigureBuilder[]): void;
+  /** Draws all; one after another, with `breath` between. */
+  draw(setting: Setting, breath?: () => Promise<void>): Promise<void>;
+}
+
+export function figureList(first: readonly FigureBuilder[]): FigureList {
+  const box = element('div', { class: 'figures' });
+  const views = new Map<string, FigureView>();
+  const stale = new Set<FigureView>();
+  const inView = new Set<Element>();
+  let setting: Setting | null = null;
+  const watch = new IntersectionObserver(
+    (entries) => {
+      for (const { target, isIntersecting } of entries) {
+        if (isIntersecting) inView.add(target);
+        else inView.delete(target);
+      }
+      drawSeen();
+    },
+    { rootMargin: '120px' },
+  );
+
+  function drawSeen(): void {
+    if (setting === null) return;
+    for (const view of stale) {
+      if (!inView.has(view.element)) continue;
+      stale.delete(view);
+      void view.draw(setting);
+    }
+  }
+
+  function lay(builders: readonly FigureBuilder[]): void {
+    for (const [id, view] of views) {
+      if (builders.some((one) => one.id === id)) continue;
+      watch.unobserve(view.element);
+      view.element.remove();
+      views.delete(id);
+      stale.delete(view);
+      inView.delete(view.element);
+    }
+    for (const [index, { id, build }] of builders.entries()) {
+      const known = views.get(id);
+      const view = known ?? figureView(index + 1, build);
+      if (known) known.renew(index + 1, build);
+      else views.set(id, view);
+      stale.add(view);
+      if (box.children[index] !== view.element) box.insertBefore(view.element, box.children[index] ?? null);
+      if (!known) watch.observe(view.element);
+    }
+  }
+
+  lay(first);
+  return {
+    element: box,
+    views: () => [...views.values()],
+    show(builders) {
+      lay(builders);
+      drawSeen();
+    },
+    async draw(changed, breath = async () => undefined) {
+      setting = changed;
+      for (const view of views.values()) {
+        stale.delete(view);
+        await view.draw(changed);
+        await breath();
+      }
+    },
+  };
+}

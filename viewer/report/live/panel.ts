@@ -1,0 +1,142 @@
+/** The instruments in the margin: every number that may be moved, which cases it moves, what was kept, the ways back and out. */
+import { type Dial, dialGroups } from '../../../sim/scenario/dial.ts';
+import { element, userText } from '../element.ts';
+import { type DialView, dialView } from './dialView.ts';
+import type { CaseDials } from './protocol.ts';
+import type { Fault } from './solver.ts';
+import { editsOf, type LiveState } from './state.ts';
+
+export interface PanelEvents {
+  /** Null is the way back. */
+  moved(caseNames: readonly string[], key: string, text: string | null): void;
+  resetAll(): void;
+  keep(caseNames: readonly string[]): void;
+  drop(name: string): void;
+  save(): void;
+}
+
+export interface Panel {
+  readonly element: HTMLElement;
+  /** `siOf` gives the SI value of a case's key as it was last computed. */
+  show(state: LiveState, siOf: (caseName: string, key: string) => number | null): void;
+  fail(fault: Fault | null): void;
+  /** A line on how the last run went. */
+  tell(text: string): void;
+}
+
+export function panel(cases: readonly CaseDials[], events: PanelEvents): Panel {
+  const names = cases.map(({ name }) => name);
+  let scope: readonly string[] = names;
+  let views: readonly { readonly key: string; readonly dial: Dial; readonly view: DialView }[] = [];
+  let last: Parameters<Panel['show']> | null = null;
+
+  const dials = element('div', { class: 'dials' });
+  const keptList = element('ul', { class: 'kept-cases' });
+  const fault = element('p', { class: 'fault', role: 'alert' });
+  const line = element('p', { class: 'run-line', role: 'status' });
+  const keep = action('Keep as a case', () => events.keep(scope));
+  const all = action('Reset all', events.resetAll);
+  const save = action('Save as scenario', events.save);
+
+  function lay(): void {
+    views = dialsIn(cases, scope).map((dial) => ({
+      key: dial.key,
+      dial,
+      view: dialView(dial, (text) => events.moved(scope, dial.key, text)),
+    }));
+    const groups = dialGroups.flatMap((group) => {
+      const own = views.filter(({ dial }) => dial.group === group);
+      if (own.length === 0) return [];
+      return [element('fieldset', {}, element('legend', {}, group), ...own.map(({ view }) => view.element))];
+    });
+    dials.replaceChildren(...groups);
+    if (last !== null) show(...last);
+  }
+
+  function show(...[state, siOf]: Parameters<Panel['show']>): void {
+    last = [state, siOf];
+    const [first] = scope;
+    const edits = new Map(editsOf(state, first!).map(({ key, text }) => [key, text]));
+    for (const { key, dial, view } of views) {
+      const text = edits.get(key);
+      view.show(text ?? dial.text, text === undefined ? dial.value : siOf(first!, key), text !== undefined);
+    }
+    const isMoved = scope.some((name) => editsOf(state, name).length > 0);
+    keep.disabled = !isMoved;
+    all.disabled = state.changes.length === 0 && state.kept.length === 0;
+    keptList.replaceChildren(
+      ...state.kept.map(({ name }) =>
+        element(
+          'li',
+          {},
+          userText(name),
+          action('Remove', () => events.drop(name), `Remove ${name}`),
+        ),
+      ),
+    );
+  }
+
+  lay();
+  const chooser =
+    names.length > 1
+      ? scopeChooser(names, (chosen) => {
+          scope = chosen;
+          lay();
+        })
+      : null;
+  return {
+    element: element(
+      'div',
+      { class: 'panel' },
+      element('p', { class: 'actions' }, keep, all, save),
+      line,
+      fault,
+      chooser,
+      keptList,
+      dials,
+    ),
+    show,
+    fail(found) {
+      const own = views.find(({ key }) => key === found?.where);
+      for (const { view } of views) view.complain(null);
+      own?.view.complain(found!.message);
+      fault.textContent = found === null || own ? '' : found.message;
+    },
+    tell(text) {
+      line.textContent = text;
+    },
+  };
+}
+
+function scopeChooser(names: readonly string[], chosen: (scope: readonly string[]) => void): HTMLElement {
+  const select = element(
+    'select',
+    {},
+    element('option', { value: '' }, 'all cases'),
+    ...names.map((name, i) =>
+      element('option', { value: String(i) }, name.length > 40 ? `${[...name].slice(0, 39).join('')}…` : name),
+    ),
+  );
+  select.addEventListener('change', () => chosen(select.value === '' ? names : [names[Number(select.value)]!]));
+  return element('label', { class: 'choice' }, 'Move in ', select);
+}
+
+/** Of one case all; of several those that all have at the same value. */
+function dialsIn(cases: readonly CaseDials[], scope: readonly string[]): readonly Dial[] {
+  const [first, ...others] = cases.filter(({ name }) => scope.includes(name));
+  return first!.dials.filter((dial) =>
+    others.every(({ dials }) =>
+      dials.some(({ key, value, unit }) => key === dial.key && value === dial.value && unit === dial.unit),
+    ),
+  );
+}
+
+function action(label: string, pressed: () => void, longLabel = label): HTMLButtonElement {
+  const made = element(
+    'button',
+    { type: 'button', ...(longLabel === label ? {} : { 'aria-label': longLabel }) },
+    label,
+  );
+  made.addEventListener('click', pressed);
+  return made;
+}
