@@ -46,9 +46,9 @@ function laidOver(patch: Branch, base: Branch, { key, text }: Edit): Branch {
   const path = key.split('.');
   const whole = merge(base, patch);
   const listAt = path.findIndex((_, depth) => subtree(whole, path.slice(0, depth))?.kind === 'list');
-  if (listAt < 0) return merge(patch, at(path, leafOf(text)));
+  if (listAt < 0) return merge(patch, at(path, leafOf(text, path)));
   const list = path.slice(0, listAt);
-  return merge(patch, at(list, withLeaf(subtree(whole, list)!, path.slice(listAt), leafOf(text), key)));
+  return merge(patch, at(list, withLeaf(subtree(whole, list)!, path.slice(listAt), leafOf(text, path), key)));
 }
 
 /** A branch with nothing but a tree at a path. */
@@ -81,7 +81,7 @@ const nowhere = { line: 1, column: 1 };
 const bareNumber = /^[-+]?(0|[1-9]\d*)(\.\d*)?([eE][-+]?\d+)?$/;
 
 /** A bare number is one in the file, too. */
-function leafOf(text: string): Leaf {
+function leafOf(text: string, path: readonly string[]): Leaf {
   const value = bareNumber.test(text) ? Number(text) : text;
-  return { kind: 'leaf', at: nowhere, path: [], value, text, quoted: false };
+  return { kind: 'leaf', at: nowhere, path, value, text, quoted: false };
 }
