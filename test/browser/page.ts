@@ -45,6 +45,7 @@ export async function openFile(
   browser: Browser,
   path: string,
   options: BrowserContextOptions = {},
+  hash = '',
 ): Promise<OpenReport> {
   const context = await browser.newContext({
     offline: true,
@@ -64,17 +65,19 @@ export async function openFile(
   });
   page.on('request', (request) => {
     const url = request.url();
-    if (url !== file && !/^(data|blob):/.test(url)) heard.push(`request: ${url}`);
+    if (url.replace(/#.*/, '') !== file && !/^(data|blob):/.test(url)) heard.push(`request: ${url}`);
   });
   await page.addInitScript(() => {
     const violations: string[] = [];
     addEventListener('securitypolicyviolation', (event) => violations.push(`policy: ${event.violatedDirective}`));
     Object.assign(globalThis, { violations });
   });
-  await page.goto(file);
+  await page.goto(`${file}${hash}`);
   const violations = (): Promise<string[]> =>
     page.evaluate(() => (globalThis as unknown as { violations: string[] }).violations);
   return { page, complaints: async () => [...heard, ...(await violations())], close: () => context.close() };
 }
 
 export const drawn = (page: Page): Promise<void> => page.locator('body[data-drawn="yes"]').waitFor({ timeout: 30_000 });
+
+export const live = (page: Page): Promise<void> => page.locator('body[data-live="yes"]').waitFor({ timeout: 30_000 });
