@@ -2,15 +2,15 @@
 import type { Layout } from 'plotly.js-dist-min';
 import type { TdbSeconds } from '../../sim/si.ts';
 import { utcMillis } from '../words/date.ts';
-import type { TimeUnit } from '../words/number.ts';
 import { calendarTicks } from './calendarTicks.ts';
 import type { FigureStyle } from './figure.ts';
+import type { AxisUnit } from './orbitAxis.ts';
 import { type TopTicks, topAxisLayout } from './topAxis.ts';
 
 export interface DateAxis {
   /** The date of zero on the time axis. */
   readonly zero: TdbSeconds;
-  readonly unit: TimeUnit;
+  readonly unit: AxisUnit;
   readonly atMost: number;
 }
 

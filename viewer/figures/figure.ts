@@ -1,6 +1,7 @@
 /** What every figure builder returns: plain JSON for Plotly and the words that stand with it. */
 import type { Data, Layout } from 'plotly.js-dist-min';
 import type { LegendLine } from './chartLine.ts';
+import type { Reading } from './reading.ts';
 import type { Theme } from './theme.ts';
 import type { View } from './view.ts';
 
@@ -25,4 +26,6 @@ export interface FigureStyle {
   readonly narrow: boolean;
   /** The part that the reader has zoomed to, so that names and dates stand where they belong; null for the whole. */
   readonly view: View | null;
+  /** `plainReading` where it is left out. */
+  readonly reading?: Reading;
 }

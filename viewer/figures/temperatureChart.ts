@@ -2,12 +2,13 @@
 import type { Layout } from 'plotly.js-dist-min';
 import type { Seconds, TdbSeconds } from '../../sim/si.ts';
 import { findingValue } from '../words/columns.ts';
-import { list, type TimeUnit } from '../words/number.ts';
+import { list } from '../words/number.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type ChartLine, traceOf } from './chartLine.ts';
-import { dateAxisLayout } from './dateAxis.ts';
+import { type DateAxis, dateAxisLayout, dateTicks } from './dateAxis.ts';
 import type { Figure, FigureStyle } from './figure.ts';
 import { namesBesideLines } from './lineNames.ts';
+import type { AxisUnit } from './orbitAxis.ts';
 import { originalLine, type TemperatureLine, temperatureLines } from './temperatureLines.ts';
 import { topAxisAnchor } from './topAxis.ts';
 import { extremes } from './variables.ts';
@@ -36,11 +37,13 @@ export interface TemperatureChart {
   readonly originals?: readonly TemperatureLine[];
   readonly from: Seconds;
   readonly to: Seconds;
-  readonly unit: TimeUnit;
+  readonly unit: AxisUnit;
   readonly timeTitle: string;
   readonly moments: readonly Moment[];
   /** Date of zero on the time axis, where it is known. */
   readonly zeroDate: TdbSeconds | null;
+  /** Dates stand at the foot instead of the numbers, and no second axis above. */
+  readonly datesBelow?: boolean;
   readonly style: FigureStyle;
 }
 
@@ -65,9 +68,21 @@ export function temperatureFigure(
     ...words,
     caption: [words.caption, ...windowWords(chart, whole)].join(' '),
     lines,
-    data: dates ? [...traces, topAxisAnchor('dates', view.x[0], view.y[0])] : traces,
-    layout: dates ? { ...layout, xaxis2: dateAxisLayout(dates, view.x, style) } : layout,
+    data: dates && !chart.datesBelow ? [...traces, topAxisAnchor('dates', view.x[0], view.y[0])] : traces,
+    layout: dates ? withDates(chart, layout, dates, view) : layout,
   };
+}
+
+function withDates(
+  { datesBelow, style }: TemperatureChart,
+  layout: Partial<Layout>,
+  dates: DateAxis,
+  view: View,
+): Partial<Layout> {
+  if (!datesBelow) return { ...layout, xaxis2: dateAxisLayout(dates, view.x, style) };
+  const { places, labels } = dateTicks(dates, view.x[0], view.x[1]);
+  const ticks = { tickmode: 'array', tickvals: places, ticktext: labels } as const;
+  return { ...layout, xaxis: { ...layout.xaxis, ...ticks, title: { text: 'Date (UTC)', standoff: 8 } } };
 }
 
 /** The range of temperatures shown: every line and the textbook values, with a little air; windows do not stretch it. */
@@ -108,7 +123,7 @@ function temperatureLayout(chart: TemperatureChart, lines: readonly ChartLine[],
       anchor: 'free',
       position: 0,
       nticks: narrow ? 5 : 10,
-      unifiedhovertitle: { text: `%{x:.4~g} ${unit.symbol}` },
+      unifiedhovertitle: { text: `%{x:.4~g}${unit.symbol === '°' ? '' : ' '}${unit.symbol}` },
       showgrid: false,
     },
     yaxis: {

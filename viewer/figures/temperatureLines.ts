@@ -1,7 +1,8 @@
 /** The lines of a temperature chart: every state, its steady value, the textbook's one number. Pure. */
 import { type Column, columnName, findingValue } from '../words/columns.ts';
-import { kelvin, type TimeUnit } from '../words/number.ts';
+import { kelvin } from '../words/number.ts';
 import type { ChartLine, Owner } from './chartLine.ts';
+import type { AxisUnit } from './orbitAxis.ts';
 import type { Span } from './orbitSpan.ts';
 import { plainLabel } from './plainLabel.ts';
 import { caseColour, caseMarker, type Theme } from './theme.ts';
@@ -14,7 +15,7 @@ export interface TemperatureLine {
 }
 
 /** References first, so that temperatures lie above them. One that several columns share is drawn once, in quiet ink. */
-export function temperatureLines(lines: readonly TemperatureLine[], unit: TimeUnit, theme: Theme): ChartLine[] {
+export function temperatureLines(lines: readonly TemperatureLine[], unit: AxisUnit, theme: Theme): ChartLine[] {
   return [
     ...groups(lines, sameTextbookValue).flatMap((group) => textbookLine(group, lines, unit, theme)),
     ...groups(lines, sameSteadyValue).map((group) => steadyLine(group, lines, unit, theme)),
@@ -22,12 +23,12 @@ export function temperatureLines(lines: readonly TemperatureLine[], unit: TimeUn
   ];
 }
 
-function stateLine({ column, span }: TemperatureLine, unit: TimeUnit, theme: Theme): ChartLine {
+function stateLine({ column, span }: TemperatureLine, unit: AxisUnit, theme: Theme): ChartLine {
   return { ...stateLook(column, theme), x: inUnit(span, unit), y: along(column, span, 'temperature') };
 }
 
 /** A state as it was before its numbers were moved. */
-export function originalLine({ column, span }: TemperatureLine, unit: TimeUnit, theme: Theme): ChartLine {
+export function originalLine({ column, span }: TemperatureLine, unit: AxisUnit, theme: Theme): ChartLine {
   const { colour, dash } = stateLook(column, theme);
   return {
     ...names(`${columnName(column)}, before`),
@@ -56,13 +57,13 @@ export function stateLook(column: Column, theme: Theme): Omit<ChartLine, 'x' | '
   };
 }
 
-function steadyLine(group: Group, all: Group, unit: TimeUnit, theme: Theme): ChartLine {
+function steadyLine(group: Group, all: Group, unit: AxisUnit, theme: Theme): ChartLine {
   const { column, span } = group[0]!;
   const y = along(column, span, 'steadyTemperature');
   return { ...reference('steady value', group, all, theme), x: inUnit(span, unit), y, dash: 'dash' };
 }
 
-function textbookLine(group: Group, all: Group, unit: TimeUnit, theme: Theme): ChartLine[] {
+function textbookLine(group: Group, all: Group, unit: AxisUnit, theme: Theme): ChartLine[] {
   const value = findingValue(group[0]!.column, 'equilibriumTemperature');
   if (value === null) return [];
   const ends = group.flatMap(({ span }) => [span.time[0]!, span.time.at(-1)!]);
@@ -137,7 +138,7 @@ function nearly(a: number, b: number): boolean {
   return Math.abs(a - b) <= 1e-9 * Math.max(Math.abs(a), Math.abs(b));
 }
 
-function inUnit(span: Span, unit: TimeUnit): number[] {
+function inUnit(span: Span, unit: AxisUnit): number[] {
   return span.time.map((t) => t / unit.seconds);
 }
 

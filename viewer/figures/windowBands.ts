@@ -1,9 +1,9 @@
 /** Windows drawn: temperature windows as bands across the chart, instellation windows as bars of time beneath it. Pure. */
 import type { Annotation, Shape } from 'plotly.js-dist-min';
 import type { Window } from '../../sim/world.ts';
-import type { TimeUnit } from '../words/number.ts';
 import type { FigureStyle } from './figure.ts';
 import { type Course, freeCorner } from './freeCorner.ts';
+import type { AxisUnit } from './orbitAxis.ts';
 import { plainLabel } from './plainLabel.ts';
 import type { TemperatureLine } from './temperatureLines.ts';
 import { caseColour } from './theme.ts';
@@ -99,7 +99,8 @@ export function instellationRows(lines: readonly TemperatureLine[], { theme }: F
         colour: caseColour(theme, column.caseIndex),
         stretches: stretchesInside(column.dataset, span, window),
       }));
-    const agree = rows.every(({ stretches }) => sameStretches(stretches, rows[0]!.stretches));
+    const length = Math.max(...lines.map(({ span }) => span.time.at(-1)! - span.time[0]!));
+    const agree = rows.every(({ stretches }) => sameStretches(stretches, rows[0]!.stretches, length));
     return agree ? [{ ...rows[0]!, name: window.name, colour: theme.bandEdge }] : rows;
   });
 }
@@ -107,7 +108,7 @@ export function instellationRows(lines: readonly TemperatureLine[], { theme }: F
 export const barRowHeight = 28;
 
 /** `total` is the height in pixels of bars and chart together. */
-export function instellationBars(rows: readonly BarRow[], total: number, unit: TimeUnit, style: FigureStyle): Drawing {
+export function instellationBars(rows: readonly BarRow[], total: number, unit: AxisUnit, style: FigureStyle): Drawing {
   const foot = (row: number): number => ((rows.length - 1 - row) * barRowHeight + 4) / total;
   return {
     shapes: rows.flatMap(({ name, colour, stretches }, row) =>
@@ -157,9 +158,9 @@ function sameWindow(a: Window, b: Window): boolean {
   return a.of === b.of && a.name === b.name && a.from === b.from && a.to === b.to;
 }
 
-/** To within a second or a millionth, so that rounding does not draw the same bar twice. */
-function sameStretches(a: readonly Stretch[], b: readonly Stretch[]): boolean {
+/** To within a ten-millionth of the axis or a millionth of itself, so that rounding does not draw the same bar twice. */
+function sameStretches(a: readonly Stretch[], b: readonly Stretch[], length: number): boolean {
   const close = (one: number, other: number): boolean =>
-    Math.abs(one - other) <= Math.max(1, 1e-6 * Math.max(Math.abs(one), Math.abs(other)));
+    Math.abs(one - other) <= Math.max(1e-7 * length, 1e-6 * Math.max(Math.abs(one), Math.abs(other)));
   return a.length === b.length && a.every((s, index) => close(s.from, b[index]!.from) && close(s.to, b[index]!.to));
 }

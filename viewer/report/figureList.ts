@@ -1,7 +1,9 @@
 /** The figures of a page, each with a name by which it is known again when the numbers behind it have moved. */
 import type { Figure, FigureStyle } from '../figures/figure.ts';
+import { plainReading, type Reading } from '../figures/reading.ts';
 import { element } from './element.ts';
 import { type FigureView, figureView } from './figureView.ts';
+import { type ReadingChoices, readingBar } from './readingBar.ts';
 import type { Setting } from './surroundings.ts';
 
 export interface FigureBuilder {
@@ -14,13 +16,23 @@ export interface FigureList {
   /** All that are there now. */
   views(): readonly FigureView[];
   /** Other numbers: figures in view are drawn at once, the others when they come into view. */
-  show(builders: readonly FigureBuilder[]): void;
+  show(builders: readonly FigureBuilder[], choices: ReadingChoices): void;
+  /** How the figures are read; `changed` hears of what the reader chooses. */
+  read(reading: Reading): void;
+  onRead(changed: (reading: Reading) => void): void;
   /** Draws all; one after another, with `breath` between. */
   draw(setting: Setting, breath?: () => Promise<void>): Promise<void>;
 }
 
-export function figureList(first: readonly FigureBuilder[]): FigureList {
-  const box = element('div', { class: 'figures' });
+export function figureList(first: readonly FigureBuilder[], firstChoices: ReadingChoices): FigureList {
+  let reading = plainReading;
+  let heard: (reading: Reading) => void = () => undefined;
+  const bar = readingBar((chosen) => {
+    readAs(chosen);
+    heard(chosen);
+  });
+  bar.offer(firstChoices);
+  const box = element('div', { class: 'figure-list' });
   const views = new Map<string, FigureView>();
   const stale = new Set<FigureView>();
   const inView = new Set<Element>();
@@ -41,8 +53,21 @@ export function figureList(first: readonly FigureBuilder[]): FigureList {
     for (const view of stale) {
       if (!inView.has(view.element)) continue;
       stale.delete(view);
-      void view.draw(setting);
+      void view.draw(read(setting));
     }
+  }
+
+  function read(plain: Setting): Setting {
+    return { ...plain, style: { ...plain.style, reading } };
+  }
+
+  function readAs(chosen: Reading): void {
+    reading = chosen;
+    for (const view of views.values()) {
+      view.leaveZoom();
+      stale.add(view);
+    }
+    drawSeen();
   }
 
   function lay(builders: readonly FigureBuilder[]): void {
@@ -67,17 +92,25 @@ export function figureList(first: readonly FigureBuilder[]): FigureList {
 
   lay(first);
   return {
-    element: box,
+    element: element('div', { class: 'figures' }, bar.element, box),
     views: () => [...views.values()],
-    show(builders) {
+    show(builders, choices) {
+      bar.offer(choices);
       lay(builders);
       drawSeen();
+    },
+    read(chosen) {
+      bar.show(chosen);
+      readAs(chosen);
+    },
+    onRead(changed) {
+      heard = changed;
     },
     async draw(changed, breath = async () => undefined) {
       setting = changed;
       for (const view of views.values()) {
         stale.delete(view);
-        await view.draw(changed);
+        await view.draw(read(changed));
         await breath();
       }
     },

@@ -1,5 +1,6 @@
 /** A figure on the page: drawn by Plotly, redrawn as the surroundings change, saved on request. */
 import type { Config, Layout } from 'plotly.js-dist-min';
+import { inCelsius } from '../figures/celsius.ts';
 import type { Figure, FigureStyle } from '../figures/figure.ts';
 import { lightTheme } from '../figures/theme.ts';
 import type { View } from '../figures/view.ts';
@@ -16,8 +17,10 @@ export interface FigureView {
   draw(setting: Setting): Promise<void>;
   /** Call when what `build` makes has changed: words and picture, the whole of it. */
   refresh(): Promise<void>;
-  /** Another place and other numbers behind the same figure: its words at once, its picture with the next `draw`. */
+  /** Another place and other numbers behind the same figure: shown with the next `draw`. */
   renew(number: number, build: Build): void;
+  /** The next `draw` shows the whole. */
+  leaveZoom(): void;
 }
 
 export type Build = (style: FigureStyle) => Figure;
@@ -29,6 +32,11 @@ const savedStyle: FigureStyle = { theme: lightTheme, narrow: false, view: null }
 const savedWidth = 1100;
 /** Device pixels to each CSS pixel of a saved PNG. */
 const pngScale = 3;
+/** What is saved is read as it is shown. */
+function savedAs(setting: Setting | null): FigureStyle {
+  const reading = setting?.style.reading;
+  return reading === undefined ? savedStyle : { ...savedStyle, reading };
+}
 /** Below this Plotly has no room between its margins, and writes positions that are no numbers. */
 const leastWidth = { wide: 560, narrow: 240 };
 
@@ -43,13 +51,14 @@ export function figureView(first: number, made: Build, controls: HTMLElement | n
   const whole = button('Show all', () => show(null));
   whole.hidden = true;
   const saving = (['svg', 'png'] as const).map((format) =>
-    button(`Save ${format.toUpperCase()}`, () => save(build, format)),
+    button(`Save ${format.toUpperCase()}`, () =>
+      save((style) => asRead(build, { ...style, ...savedAs(setting) }), format),
+    ),
   );
   const tools = element('p', { class: 'tools' }, whole, ...saving);
   const words = element('figcaption', controls === null ? {} : { 'aria-live': 'polite' });
 
-  function describe(): void {
-    const { title, textAlternative, caption } = build(savedStyle);
+  function say({ title, textAlternative, caption }: Figure): void {
     plot.setAttribute('aria-label', `${title}. ${textAlternative}`);
     const finding = controls === null ? [] : [textAlternative, ' '];
     words.replaceChildren(element('b', {}, `Figure ${number}. ${title}. `), ...finding, caption);
@@ -59,7 +68,8 @@ export function figureView(first: number, made: Build, controls: HTMLElement | n
     if (setting === null) return;
     view = part;
     whole.hidden = view === null;
-    const figure = build({ ...setting.style, view });
+    const figure = asRead(build, { ...setting.style, view });
+    say(figure);
     legend.replaceChildren(...(setting.style.narrow ? legendEntries(figure) : []));
     await plotly().react(plot, figure.data, drawnLayout(figure, setting, widthFor(plot, setting)), config);
   }
@@ -74,17 +84,15 @@ export function figureView(first: number, made: Build, controls: HTMLElement | n
   }
 
   async function refresh(): Promise<void> {
-    describe();
     await show(null);
   }
 
   function renew(place: number, next: Build): void {
     number = place;
     build = next;
-    describe();
   }
 
-  describe();
+  say(build(savedStyle));
   return {
     element: element(
       'figure',
@@ -97,7 +105,15 @@ export function figureView(first: number, made: Build, controls: HTMLElement | n
     draw,
     refresh,
     renew,
+    leaveZoom() {
+      view = null;
+    },
   };
+}
+
+function asRead(build: Build, style: FigureStyle): Figure {
+  const figure = build(style);
+  return style.reading?.unit === 'degC' ? inCelsius(figure) : figure;
 }
 
 function widthFor(plot: HTMLElement, { width, style }: Setting): number {

@@ -10,7 +10,7 @@ describe('what a page carries', () => {
   test('a trace comes back as it was written, a run as a run', () => {
     const trace = traceOf([plainCase()]);
     expect(readPage(written({ trace }))).toEqual({ trace });
-    expect(Object.keys(readPage(written({ result: plainRun() })))).toEqual(['result']);
+    expect(Object.keys(readPage(written({ result: plainRun() })))).toEqual(['result', 'tree']);
   });
 
   test('a damaged trace is answered in words', () => {

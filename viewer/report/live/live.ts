@@ -1,6 +1,7 @@
 /** The live page: what the reader moves goes to the solver, and its answers to the page. */
 import type { CaseResult, RunResult } from '../../../sim/run.ts';
 import type { EditedCase } from '../../../sim/scenario/edited.ts';
+import { plainReading } from '../../figures/reading.ts';
 import { movesText, nameFor } from '../../words/moves.ts';
 import { element } from '../element.ts';
 import type { RunPage } from '../page.ts';
@@ -16,6 +17,8 @@ import {
   type LiveState,
   moved,
   presentCases,
+  readingFromHash,
+  readingToHash,
   reset,
   toHash,
   unmoved,
@@ -60,6 +63,12 @@ function run(page: RunPage, original: RunResult, tree: unknown, box: HTMLElement
   let controls: Panel | null = null;
   let shown = original;
   let writing = 0;
+  let reading = plainReading;
+  const linkOf = () => [toHash(state, names), readingToHash(reading)].filter((part) => part !== '').join('&');
+  page.figures.onRead((chosen) => {
+    reading = chosen;
+    linkSoon();
+  });
 
   const solver: Solver = startSolver(tree, original.scenario.file, {
     opened(cases) {
@@ -105,9 +114,13 @@ function run(page: RunPage, original: RunResult, tree: unknown, box: HTMLElement
   function change(next: LiveState): void {
     state = next;
     controls?.show(state, siOf);
+    linkSoon();
+    request();
+  }
+
+  function linkSoon(): void {
     clearTimeout(writing);
     writing = setTimeout(writeLink, 200) as unknown as number;
-    request();
   }
 
   function request(): void {
@@ -162,14 +175,16 @@ function run(page: RunPage, original: RunResult, tree: unknown, box: HTMLElement
 
   function takeLink(): void {
     const hash = location.hash.replace(/^#/, '');
-    if (hash === toHash(state, names)) return;
+    if (hash === linkOf()) return;
+    reading = readingFromHash(hash, names);
+    page.figures.read(reading);
     const isKnown = (caseName: string, key: string) =>
       known.some(({ name, dials }) => name === caseName && dials.some((dial) => dial.key === key));
     change(fromHash(hash, names, isKnown));
   }
 
   function writeLink(): void {
-    const hash = toHash(state, names);
+    const hash = linkOf();
     if (hash !== location.hash.replace(/^#/, ''))
       history.replaceState(null, '', hash === '' ? location.pathname : `#${hash}`);
   }

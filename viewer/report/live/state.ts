@@ -1,5 +1,6 @@
 /** What a reader has moved: which number of which case, and what was kept beside the cases of the file. Pure. */
 import type { EditedCase } from '../../../sim/scenario/edited.ts';
+import { axisNames, plainReading, type Reading } from '../../figures/reading.ts';
 
 export interface Change {
   readonly caseName: string;
@@ -62,6 +63,25 @@ export function toHash(state: LiveState, names: readonly string[]): string {
     for (const { key, text } of edits) entries.append(`kept${i}.${key}`, text);
   }
   return entries.toString();
+}
+
+/** How figures are read, as more of the same link: only what is not plain. */
+export function readingToHash({ axis, unit, against }: Reading): string {
+  const entries = new URLSearchParams();
+  if (axis !== plainReading.axis) entries.append('by', axis);
+  if (unit !== plainReading.unit) entries.append('in', unit);
+  if (against !== null) entries.append('from', against);
+  return entries.toString();
+}
+
+export function readingFromHash(hash: string, names: readonly string[]): Reading {
+  const entries = new URLSearchParams(hash.replace(/^#/, ''));
+  const against = entries.get('from');
+  return {
+    axis: axisNames.find((name) => name === entries.get('by')) ?? plainReading.axis,
+    unit: entries.get('in') === 'degC' ? 'degC' : 'K',
+    against: against !== null && names.includes(against) ? against : null,
+  };
 }
 
 /** What of a link can be understood; `isKnown` tells keys of a case. */
