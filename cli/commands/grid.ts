@@ -95,7 +95,7 @@ function setupOf({ text, file, scenario }: ScenarioFile, { along, hold, steps, o
     alongs: along,
     hold: hold ?? null,
     steps,
-    of: of === undefined ? null : [...new Set(of.split(',').map((name) => name.trim()))],
+    of: of === undefined ? null : [...new Set(of.split(',').map((name) => name.trim()))].filter((name) => name !== ''),
   };
 }
 
@@ -110,7 +110,7 @@ function jobOf(plan: GridPlan, { sha256 }: ScenarioFile, { version }: Program): 
     kind: 'gridNodes',
     setup,
     inputs: axes.map(({ along: { key, unit, label } }) => ({ name: key, unit, label })),
-    findings: findingColumns(cases.map(({ over: { name }, findings }) => ({ name, findings }))),
+    findings: findingColumns(cases),
     rows: count,
     settings: {
       scenario: sha256,
@@ -136,7 +136,7 @@ async function reportOf(
   try {
     const findings: Float64Array[] = [];
     for (const name of table.names.slice(1 + plan.axes.length)) findings.push(await table.column(name));
-    return summariseGrid(plan, scenario.cases, originOf({ ...scenario, file }, { sha256, version }), {
+    return summariseGrid(plan, scenario, originOf({ ...scenario, file }, { sha256, version }), {
       findings,
       failures: failuresOf(files.failedPath),
     });

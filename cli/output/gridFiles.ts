@@ -105,7 +105,7 @@ function findingVariable({ label, unit, values }: GridFinding, dims: readonly st
 }
 
 /** Extremes of each finding over the grid, and where. */
-export function gridSummary({ program, scenario, axes, hold, cases }: GridReport) {
+export function gridSummary({ program, scenario, axes, hold, cases, notes }: GridReport) {
   const { title, file, sha256 } = scenario;
   return {
     program,
@@ -116,13 +116,13 @@ export function gridSummary({ program, scenario, axes, hold, cases }: GridReport
       cases: cases.map((one) => ({
         name: one.name,
         model: one.model,
-        own: one.own,
+        members: one.members.map(({ name, own, universal }) => ({ name, own, universal })),
         failed: one.failed.length,
         findings: Object.fromEntries(one.findings.map((finding) => [finding.name, extremesOf(finding, axes)])),
-        universal: one.universal,
         warnings: one.warnings,
         notes: one.notes,
       })),
+      notes,
     },
   };
 }

@@ -4,6 +4,7 @@ import type { GridCase } from '../../sim/studies/grid/gridReport.ts';
 import type { StoreReading } from '../../sim/studies/grid/readBack.ts';
 import type { UniversalPlace } from '../../sim/studies/grid/storeNumber.ts';
 import type { UniversalChart } from '../../sim/studies/grid/universalChart.ts';
+import { membersOf } from '../words/gridMembers.ts';
 import { exact, fixed, list, nbsp, significant } from '../words/number.ts';
 import { placeText } from '../words/storeReading.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
@@ -41,8 +42,8 @@ const lagRange = [0, 25] as const;
 
 /** Cases of the report that have a place on the chart. */
 export function placedCases(cases: readonly GridCase[]): PlacedCase[] {
-  return cases.flatMap(({ name, universal }, caseIndex) =>
-    universal === null ? [] : [{ caseIndex, name, place: universal }],
+  return membersOf({ cases }).flatMap(({ name, index, universal }) =>
+    universal === null ? [] : [{ caseIndex: index, name, place: universal }],
   );
 }
 

@@ -2,6 +2,7 @@
 import type { GridReport } from '../../sim/studies/grid/gridReport.ts';
 import { labelInText } from './along.ts';
 import { nodeText, rangesText } from './gridAxes.ts';
+import { lookOf } from './gridMembers.ts';
 import { list } from './number.ts';
 import { extremesOf, type ShownFinding, shownFinding, spanText } from './shownFinding.ts';
 
@@ -22,9 +23,13 @@ export function gridAnswer(report: GridReport): GridAnswer {
   );
   return {
     lead: `${over}, ${all.join(', and ')}.`,
-    details: report.cases.map(({ name }, at) => {
+    details: report.cases.map((one, at) => {
       const text = caseText(report, at, told, false);
-      return { caseIndex: at, name, text: `${text[0]!.toUpperCase()}${text.slice(1)}${failedText(report, at)}` };
+      return {
+        caseIndex: lookOf(one),
+        name: one.name,
+        text: `${text[0]!.toUpperCase()}${text.slice(1)}${failedText(report, at)}`,
+      };
     }),
   };
 }

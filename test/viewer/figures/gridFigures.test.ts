@@ -8,7 +8,16 @@ import { findingMap } from '../../../viewer/figures/findingMap.ts';
 import { darkTheme, lightTheme } from '../../../viewer/figures/theme.ts';
 import { placedCases, universalMap } from '../../../viewer/figures/universalMap.ts';
 import { valueScale } from '../../../viewer/figures/valueScale.ts';
-import { curveGrid, eccentricityAxis, formula, gridCase, gridOf, heatCapacityAxis, mapGrid } from '../gridFixture.ts';
+import {
+  curveGrid,
+  eccentricityAxis,
+  formula,
+  gridCase,
+  gridOf,
+  heatCapacityAxis,
+  mapGrid,
+  unplaced,
+} from '../gridFixture.ts';
 
 const style: FigureStyle = { theme: lightTheme, narrow: false, view: null };
 interface Drawn {
@@ -165,7 +174,7 @@ describe('universalMap', () => {
     expect(named(figure, 'shallow sea')).toMatchObject({ x: [2.1e7 / 9.1e6], y: [0.42] });
     expect(texts(figure)).toEqual(expect.arrayContaining(['shallow sea', 'thin air', 'deep sea']));
     expect(figure.textAlternative).toContain('shallow sea: eccentricity 0.42, heat-store number 2.31');
-    expect(placedCases(mapGrid().cases.map((one) => ({ ...one, universal: null })))).toEqual([]);
+    expect(placedCases(unplaced(mapGrid().cases))).toEqual([]);
   });
 
   test('a reading is a cross with its range; an open side goes to the edge', () => {

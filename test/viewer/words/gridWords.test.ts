@@ -5,7 +5,16 @@ import { gridCautions, gridSteps } from '../../../viewer/words/gridMethod.ts';
 import { extremeRows } from '../../../viewer/words/gridTable.ts';
 import { extremesOf, offeredFindings, shownFinding } from '../../../viewer/words/shownFinding.ts';
 import { readingText } from '../../../viewer/words/storeReading.ts';
-import { curveGrid, eccentricityAxis, gridCase, gridOf, heatCapacityAxis, mapGrid, perNumber } from '../gridFixture.ts';
+import {
+  curveGrid,
+  eccentricityAxis,
+  gridCase,
+  gridOf,
+  heatCapacityAxis,
+  mapGrid,
+  perNumber,
+  unplaced,
+} from '../gridFixture.ts';
 
 const plain = (text: string): string => text.replaceAll('\u00a0', ' ');
 const oneCase = () => {
@@ -125,7 +134,7 @@ describe('method and cautions of a grid', () => {
     const held = {
       ...report,
       hold: 'orbitMeanInstellation',
-      cases: report.cases.map((one) => ({ ...one, universal: null })),
+      cases: unplaced(report.cases),
     };
     expect(words(held)).toContain('is held at the scenario’s value');
     expect(words(held)).not.toContain('heat-store number');
