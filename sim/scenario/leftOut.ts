@@ -20,6 +20,7 @@ export function replacedNotes(replaced: readonly Replaced[]): string[] {
   });
 }
 
-function listed(words: readonly string[]): string {
+/** `a, b and c`. */
+export function listed(words: readonly string[]): string {
   return words.length > 1 ? `${words.slice(0, -1).join(', ')} and ${words.at(-1)}` : (words[0] ?? '');
 }

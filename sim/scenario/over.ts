@@ -7,7 +7,7 @@ import type { Built } from './build/world.ts';
 import { conflicts } from './cases.ts';
 import { withDefaults } from './defaults.ts';
 import { following, type Hold, holdNote } from './hold.ts';
-import { redundantNote } from './leftOut.ts';
+import { listed, redundantNote } from './leftOut.ts';
 import { merge, patchOf, type Replaced, replacedIn } from './merge.ts';
 import { nodesOf } from './nodes.ts';
 import { type Probes, probe } from './probes.ts';
@@ -94,7 +94,7 @@ function caseOver(one: ScenarioCase, tree: Branch, alongs: readonly Along[], opt
   );
   for (const { key, instead } of redundant) {
     if (!alongs.some((along) => along.key === key)) continue;
-    const what = `${key} of case \`${one.name}\` follows from ${instead.join(' and ')}`;
+    const what = `${key} of case \`${one.name}\` follows from ${listed(instead)}`;
     throw new SimError(where, what, 'Follow one of those');
   }
   const eccentricityAt = alongs.findIndex(({ key }) => key === 'orbit.eccentricity');

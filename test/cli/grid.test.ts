@@ -202,6 +202,16 @@ test.each([
     '--of: there is no finding `temperture`. Did you mean',
   ],
   [['--along', 'orbit.eccentricity=0 to 0.9', '--hold', 'period'], '--hold: `period` cannot be held'],
+  [
+    ['--along', 'orbit.eccentricity=0', 'to', '0.9', '--steps', '3'],
+    "--along: the range is not in quotes. Write --along 'orbit.eccentricity=0 to 0.9'.",
+  ],
+  [
+    ['--along', 'orbit.eccentricity', '=', '0', 'to', '0.9'],
+    "--along: the range is not in quotes. Write --along 'orbit.eccentricity=0 to 0.9'.",
+  ],
+  [['--along', 'orbit.eccentricity=0 to 0.9', '--of', ' , '], '--of: no finding is named. Choose from period,'],
+  [['--along', 'orbit.eccentricity=0..0.9'], '--along: `0..0.9` is not a range. Write `orbit.eccentricity=0 to 0.9`.'],
   [['--along', 'orbit.eccentricity=0 to 2'], '--along: orbit.eccentricity'],
   [[...ranges, '--along', 'star.luminosity=1 to 2 Lsun'], '--along: 3 ranges are given'],
   [['--along', 'orbit.eccentricity=0 to 0.9', '--steps', '1'], '--steps takes a whole number from 2'],
