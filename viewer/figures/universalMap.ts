@@ -1,7 +1,7 @@
 /** Figure: damping and lag of every plain lumped world, with the cases placed among them. Pure. */
 import type { Annotation, Data, Layout, Shape } from 'plotly.js-dist-min';
 import type { GridCase } from '../../sim/studies/grid/gridReport.ts';
-import type { StoreReading } from '../../sim/studies/grid/readBack.ts';
+import type { ReadBack } from '../../sim/studies/grid/readBack.ts';
 import type { UniversalPlace } from '../../sim/studies/grid/storeNumber.ts';
 import type { UniversalChart } from '../../sim/studies/grid/universalChart.ts';
 import { membersOf } from '../words/gridMembers.ts';
@@ -28,7 +28,7 @@ export interface PlacedCase {
 /** What was read back, to be marked. */
 export interface MarkedReading {
   readonly eccentricity: number;
-  readonly reading: StoreReading;
+  readonly reading: Pick<ReadBack, 'storeNumber' | 'low' | 'high'>;
 }
 
 const plotHeight = { wide: 420, narrow: 330 };
@@ -161,7 +161,7 @@ function markers(placed: readonly PlacedCase[]): Data[] {
   }));
 }
 
-/** A cross at what was read, with a bar for its uncertainty; a side without a limit goes to the edge. */
+/** A cross at what was read, if anything was, with a bar for its uncertainty; a side without a limit goes to the edge. */
 function readingMarks(marked: MarkedReading | null, { storeNumbers }: UniversalChart): Data[] {
   if (marked === null) return [];
   const { eccentricity, reading } = marked;
@@ -171,14 +171,18 @@ function readingMarks(marked: MarkedReading | null, { storeNumbers }: UniversalC
   return [
     { type: 'scatter', mode: 'lines', name: 'read back, edge', ...bar, line: { color: '#000000', width: 5 } },
     { type: 'scatter', mode: 'lines', name: 'read back', ...bar, line: { color: '#ffffff', width: 2.5 } },
-    {
-      type: 'scatter',
-      mode: 'markers',
-      name: 'read back',
-      x: [reading.storeNumber],
-      y: [eccentricity],
-      marker: { symbol: 'x', size: 11, color: '#ffffff', line: { color: '#000000', width: 1.5 } },
-    },
+    ...(reading.storeNumber === null
+      ? []
+      : [
+          {
+            type: 'scatter',
+            mode: 'markers',
+            name: 'read back',
+            x: [reading.storeNumber],
+            y: [eccentricity],
+            marker: { symbol: 'x', size: 11, color: '#ffffff', line: { color: '#000000', width: 1.5 } },
+          },
+        ]),
   ].map((trace) => ({ ...trace, hoverinfo: 'skip' })) as Data[];
 }
 
@@ -299,7 +303,7 @@ function finding(placed: readonly PlacedCase[], marked: MarkedReading | null): s
   return [
     'The lag grows with the heat store, up to a quarter of an orbit on a nearly circular one and less on an eccentric one; the damping hardly depends on the eccentricity.',
     ...(cases.length > 0 ? [`${list(cases)}.`] : []),
-    ...(marked === null
+    ...(marked === null || marked.reading.storeNumber === null
       ? []
       : [
           `Read back at eccentricity ${exact(marked.eccentricity)}: heat-store number ${significant(marked.reading.storeNumber, 3)}.`,

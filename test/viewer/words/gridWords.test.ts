@@ -159,6 +159,10 @@ describe('readingText', () => {
     expect(readingText({ storeNumber: 2, low: 1, high: null }, place)).toContain('(above 1.00)');
     const tooLate = lagReader()({ eccentricity: 0.3, lag: 0.24, plusMinus: 0 });
     expect(readingText(tooLate, place)).toMatch(/^No heat store can be read: at this eccentricity no heat store/);
+    const nearly = { storeNumber: null, reason: 'it is late', low: 2, high: null };
+    expect(plain(readingText(nearly, place))).toBe(
+      'No heat store can be read: it is late. Its uncertainty takes in heat-store numbers above 2.00: heat capacities above 1.82 × 10⁷ J m⁻² K⁻¹.',
+    );
   });
 });
 
