@@ -57,7 +57,7 @@ function caseText(report: GridReport, at: number, told: readonly Told[], isWhole
   const text = told.map(({ what, shown }) => runs(what, shown, shown.cases[at] ?? [])).join(', and ');
   const found = extremesOf(told.find(({ name }) => name === 'temperatureMean')?.shown.cases[at] ?? []);
   if (!isWhole || found === null || found.high.value === found.low.value) return `${text}.`;
-  const warmest = `It is warmest on average at ${nodeText(report.axes, found.high.node)}`;
+  const warmest = `The planet is warmest on average at ${nodeText(report.axes, found.high.node)}`;
   return `${text}. ${warmest}, coldest at ${nodeText(report.axes, found.low.node)}.`;
 }
 

@@ -80,7 +80,7 @@ describe('gridAnswer', () => {
   test('one case: over which range, from where to where, and where it is warmest', () => {
     const { lead, details } = gridAnswer(oneCase());
     expect(plain(lead)).toBe(
-      'Over eccentricity 0 to 0.9, the mean temperature runs from 290.0 to 356.9 K, and the lag runs from 2.93 to 18.05 % of an orbit. It is warmest on average at eccentricity 0.9, coldest at eccentricity 0.',
+      'Over eccentricity 0 to 0.9, the mean temperature runs from 290.0 to 356.9 K, and the lag runs from 2.93 to 18.05 % of an orbit. The planet is warmest on average at eccentricity 0.9, coldest at eccentricity 0.',
     );
     expect(details).toEqual([]);
   });
