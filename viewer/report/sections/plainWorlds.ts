@@ -6,7 +6,7 @@ import { chartNodes, universalChart } from '../../../sim/studies/grid/universalC
 import { type MarkedReading, type PlacedCase, placedCases, universalMap } from '../../figures/universalMap.ts';
 import { exact } from '../../words/number.ts';
 import { readingText } from '../../words/storeReading.ts';
-import { chooser, numberField } from '../controls.ts';
+import { choice, numberField } from '../controls.ts';
 import { element } from '../element.ts';
 import { type FigureView, figureView } from '../figureView.ts';
 
@@ -102,7 +102,7 @@ function readingForm(
       update();
     });
   const cases = placed.map(({ name }, at) => ({ value: String(at), label: name }));
-  const caseChooser = chooser('Case', [{ label: null, choices: cases }], (value) => {
+  const caseChoice = choice('Case', [{ title: 'Cases', options: cases }], String(caseAt), (value) => {
     caseAt = Number(value);
     update();
   });
@@ -117,7 +117,7 @@ function readingForm(
       field('Eccentricity', '', 'eccentricity'),
       field('Lag behind periapsis', '% of an orbit', 'lag'),
       field('Its uncertainty, ±', '% of an orbit', 'plusMinus'),
-      ...(cases.length > 1 ? [caseChooser] : []),
+      ...(cases.length > 1 ? [caseChoice] : []),
     ),
     answer,
   );
