@@ -1,7 +1,7 @@
 /** `perilag grid`: every finding of each case over one or two inputs, as curves or maps and as files. */
 import { readFileSync } from 'node:fs';
 import { availableParallelism } from 'node:os';
-import { join, resolve } from 'node:path';
+import { resolve } from 'node:path';
 import { originOf } from '../../sim/origin.ts';
 import { findingColumns } from '../../sim/studies/columnName.ts';
 import type { GridReport } from '../../sim/studies/grid/gridReport.ts';
@@ -22,7 +22,7 @@ import { jsonText } from '../output/json.ts';
 import { pagePieces } from '../output/report.ts';
 import { scenarioYamlText } from '../output/scenarioYaml.ts';
 import { terminalOf } from '../output/terminal.ts';
-import { hanging } from '../output/text.ts';
+import { writtenText } from '../output/written.ts';
 import { samplesFrom } from '../posteriorFile.ts';
 import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
@@ -156,9 +156,7 @@ function show(report: GridReport, out: string, { json, quiet }: GridOptions, io:
   if (quiet) return;
   const terminal = terminalOf(io);
   if (!json) io.stdout.write(`${gridLines(report, terminal).join('\n')}\n`);
-  const failed = report.cases.some((one) => one.failed.length > 0) ? ', failed-grid.csv' : '';
-  const listed = `summary.json, grid.csv, grid.nc, grid.parquet${failed}, scenario.yaml beside it`;
-  io.stderr.write(
-    `report  ${terminal.say(join(out, 'report.html'))}\n${hanging('files   ', listed, terminal.width).join('\n')}\n`,
-  );
+  const failed = report.cases.some((one) => one.failed.length > 0) ? ['failed-grid.csv'] : [];
+  const beside = ['summary.json', 'grid.csv', 'grid.nc', 'grid.parquet', ...failed, 'scenario.yaml'];
+  io.stderr.write(writtenText(out, beside, terminal));
 }
