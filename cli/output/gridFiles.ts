@@ -50,6 +50,8 @@ const missing = 9.969209968386869e36;
 export function gridNetcdf(report: GridReport, scenario: string, history: string): NetcdfFile {
   const { program, axes, cases } = report;
   const names = groupNames(cases.map(({ name }) => name));
+  const held = report.hold === null ? [] : [`${report.hold} is held as the eccentricity varies`];
+  const comment = [...held, ...report.notes].join('\n');
   return {
     attributes: {
       Conventions: 'CF-1.11',
@@ -57,7 +59,7 @@ export function gridNetcdf(report: GridReport, scenario: string, history: string
       history,
       source: `${program.name} ${program.version}`,
       groups: names.join(' '),
-      ...(report.hold === null ? {} : { comment: `${report.hold} is held as the eccentricity varies` }),
+      ...(comment === '' ? {} : { comment }),
       scenario,
     },
     dimensions: {},
