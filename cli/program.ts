@@ -24,7 +24,7 @@ function program(words: readonly string[], io: Io, outcome: { code: number }): C
     .configureOutput({
       writeOut: (text) => io.stdout.write(text),
       writeErr: (text) => io.stderr.write(text),
-      outputError: (text, write) => write(ownWords(text, words[0])),
+      outputError: (text, write) => write(ownWords(text, words)),
     })
     .configureHelp({ helpWidth: Math.min(io.columns, 120) })
     .addHelpText('after', '\nStart with `perilag new planet.yaml`, then `perilag run planet.yaml`.');
@@ -146,12 +146,26 @@ const completeCommands: Readonly<Record<string, string>> = {
   gather: 'perilag gather part-1 part-2 -o whole',
 };
 
-/** An option that a command cannot do without, in the form of our own errors; everything else as Commander tells it. */
-function ownWords(text: string, command = ''): string {
+/** What a user most often trips over, in the form of our own errors; everything else as Commander tells it. */
+function ownWords(text: string, words: readonly string[]): string {
+  const [command = ''] = words;
+  const torn = /too many arguments/.test(text) ? tornRange(words) : null;
+  if (torn !== null) return `--along: the range is not in quotes. Write --along '${torn}'.\n`;
   const [, flags] = /required option '([^']+)' not specified/.exec(text) ?? [];
   const complete = completeCommands[command];
   if (flags === undefined || complete === undefined) return text;
   return `${command}: ${flags} is missing. Write e.g. \`${complete}\`.\n`;
+}
+
+/** The range of an `--along` that the shell took apart at its spaces; null where there is none. */
+function tornRange(words: readonly string[]): string | null {
+  const ranges = words.flatMap((word, at) => {
+    if (word !== '--along') return [];
+    const rest = words.slice(at + 1);
+    const end = rest.findIndex((one) => /^-\D/.test(one));
+    return [(end < 0 ? rest : rest.slice(0, end)).join(' ').replace(/ ?= ?/, '=')];
+  });
+  return ranges.find((range) => / to /.test(range) && !words.includes(range)) ?? null;
 }
 
 /** Reads a whole number of an option. Errors: as Commander tells them. */

@@ -1,7 +1,7 @@
 /** `perilag grid`: every finding of each case over one or two inputs, as curves or maps and as files. */
 import { readFileSync } from 'node:fs';
 import { availableParallelism } from 'node:os';
-import { join, resolve } from 'node:path';
+import { resolve } from 'node:path';
 import { originOf } from '../../sim/origin.ts';
 import { findingColumns } from '../../sim/studies/columnName.ts';
 import type { GridReport } from '../../sim/studies/grid/gridReport.ts';
@@ -22,7 +22,7 @@ import { jsonText } from '../output/json.ts';
 import { pagePieces } from '../output/report.ts';
 import { scenarioYamlText } from '../output/scenarioYaml.ts';
 import { terminalOf } from '../output/terminal.ts';
-import { hanging } from '../output/text.ts';
+import { writtenText } from '../output/written.ts';
 import { samplesFrom } from '../posteriorFile.ts';
 import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
@@ -95,7 +95,7 @@ function setupOf({ text, file, scenario }: ScenarioFile, { along, hold, steps, o
     alongs: along,
     hold: hold ?? null,
     steps,
-    of: of === undefined ? null : [...new Set(of.split(',').map((name) => name.trim()))],
+    of: of === undefined ? null : [...new Set(of.split(',').map((name) => name.trim()))].filter((name) => name !== ''),
   };
 }
 
@@ -110,7 +110,7 @@ function jobOf(plan: GridPlan, { sha256 }: ScenarioFile, { version }: Program): 
     kind: 'gridNodes',
     setup,
     inputs: axes.map(({ along: { key, unit, label } }) => ({ name: key, unit, label })),
-    findings: findingColumns(cases.map(({ over: { name }, findings }) => ({ name, findings }))),
+    findings: findingColumns(cases),
     rows: count,
     settings: {
       scenario: sha256,
@@ -136,7 +136,7 @@ async function reportOf(
   try {
     const findings: Float64Array[] = [];
     for (const name of table.names.slice(1 + plan.axes.length)) findings.push(await table.column(name));
-    return summariseGrid(plan, scenario.cases, originOf({ ...scenario, file }, { sha256, version }), {
+    return summariseGrid(plan, scenario, originOf({ ...scenario, file }, { sha256, version }), {
       findings,
       failures: failuresOf(files.failedPath),
     });
@@ -156,9 +156,7 @@ function show(report: GridReport, out: string, { json, quiet }: GridOptions, io:
   if (quiet) return;
   const terminal = terminalOf(io);
   if (!json) io.stdout.write(`${gridLines(report, terminal).join('\n')}\n`);
-  const failed = report.cases.some((one) => one.failed.length > 0) ? ', failed-grid.csv' : '';
-  const listed = `summary.json, grid.csv, grid.nc, grid.parquet${failed}, scenario.yaml beside it`;
-  io.stderr.write(
-    `report  ${terminal.say(join(out, 'report.html'))}\n${hanging('files   ', listed, terminal.width).join('\n')}\n`,
-  );
+  const failed = report.cases.some((one) => one.failed.length > 0) ? ['failed-grid.csv'] : [];
+  const beside = ['summary.json', 'grid.csv', 'grid.nc', 'grid.parquet', ...failed, 'scenario.yaml'];
+  io.stderr.write(writtenText(out, beside, terminal));
 }

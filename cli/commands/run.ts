@@ -17,7 +17,8 @@ import { seriesText } from '../output/series.ts';
 import { summaryOf, summaryText } from '../output/summary.ts';
 import { tableLines } from '../output/table.ts';
 import { type Terminal, terminalOf } from '../output/terminal.ts';
-import { hanging, printable } from '../output/text.ts';
+import { printable } from '../output/text.ts';
+import { writtenText } from '../output/written.ts';
 import { samplesFrom } from '../posteriorFile.ts';
 import { readScenarioFiles, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
@@ -115,10 +116,8 @@ function show(result: RunResult, { folder, products, isLater }: Written, options
   if (options.quiet) return;
   const terminal = terminalOf(io);
   if (!options.json) io.stdout.write(`${isLater ? '\n' : ''}${textOf(result, terminal, options)}\n`);
-  const data = products.map(({ name }) => name).filter((name) => name !== 'report.html');
-  const files = hanging('files   ', `${data.join(', ')} beside it`, terminal.width);
-  // The path stays in one piece, to be copied.
-  io.stderr.write(`report  ${terminal.say(join(folder, 'report.html'))}\n${files.join('\n')}\n`);
+  const beside = products.map(({ name }) => name).filter((name) => name !== 'report.html');
+  io.stderr.write(writtenText(folder, beside, terminal));
 }
 
 function textOf(result: RunResult, terminal: Terminal, { fractions = false }: RunOptions): string {

@@ -1,5 +1,5 @@
 /** From the finished tables of a spread to what stands beside them: summary, scenario, report, and the table of the terminal. */
-import { resolve } from 'node:path';
+import { basename, resolve } from 'node:path';
 import { originOf } from '../../sim/origin.ts';
 import { runScenario } from '../../sim/run.ts';
 import type { SpreadPlan } from '../../sim/studies/spread/plan.ts';
@@ -16,7 +16,7 @@ import { spreadSummary } from '../output/spreadSummary.ts';
 import { spreadLines } from '../output/spreadTable.ts';
 import { summaryOf } from '../output/summary.ts';
 import { terminalOf } from '../output/terminal.ts';
-import { hanging } from '../output/text.ts';
+import { writtenText } from '../output/written.ts';
 import { samplesFrom } from '../posteriorFile.ts';
 import type { ScenarioFile } from '../scenarioFile.ts';
 import type { SpreadContext } from './spreadContext.ts';
@@ -87,12 +87,9 @@ function show(report: SpreadReport, { files, out }: FinishedSpread, json: boolea
   const terminal = terminalOf(io);
   if (!json) io.stdout.write(`${spreadLines(report, terminal).join('\n')}\n`);
   const tables = [files.draws, files.bands, files.indices].filter((one) => one !== undefined);
-  const names = tables.flatMap(({ path, failedPath }) => [path, ...(failedPath === null ? [] : [failedPath])]);
-  const listed = ['summary.json', ...names.map((path) => path.slice(path.lastIndexOf('/') + 1)), 'scenario.yaml'].join(
-    ', ',
-  );
-  const lines = hanging('files   ', `${listed} beside it`, terminal.width);
-  io.stderr.write(`report  ${terminal.say(`${out.replace(/\/$/, '')}/report.html`)}\n${lines.join('\n')}\n`);
+  const paths = tables.flatMap(({ path, failedPath }) => [path, ...(failedPath === null ? [] : [failedPath])]);
+  const beside = ['summary.json', ...paths.map((path) => basename(path)), 'scenario.yaml'];
+  io.stderr.write(writtenText(out, beside, terminal));
 }
 
 function tellFailures({ failed }: SpreadReport, draws: number, { failedPath }: TableFiles, io: Io): number {

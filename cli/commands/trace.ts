@@ -1,5 +1,5 @@
 /** `perilag trace`: the climates of each case as one input changes, as a table and as files. */
-import { join, resolve } from 'node:path';
+import { resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
 import { originOf } from '../../sim/origin.ts';
 import { formatNumber } from '../../sim/quantity/index.ts';
@@ -15,9 +15,10 @@ import { type Progress, progressOf } from '../output/progress.ts';
 import { pagePieces } from '../output/report.ts';
 import { scenarioYamlText } from '../output/scenarioYaml.ts';
 import { terminalOf } from '../output/terminal.ts';
-import { hanging, printable } from '../output/text.ts';
+import { printable } from '../output/text.ts';
 import { traceCsvText, traceSummary } from '../output/traceFiles.ts';
 import { traceLines } from '../output/traceTable.ts';
+import { writtenText } from '../output/written.ts';
 import { samplesFrom } from '../posteriorFile.ts';
 import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
@@ -89,9 +90,7 @@ function show(report: TraceReport, folder: string, { json, quiet }: TraceCommand
   if (quiet) return;
   const terminal = terminalOf(io);
   if (!json) io.stdout.write(`${traceLines(report, terminal).join('\n')}\n`);
-  const files = hanging('files   ', 'summary.json, trace.csv, scenario.yaml beside it', terminal.width);
-  // The path stays in one piece, to be copied.
-  io.stderr.write(`report  ${terminal.say(join(folder, 'report.html'))}\n${files.join('\n')}\n`);
+  io.stderr.write(writtenText(folder, ['summary.json', 'trace.csv', 'scenario.yaml'], terminal));
 }
 
 /** Says which cases could not be followed to the ends of the range; true when there are some. */

@@ -50,6 +50,8 @@ const missing = 9.969209968386869e36;
 export function gridNetcdf(report: GridReport, scenario: string, history: string): NetcdfFile {
   const { program, axes, cases } = report;
   const names = groupNames(cases.map(({ name }) => name));
+  const held = report.hold === null ? [] : [`${report.hold} is held as the eccentricity varies`];
+  const comment = [...held, ...report.notes].join('\n');
   return {
     attributes: {
       Conventions: 'CF-1.11',
@@ -57,7 +59,7 @@ export function gridNetcdf(report: GridReport, scenario: string, history: string
       history,
       source: `${program.name} ${program.version}`,
       groups: names.join(' '),
-      ...(report.hold === null ? {} : { comment: `${report.hold} is held as the eccentricity varies` }),
+      ...(comment === '' ? {} : { comment }),
       scenario,
     },
     dimensions: {},
@@ -105,7 +107,7 @@ function findingVariable({ label, unit, values }: GridFinding, dims: readonly st
 }
 
 /** Extremes of each finding over the grid, and where. */
-export function gridSummary({ program, scenario, axes, hold, cases }: GridReport) {
+export function gridSummary({ program, scenario, axes, hold, cases, notes }: GridReport) {
   const { title, file, sha256 } = scenario;
   return {
     program,
@@ -116,13 +118,13 @@ export function gridSummary({ program, scenario, axes, hold, cases }: GridReport
       cases: cases.map((one) => ({
         name: one.name,
         model: one.model,
-        own: one.own,
+        members: one.members.map(({ name, own, universal }) => ({ name, own, universal })),
         failed: one.failed.length,
         findings: Object.fromEntries(one.findings.map((finding) => [finding.name, extremesOf(finding, axes)])),
-        universal: one.universal,
         warnings: one.warnings,
         notes: one.notes,
       })),
+      notes,
     },
   };
 }

@@ -1,7 +1,7 @@
 /** What `grid` shows of each case: how far the chief findings go over the grid, and where. */
 import { formatNumber, inUnit } from '../../sim/quantity/index.ts';
 import type { GridAxis, GridCase, GridFinding, GridReport } from '../../sim/studies/grid/gridReport.ts';
-import { panels } from './grid.ts';
+import { type Grid, panels } from './grid.ts';
 import { extremesOf } from './gridFiles.ts';
 import type { Terminal } from './terminal.ts';
 import { hanging, wrap } from './text.ts';
@@ -20,7 +20,7 @@ const chief = [
 const few = 8;
 
 /** Lines that fit the terminal, from 40 columns up. */
-export function gridLines({ scenario, axes, hold, cases }: GridReport, terminal: Terminal): string[] {
+export function gridLines({ scenario, axes, hold, cases, notes }: GridReport, terminal: Terminal): string[] {
   const title = wrap(terminal.say(scenario.title ?? scenario.file), terminal.width);
   const over = axes.map(axisText).join('; ');
   const held = hold === null ? '' : `; ${hold} held`;
@@ -28,6 +28,8 @@ export function gridLines({ scenario, axes, hold, cases }: GridReport, terminal:
     ...title.map((line) => terminal.paint('bold', line)),
     ...wrap(terminal.say(`over ${over}${held}`), terminal.width).map((line) => terminal.paint('dim', line)),
     ...cases.flatMap((one) => ['', ...caseLines(one, axes, terminal)]),
+    ...(notes.length > 0 ? [''] : []),
+    ...notes.flatMap((text) => hanging('note      ', terminal.say(text), terminal.width)),
   ];
 }
 
@@ -38,33 +40,45 @@ function axisText({ key, unit, log, nodes }: GridAxis): string {
 
 function caseLines(one: GridCase, axes: readonly GridAxis[], terminal: Terminal): string[] {
   const shown = one.findings.length <= few ? one.findings : one.findings.filter(({ name }) => chief.includes(name));
-  const grid = {
-    headings: [
-      'least',
-      terminal.say(`at ${axes.map(({ key }) => key.split('.').at(-1)).join(', ')}`),
-      'greatest',
-      'at',
-    ],
-    rows: shown.map((finding) => {
-      const label = terminal.say(labelOf(finding));
-      return { section: label, label: '', alone: label };
-    }),
-    cells: shown.map((finding) => {
-      const { least, greatest } = extremesOf(finding, axes);
-      return [least, greatest].flatMap((end) => {
-        if (end === null) return ['—', ''];
-        return [valueText(finding, end.value), end.at.map((value) => formatNumber(value, 4)).join(', ')];
-      });
-    }),
-  };
+  const [least, greatest] = endColumns(shown, axes, terminal);
+  const together = panels(sideBySide(least, greatest), terminal);
+  // A value and its place stay together where all do not fit.
+  const shownPanels = together.length === 1 ? together : [least, greatest].flatMap((end) => panels(end, terminal));
   const name = wrap(terminal.say(`${one.name} (${one.model})`), terminal.width);
   return [
     ...name.map((line) => terminal.paint('bold', line)),
-    ...panels(grid, terminal).flatMap((panel, index) => (index === 0 ? panel : ['', ...panel])),
+    ...shownPanels.flatMap((panel, index) => (index === 0 ? panel : ['', ...panel])),
     ...failedLines(one, terminal),
     ...one.warnings.flatMap((text) => hanging('warning   ', terminal.say(text), terminal.width)),
     ...one.notes.flatMap((text) => hanging('note      ', terminal.say(text), terminal.width)),
   ];
+}
+
+/** Lowest values with their places, and highest. */
+function endColumns(shown: readonly GridFinding[], axes: readonly GridAxis[], terminal: Terminal): [Grid, Grid] {
+  const at = terminal.say(`at ${axes.map(({ key }) => key.split('.').at(-1)).join(', ')}`);
+  const rows = shown.map((finding) => {
+    const label = terminal.say(labelOf(finding));
+    return { section: label, label: '', alone: label };
+  });
+  const cellsOf = (which: 'least' | 'greatest') =>
+    shown.map((finding) => {
+      const end = extremesOf(finding, axes)[which];
+      if (end === null) return ['—', ''];
+      return [valueText(finding, end.value), end.at.map((value) => formatNumber(value, 4)).join(', ')];
+    });
+  return [
+    { headings: ['least', at], rows, cells: cellsOf('least') },
+    { headings: ['greatest', at], rows, cells: cellsOf('greatest') },
+  ];
+}
+
+function sideBySide(left: Grid, right: Grid): Grid {
+  return {
+    headings: [...left.headings, ...right.headings],
+    rows: left.rows,
+    cells: left.cells.map((row, index) => [...row, ...right.cells[index]!]),
+  };
 }
 
 function failedLines({ failed, findings }: GridCase, terminal: Terminal): string[] {

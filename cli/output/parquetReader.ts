@@ -31,16 +31,6 @@ export async function openParquet(path: string): Promise<ParquetTable> {
   }
 }
 
-/** One column of the file at `path`, NaN for null. Errors: as `openParquet` and `column`. */
-export async function readColumn(path: string, name: string): Promise<Float64Array> {
-  const table = await openParquet(path);
-  try {
-    return await table.column(name);
-  } finally {
-    await table.close();
-  }
-}
-
 function tableOf(path: string, file: FileHandle, buffer: AsyncBuffer, metadata: FileMetaData): ParquetTable {
   const rows = Number(metadata.num_rows);
   const names = metadata.schema.slice(1).map(({ name }) => name);

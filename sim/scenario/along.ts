@@ -2,6 +2,7 @@
 import { SimError } from '../error.ts';
 import { formatQuantity, parseQuantity, type Quantity } from '../quantity/index.ts';
 import { numberKeyFault } from './numberKey.ts';
+import { mendedRange } from './rangeForms.ts';
 import { aboutKey, labelOf, quantityAt } from './schema/lookup.ts';
 import { shorten } from './syntax.ts';
 
@@ -20,6 +21,8 @@ export interface Along {
 }
 
 const where = '--along';
+/** Of what a user may copy from a message. */
+const most = 100;
 const sample = 'star.luminosity=0.8 to 1.3 Lsun';
 const refusal = 'is a setting, a word, a date or a table, along which no climate can be followed';
 
@@ -32,6 +35,11 @@ export function readAlong(text: string): Along {
   const equals = text.indexOf('=');
   const key = (equals < 0 ? text : text.slice(0, equals)).trim();
   if (key === '') throw new SimError(where, 'no key is given', `Write e.g. \`${sample}\``);
+  const [word = '', ...more] = key.split(/\s+/);
+  if (more.length > 0) {
+    const what = `\`${shorten(text.trim())}\` has no \`=\` behind its key`;
+    throw new SimError(where, what, `Write \`${shorten(`${word}=${text.trim().slice(word.length).trim()}`, most)}\``);
+  }
   const path = key.split('.');
   const fault = numberKeyFault(path, { isNumber: (at) => quantityAt(at) !== null, refusal, sample });
   if (fault) throw new SimError(where, fault.what, fault.mend);
@@ -41,6 +49,14 @@ export function readAlong(text: string): Along {
   if (written === '') {
     const what = equals < 0 ? `\`${key}\` has no range behind it` : `the range of ${key} is empty`;
     throw new SimError(where, what, example);
+  }
+  const mended = mendedRange(written);
+  if (mended !== null) {
+    throw new SimError(
+      where,
+      `\`${shorten(written)}\` is not a range`,
+      `Write \`${shorten(`${key}=${mended}`, most)}\``,
+    );
   }
   const { distribution, unit } = atAlong(key, () => parseQuantity(written, { ...spec, spread: true }));
   if (distribution.form !== 'uniform' && distribution.form !== 'logUniform') {

@@ -1,8 +1,10 @@
 /** A case along one input, for what follows its climates: the World at any value, and a word on where it is not sound. */
 import { SimError } from '../error.ts';
 import type { World } from '../world.ts';
+import { alike, alikeNotes, togetherName } from './alike.ts';
 import { type Along, alongText } from './along.ts';
 import { fingerprint } from './influence.ts';
+import { replacedNotes } from './leftOut.ts';
 import { type CaseOver, casesOver } from './over.ts';
 
 /** A case whose input changes. */
@@ -23,11 +25,12 @@ export interface CaseAlong {
  */
 export function casesAlong(text: string, file: string, along: Along, only?: readonly string[]): readonly CaseAlong[] {
   const options = { withoutWindows: true, ...(only ? { only } : {}) };
-  return coinciding(casesOver(text, file, [along], options).map((one) => caseAlong(one, along))).map(together);
+  return alike(casesOver(text, file, [along], options).map((one) => caseAlong(one, along))).map(together);
 }
 
-/** With all that its climates depend on at both ends of the input. */
 interface PrintedCase extends CaseAlong {
+  readonly over: CaseOver;
+  /** All that its climates depend on at both ends of the input. */
   readonly print: string;
 }
 
@@ -41,28 +44,19 @@ function caseAlong(one: CaseOver, along: Along): PrintedCase {
   };
   const ends = [along.from, along.to].map((end) => fingerprint(worldAt(end)));
   const print = JSON.stringify([model, options.tolerance, ...ends]);
-  return { name, model, tolerance: options.tolerance, warnings: [...warnings, ...notes], worldAt, print };
-}
-
-/** Cases in groups that are one and the same along the input: they differed in what it replaces. */
-function coinciding(all: readonly PrintedCase[]): PrintedCase[][] {
-  const groups: PrintedCase[][] = [];
-  for (const one of all) {
-    const group = groups.find(([first]) => first!.print === one.print);
-    if (group) group.push(one);
-    else groups.push([one]);
-  }
-  return groups;
+  return { name, model, tolerance: options.tolerance, warnings: [...warnings, ...notes], worldAt, over: one, print };
 }
 
 /** One case that bears the names of all. */
 function together(group: readonly PrintedCase[]): CaseAlong {
-  const { print: _, ...one } = group[0]!;
-  if (group.length === 1) return one;
-  const names = group.map(({ name }) => name);
-  const listed = names.map((name) => `“${name}”`).join(', ');
-  const warning = `The cases ${listed} are the same along this input, which replaces what sets them apart: they were followed once.`;
-  return { ...one, name: names.join(' = '), warnings: [...one.warnings, warning] };
+  const { name: _, print: __, over, ...one } = group[0]!;
+  const overs = group.map((each) => each.over);
+  const warnings = [
+    ...replacedNotes(overs.flatMap(({ replaced }) => replaced)),
+    ...one.warnings,
+    ...alikeNotes(overs, 'along this input, which replaces', 'followed'),
+  ];
+  return { ...one, name: togetherName(overs), warnings };
 }
 
 function soundAt(one: CaseOver, along: Along, value: number): World {

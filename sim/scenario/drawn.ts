@@ -6,10 +6,11 @@ import type { SolveOptions, Window, World } from '../world.ts';
 import { standardDeviation } from './build/given.ts';
 import type { Built } from './build/world.ts';
 import { withDefaults } from './defaults.ts';
+import { redundantNote } from './leftOut.ts';
 import { type CaseColumns, columnsOf, type Posterior, rulesNote } from './posterior.ts';
 import { type ProbeValues, probe } from './probes.ts';
 import { readWithTrees } from './read.ts';
-import { type Redundant, withoutRedundant } from './redundant.ts';
+import { withoutRedundant } from './redundant.ts';
 import { endsOfSpread, turnOf } from './schema/lookup.ts';
 import type { Branch } from './tree.ts';
 import type { CaseInput, ScenarioCase } from './types.ts';
@@ -132,12 +133,6 @@ function idleInput({ key, label }: Pick<CaseInput, 'key' | 'label'>, reason: str
 function reasonOf({ model, inputs }: ScenarioCase, key: string): string {
   const isUsed = inputs.find((input) => input.key === key)?.used ?? false;
   return isUsed ? 'no finding changes with it' : `model ${model} does not use it here`;
-}
-
-/** `orbit.semiMajorAxis is left out: it follows from orbit.period and star.mass.` */
-export function redundantNote({ key, instead }: Redundant): string {
-  const words = instead.length > 1 ? `${instead.slice(0, -1).join(', ')} and ${instead.at(-1)}` : instead[0];
-  return `${key} is left out: it follows from ${words}.`;
 }
 
 /** A circle with a spread, of a planet that has seasons: nothing but its centre is complete. */

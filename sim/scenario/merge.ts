@@ -62,20 +62,40 @@ export function merge(base: Branch, patch: Branch, section = ''): Branch {
   return { ...base, entries };
 }
 
-/** Keys of the base that give way because the patch says the same thing another way. */
-function replacedKeys(base: Branch, patch: Branch, section: string): ReadonlySet<string> {
-  const replaced = new Set<string>();
+/** Keys of a section of the base that give way because the patch says the same thing another way, each with the patch's keys that do. */
+function replacedKeys(base: Branch, patch: Branch, section: string): ReadonlyMap<string, readonly string[]> {
+  const replaced = new Map<string, readonly string[]>();
   for (const group of alternatives) {
     if (group.section !== section) continue;
     const chosen = group.ways.filter((way) => isChosen(way, base, patch));
     if (!chosen.length) continue;
     const kept = new Set(chosen.flatMap((way) => keysOf(group, way)));
+    const by = chosen.flat().filter((key) => patch.entries.has(key));
     for (const way of group.ways) {
       if (chosen.includes(way) || (group.keepsUnfinished && !way.every((key) => base.entries.has(key)))) continue;
-      for (const key of keysOf(group, way)) if (!kept.has(key)) replaced.add(key);
+      for (const key of keysOf(group, way)) if (base.entries.has(key) && !kept.has(key)) replaced.set(key, by);
     }
   }
   return replaced;
+}
+
+/** A key of a scenario that others replace. All dotted. */
+export interface Replaced {
+  readonly key: string;
+  readonly by: readonly string[];
+}
+
+/** What of the base gives way when the patch is laid over it. */
+export function replacedIn(base: Branch, patch: Branch, path: readonly string[] = []): Replaced[] {
+  const dotted = (key: string) => [...path, key].join('.');
+  const gone = replacedKeys(base, patch, path.join('.'));
+  const below = [...patch.entries].flatMap(([key, { tree }]) => {
+    const under = base.entries.get(key)?.tree;
+    return !gone.has(key) && under?.kind === 'branch' && tree.kind === 'branch'
+      ? replacedIn(under, tree, [...path, key])
+      : [];
+  });
+  return [...[...gone].map(([key, by]) => ({ key: dotted(key), by: by.map(dotted) })), ...below];
 }
 
 /** The patch gives a key of this way, and with the base it is complete. */

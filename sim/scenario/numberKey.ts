@@ -1,6 +1,6 @@
 /** Keys that a user names away from the scenario (`--along`, columns of a posterior), where a number of the World is wanted. */
 import { nearest } from '../quantity/index.ts';
-import { keysIn, sectionOf } from './schema/lookup.ts';
+import { keyOfSymbol, keysIn, sectionOf } from './schema/lookup.ts';
 import { shorten } from './syntax.ts';
 
 export interface Wanted {
@@ -34,7 +34,7 @@ function unknownFault(path: readonly string[]): KeyFault | null {
     if (depth === 1 && !followed.includes(path[0]!)) break; // told as what is no number
     if (known.includes(step)) continue;
     const section = depth === 0 ? sectionOf(step) : null;
-    const near = section === null ? nearest(step, known) : `${section}.${step}`;
+    const near = section === null ? (keyOfSymbol(above, step) ?? nearest(step, known)) : `${section}.${step}`;
     const meant = near && (section === null ? [...above, near, ...path.slice(depth + 1)].join('.') : near);
     const what =
       depth === 0 ? `there is no key \`${shorten(key)}\`` : `\`${shorten(step)}\` is not a key of ${above.join('.')}`;

@@ -6,9 +6,9 @@ import type { Along } from './along.ts';
 import type { Built } from './build/world.ts';
 import { conflicts } from './cases.ts';
 import { withDefaults } from './defaults.ts';
-import { redundantNote } from './drawn.ts';
 import { following, type Hold, holdNote } from './hold.ts';
-import { merge, patchOf } from './merge.ts';
+import { listed, redundantNote } from './leftOut.ts';
+import { merge, patchOf, type Replaced, replacedIn } from './merge.ts';
 import { nodesOf } from './nodes.ts';
 import { type Probes, probe } from './probes.ts';
 import { readWithTrees } from './read.ts';
@@ -36,6 +36,12 @@ export interface CaseOver {
   readonly windowsVary: boolean;
   /** SI values of the ranges' keys in the case as it stands; null where it says nothing that gives them. */
   readonly own: readonly (number | null)[];
+  /** As it stands. */
+  readonly world: World;
+  /** Keys that give way to the ranges'. */
+  readonly replaced: readonly Replaced[];
+  /** Keys of the case that no node reads: those of the ranges, those that give way to them, and those that follow from others. */
+  readonly unread: readonly string[];
   readonly warnings: readonly string[];
   /** What follows from other keys, and what is held. */
   readonly notes: readonly string[];
@@ -75,7 +81,9 @@ export function casesOver(
 
 function caseOver(one: ScenarioCase, tree: Branch, alongs: readonly Along[], options: OverOptions): CaseOver {
   for (const along of alongs) refuseList(one.name, tree, along);
-  const laid = layOver(tree, alongs);
+  const patch = patchFor(alongs);
+  const laid = patch ? merge(tree, patch) : tree;
+  const replaced = patch ? replacedIn(tree, patch) : [];
   const filled = withDefaults(options.withoutWindows ? without(laid, ['windows']) : laid);
   const { keys, faults } = validateCase(filled);
   const [fault] = [...faults, ...conflicts(filled)];
@@ -86,7 +94,7 @@ function caseOver(one: ScenarioCase, tree: Branch, alongs: readonly Along[], opt
   );
   for (const { key, instead } of redundant) {
     if (!alongs.some((along) => along.key === key)) continue;
-    const what = `${key} of case \`${one.name}\` follows from ${instead.join(' and ')}`;
+    const what = `${key} of case \`${one.name}\` follows from ${listed(instead)}`;
     throw new SimError(where, what, 'Follow one of those');
   }
   const eccentricityAt = alongs.findIndex(({ key }) => key === 'orbit.eccentricity');
@@ -105,6 +113,9 @@ function caseOver(one: ScenarioCase, tree: Branch, alongs: readonly Along[], opt
     windows: options.withoutWindows ? [] : one.windows,
     windowsVary: probes.windowsMove,
     own: alongs.map(({ key }) => ownValue(one, key)),
+    world: one.world,
+    replaced,
+    unread: [...alongs, ...replaced, ...redundant].map(({ key }) => key),
     warnings: alongs.flatMap((along, i) => movedPlanet(along, probes.pairs(i))),
     notes: [...redundant.map(redundantNote), ...(held ? [holdNote(held)] : [])],
     ...made,
@@ -126,16 +137,10 @@ function refuseList(name: string, tree: Branch, { key }: Along): void {
 /** No section of a scenario: in one patch, nothing replaces anything. */
 const apart = '--along';
 
-/** The case with a value within each range: no end of it, which may mean something of its own (a circle). */
-function layOver(tree: Branch, alongs: readonly Along[]): Branch {
-  const patches = alongs.map((along) => patchOf(along.key, nodesOf(along, 3)[1]!.text));
-  const [first, ...others] = patches;
-  return first
-    ? merge(
-        tree,
-        others.reduce((patch, other) => merge(patch, other, apart), first),
-      )
-    : tree;
+/** A value within each range: no end of it, which may mean something of its own (a circle). Null without ranges. */
+function patchFor(alongs: readonly Along[]): Branch | null {
+  const [first, ...others] = alongs.map((along) => patchOf(along.key, nodesOf(along, 3)[1]!.text));
+  return first ? others.reduce((patch, other) => merge(patch, other, apart), first) : null;
 }
 
 function checkProbes(name: string, alongs: readonly Along[], probes: Probes): void {

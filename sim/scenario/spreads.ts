@@ -1,20 +1,36 @@
-/** What a run makes of uncertain inputs: it uses their centres. Said once for the scenario, with every centre that nobody typed. */
+/** What a run or a grid makes of uncertain inputs: it uses their centres. Said once for the scenario, with every centre that nobody typed. */
 import { formatInstantUtc, formatQuantity, parseUnit } from '../quantity/index.ts';
 import type { Posterior } from './posterior.ts';
-import type { CaseInput, Scenario, ScenarioCase } from './types.ts';
+import type { CaseInput, ScenarioCase } from './types.ts';
 
 const digits = 4;
 
+/** Words for the command that does not propagate them; `run` unless another is named. */
+export interface Unpropagated {
+  readonly command: 'run' | 'grid';
+  /** Whose centres are used. */
+  readonly which: string;
+}
+
+const byRun: Unpropagated = { command: 'run', which: 'every input' };
+/** A grid varies some of the inputs itself; leave them out of the cases. */
+export const byGrid: Unpropagated = { command: 'grid', which: 'every input that no range varies' };
+
 /** Empty where every input that is used is exact and no samples are given. */
-export function spreadNotes({ cases, posterior }: Pick<Scenario, 'cases' | 'posterior'>): string[] {
-  return [...centreNotes(cases), ...(posterior ? [sampleNote(posterior)] : [])];
+export function spreadNotes(
+  { cases, posterior }: { readonly cases: readonly Noted[]; readonly posterior: Posterior | null },
+  by = byRun,
+): string[] {
+  return [...centreNotes(cases, by), ...(posterior ? [sampleNote(posterior, by)] : [])];
 }
 
-function sampleNote({ file }: Posterior): string {
-  return `Samples of ${file} are not used by run: the values that stand in the scenario are; perilag spread draws from them.`;
+type Noted = Pick<ScenarioCase, 'name' | 'inputs'>;
+
+function sampleNote({ file }: Posterior, { command }: Unpropagated): string {
+  return `Samples of ${file} are not used by ${command}: the values that stand in the scenario are; perilag spread draws from them.`;
 }
 
-function centreNotes(cases: readonly ScenarioCase[]): string[] {
+function centreNotes(cases: readonly Noted[], { command, which }: Unpropagated): string[] {
   const uncertain = cases.flatMap(({ name, inputs }) =>
     inputs.filter(isSpread).map((input) => ({ name, input, said: saidOf(input) })),
   );
@@ -22,7 +38,7 @@ function centreNotes(cases: readonly ScenarioCase[]): string[] {
   const told = new Map<string, string[]>();
   for (const { name, said } of uncertain) if (said !== null) told.set(said, [...(told.get(said) ?? []), name]);
   return [
-    'Spreads of inputs are not propagated by run: every input is used at its centre; perilag spread samples them.',
+    `Spreads of inputs are not propagated by ${command}: ${which} is used at its centre; perilag spread samples them.`,
     ...[...told].map(([said, names]) =>
       names.length === cases.length
         ? `${said}.`

@@ -6,6 +6,7 @@
 import { gmres } from './gmres.ts';
 import { logDominantMultiplier, meanYearPreconditioner, type YearMap } from './periodicMap.ts';
 import type { Tangent } from './tangent.ts';
+import { largest } from './vectors.ts';
 
 export interface Family {
   readonly size: number;
@@ -243,7 +244,7 @@ class Follower {
       if (direction !== null && border === null) return null;
       const change = this.solveBordered(evaluated.tangent, border, evaluated.residual, 0);
       if (change === null) return null;
-      const size = change.y.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
+      const size = largest(change.y);
       if (!(size < 20 * Math.max(1, family.yScale)) || size > 50 * lastChange) return null;
       lastChange = Math.max(size, options.tolerance);
       at = { y: at.y.map((value, i) => value + change.y[i]), p: at.p + change.p };

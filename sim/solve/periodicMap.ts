@@ -12,6 +12,7 @@ import { leftmostEigenvalue } from './davidson.ts';
 import { gmres } from './gmres.ts';
 import type { StageHistory } from './rodas4.ts';
 import type { Tangent } from './tangent.ts';
+import { largest } from './vectors.ts';
 
 export interface YearMap<T extends Tangent = Tangent> {
   readonly size: number;
@@ -176,8 +177,4 @@ function logByPowers(tangent: Tangent, start: Float64Array): number {
     if (settled) break;
   }
   return log;
-}
-
-function largest(values: Float64Array): number {
-  return values.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
 }

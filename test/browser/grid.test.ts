@@ -103,7 +103,7 @@ describe.skipIf(!hasBrowser)('the report of a grid in Chromium', () => {
     await field('Its uncertainty').fill('1.5');
     await page.getByRole('combobox', { name: 'Case' }).last().selectOption('deep sea');
     const reading = lagReader()({ eccentricity: 0.3, lag: 0.09, plusMinus: 0.015 });
-    expect(await answer.textContent()).toBe(readingText(reading, grid.cases[2]!.universal!));
+    expect(await answer.textContent()).toBe(readingText(reading, grid.cases[2]!.members[0]!.universal!));
     const plot = page.locator('.plot').nth(1);
     await page.waitForFunction(() => document.querySelectorAll('.plot')[1]!.ariaLabel!.includes('Read back at'));
     expect(await plot.getAttribute('aria-label')).toContain('Read back at eccentricity 0.3');

@@ -96,7 +96,11 @@ test('files and table: only what was asked for, gaps where there is no world', a
   expect(rows.map((row) => row.temperatureMax_K === '')).toEqual([0, 0, 0, 0, 0, 0, 0, 0, 1, 1].map(Boolean));
   expect(rows[0]!.lagOfMax_s).toBe(''); // a circle has no maximum to lag behind
   const { grid: told } = JSON.parse(read('out', 'summary.json'));
-  expect(told.cases[0]).toMatchObject({ name: 'shallow sea', failed: 2, own: [0.62] });
+  expect(told.cases[0]).toMatchObject({
+    name: 'shallow sea',
+    failed: 2,
+    members: [{ name: 'shallow sea', own: [0.62] }],
+  });
   for (const name of ['grid.nc', 'grid.parquet', 'failed-grid.csv', 'report.html', 'scenario.yaml'])
     expect(existsSync(place.path('out', name)), name).toBe(true);
   expect(existsSync(place.path('out', 'grid.work'))).toBe(false);
@@ -124,6 +128,58 @@ test('a finished grid whose list of failed nodes is lost is computed again', asy
   expect(read('out', 'failed-grid.csv')).toBe(list);
 });
 
+test('cases that the input makes alike are computed once, and files, table and page say so', async () => {
+  const words = ['--along', 'planet.heatStore.heatCapacity=1e5 to 1e9 J/m2/K log', '--steps', '3'];
+  const { stdout } = await place.perilag('grid', 'corvane.yaml', '-o', 'out', ...words);
+  const together = 'shallow sea = bare rock = thick air';
+  const said = [
+    'planet.heatStore.mixedLayer, planet.heatStore.ground and planet.heatStore.atmosphere are left out: planet.heatStore.heatCapacity takes their place.',
+    'The cases “shallow sea”, “bare rock”, “thick air” are the same along this input, which replaces what sets them apart: they were computed once.',
+  ];
+  for (const text of said) expect(stdout.replace(/\n\s+/g, ' ')).toContain(text);
+  expect(rowsOf('out').map((row) => row.case)).toEqual([together, together, together]);
+  const { grid: told } = JSON.parse(read('out', 'summary.json'));
+  expect(told.cases.map(({ name, notes }: { name: string; notes: string[] }) => [name, notes])).toEqual([
+    [together, said],
+  ]);
+  expect(read('out', 'report.html')).toContain(said[1]);
+});
+
+test('a spread that the grid does not propagate is said, on the terminal and in the summary', async () => {
+  place.write('unsure.yaml', threeCasesText.replace('bondAlbedo: 0.3', 'bondAlbedo: 0.3 ± 0.05'));
+  const words = ['--along', 'orbit.eccentricity=0 to 0.9', '--steps', '2', '--of', 'temperatureMax'];
+  const { stdout } = await place.perilag('grid', 'unsure.yaml', '-o', 'out', ...words);
+  const said =
+    'Spreads of inputs are not propagated by grid: every input that no range varies is used at its centre; perilag spread samples them.';
+  expect(stdout.replace(/\n\s+/g, ' ')).toContain(`note      ${said}`);
+  expect(JSON.parse(read('out', 'summary.json')).grid.notes).toEqual([said]);
+});
+
+test('by latitude, too, every node is what a scenario that says its values gives, to the last bit', async () => {
+  const coarse = zonalText.replace('bands: 36', 'bands: 18').replace('samples: 48', 'samples: 24');
+  place.write('zonal.yaml', coarse);
+  const along = ['--along', 'orbit.eccentricity=0.05 to 0.3', '--along', 'planet.obliquity=10 to 40 deg'];
+  await grid('zonal.yaml', ...along, '--steps', '2');
+  for (const row of rowsOf('out')) {
+    const [e, obliquity] = [row['orbit.eccentricity']!, row['planet.obliquity_deg']!];
+    place.write(
+      'one.yaml',
+      coarse
+        .replace('eccentricity: 0.05', `eccentricity: ${e}`)
+        .replace('obliquity: 24 deg', `obliquity: ${obliquity} deg`),
+    );
+    const run = await place.perilag('run', 'one.yaml', '--json', '--quiet', '-o', 'one');
+    const { findings } = JSON.parse(run.stdout).cases[0];
+    const names = Object.keys(findings);
+    expect(names.length).toBeGreaterThan(20);
+    for (const name of names) {
+      const column = Object.keys(row).find((one) => one === name || one.startsWith(`${name}_`))!;
+      const { value } = findings[name];
+      expect(row[column], `${name} at ${e}, ${obliquity}`).toBe(value === null ? '' : String(value));
+    }
+  }
+});
+
 test('latitudes too', async () => {
   place.write('zonal.yaml', zonalText.replace('bands: 36', 'bands: 18'));
   await grid(
@@ -141,8 +197,21 @@ test('latitudes too', async () => {
 });
 
 test.each([
-  [['--along', 'orbit.eccentricity=0 to 0.9', '--of', 'temperture'], '--of: `temperture` is no finding of case'],
+  [
+    ['--along', 'orbit.eccentricity=0 to 0.9', '--of', 'temperture'],
+    '--of: there is no finding `temperture`. Did you mean',
+  ],
   [['--along', 'orbit.eccentricity=0 to 0.9', '--hold', 'period'], '--hold: `period` cannot be held'],
+  [
+    ['--along', 'orbit.eccentricity=0', 'to', '0.9', '--steps', '3'],
+    "--along: the range is not in quotes. Write --along 'orbit.eccentricity=0 to 0.9'.",
+  ],
+  [
+    ['--along', 'orbit.eccentricity', '=', '0', 'to', '0.9'],
+    "--along: the range is not in quotes. Write --along 'orbit.eccentricity=0 to 0.9'.",
+  ],
+  [['--along', 'orbit.eccentricity=0 to 0.9', '--of', ' , '], '--of: no finding is named. Choose from period,'],
+  [['--along', 'orbit.eccentricity=0..0.9'], '--along: `0..0.9` is not a range. Write `orbit.eccentricity=0 to 0.9`.'],
   [['--along', 'orbit.eccentricity=0 to 2'], '--along: orbit.eccentricity'],
   [[...ranges, '--along', 'star.luminosity=1 to 2 Lsun'], '--along: 3 ranges are given'],
   [['--along', 'orbit.eccentricity=0 to 0.9', '--steps', '1'], '--steps takes a whole number from 2'],

@@ -1,7 +1,7 @@
 import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { fingerprintOf } from '../../cli/engine/job.ts';
-import { readColumn } from '../../cli/output/parquetReader.ts';
+import { readColumn } from './readColumn.ts';
 import { type Workplace, workplace, zonalText } from './support.ts';
 
 /** A fast world: its temperature is the steady one, T ∝ (L (1 − A))^¼, up to its small store. */

@@ -1,7 +1,7 @@
 /** Grids of an invented planet whose numbers follow a formula: the first-order response, with the swing of an eccentric orbit. */
 
 import type { CaseInput } from '../../sim/scenario/types.ts';
-import type { GridAxis, GridCase, GridFinding, GridReport } from '../../sim/studies/grid/gridReport.ts';
+import type { GridAxis, GridCase, GridFinding, GridMember, GridReport } from '../../sim/studies/grid/gridReport.ts';
 
 type Axis = GridAxis & { readonly at: 'eccentricity' | 'heatCapacity' };
 
@@ -78,13 +78,14 @@ const about: readonly (readonly [name: string, label: string, unit: string, circ
 
 export interface GridCaseOptions {
   readonly name?: string;
+  readonly index?: number;
   readonly own?: Point;
   readonly failed?: readonly number[];
 }
 
 /** One case on the axes; what is not along an axis is as `own` has it. */
 export function gridCase(axes: readonly Axis[], options: GridCaseOptions = {}): GridCase {
-  const { name = 'shallow sea', own = { eccentricity: 0.42, heatCapacity: 2.1e7 }, failed = [] } = options;
+  const { name = 'shallow sea', index = 0, own = { eccentricity: 0.42, heatCapacity: 2.1e7 }, failed = [] } = options;
   const points = axes.reduce<Point[]>(
     (made, { at, nodes }) => made.flatMap((point) => Array.from(nodes, (node) => ({ ...point, [at]: node }))),
     [own],
@@ -97,10 +98,23 @@ export function gridCase(axes: readonly Axis[], options: GridCaseOptions = {}): 
     name,
     model: 'lumped',
     findings,
-    own: axes.map(({ at }) => own[at]),
     failed: failed.map((node) => ({ node, message: 'the periapsis lies inside the star' })),
     warnings: [],
     notes: [],
+    members: [gridMember(axes, own, { name, index })],
+  };
+}
+
+/** A case of the scenario at its own point. */
+export function gridMember(
+  axes: readonly Axis[],
+  own: Point,
+  { name, index }: Pick<GridMember, 'name' | 'index'>,
+): GridMember {
+  return {
+    name,
+    index,
+    own: axes.map(({ at }) => own[at]),
     universal: {
       eccentricity: own.eccentricity,
       storeNumber: own.heatCapacity / perNumber,
@@ -139,6 +153,7 @@ export function gridOf(axes: readonly GridAxis[], cases: readonly GridCase[], ho
     axes: axes.map(({ key, label, unit, log, nodes }) => ({ key, label, unit, log, nodes })),
     hold,
     cases,
+    notes: [],
   };
 }
 
@@ -149,10 +164,11 @@ export function mapGrid(): GridReport {
     gridCase(axes),
     gridCase(axes, {
       name: 'thin air',
+      index: 1,
       own: { eccentricity: 0.42, heatCapacity: 6e5 },
       failed: [1268, 1269, 1270, 1227, 1228],
     }),
-    gridCase(axes, { name: 'deep sea', own: { eccentricity: 0.42, heatCapacity: 4e8 } }),
+    gridCase(axes, { name: 'deep sea', index: 2, own: { eccentricity: 0.42, heatCapacity: 4e8 } }),
   ]);
 }
 
@@ -162,8 +178,25 @@ export function curveGrid(axis = eccentricityAxis()): GridReport {
     [axis],
     [
       gridCase([axis]),
-      gridCase([axis], { name: 'thin air', own: { eccentricity: 0.42, heatCapacity: 6e5 }, failed: [29, 30] }),
-      gridCase([axis], { name: 'deep sea', own: { eccentricity: 0.3, heatCapacity: 4e8 } }),
+      gridCase([axis], {
+        name: 'thin air',
+        index: 1,
+        own: { eccentricity: 0.42, heatCapacity: 6e5 },
+        failed: [29, 30],
+      }),
+      gridCase([axis], { name: 'deep sea', index: 2, own: { eccentricity: 0.3, heatCapacity: 4e8 } }),
     ],
   );
+}
+
+/** Cases that are no plain worlds. */
+export function unplaced(cases: readonly GridCase[]): GridCase[] {
+  return cases.map((one) => ({ ...one, members: one.members.map((member) => ({ ...member, universal: null })) }));
+}
+
+/** The three cases as one, over their heat store: what sets them apart is replaced. */
+export function togetherGrid(axis = heatCapacityAxis()): GridReport {
+  const { cases, ...rest } = curveGrid(axis);
+  const members = cases.flatMap((one) => one.members);
+  return { ...rest, cases: [{ ...cases[0]!, name: members.map(({ name }) => name).join(' = '), members }] };
 }

@@ -1,26 +1,20 @@
 /** Figure: the climates of every case against the input that changes, with the folds where they end; ice below. Pure. */
 import type { Annotation, Data, Layout, ScatterData, Shape } from 'plotly.js-dist-min';
 import type { TraceReport } from '../../sim/studies/traceReport.ts';
-import { type Along, alongText, axisTitle, labelInText } from '../words/along.ts';
+import { type Along, axisTitle, labelInText } from '../words/along.ts';
 import { type Arc, arcsOf, type TraceCase, type TracePoint } from '../words/arcs.ts';
 import { type ClimateEnd, climateEnds, foldsOf, spansOf } from '../words/climates.ts';
+import { axisPlace } from '../words/gridAxes.ts';
 import { unitText } from '../words/number.ts';
 import { endsText } from '../words/traceAnswer.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
-import { type ChartLine, glyph } from './chartLine.ts';
+import type { ChartLine } from './chartLine.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { type CaseLook, foldLabels } from './foldLabels.ts';
 import { namesBesideLines } from './lineNames.ts';
 import { plainLabel } from './plainLabel.ts';
-import { spreadLabels } from './spreadLabels.ts';
 import { caseColour, caseMarker } from './theme.ts';
 import type { View } from './view.ts';
-
-interface CaseLook {
-  readonly oneCase: TraceCase;
-  readonly name: string;
-  readonly colour: string;
-  readonly shape: ReturnType<typeof caseMarker>;
-}
 
 type Panel = 'y' | 'y2';
 
@@ -38,7 +32,10 @@ export function climateLoop({ cases, along }: TraceReport, style: FigureStyle): 
       shape: caseMarker(index),
     };
   });
-  const view = style.view ?? { x: [place(along.from, along), place(along.to, along)], y: frameOf(cases, along) };
+  const view = style.view ?? {
+    x: [axisPlace(along, along.from), axisPlace(along, along.to)],
+    y: frameOf(cases, along),
+  };
   return {
     name: 'climates-and-where-they-end',
     title: `Climates against ${labelInText(along)}, and where they end`,
@@ -136,11 +133,6 @@ function common(points: readonly TracePoint[], along: Along, panel: Panel): Part
   };
 }
 
-/** A value on the axis: its logarithm on a logarithmic one. */
-function place(value: number, { log }: Along): number {
-  return log ? Math.log10(value) : value;
-}
-
 function frameOf(cases: readonly TraceCase[], { from, to }: Along): [number, number] {
   const points = cases.flatMap(({ branches }) => branches.flatMap((branch) => branch.points));
   const shown = points.filter(({ value }) => value >= from && value <= to);
@@ -168,7 +160,7 @@ function rightmost({ oneCase, name, colour, shape }: CaseLook, along: Along): Ch
     width: width.stable,
     marker: { shape, open: true },
     referenceFor: null,
-    x: points.map(({ value }) => place(value, along)),
+    x: points.map(({ value }) => axisPlace(along, value)),
     y: points.map(({ temperatureMean }) => temperatureMean),
   };
 }
@@ -213,101 +205,9 @@ function loopLayout(looks: readonly CaseLook[], along: Along, view: View, style:
     shapes: spans?.shapes ?? [],
     annotations: [
       ...(spans?.annotations ?? []),
-      ...foldLabels(looks, along, view, style),
+      ...foldLabels(looks, along, view, height, style),
       ...(narrow ? [] : namesBesideLines(named, view, height, style)),
     ],
-  };
-}
-
-function foldLabels(looks: readonly CaseLook[], along: Along, view: View, style: FigureStyle): Partial<Annotation>[] {
-  const ends = looks.flatMap((look) => climateEnds(look.oneCase, along).map((end): LookedEnd => ({ end, look })));
-  if (looks.length > 1) return uprightLabels(ends, along, view, style);
-  return ends.map(({ end }) => ({ ...foldAnchor(end, along, style), ...labelBeside(end, along, view, style) }));
-}
-
-function foldAnchor({ point }: ClimateEnd, along: Along, { theme }: FigureStyle): Partial<Annotation> {
-  const font = { color: theme.ink, size: 12 };
-  return { x: place(point.value, along), xref: 'x', y: point.temperatureMean, yref: 'y', showarrow: false, font };
-}
-
-/** On the outer side of the fold, where no line runs; where there is no room outside, in the free corner, with a leader. */
-function labelBeside(
-  { point, liesAbove, next, name }: ClimateEnd,
-  along: Along,
-  view: View,
-  style: FigureStyle,
-): Partial<Annotation> {
-  const needed = style.narrow ? 0.3 : 0.16;
-  const share = (place(point.value, along) - view.x[0]) / (view.x[1] - view.x[0]);
-  const text = `${name} climate ends<br><b>${plainLabel(alongText(point.value, along))}</b>`;
-  const side = liesAbove ? 'left' : 'right';
-  if ((liesAbove ? share : 1 - share) < needed) {
-    const room = (liesAbove ? share : 1 - share) * roughWidth(style) - 6;
-    return { text, align: side, xanchor: side, ...toEdge({ point, next }, view, style), ax: liesAbove ? -room : room };
-  }
-  const away = liesAbove ? 'right' : 'left';
-  return { text, align: away, xanchor: away, yanchor: 'middle', xshift: liesAbove ? -10 : 10 };
-}
-
-/** Several cases: upright at the edge of the panel away from the jump, spread so that neighbours keep clear of each other. */
-function uprightLabels(
-  ends: readonly LookedEnd[],
-  along: Along,
-  view: View,
-  style: FigureStyle,
-): Partial<Annotation>[] {
-  const width = roughWidth(style);
-  return [true, false].flatMap((down) => {
-    const row = ends.filter(({ end }) => jumpsDown(end) === down);
-    const wanted = row.map(
-      ({ end }) => ((place(end.point.value, along) - view.x[0]) / (view.x[1] - view.x[0])) * width,
-    );
-    const places = spreadLabels(wanted, 20, 8, width - 8);
-    return row.map(({ end, look: { colour, shape } }, at) => ({
-      ...foldAnchor(end, along, style),
-      text: `<span style="color:${colour}">${glyph({ shape, open: true })}</span> ${plainLabel(alongText(end.point.value, along))}`,
-      textangle: -90,
-      xanchor: 'center',
-      ...inwards(toEdge(end, view, style), jumpsDown(end) ? 38 : -38),
-      ax: places[at]! - wanted[at]!,
-      arrowcolor: colour,
-    }));
-  });
-}
-
-/** Held by its middle, which turned text keeps. */
-function inwards(leader: Partial<Annotation>, pixels: number): Partial<Annotation> {
-  return { ...leader, yanchor: 'middle', ay: Number(leader.ay) + pixels };
-}
-
-interface LookedEnd {
-  readonly end: ClimateEnd;
-  readonly look: CaseLook;
-}
-
-/** Rough width of the plot in pixels: for the room between labels only. */
-function roughWidth({ narrow }: FigureStyle): number {
-  return narrow ? 290 : 780;
-}
-
-function jumpsDown({ point, next }: Pick<ClimateEnd, 'point' | 'next'>): boolean {
-  return next === null || next < point.temperatureMean;
-}
-
-/** A leader from the fold to the upper edge of the panel, to the lower one from a fold that jumps up. */
-function toEdge(end: Pick<ClimateEnd, 'point' | 'next'>, view: View, style: FigureStyle): Partial<Annotation> {
-  const total = style.narrow ? plotHeight.narrow : plotHeight.wide;
-  const height = (panels.temperature[1] - panels.temperature[0]) * total;
-  const share = (end.point.temperatureMean - view.y[0]) / (view.y[1] - view.y[0]);
-  const isUp = jumpsDown(end);
-  return {
-    showarrow: true,
-    arrowhead: 0,
-    arrowwidth: 0.75,
-    arrowcolor: style.theme.quiet,
-    standoff: 6,
-    yanchor: isUp ? 'top' : 'bottom',
-    ay: isUp ? 4 - (1 - share) * height : share * height - 4,
   };
 }
 
@@ -319,7 +219,8 @@ function severalSpans(
   { theme, narrow }: FigureStyle,
 ): { shapes: Partial<Shape>[]; annotations: Partial<Annotation>[] } {
   const spans = spansOf(oneCase, along).filter(({ climates }) => climates > 1);
-  const share = (from: number, to: number): number => (place(to, along) - place(from, along)) / (view.x[1] - view.x[0]);
+  const share = (from: number, to: number): number =>
+    (axisPlace(along, to) - axisPlace(along, from)) / (view.x[1] - view.x[0]);
   return {
     // A shape on a logarithmic axis takes the value itself, an annotation its logarithm.
     shapes: spans.map(({ from, to, climates }) => ({
@@ -338,7 +239,7 @@ function severalSpans(
     annotations: spans
       .filter(({ from, to }) => share(from, to) > (narrow ? 0.25 : 0.1))
       .map(({ from, to, climates }) => ({
-        x: (place(from, along) + place(to, along)) / 2,
+        x: (axisPlace(along, from) + axisPlace(along, to)) / 2,
         xref: 'x',
         y: 1,
         yref: 'paper',

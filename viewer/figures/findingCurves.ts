@@ -3,6 +3,8 @@ import type { Annotation, Data, Layout, Shape } from 'plotly.js-dist-min';
 import type { GridAxis, GridReport } from '../../sim/studies/grid/gridReport.ts';
 import { labelInText } from '../words/along.ts';
 import { axisPlace, nodeText, rangeOf } from '../words/gridAxes.ts';
+import { lookOf, membersOf } from '../words/gridMembers.ts';
+import { list } from '../words/number.ts';
 import { extremesOf, type ShownFinding, shownFinding } from '../words/shownFinding.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type ChartLine, glyph, traceOf } from './chartLine.ts';
@@ -44,15 +46,16 @@ function lineOf(report: GridReport, at: number, shown: ShownFinding, { theme }: 
     const y = values[node] ?? null;
     return y === null ? [] : [{ x, y }];
   });
-  const name = report.cases[at]!.name;
+  const { name } = report.cases[at]!;
+  const look = lookOf(report.cases[at]!);
   return {
     plainName: name,
     name: plainLabel(name, 60),
     shortName: plainLabel(name, 22),
-    colour: caseColour(theme, at),
+    colour: caseColour(theme, look),
     dash: 'solid',
     width: 2.5,
-    marker: { shape: caseMarker(at), open: false },
+    marker: { shape: caseMarker(look), open: false },
     referenceFor: null,
     x: nodes.map(({ x }) => x),
     y: nodes.map(({ y }) => y),
@@ -129,9 +132,11 @@ function ownPoints(
   { theme }: FigureStyle,
 ): { shapes: Partial<Shape>[]; annotations: Partial<Annotation>[] } {
   const places = new Map<number, number[]>();
-  report.cases.forEach(({ own: [value] }, at) => {
-    if (typeof value === 'number') places.set(value, [...(places.get(value) ?? []), at]);
-  });
+  const members = membersOf(report);
+  for (const { own, index } of members) {
+    const [value] = own;
+    if (typeof value === 'number') places.set(value, [...(places.get(value) ?? []), index]);
+  }
   const all = [...places.entries()];
   return {
     shapes: all.map(([value]) => ({
@@ -153,7 +158,7 @@ function ownPoints(
       yref: 'paper',
       yanchor: 'bottom',
       text:
-        owners.length === report.cases.length
+        owners.length === members.length
           ? 'own point'
           : owners.map((at) => `<span style="color:${caseColour(theme, at)}">${sign(at)}</span>`).join(' '),
       showarrow: false,
@@ -168,7 +173,7 @@ function sign(at: number): string {
 
 /** On the axis, where a world could not be computed. */
 function crosses(report: GridReport, axis: GridAxis, { theme }: FigureStyle): Partial<Annotation>[] {
-  return report.cases.flatMap(({ failed }, at) =>
+  return report.cases.flatMap(({ failed, members }, at) =>
     failed.slice(0, mostCrosses).map(({ node }) => ({
       x: axisPlace(axis, axis.nodes[node]!),
       xref: 'x' as const,
@@ -178,7 +183,7 @@ function crosses(report: GridReport, axis: GridAxis, { theme }: FigureStyle): Pa
       yshift: 9 * at,
       text: '×',
       showarrow: false,
-      font: { color: caseColour(theme, at), size: 13 },
+      font: { color: caseColour(theme, lookOf({ members })), size: 13 },
     })),
   );
 }
@@ -196,15 +201,24 @@ function finding(report: GridReport, at: number, shown: ShownFinding): string {
   return `${name}: lowest ${words(low)}; highest ${words(high)}.${missing}`;
 }
 
-function caption({ cases, axes }: GridReport, shown: ShownFinding): string {
+function caption(report: GridReport, shown: ShownFinding): string {
+  const { cases, axes } = report;
   const failed = cases.reduce((sum, one) => sum + one.failed.length, 0);
   const nodes = cases.length * axes[0]!.nodes.length;
   const blank = shown.cases.flat().filter((value) => value === null).length - failed;
-  const hasOwn = cases.some(({ own: [value] }) => typeof value === 'number');
   return [
     `${axes[0]!.nodes.length} worlds a case, joined by straight lines.`,
-    ...(hasOwn ? ['Dotted: the scenario’s own point.'] : []),
+    ...ownWords(report),
     ...(failed > 0 ? [`Crosses on the axis: ${failed} of ${nodes} worlds could not be computed.`] : []),
     ...(blank > 0 ? [`The lines break where there is no value, in ${blank} of ${nodes} worlds.`] : []),
   ].join(' ');
+}
+
+/** The signs of cases that share a line are nowhere else. */
+function ownWords(report: GridReport): string[] {
+  const owners = membersOf(report).filter(({ own: [value] }) => typeof value === 'number');
+  if (owners.length === 0) return [];
+  if (!report.cases.some(({ members }) => members.length > 1)) return ['Dotted: the scenario’s own point.'];
+  const signs = owners.map(({ name, index }) => `${sign(index)}\u00a0${name}`);
+  return [`Dotted: the scenario’s own points, ${list(signs)}.`];
 }

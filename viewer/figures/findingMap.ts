@@ -45,13 +45,20 @@ export function findingMap(report: GridReport, caseIndex: number, name: string, 
   const oneCase = report.cases[caseIndex]!;
   const whose = report.cases.length > 1 ? `: ${oneCase.name}` : '';
   const contours = contoursOf(map);
-  const hasOwn = ownPoint(map) !== null;
+  const own = ownPoints(map);
   return {
     name: `${fileName(name)}-over-two-inputs${report.cases.length > 1 ? `-${caseIndex + 1}` : ''}`,
     title: `${shown.label} over ${list(report.axes.map(labelInText))}${whose}`,
     textAlternative: finding(map),
-    caption: caption(map, hasOwn),
-    lines: hasOwn ? [ownLegend(map)] : [],
+    caption: caption(map),
+    lines: own.map(({ name, index }) => {
+      return {
+        plainName: name,
+        colour: 'currentColor',
+        dash: 'solid',
+        marker: { shape: caseMarker(index), open: true },
+      };
+    }),
     data: [...(shown.range === null ? [] : [colours(map, rows)]), ...contours.data, ...marks(map)],
     layout: layoutOf(map, contours.annotations),
   };
@@ -135,7 +142,6 @@ function barTicks({ levels, place }: ValueScale, { short }: ShownFinding) {
 function contoursOf(map: FindingMap): ContourDrawing {
   const { x, y, rows, scale, shown, view } = map;
   const z = rows.map((row) => row.map((value) => (value === null ? null : scale.place(value))));
-  const own = ownPoint(map);
   return levelContours(
     {
       x: [...x.nodes],
@@ -149,28 +155,31 @@ function contoursOf(map: FindingMap): ContourDrawing {
       window: { ...view, ...size(map) },
     },
     { scale: temperatureScale, range: scale.range },
-    own === null ? [] : [{ x: axisPlace(x, own.x), y: axisPlace(y, own.y) }],
+    ownPoints(map).map((own) => ({ x: axisPlace(x, own.x), y: axisPlace(y, own.y) })),
   );
 }
 
-/** Null where the scenario has none within the ranges. */
-function ownPoint({ report, caseIndex }: FindingMap): { x: number; y: number } | null {
-  const [x, y] = report.cases[caseIndex]!.own;
-  return typeof x === 'number' && typeof y === 'number' ? { x, y } : null;
+interface OwnPoint {
+  /** What the sign says; of cases that became one, whose it is. */
+  readonly name: string;
+  readonly caseName: string;
+  readonly index: number;
+  readonly x: number;
+  readonly y: number;
 }
 
-function ownLegend({ caseIndex }: FindingMap) {
-  return {
-    plainName: 'the scenario’s own point',
-    colour: 'currentColor',
-    dash: 'solid' as const,
-    marker: { shape: caseMarker(caseIndex), open: true },
-  };
+/** Those that the scenario has within the ranges: one a member. */
+function ownPoints({ report, caseIndex }: FindingMap): OwnPoint[] {
+  const { members } = report.cases[caseIndex]!;
+  return members.flatMap(({ name, index, own: [x, y] }) => {
+    if (typeof x !== 'number' || typeof y !== 'number') return [];
+    const said = members.length > 1 ? `own point of ${name}` : 'the scenario’s own point';
+    return [{ name: said, caseName: name, index, x, y }];
+  });
 }
 
 function marks(map: FindingMap): Data[] {
-  const { report, caseIndex, failed, x, y, style } = map;
-  const own = ownPoint(map);
+  const { failed, x, y, style } = map;
   const inner = y.nodes.length;
   const base = { type: 'scatter', mode: 'markers', cliponaxis: false } as const;
   return [
@@ -182,23 +191,14 @@ function marks(map: FindingMap): Data[] {
       marker: { symbol: 'x-thin', size: 6, line: { color: style.theme.quiet, width: 1.25 } },
       hovertemplate: 'not computed<extra></extra>',
     },
-    ...(own === null
-      ? []
-      : [
-          {
-            ...base,
-            name: 'the scenario’s own point',
-            x: [own.x],
-            y: [own.y],
-            marker: {
-              symbol: caseMarker(caseIndex),
-              size: 12,
-              color: '#ffffff',
-              line: { color: '#000000', width: 1.75 },
-            },
-            hovertemplate: `${plainLabel(report.cases[caseIndex]!.name)}, as in the scenario<extra></extra>`,
-          },
-        ]),
+    ...ownPoints(map).map((own) => ({
+      ...base,
+      name: plainLabel(own.name, 60),
+      x: [own.x],
+      y: [own.y],
+      marker: { symbol: caseMarker(own.index), size: 12, color: '#ffffff', line: { color: '#000000', width: 1.75 } },
+      hovertemplate: `${plainLabel(own.caseName)}, as in the scenario<extra></extra>`,
+    })),
   ] as Data[];
 }
 
@@ -219,12 +219,12 @@ function layoutOf(map: FindingMap, numbers: readonly Partial<Annotation>[]): Par
 
 /** Beside the map, under the colour bar: what the signs are. */
 function keyOf(map: FindingMap): Partial<Annotation>[] {
-  const { caseIndex, style, failed, rows } = map;
+  const { style, failed, rows } = map;
   if (style.narrow) return [];
   const blank = rows.flat().filter((value) => value === null).length - failed.length;
   const glyphs = { circle: '○', square: '□', 'triangle-up': '△', diamond: '◇', cross: '✛', star: '☆', hexagon: '⬡' };
   const entries = [
-    ...(ownPoint(map) === null ? [] : [`${glyphs[caseMarker(caseIndex)]}  the scenario’s own point`]),
+    ...ownPoints(map).map(({ name, index }) => `${glyphs[caseMarker(index)]}  ${plainLabel(name, 26)}`),
     ...(failed.length > 0 ? ['×  not computed'] : []),
     ...(blank > 0 ? ['blank: no value'] : []),
   ];
@@ -246,29 +246,32 @@ function keyOf(map: FindingMap): Partial<Annotation>[] {
 
 function finding(map: FindingMap): string {
   const { report, caseIndex, shown, failed } = map;
-  const { name, own } = report.cases[caseIndex]!;
+  const { name } = report.cases[caseIndex]!;
   const found = extremesOf(shown.cases[caseIndex]!);
   if (found === null) return `${name}: ${labelInText(shown)} has no value anywhere.`;
   const at = ({ value, node }: { value: number; node: number }): string =>
     `${shown.text(value)} at ${nodeText(report.axes, node)}`;
-  const where = report.axes.flatMap((axis, index) => {
-    const value = own[index];
-    return typeof value === 'number' ? [axisText(axis, value)] : [];
+  const owns = ownPoints(map).map((own) => {
+    const [x, y] = report.axes as readonly [GridAxis, GridAxis];
+    return `${own.name[0]!.toUpperCase()}${own.name.slice(1)}: ${list([axisText(x, own.x), axisText(y, own.y)])}.`;
   });
   return [
     `${name}: lowest ${at(found.low)}; highest ${at(found.high)}.`,
-    ...(where.length === 2 ? [`The scenario’s own point: ${list(where)}.`] : []),
+    ...owns,
     ...(failed.length > 0 ? [`${failed.length} nodes were not computed.`] : []),
   ].join(' ');
 }
 
-function caption({ report, rows, failed, shown }: FindingMap, hasOwn: boolean): string {
+function caption(map: FindingMap): string {
+  const { report, rows, failed, shown } = map;
+  const own = ownPoints(map).length;
   const nodes = rows.flat();
   const blank = nodes.filter((value) => value === null).length - failed.length;
   return [
     'Every cell is a world of its own; lines join equal values and are interpolated between the nodes.',
     ...(shown.log ? ['The colours go by the logarithm.'] : []),
-    ...(hasOwn ? ['The white sign is the scenario’s own point.'] : []),
+    ...(own === 1 ? ['The white sign is the scenario’s own point.'] : []),
+    ...(own > 1 ? ['The white signs are the scenario’s own points.'] : []),
     ...(failed.length > 0 ? [`Crosses: ${failed.length} of ${nodes.length} worlds could not be computed.`] : []),
     ...(blank > 0 ? [`Blank: in ${blank} of ${nodes.length} worlds it has no value.`] : []),
     ...(report.cases.length > 1 ? ['The colours mean the same in every case.'] : []),

@@ -26,7 +26,11 @@ export function valueAt({ dataset }: Column, name: string, share: number): numbe
 }
 
 /** Rows before and after a place on a circle of increasing numbers, and how far it is between them. */
-function bracket(circle: ArrayLike<number>, wanted: number, turn: number): [before: number, after: number, part: number] {
+function bracket(
+  circle: ArrayLike<number>,
+  wanted: number,
+  turn: number,
+): [before: number, after: number, part: number] {
   let low = 0;
   let high = circle.length;
   while (low < high) {
@@ -42,7 +46,12 @@ function bracket(circle: ArrayLike<number>, wanted: number, turn: number): [befo
 }
 
 /** On a chart through the orbit: a line, and a point on each curve. `span` gives the places of a column along the axis, `per` what they are divided by. */
-export function momentsAlong(columns: readonly Column[], span: (column: Column) => Span, per: number, name: string | null): Moments {
+export function momentsAlong(
+  columns: readonly Column[],
+  span: (column: Column) => Span,
+  per: number,
+  name: string | null,
+): Moments {
   const axes = columns.map((column) => axisOf(column, span(column), per));
   return {
     shareAt: (x) => axes[0]!.shareAt(x),
@@ -72,14 +81,14 @@ function axisOf({ dataset }: Column, { time, rows }: Span, per: number): Axis {
     shareAt(x) {
       const after = places.findIndex((place) => place >= x);
       if (after <= 0) return after === 0 ? shares[0]! : null;
-      const step = ((shares[after]! - shares[after - 1]!) % 1 + 1) % 1;
+      const step = (((shares[after]! - shares[after - 1]!) % 1) + 1) % 1;
       const part = (x - places[after - 1]!) / (places[after]! - places[after - 1]!);
       return (shares[after - 1]! + part * step) % 1;
     },
     placeOf(share) {
       for (let at = 1; at < shares.length; at++) {
-        const step = ((shares[at]! - shares[at - 1]!) % 1 + 1) % 1;
-        const ahead = ((share - shares[at - 1]!) % 1 + 1) % 1;
+        const step = (((shares[at]! - shares[at - 1]!) % 1) + 1) % 1;
+        const ahead = (((share - shares[at - 1]!) % 1) + 1) % 1;
         if (ahead <= step && step > 0) return places[at - 1]! + (ahead / step) * (places[at]! - places[at - 1]!);
       }
       return places[0]!;
@@ -117,7 +126,10 @@ export function momentsBetween(
 }
 
 /** What every case has at a moment: for a line of words beside the figures. */
-export function momentValues(columns: readonly Column[], share: number): { name: string; temperature: number; instellation: number; steady: number }[] {
+export function momentValues(
+  columns: readonly Column[],
+  share: number,
+): { name: string; temperature: number; instellation: number; steady: number }[] {
   return columns.map((column) => ({
     name: columnName(column),
     temperature: valueAt(column, 'temperature', share),

@@ -1,10 +1,11 @@
 /** Figure: a curve with its spread, as nested bands around the median, a panel for each case. Pure. */
-import type { Annotation, Data, Layout, ScatterData, Shape } from 'plotly.js-dist-min';
+import type { Annotation, Data, Layout, ScatterData } from 'plotly.js-dist-min';
 import type { SpreadBand, SpreadCase, SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
 import { ledBy } from '../words/importance.ts';
 import { keptPercents, list, unitText } from '../words/number.ts';
 import { bandSentence } from '../words/spreadBand.ts';
 import { periodsText } from '../words/spreadNumber.ts';
+import { apsides, apsisNames } from './apsides.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type LegendLine, lastInView } from './chartLine.ts';
 import type { Figure, FigureStyle } from './figure.ts';
@@ -236,41 +237,6 @@ function orbitAxis({ x }: View, { columns }: PanelGrid, style: FigureStyle): Par
 
 function latitudeAxis(view: View, { columns }: PanelGrid, style: FigureStyle): Partial<Layout['xaxis']> {
   return latitudeAxisLayout(view.x, columns > 1 ? { ...style, narrow: true } : style);
-}
-
-const apsidesAt = [
-  { at: 0, label: 'periapsis', strong: true },
-  { at: 0.5, label: 'apoapsis', strong: false },
-] as const;
-
-function apsides(panel: Panel, { theme }: FigureStyle): Partial<Shape>[] {
-  return apsidesAt.map(({ at, label, strong }) => ({
-    type: 'line',
-    name: label,
-    xref: panel.x,
-    x0: at,
-    x1: at,
-    yref: `${panel.y} domain` as 'y',
-    y0: 0,
-    y1: 1,
-    line: { color: strong ? theme.ink : theme.bandEdge, width: 1, dash: strong ? 'solid' : 'dot' },
-    layer: 'below',
-  }));
-}
-
-function apsisNames(panel: Panel, { theme }: FigureStyle): Partial<Annotation>[] {
-  return apsidesAt.map(({ at, label, strong }) => ({
-    text: strong ? `<b>${label}</b>` : label,
-    showarrow: false,
-    font: { color: strong ? theme.ink : theme.quiet, size: 12 },
-    x: at,
-    xref: panel.x,
-    xanchor: 'left',
-    xshift: 2,
-    y: panel.yDomain[1],
-    yref: 'paper',
-    yanchor: 'top',
-  }));
 }
 
 /** Beside the last panel of the first row: what the bands and lines are. */

@@ -1,9 +1,10 @@
 /** Figure: damping and lag of every plain lumped world, with the cases placed among them. Pure. */
-import type { Annotation, Data, Layout, Shape } from 'plotly.js-dist-min';
+import type { Annotation, Data, Layout } from 'plotly.js-dist-min';
 import type { GridCase } from '../../sim/studies/grid/gridReport.ts';
-import type { StoreReading } from '../../sim/studies/grid/readBack.ts';
+import type { ReadBack } from '../../sim/studies/grid/readBack.ts';
 import type { UniversalPlace } from '../../sim/studies/grid/storeNumber.ts';
 import type { UniversalChart } from '../../sim/studies/grid/universalChart.ts';
+import { membersOf } from '../words/gridMembers.ts';
 import { exact, fixed, list, nbsp, significant } from '../words/number.ts';
 import { placeText } from '../words/storeReading.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
@@ -14,8 +15,8 @@ import type { Figure, FigureStyle } from './figure.ts';
 import { decadeTicks } from './gridAxisLayout.ts';
 import { colourBar } from './mapKey.ts';
 import { plainLabel } from './plainLabel.ts';
-import { spreadLabels } from './spreadLabels.ts';
 import { caseMarker } from './theme.ts';
+import { dampingKey, placeNames } from './universalLabels.ts';
 import type { View } from './view.ts';
 
 export interface PlacedCase {
@@ -27,7 +28,7 @@ export interface PlacedCase {
 /** What was read back, to be marked. */
 export interface MarkedReading {
   readonly eccentricity: number;
-  readonly reading: StoreReading;
+  readonly reading: Pick<ReadBack, 'storeNumber' | 'low' | 'high'>;
 }
 
 const plotHeight = { wide: 420, narrow: 330 };
@@ -41,8 +42,8 @@ const lagRange = [0, 25] as const;
 
 /** Cases of the report that have a place on the chart. */
 export function placedCases(cases: readonly GridCase[]): PlacedCase[] {
-  return cases.flatMap(({ name, universal }, caseIndex) =>
-    universal === null ? [] : [{ caseIndex, name, place: universal }],
+  return membersOf({ cases }).flatMap(({ name, index, universal }) =>
+    universal === null ? [] : [{ caseIndex: index, name, place: universal }],
   );
 }
 
@@ -160,7 +161,7 @@ function markers(placed: readonly PlacedCase[]): Data[] {
   }));
 }
 
-/** A cross at what was read, with a bar for its uncertainty; a side without a limit goes to the edge. */
+/** A cross at what was read, if anything was, with a bar for its uncertainty; a side without a limit goes to the edge. */
 function readingMarks(marked: MarkedReading | null, { storeNumbers }: UniversalChart): Data[] {
   if (marked === null) return [];
   const { eccentricity, reading } = marked;
@@ -170,14 +171,18 @@ function readingMarks(marked: MarkedReading | null, { storeNumbers }: UniversalC
   return [
     { type: 'scatter', mode: 'lines', name: 'read back, edge', ...bar, line: { color: '#000000', width: 5 } },
     { type: 'scatter', mode: 'lines', name: 'read back', ...bar, line: { color: '#ffffff', width: 2.5 } },
-    {
-      type: 'scatter',
-      mode: 'markers',
-      name: 'read back',
-      x: [reading.storeNumber],
-      y: [eccentricity],
-      marker: { symbol: 'x', size: 11, color: '#ffffff', line: { color: '#000000', width: 1.5 } },
-    },
+    ...(reading.storeNumber === null
+      ? []
+      : [
+          {
+            type: 'scatter',
+            mode: 'markers',
+            name: 'read back',
+            x: [reading.storeNumber],
+            y: [eccentricity],
+            marker: { symbol: 'x', size: 11, color: '#ffffff', line: { color: '#000000', width: 1.5 } },
+          },
+        ]),
   ].map((trace) => ({ ...trace, hoverinfo: 'skip' })) as Data[];
 }
 
@@ -190,7 +195,8 @@ function layoutOf(
   const { narrow } = style;
   const margin = narrow ? margins.narrow : margins.wide;
   const height = narrow ? plotHeight.narrow : plotHeight.wide;
-  const key = narrow ? { shapes: [], annotations: [] } : lineKey(style);
+  const key = narrow ? { shapes: [], annotations: [] } : dampingKey(style);
+  const size = { width: plotWidth.wide, height: plotHeight.wide };
   return {
     ...plainLayout(style),
     height: height + margin.t + margin.b,
@@ -213,74 +219,7 @@ function layoutOf(
       mirror: true,
     },
     shapes: key.shapes,
-    annotations: [...numbers, ...(narrow ? [] : names(placed, view)), ...key.annotations],
-  };
-}
-
-/** Beside the markers on paper-white, apart from each other. */
-function names(placed: readonly PlacedCase[], view: View): Partial<Annotation>[] {
-  const pixel = (y: number): number => ((y - view.y[0]) / (view.y[1] - view.y[0])) * plotHeight.wide;
-  const wanted = placed.map(({ place }) => pixel(place.eccentricity));
-  const places = spreadLabels(wanted, 21, 10, plotHeight.wide - 10);
-  return placed.map(({ name, place }, at) => {
-    const x = Math.log10(place.storeNumber);
-    const isRight = x > view.x[0] + 0.72 * (view.x[1] - view.x[0]);
-    return {
-      x,
-      y: place.eccentricity,
-      ax: isRight ? -26 : 26,
-      ay: wanted[at]! - places[at]!,
-      text: plainLabel(name, 24),
-      showarrow: true,
-      arrowhead: 0,
-      arrowwidth: 1,
-      arrowcolor: '#000000',
-      standoff: 6,
-      xanchor: isRight ? 'right' : 'left',
-      yanchor: 'middle',
-      bgcolor: '#ffffff',
-      borderpad: 2,
-      font: { color: '#000000', size: 12 },
-    };
-  });
-}
-
-/** Beside the map: a sample of the dashed line. */
-function lineKey({ theme }: FigureStyle): { shapes: Partial<Shape>[]; annotations: Partial<Annotation>[] } {
-  const sample = {
-    type: 'line',
-    xref: 'paper',
-    yref: 'paper',
-    xsizemode: 'pixel',
-    ysizemode: 'pixel',
-    xanchor: 1,
-    yanchor: 1,
-    x0: 18,
-    x1: 46,
-    y0: -92,
-    y1: -92,
-  } as const;
-  return {
-    shapes: [
-      { ...sample, line: { color: '#000000', width: 2.5 } },
-      { ...sample, line: { color: '#ffffff', width: 1.25, dash: 'dash' } },
-    ],
-    annotations: [
-      {
-        text: 'damping: swing over<br>steady swing',
-        showarrow: false,
-        align: 'left',
-        font: { color: theme.ink, size: 12 },
-        x: 1,
-        xref: 'paper',
-        xanchor: 'left',
-        xshift: 54,
-        y: 1,
-        yref: 'paper',
-        yanchor: 'top',
-        yshift: -83,
-      },
-    ],
+    annotations: [...numbers, ...(narrow ? [] : placeNames(placed, view, size)), ...key.annotations],
   };
 }
 
@@ -298,7 +237,7 @@ function finding(placed: readonly PlacedCase[], marked: MarkedReading | null): s
   return [
     'The lag grows with the heat store, up to a quarter of an orbit on a nearly circular one and less on an eccentric one; the damping hardly depends on the eccentricity.',
     ...(cases.length > 0 ? [`${list(cases)}.`] : []),
-    ...(marked === null
+    ...(marked === null || marked.reading.storeNumber === null
       ? []
       : [
           `Read back at eccentricity ${exact(marked.eccentricity)}: heat-store number ${significant(marked.reading.storeNumber, 3)}.`,

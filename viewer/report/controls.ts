@@ -1,32 +1,45 @@
 /** What a reader may choose or type. */
 import { element, userText } from './element.ts';
 
-export interface Choice {
+export interface Option {
   readonly value: string;
   readonly label: string;
 }
 
-export interface ChoiceGroup {
-  /** Null where the choices need no heading. */
-  readonly label: string | null;
-  readonly choices: readonly Choice[];
+export interface OptionGroup {
+  readonly title: string;
+  readonly options: readonly Option[];
 }
 
-/** A labelled select; `chosen` is called with the value at every change. */
-export function chooser(label: string, groups: readonly ChoiceGroup[], chosen: (value: string) => void): HTMLElement {
-  const options = (choices: readonly Choice[]): HTMLElement[] =>
-    choices.map(({ value, label: text }) => element('option', { value }, text));
-  const select = element(
-    'select',
-    {},
-    ...groups
-      .filter(({ choices }) => choices.length > 0)
-      .flatMap(({ label: heading, choices }) =>
-        heading === null ? options(choices) : [element('optgroup', { label: heading }, ...options(choices))],
-      ),
-  );
-  select.addEventListener('change', () => chosen(select.value));
+/** Texts are shortened: the control is as wide as its longest entry. */
+const longest = 60;
+
+/** A labelled select by the browser's own control; `changed` is called with the value at every change. One group needs no title. */
+export function choice(
+  label: string,
+  groups: readonly OptionGroup[],
+  chosen: string,
+  changed: (value: string) => void,
+): HTMLElement {
+  const filled = groups.filter(({ options }) => options.length > 0);
+  const entries = filled.flatMap(({ title, options }) => {
+    const own = options.map(({ value, label: text }) => element('option', { value }, shortened(text)));
+    return filled.length === 1 ? own : [element('optgroup', { label: title }, ...own)];
+  });
+  const select = element('select', {}, ...entries);
+  select.value = chosen;
+  select.addEventListener('change', () => changed(select.value));
   return labelled(label, select);
+}
+
+/** Several of them in a row. */
+export function controlRow(label: string, ...controls: readonly HTMLElement[]): HTMLElement {
+  return element('div', { class: 'controls', role: 'group', 'aria-label': label }, ...controls);
+}
+
+export function shortened(text: string): string {
+  const characters = [...text];
+  return characters.length > longest ? `${characters.slice(0, longest - 1).join('')}…` : text;
 }
 
 /** A labelled field for a number; `unit` stands behind it. */
@@ -36,7 +49,7 @@ export function numberField(label: string, unit: string, value: string, typed: (
   return labelled(label, input, unit);
 }
 
-function labelled(label: string, control: HTMLElement, unit = ''): HTMLElement {
+export function labelled(label: string, control: HTMLElement, unit = ''): HTMLElement {
   return element(
     'label',
     { class: 'control' },

@@ -1,5 +1,6 @@
 /** The whole page from a grid, top to bottom. */
 import type { GridReport } from '../../sim/studies/grid/gridReport.ts';
+import { membersOf } from '../words/gridMembers.ts';
 import { gridCautions, gridSteps } from '../words/gridMethod.ts';
 import { element } from './element.ts';
 import type { Page } from './page.ts';
@@ -23,7 +24,7 @@ export function gridPage(report: GridReport): Page {
     finding.element,
     extremesSection(report),
     plain?.element ?? null,
-    inputsSection(report.cases.map(({ name, inputs }) => ({ name, inputs, derived: [] }))),
+    inputsSection(membersOf(report).map(({ name, inputs }) => ({ name, inputs, derived: [] }))),
     stepsSection(gridSteps(report)),
     cautionsList(gridCautions(report)),
     footer(report),

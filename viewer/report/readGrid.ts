@@ -1,5 +1,5 @@
 /** Checks a grid that the page carries. Pure. */
-import type { GridAxis, GridCase, GridReport } from '../../sim/studies/grid/gridReport.ts';
+import type { GridAxis, GridCase, GridMember, GridReport } from '../../sim/studies/grid/gridReport.ts';
 import { damaged } from './readResult.ts';
 
 /** Errors: PageError when the data are no grid that this page can show. */
@@ -18,7 +18,7 @@ function isGrid(value: unknown): value is GridReport {
   const { axes, cases, scenario, program } = grid;
   if (typeof scenario?.file !== 'string' || typeof program?.name !== 'string') return false;
   if (!Array.isArray(axes) || axes.length < 1 || axes.length > 2 || !axes.every(isAxis)) return false;
-  return Array.isArray(cases) && cases.length > 0 && cases.every(isCase);
+  return Array.isArray(grid.notes) && Array.isArray(cases) && cases.length > 0 && cases.every(isCase);
 }
 
 function isAxis(axis: Partial<GridAxis> | null): boolean {
@@ -29,19 +29,30 @@ function isAxis(axis: Partial<GridAxis> | null): boolean {
 }
 
 function isCase(one: Partial<GridCase> | null): boolean {
-  const { name, model, findings, own, failed, warnings, notes, inputs } = one ?? {};
+  const { name, model, findings, members, failed, warnings, notes } = one ?? {};
   if (typeof name !== 'string' || typeof model !== 'string') return false;
-  return [findings, own, failed, warnings, notes, inputs].every(Array.isArray);
+  if (![findings, members, failed, warnings, notes].every(Array.isArray)) return false;
+  return members!.length > 0 && members!.every(isMember);
 }
 
-function isWhole({ findings, own, failed, universal }: GridCase, axes: number, nodes: number): boolean {
-  const isNumberOrNull = (value: unknown): boolean => value === null || Number.isFinite(value);
+function isMember({ name, index, own, inputs }: Partial<GridMember>): boolean {
+  return typeof name === 'string' && Number.isInteger(index) && Array.isArray(own) && Array.isArray(inputs);
+}
+
+function isNumberOrNull(value: unknown): boolean {
+  return value === null || Number.isFinite(value);
+}
+
+function isPlaced({ own, universal }: GridMember, axes: number): boolean {
   if (own.length !== axes || !own.every(isNumberOrNull)) return false;
+  if (universal === null) return true;
+  const { eccentricity, storeNumber, heatCapacityPerNumber } = universal ?? {};
+  return eccentricity >= 0 && eccentricity < 1 && storeNumber > 0 && heatCapacityPerNumber > 0;
+}
+
+function isWhole({ findings, members, failed }: GridCase, axes: number, nodes: number): boolean {
+  if (!members.every((member) => isPlaced(member, axes))) return false;
   if (!failed.every(({ node }) => Number.isInteger(node) && node >= 0 && node < nodes)) return false;
-  if (universal !== null) {
-    const { eccentricity, storeNumber, heatCapacityPerNumber } = universal ?? {};
-    if (!(eccentricity >= 0 && eccentricity < 1 && storeNumber > 0 && heatCapacityPerNumber > 0)) return false;
-  }
   return findings.every(({ name, values }) => {
     return typeof name === 'string' && values?.length === nodes && values.every(isNumberOrNull);
   });

@@ -1,5 +1,6 @@
 /** How the figures are to be read: across what, in which unit, beside what. The browser's own controls. */
 import { type AxisName, plainReading, type Reading } from '../figures/reading.ts';
+import { controlRow, labelled, shortened } from './controls.ts';
 import { element } from './element.ts';
 
 /** What there is to choose from. */
@@ -40,7 +41,7 @@ export function readingBar(changed: (reading: Reading) => void): ReadingBar {
   unit.addEventListener('change', () => change({ unit: unit.value as Reading['unit'] }));
   const against = element('select', {});
   against.addEventListener('change', () => change({ against: against.value === '' ? null : against.value }));
-  const againstLabel = element('label', { class: 'choice' }, 'Difference from ', against);
+  const againstLabel = labelled('Difference from', against);
 
   function show(next: Reading): void {
     reading = next;
@@ -50,11 +51,10 @@ export function readingBar(changed: (reading: Reading) => void): ReadingBar {
   }
 
   return {
-    element: element(
-      'div',
-      { class: 'chooser reading-bar', role: 'group', 'aria-label': 'How the figures are read' },
-      element('label', { class: 'choice' }, 'Through the orbit by ', axis),
-      element('label', { class: 'choice' }, 'Temperatures in ', unit),
+    element: controlRow(
+      'How the figures are read',
+      labelled('Through the orbit by', axis),
+      labelled('Temperatures in', unit),
       againstLabel,
     ),
     offer({ axes, cases }) {
@@ -68,11 +68,4 @@ export function readingBar(changed: (reading: Reading) => void): ReadingBar {
     },
     show,
   };
-}
-
-const longest = 40;
-
-function shortened(name: string): string {
-  const letters = [...name];
-  return letters.length > longest ? `${letters.slice(0, longest - 1).join('')}…` : name;
 }

@@ -2,6 +2,7 @@
 import type { GridReport } from '../../sim/studies/grid/gridReport.ts';
 import { labelInText } from './along.ts';
 import { nodeText, rangesText } from './gridAxes.ts';
+import { lookOf } from './gridMembers.ts';
 import { list } from './number.ts';
 import { extremesOf, type ShownFinding, shownFinding, spanText } from './shownFinding.ts';
 
@@ -22,9 +23,13 @@ export function gridAnswer(report: GridReport): GridAnswer {
   );
   return {
     lead: `${over}, ${all.join(', and ')}.`,
-    details: report.cases.map(({ name }, at) => {
+    details: report.cases.map((one, at) => {
       const text = caseText(report, at, told, false);
-      return { caseIndex: at, name, text: `${text[0]!.toUpperCase()}${text.slice(1)}${failedText(report, at)}` };
+      return {
+        caseIndex: lookOf(one),
+        name: one.name,
+        text: `${text[0]!.toUpperCase()}${text.slice(1)}${failedText(report, at)}`,
+      };
     }),
   };
 }
@@ -52,7 +57,7 @@ function caseText(report: GridReport, at: number, told: readonly Told[], isWhole
   const text = told.map(({ what, shown }) => runs(what, shown, shown.cases[at] ?? [])).join(', and ');
   const found = extremesOf(told.find(({ name }) => name === 'temperatureMean')?.shown.cases[at] ?? []);
   if (!isWhole || found === null || found.high.value === found.low.value) return `${text}.`;
-  const warmest = `It is warmest on average at ${nodeText(report.axes, found.high.node)}`;
+  const warmest = `The planet is warmest on average at ${nodeText(report.axes, found.high.node)}`;
   return `${text}. ${warmest}, coldest at ${nodeText(report.axes, found.low.node)}.`;
 }
 

@@ -1,17 +1,18 @@
 /** How a grid was computed, and what its numbers are not. Pure. */
 import type { GridReport } from '../../sim/studies/grid/gridReport.ts';
 import { rangesText } from './gridAxes.ts';
+import { membersOf } from './gridMembers.ts';
 import { modelCautions, planningCaution, stepsFor, usedInputs } from './method.ts';
 import type { Step } from './rule.ts';
 
 export function gridSteps(report: GridReport): Step[] {
-  const { cases, hold } = report;
+  const { hold } = report;
   const shape = report.axes.map(({ nodes }) => nodes.length).join(' × ');
   const steps = report.axes.map(({ log }) => (log ? 'equal ratios' : 'equal steps'));
-  const isPlaced = cases.some(({ universal }) => universal !== null);
+  const isPlaced = membersOf(report).some(({ universal }) => universal !== null);
   return [
     ...stepsFor({
-      ...usedInputs(cases.flatMap(({ inputs }) => inputs)),
+      ...usedInputs(membersOf(report).flatMap(({ inputs }) => inputs)),
       ...models(report),
       periodic: true,
       forward: false,
@@ -45,7 +46,7 @@ function models({ cases }: GridReport): { asOne: boolean; byLatitude: boolean } 
 }
 
 export function gridCautions(report: GridReport): string[] {
-  const isPlaced = report.cases.some(({ universal }) => universal !== null);
+  const isPlaced = membersOf(report).some(({ universal }) => universal !== null);
   return [
     ...modelCautions(models(report)),
     'A range on an axis is a choice and no probability: the map says what would follow from each value, not how likely it is.',

@@ -9,8 +9,13 @@ const digits = 3;
 
 /** The answer under the form: heat-store number, heat capacity of the case, and the sea that would hold as much. */
 export function readingText(reading: ReadBack, { heatCapacityPerNumber }: UniversalPlace): string {
-  if (reading.storeNumber === null) return `No heat store can be read: ${reading.reason}.`;
   const { storeNumber, low, high } = reading;
+  if (storeNumber === null) {
+    const none = `No heat store can be read: ${reading.reason}.`;
+    if (low === null && high === null) return none;
+    const [numbers, capacities] = [1, heatCapacityPerNumber].map((per) => limitsText(low, high, per));
+    return `${none} Its uncertainty takes in heat-store numbers ${numbers}: heat capacities ${withUnit(capacities!, 'J/m2/K')}.`;
+  }
   const range = rangeText(low, high, 1);
   const capacity = storeNumber * heatCapacityPerNumber;
   const sea = capacity / mixedLayerHeatCapacity(1);
@@ -23,11 +28,17 @@ export function readingText(reading: ReadBack, { heatCapacityPerNumber }: Univer
 
 /** ` (1.2 to 2.1)`; a side that the lag's uncertainty leaves open is said to be. */
 function rangeText(low: number | null, high: number | null, per: number): string {
-  const number = (value: number): string => significant(value * per, digits);
   if (low === null && high === null) return ' (no limit either way)';
-  if (low === null) return ` (below ${number(high!)})`;
-  if (high === null) return ` (above ${number(low)})`;
-  return number(low) === number(high) ? '' : ` (${number(low)} to ${number(high)})`;
+  const text = limitsText(low, high, per);
+  return text === '' ? '' : ` (${text})`;
+}
+
+/** Empty where the shown digits are the same at both ends. Shape: at least one is a number. */
+function limitsText(low: number | null, high: number | null, per: number): string {
+  const number = (value: number): string => significant(value * per, digits);
+  if (low === null) return `below ${number(high!)}`;
+  if (high === null) return `above ${number(low)}`;
+  return number(low) === number(high) ? '' : `${number(low)} to ${number(high)}`;
 }
 
 /** `0.62 and 1.3`: where a case stands on the chart. */

@@ -3,6 +3,7 @@
  * it is the periodic state; the flow towards it from a warm or cold start keeps that start's basin.
  */
 import { banded, factorBanded, solveBanded } from '../../solve/banded.ts';
+import { largest } from '../../solve/vectors.ts';
 import type { YearMesh } from './mesh.ts';
 import type { ZonalPhysics } from './physics.ts';
 import { zonalSystem } from './system.ts';
@@ -45,7 +46,7 @@ export function relaxToAnnualBalance(physics: ZonalPhysics, mesh: YearMesh, star
     for (let i = 0; i < size; i++) matrix.diagonals[width][i] += 1 / step;
     if (!factorBanded(matrix)) return y;
     solveBanded(matrix, change);
-    const moved = change.reduce((largest, value) => Math.max(largest, Math.abs(value)), 0);
+    const moved = largest(change);
     if (!(moved <= most) && count < 390) {
       step /= 3;
       continue;

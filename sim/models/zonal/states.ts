@@ -11,6 +11,7 @@ import {
 } from '../../solve/periodicMap.ts';
 import { marchRodas4, type StageHistory, stageHistory, stageWork } from '../../solve/rodas4.ts';
 import { type SteppedTangent, type TangentStore, tangentOf, tangentStore } from '../../solve/tangent.ts';
+import { largest } from '../../solve/vectors.ts';
 import type { Globe, World } from '../../world.ts';
 import { relaxToAnnualBalance } from './annualBalance.ts';
 import { equalAreaBands } from './bands.ts';
@@ -111,7 +112,7 @@ export function settleZonal(grid: ZonalGrid, bandStart: Float64Array, tolerance:
 
 /** Rodas4 gains 2⁴ by halving its steps; kinks of polar night and narrow ramps leave less, as the gain before shows. */
 function safety({ system, map, settled: { tangent } }: OnMesh, gain: number): number {
-  if (tangent !== null && fastestRate(system, map, tangent) * largestOf(system.mesh.width) > fastStep) return 1;
+  if (tangent !== null && fastestRate(system, map, tangent) * largest(system.mesh.width) > fastStep) return 1;
   return Number.isNaN(gain) ? firstSafety : Math.min(bestSafety, Math.max(1, gain - 1));
 }
 
@@ -120,11 +121,7 @@ function fastestRate(system: ZonalSystem, { history }: ZonalYearMap, { meanJacob
   const rates = new Float64Array(system.size);
   system.transportRatesInto(history.value.subarray(0, system.size), rates);
   const main = meanJacobian.diagonals[system.width];
-  return largestOf(rates.map((rate, i) => rate + main[i]));
-}
-
-function largestOf(values: Float64Array): number {
-  return values.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
+  return largest(rates.map((rate, i) => rate + main[i]));
 }
 
 /** The same temperature on every surface of a band. */
@@ -197,7 +194,7 @@ function largestDifference(coarse: OnMesh, fine: OnMesh): number {
   const { size, mesh } = coarse.system;
   const fineTime = fine.system.mesh.time;
   const { value, rate } = coarse.map.history;
-  let largest = 0;
+  let most = 0;
   for (let step = 0; step < mesh.steps; step++) {
     const h = mesh.width[step];
     const x = (fineTime[2 * step + 1] - mesh.time[step]) / h;
@@ -212,10 +209,10 @@ function largestDifference(coarse: OnMesh, fine: OnMesh): number {
       const atEnd = fine.map.history.value[2 * step * size + i];
       const atMiddle = fine.map.history.value[(2 * step + 1) * size + i];
       const difference = Math.max(Math.abs(value[a] / atEnd - 1), Math.abs(between / atMiddle - 1));
-      if (!(difference <= largest)) largest = difference;
+      if (!(difference <= most)) most = difference;
     }
   }
-  return largest;
+  return most;
 }
 
 function finished(on: OnMesh, errorEstimate: number, converged: boolean, yearEquivalents: number): ZonalState {

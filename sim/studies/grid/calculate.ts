@@ -15,9 +15,9 @@ export function nodesCalculator(setup: GridSetup) {
     for (let node = from; node < to; node++) {
       const values = valuesAt(plan.axes, node);
       for (const [k, { along }] of plan.axes.entries()) axes[k][node - from] = inUnit(values[k], along.unit);
-      const messages = plan.cases.flatMap(({ over }, c) => {
+      const messages = plan.cases.flatMap(({ name }, c) => {
         const message = solve[c](values, findings[c], node - from);
-        return message === null ? [] : [plan.cases.length === 1 ? message : `${over.name}: ${message}`];
+        return message === null ? [] : [plan.cases.length === 1 ? message : `${name}: ${message}`];
       });
       if (messages.length > 0) failures.push({ draw: node, message: messages.join('; ') });
     }

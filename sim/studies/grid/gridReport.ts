@@ -22,19 +22,29 @@ export interface GridFinding {
   readonly circular: boolean;
 }
 
-export interface GridCase {
+/** A case of the scenario on the grid. */
+export interface GridMember {
   readonly name: string;
-  readonly model: string;
-  readonly findings: readonly GridFinding[];
+  /** Its place among the cases of the grid, the merged ones counted. */
+  readonly index: number;
   /** The scenario's own point in the axes' units; null where it says nothing that gives it, or lies outside. */
   readonly own: readonly (number | null)[];
-  readonly failed: readonly { readonly node: number; readonly message: string }[];
-  readonly warnings: readonly string[];
-  readonly notes: readonly string[];
   /** The case on the chart of plain lumped worlds; null where it is not one. */
   readonly universal: UniversalPlace | null;
   /** As the scenario has them; those along an axis are what its own point is made of. */
   readonly inputs: readonly CaseInput[];
+}
+
+export interface GridCase {
+  /** Of all members: `rock = thick air`. */
+  readonly name: string;
+  readonly model: string;
+  readonly findings: readonly GridFinding[];
+  /** Cases of the scenario that the axes make one and the same; mostly a single one. */
+  readonly members: readonly GridMember[];
+  readonly failed: readonly { readonly node: number; readonly message: string }[];
+  readonly warnings: readonly string[];
+  readonly notes: readonly string[];
 }
 
 export interface GridReport extends Origin {
@@ -42,4 +52,6 @@ export interface GridReport extends Origin {
   readonly axes: readonly GridAxis[];
   readonly hold: string | null;
   readonly cases: readonly GridCase[];
+  /** Of the grid as a whole: that spreads are not propagated, and which centres are used instead. */
+  readonly notes: readonly string[];
 }

@@ -5,10 +5,15 @@ import type { FindingColumn } from '../../findings/finding.ts';
 import { batchOf } from '../../models/batchOf.ts';
 import { models } from '../../models/index.ts';
 import type { Batch } from '../../models/model.ts';
+import { nearest } from '../../quantity/index.ts';
+import { alike, alikeNotes, togetherName } from '../../scenario/alike.ts';
 import { type Along, readAlong } from '../../scenario/along.ts';
 import { readHold } from '../../scenario/hold.ts';
+import { fingerprintWithWindows } from '../../scenario/influence.ts';
+import { replacedNotes } from '../../scenario/leftOut.ts';
 import { type Node, nodesOf } from '../../scenario/nodes.ts';
 import { type CaseOver, casesOver } from '../../scenario/over.ts';
+import { caught } from '../rowSolver.ts';
 import { nodePlaces } from './nodePlaces.ts';
 
 /** What the numbers of a grid depend on. Plain data: it crosses to every worker. */
@@ -30,9 +35,15 @@ export interface GridPlanAxis {
 }
 
 export interface GridPlanCase {
+  /** Of all members. */
+  readonly name: string;
+  /** Cases of the scenario that are the same over the ranges; the first stands for all. */
+  readonly members: readonly CaseOver[];
   readonly over: CaseOver;
   readonly batch: Batch;
   readonly findings: readonly FindingColumn[];
+  /** What the ranges replace, what follows from other keys, what is held, and why there are several members. */
+  readonly notes: readonly string[];
 }
 
 export interface GridPlan {
@@ -43,6 +54,8 @@ export interface GridPlan {
   readonly count: number;
 }
 
+const where = '--of';
+
 /** Errors: as `readAlong`, `readHold` and `casesOver`; SimError at `--of` for a name that is no finding. */
 export function planGrid(setup: GridSetup): GridPlan {
   const alongs = setup.alongs.map(readAlong);
@@ -50,23 +63,75 @@ export function planGrid(setup: GridSetup): GridPlan {
   const hold = setup.hold === null ? null : readHold(setup.hold, alongs);
   const axes = alongs.map((along) => ({ along, nodes: nodesOf(along, setup.steps) }));
   const overs = casesOver(setup.text, setup.file, alongs, { ...(setup.only ? { only: setup.only } : {}), hold });
-  return { setup, axes, cases: overs.map((over) => planCase(over, axes, setup.of)), count: setup.steps ** axes.length };
+  const groups = alike(overs.map((over) => ({ over, print: printOf(over, axes) }))).map((group) =>
+    group.map(({ over }) => over),
+  );
+  return { setup, axes, cases: planCases(groups, axes, setup.of), count: setup.steps ** axes.length };
 }
 
-function planCase(over: CaseOver, axes: readonly GridPlanAxis[], of: readonly string[] | null): GridPlanCase {
-  const model = models[over.model];
-  const template = over.worldAt(firstSound(over, axes));
-  const all = batchOf(model, over.options, over.windows, template);
-  const known = all.columns.map(({ name }) => name);
-  const missing = of?.find((name) => !known.includes(name));
-  if (missing !== undefined)
-    throw new SimError(
-      '--of',
-      `\`${missing}\` is no finding of case \`${over.name}\``,
-      `Choose from ${known.join(', ')}`,
-    );
-  const batch = of === null ? all : batchOf(model, over.options, over.windows, template, of);
-  return { over, batch, findings: batch.columns };
+/** All that the findings of a case depend on, at the ends and in the middle of the ranges. */
+function printOf(over: CaseOver, axes: readonly GridPlanAxis[]): string {
+  const probed = axes.reduce<number[][]>(
+    (points, { along }) => points.flatMap((point) => nodesOf(along, 3).map(({ value }) => [...point, value])),
+    [[]],
+  );
+  const prints = probed.map((point) => {
+    const built = caught(() => over.builtAt(point));
+    return typeof built === 'string' ? built : [built.world.star, fingerprintWithWindows(built)];
+  });
+  return JSON.stringify([over.model, over.options, prints]);
+}
+
+function planCases(
+  groups: readonly (readonly CaseOver[])[],
+  axes: readonly GridPlanAxis[],
+  of: readonly string[] | null,
+): GridPlanCase[] {
+  const batchFor = (over: CaseOver, only?: readonly string[]) =>
+    batchOf(models[over.model], over.options, over.windows, over.worldAt(firstSound(over, axes)), only);
+  const all = groups.map(([over]) => batchFor(over));
+  if (of !== null) checkNames(of, all);
+  const these = axes.length > 1 ? 'over these inputs, which replace' : 'along this input, which replaces';
+  return groups.map((members, at) => {
+    const [over] = members;
+    const batch = of === null ? all[at] : batchFor(over, wantedOf(of, togetherName(members), all[at]));
+    return {
+      name: togetherName(members),
+      members,
+      over,
+      batch,
+      findings: batch.columns,
+      notes: [
+        ...replacedNotes(members.flatMap(({ replaced }) => replaced)),
+        ...over.notes,
+        ...alikeNotes(members, these, 'computed'),
+      ],
+    };
+  });
+}
+
+/** Errors: SimError for no name, and for one that is no finding of any case. */
+function checkNames(of: readonly string[], batches: readonly Batch[]): void {
+  const known = [...new Set(batches.flatMap(({ columns }) => columns.map(({ name }) => name)))];
+  const missing = of.find((name) => !known.includes(name));
+  if (of.length > 0 && missing === undefined) return;
+  const what = missing === undefined ? 'no finding is named' : `there is no finding \`${missing}\``;
+  throw new SimError(where, what, adviceOn(missing ?? '', known));
+}
+
+function adviceOn(missing: string, known: readonly string[]): string {
+  if (/\s/.test(missing) && missing.split(/\s+/).every((name) => known.includes(name)))
+    return 'Put commas between the names';
+  const near = nearest(missing.replace(/[_\s-]/g, ''), known);
+  return near === null ? `Choose from ${known.join(', ')}` : `Did you mean \`${near}\``;
+}
+
+/** Those of the names that the case has; models have findings of their own. Errors: SimError where it has none. */
+function wantedOf(of: readonly string[], caseName: string, { columns }: Batch): string[] {
+  const wanted = of.filter((name) => columns.some((column) => column.name === name));
+  if (wanted.length > 0) return wanted;
+  const what = `case \`${caseName}\` has none of ${of.join(', ')}`;
+  throw new SimError(where, what, 'Ask for one that it has, or leave the case out with --only');
 }
 
 /** Values of the first node at which a case is sound; there is one, or `casesOver` would have refused it. */

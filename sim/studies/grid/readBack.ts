@@ -18,7 +18,15 @@ export interface StoreReading {
   readonly high: number | null;
 }
 
-export type ReadBack = StoreReading | { readonly storeNumber: null; readonly reason: string };
+/** None for the lag itself; limits from what its uncertainty takes in, null where it takes in none or sets none. */
+export interface NoReading {
+  readonly storeNumber: null;
+  readonly reason: string;
+  readonly low: number | null;
+  readonly high: number | null;
+}
+
+export type ReadBack = StoreReading | NoReading;
 
 /** ln of the heat-store numbers that are looked through: a lag is then told apart from none and from that of no emission at all. */
 const searched = [Math.log(1e-4), Math.log(1e4)] as const;
@@ -35,17 +43,22 @@ export function lagReader(): (observed: ObservedLag) => ReadBack {
   return (observed) => {
     check(observed);
     const { eccentricity, lag, plusMinus } = observed;
-    if (eccentricity === 0) return { storeNumber: null, reason: 'a circular orbit has no lag to be read' };
-    if (lag <= 0) return { storeNumber: null, reason: 'a heat store delays the maximum; this one is not late' };
+    if (eccentricity === 0) {
+      return { storeNumber: null, reason: 'a circular orbit has no lag to be read', low: null, high: null };
+    }
     const response = (logNumber: number) => respond(eccentricity, Math.exp(logNumber), tolerance);
     const lags = places.map((at) => response(at).lag);
-    const found = inverse(lag, lags, (at) => response(at).lag);
-    if (typeof found !== 'number') return { storeNumber: null, reason: outOfReach[found](lags) };
-    const error = plusMinus + response(found).lagError;
     const limit = (wanted: number): number | null => {
       const at = inverse(wanted, lags, (place) => response(place).lag);
       return typeof at === 'number' ? Math.exp(at) : null;
     };
+    const found = inverse(lag, lags, (at) => response(at).lag);
+    if (typeof found !== 'number') {
+      const reason = lag <= 0 ? 'a heat store delays the maximum; this one is not late' : outOfReach[found](lags);
+      const [low, high] = found === 'several' ? [null, null] : [limit(lag - plusMinus), limit(lag + plusMinus)];
+      return { storeNumber: null, reason, low, high };
+    }
+    const error = plusMinus + response(found).lagError;
     return { storeNumber: Math.exp(found), low: limit(lag - error), high: limit(lag + error) };
   };
 }

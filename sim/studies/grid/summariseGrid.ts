@@ -1,9 +1,11 @@
 /** From the rows of a grid to what is told of it. */
 import type { Origin } from '../../origin.ts';
 import { inUnit } from '../../quantity/index.ts';
-import type { ScenarioCase } from '../../scenario/types.ts';
+import type { CaseOver } from '../../scenario/over.ts';
+import { byGrid, spreadNotes } from '../../scenario/spreads.ts';
+import type { Scenario, ScenarioCase } from '../../scenario/types.ts';
 import { isTimeInOrbit } from '../isTimeInOrbit.ts';
-import type { GridCase, GridReport } from './gridReport.ts';
+import type { GridCase, GridMember, GridReport } from './gridReport.ts';
 import type { GridPlan, GridPlanCase } from './plan.ts';
 import { universalPlace } from './storeNumber.ts';
 
@@ -14,10 +16,10 @@ export interface GridRows {
   readonly failures: readonly { readonly node: number; readonly message: string }[];
 }
 
-/** `cases`: those of the scenario, in the order of the plan. */
+/** `scenario`: with the cases of the plan. */
 export function summariseGrid(
   plan: GridPlan,
-  cases: readonly ScenarioCase[],
+  { cases, posterior }: Pick<Scenario, 'cases' | 'posterior'>,
   origin: Origin,
   rows: GridRows,
 ): GridReport {
@@ -28,42 +30,62 @@ export function summariseGrid(
       return { key, label, unit, log, nodes: Float64Array.from(nodes, ({ value }) => inUnit(value, unit)) };
     }),
     hold: plan.setup.hold,
-    cases: plan.cases.map((one, index) => {
+    cases: plan.cases.map((one) => {
       const columns = rows.findings.slice(offset, offset + one.findings.length);
       offset += one.findings.length;
-      return summariseCase(plan, one, cases[index], columns, rows.failures);
+      return summariseCase(plan, one, cases, columns, rows.failures);
     }),
+    notes: spreadNotes({ cases: cases.map((one) => asRead(one, plan)), posterior }, byGrid),
   };
 }
 
 function summariseCase(
-  { axes, cases }: GridPlan,
-  { over, findings }: GridPlanCase,
-  { model, world, options, inputs }: ScenarioCase,
+  { axes, cases: planned }: GridPlan,
+  { name, over, members, findings, notes }: GridPlanCase,
+  cases: readonly ScenarioCase[],
   columns: readonly Float64Array[],
   failures: GridRows['failures'],
 ): GridCase {
-  const names = cases.map((one) => one.over.name);
+  const names = planned.map((one) => one.name);
   return {
-    name: over.name,
-    model,
+    name,
+    model: over.model,
     findings: findings.map((finding, f) => ({
       ...finding,
       values: Array.from(columns[f], (value) => (Number.isNaN(value) ? null : value)),
-      circular: options.start === 'periodic' && isTimeInOrbit(finding.name),
+      circular: over.options.start === 'periodic' && isTimeInOrbit(finding.name),
     })),
-    own: over.own.map((value, k) => {
+    members: members.map((member) => summariseMember(member, axes, cases)),
+    failed: failures.flatMap(({ node, message }) =>
+      messagesOf(message, names, name).map((text) => ({ node, message: text })),
+    ),
+    warnings: [...new Set(members.flatMap(({ warnings }) => warnings))],
+    notes,
+  };
+}
+
+function summariseMember(
+  { name, model, options, own, world }: CaseOver,
+  axes: GridPlan['axes'],
+  cases: readonly ScenarioCase[],
+): GridMember {
+  const index = cases.findIndex((one) => one.name === name);
+  return {
+    name,
+    index,
+    own: own.map((value, k) => {
       const { from, to, unit } = axes[k].along;
       return value === null || value < from || value > to ? null : inUnit(value, unit);
     }),
-    failed: failures.flatMap(({ node, message }) =>
-      messagesOf(message, names, over.name).map((text) => ({ node, message: text })),
-    ),
-    warnings: over.warnings,
-    notes: over.notes,
     universal: universalPlace(model, world, options),
-    inputs,
+    inputs: cases[index].inputs,
   };
+}
+
+/** A case with the inputs that its nodes read. */
+function asRead({ name, inputs }: ScenarioCase, { cases }: GridPlan): Pick<ScenarioCase, 'name' | 'inputs'> {
+  const { unread } = cases.flatMap(({ members }) => members).find((member) => member.name === name)!;
+  return { name, inputs: inputs.filter(({ key }) => !unread.some((one) => `${key}.`.startsWith(`${one}.`))) };
 }
 
 /**

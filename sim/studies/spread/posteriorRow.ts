@@ -27,20 +27,6 @@ export function rowsEvenly(where: string, rows: number): RowChooser {
   return (share) => Math.min(rows - 1, Math.floor(share * rows));
 }
 
-/**
- * How many rows of equal weight would tell as much: (Σw)² / Σw².
- * Source: Kish (1965) Survey Sampling.
- */
-export function effectiveRows(weights: Float64Array): number {
-  let sum = 0;
-  let squares = 0;
-  for (const weight of weights) {
-    sum += weight;
-    squares += weight * weight;
-  }
-  return sum ** 2 / squares;
-}
-
 /** First row whose reach passes the level, so never one of weight 0. */
 function firstBeyond(reach: Float64Array, level: number): number {
   let low = 0;

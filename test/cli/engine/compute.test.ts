@@ -1,8 +1,8 @@
 import { existsSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { Interrupted } from '../../../cli/exit.ts';
-import { readColumn } from '../../../cli/output/parquetReader.ts';
 import { SimError } from '../../../sim/error.ts';
+import { readColumn } from '../readColumn.ts';
 import { demoJob, hashed } from './demo.ts';
 import { type Bench, bench } from './support.ts';
 

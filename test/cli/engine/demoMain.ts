@@ -4,7 +4,7 @@ import { parseArgs } from 'node:util';
 import { computeTable } from '../../../cli/engine/compute.ts';
 import { tellError } from '../../../cli/exit.ts';
 import { processIo } from '../../../cli/io.ts';
-import { readColumn } from '../../../cli/output/parquetReader.ts';
+import { readColumn } from '../readColumn.ts';
 import { demoJob, demoKinds } from './demo.ts';
 
 const { positionals, values } = parseArgs({

@@ -5,8 +5,9 @@ import { asyncBufferFromFile, parquetMetadataAsync, parquetReadObjects } from 'h
 import { parquetWriteFile } from 'hyparquet-writer';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { createParquet } from '../../../cli/output/parquet.ts';
-import { openParquet, readColumn } from '../../../cli/output/parquetReader.ts';
+import { openParquet } from '../../../cli/output/parquetReader.ts';
 import { hashed } from '../engine/demo.ts';
+import { readColumn } from '../readColumn.ts';
 
 let home = '';
 let path = '';

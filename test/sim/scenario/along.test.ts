@@ -3,6 +3,7 @@ import { describe, expect, test } from 'vitest';
 import { solarLuminosity } from '../../../sim/constants.ts';
 import { alongText, readAlong } from '../../../sim/scenario/along.ts';
 import { casesAlong } from '../../../sim/scenario/caseAlong.ts';
+import { mendedRange } from '../../../sim/scenario/rangeForms.ts';
 
 const text = `title: two stores
 star: { luminosity: 0.6 Lsun, mass: 0.9 Msun }
@@ -25,6 +26,35 @@ function messageOf(work: () => unknown): string {
   }
   return 'nothing was refused';
 }
+
+describe('ranges as they are written elsewhere', () => {
+  test.each([
+    ['0-0.9', '0 to 0.9'],
+    ['0..0.9', '0 to 0.9'],
+    ['0:0.9', '0 to 0.9'],
+    ['0, 0.9', '0 to 0.9'],
+    ['[0.8, 1.3] Lsun', '0.8 to 1.3 Lsun'],
+    ['-20 – 10 degC', '-20 to 10 degC'],
+    ['1e4-1e9 J/m2/K log', '1e4 to 1e9 J/m2/K log'],
+    ['1e-4:1e-2 au, log', '1e-4 to 1e-2 au log'],
+    ['1e4 to 1e9 J/m2/K logarithmic', '1e4 to 1e9 J/m2/K log'],
+    ['1e4 to 1e9 J/m2/K (log)', '1e4 to 1e9 J/m2/K log'],
+    ['log 1e4 to 1e9 J/m2/K', '1e4 to 1e9 J/m2/K log'],
+  ])('%s', (written, mended) => {
+    expect(mendedRange(written)).toBe(mended);
+    expect(mendedRange(mended)).toBeNull();
+    expect(messageOf(() => readAlong(`orbit.eccentricity=${written}`))).toBe(
+      `--along: \`${written}\` is not a range. Write \`orbit.eccentricity=${mended}\`.`,
+    );
+  });
+
+  test.each(['0 to 0.9', '1e4 to 1e9 J/m2/K log', '-20 degC to 10 degC', '0.3 ± 0.1', '1e-4', '5 J/m2/K/s^0.5'])(
+    '%s is left to the reader of quantities',
+    (written) => {
+      expect(mendedRange(written)).toBeNull();
+    },
+  );
+});
 
 describe('readAlong', () => {
   test('a range in the user’s unit, its ends in SI', () => {
@@ -57,6 +87,11 @@ describe('readAlong', () => {
       'star.luminosity=',
       '--along: the range of star.luminosity is empty. Write e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
     ],
+    [
+      'orbit.eccentricity 0 to 0.9',
+      '--along: `orbit.eccentricity 0 to 0.9` has no `=` behind its key. Write `orbit.eccentricity=0 to 0.9`.',
+    ],
+    ['orbit.e=0 to 0.9', '--along: `e` is not a key of orbit. Did you mean `orbit.eccentricity`?'],
     ['star.luminosty=0.8 to 1.3 Lsun', '--along: `luminosty` is not a key of star. Did you mean `star.luminosity`?'],
     [
       'stars.luminosity=0.8 to 1.3 Lsun',

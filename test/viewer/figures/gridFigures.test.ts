@@ -6,9 +6,20 @@ import type { Figure, FigureStyle } from '../../../viewer/figures/figure.ts';
 import { findingCurves } from '../../../viewer/figures/findingCurves.ts';
 import { findingMap } from '../../../viewer/figures/findingMap.ts';
 import { darkTheme, lightTheme } from '../../../viewer/figures/theme.ts';
+import { placeNames } from '../../../viewer/figures/universalLabels.ts';
 import { placedCases, universalMap } from '../../../viewer/figures/universalMap.ts';
 import { valueScale } from '../../../viewer/figures/valueScale.ts';
-import { curveGrid, eccentricityAxis, formula, gridCase, gridOf, heatCapacityAxis, mapGrid } from '../gridFixture.ts';
+import {
+  curveGrid,
+  eccentricityAxis,
+  formula,
+  gridCase,
+  gridOf,
+  heatCapacityAxis,
+  mapGrid,
+  togetherGrid,
+  unplaced,
+} from '../gridFixture.ts';
 
 const style: FigureStyle = { theme: lightTheme, narrow: false, view: null };
 interface Drawn {
@@ -144,6 +155,22 @@ describe('findingCurves', () => {
     expect(annotations!.some(({ x }) => Math.abs(Number(x) - Math.log10(6e5)) < 1e-12)).toBe(true);
   });
 
+  test('cases that share a line keep their own points, told apart by signs in the caption', () => {
+    const figure = findingCurves(togetherGrid(), 'temperatureMean', style);
+    expect(figure.data.map(({ name }) => name)).toEqual(['shallow sea = thin air = deep sea']);
+    expect(figure.layout.shapes!.map(({ x0 }) => x0)).toEqual([2.1e7, 6e5, 4e8]);
+    expect(figure.caption.replaceAll('\u00a0', ' ')).toContain(
+      'the scenario’s own points, ● shallow sea, ■ thin air and ▲ deep sea.',
+    );
+    const report = mapGrid();
+    const members = report.cases.flatMap((one) => one.members);
+    const map = findingMap({ ...report, cases: [{ ...report.cases[0]!, members }] }, 0, 'temperatureMax', style);
+    expect(named(map, 'own point of thin air')).toMatchObject({ x: [0.42], y: [6e5] });
+    expect(map.caption).toContain('The white signs are the scenario’s own points.');
+    expect(map.lines.map(({ marker }) => marker?.shape)).toEqual(['circle', 'square', 'triangle-up']);
+    expect([...notFinite(figure), ...notFinite(map)]).toEqual([]);
+  });
+
   test('without sight: from where to where, case by case', () => {
     const text = findingCurves(curveGrid(), 'temperatureMean', style).textAlternative.replaceAll('\u00a0', ' ');
     expect(text).toMatch(
@@ -165,7 +192,31 @@ describe('universalMap', () => {
     expect(named(figure, 'shallow sea')).toMatchObject({ x: [2.1e7 / 9.1e6], y: [0.42] });
     expect(texts(figure)).toEqual(expect.arrayContaining(['shallow sea', 'thin air', 'deep sea']));
     expect(figure.textAlternative).toContain('shallow sea: eccentricity 0.42, heat-store number 2.31');
-    expect(placedCases(mapGrid().cases.map((one) => ({ ...one, universal: null })))).toEqual([]);
+    expect(placedCases(unplaced(mapGrid().cases))).toEqual([]);
+  });
+
+  test('names stay beside their markers where there is room, and are spread where they would touch', () => {
+    const at = (storeNumber: number, name: string) => {
+      return { name, caseIndex: 0, place: { eccentricity: 0.42, storeNumber, heatCapacityPerNumber: 1 } };
+    };
+    const view = { x: [-2, 2], y: [0, 0.95] } as const;
+    const heights = (...numbers: number[]) =>
+      placeNames(
+        numbers.map((number) => at(number, String(number))),
+        view,
+        { width: 800, height: 420 },
+      ).map(({ ay }) => Number(ay));
+    expect(heights(0.1, 1, 30)).toEqual([0, 0, 0]);
+    const [low, high] = heights(1, 1.3);
+    expect(Math.abs(low! - high!)).toBeGreaterThanOrEqual(21 - 1e-9);
+  });
+
+  test('a limit without a reading is a bar without a cross', () => {
+    const reading = { storeNumber: null, low: 2, high: null };
+    const figure = universalMap(chart, placed, { eccentricity: 0.5, reading }, style);
+    const marks = figure.data.filter(({ name }) => name === 'read back') as Partial<ScatterData>[];
+    expect(marks.map(({ x }) => x)).toEqual([[2, 100]]);
+    expect(figure.textAlternative).not.toContain('Read back');
   });
 
   test('a reading is a cross with its range; an open side goes to the edge', () => {

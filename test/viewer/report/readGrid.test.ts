@@ -33,8 +33,8 @@ describe('a page that carries a grid', () => {
     ['a value too few', (grid) => grid.cases[1].findings[2].values.pop()],
     ['a word for a value', (grid) => (grid.cases[1].findings[2].values[4] = 'hot')],
     ['a failed node beyond the grid', (grid) => (grid.cases[1].failed[0].node = 31)],
-    ['an own point of two inputs', (grid) => grid.cases[1].own.push(1)],
-    ['a place off the chart', (grid) => (grid.cases[1].universal.storeNumber = 0)],
+    ['an own point of two inputs', (grid) => grid.cases[1].members[0].own.push(1)],
+    ['a place off the chart', (grid) => (grid.cases[1].members[0].universal.storeNumber = 0)],
   ])('%s: numbers are missing', (_, change) => {
     expect(() => readPage(changed(change))).toThrow('numbers of “thin air” are missing');
   });

@@ -5,7 +5,16 @@ import { gridCautions, gridSteps } from '../../../viewer/words/gridMethod.ts';
 import { extremeRows } from '../../../viewer/words/gridTable.ts';
 import { extremesOf, offeredFindings, shownFinding } from '../../../viewer/words/shownFinding.ts';
 import { readingText } from '../../../viewer/words/storeReading.ts';
-import { curveGrid, eccentricityAxis, gridCase, gridOf, heatCapacityAxis, mapGrid, perNumber } from '../gridFixture.ts';
+import {
+  curveGrid,
+  eccentricityAxis,
+  gridCase,
+  gridOf,
+  heatCapacityAxis,
+  mapGrid,
+  perNumber,
+  unplaced,
+} from '../gridFixture.ts';
 
 const plain = (text: string): string => text.replaceAll('\u00a0', ' ');
 const oneCase = () => {
@@ -71,7 +80,7 @@ describe('gridAnswer', () => {
   test('one case: over which range, from where to where, and where it is warmest', () => {
     const { lead, details } = gridAnswer(oneCase());
     expect(plain(lead)).toBe(
-      'Over eccentricity 0 to 0.9, the mean temperature runs from 290.0 to 356.9 K, and the lag runs from 2.93 to 18.05 % of an orbit. It is warmest on average at eccentricity 0.9, coldest at eccentricity 0.',
+      'Over eccentricity 0 to 0.9, the mean temperature runs from 290.0 to 356.9 K, and the lag runs from 2.93 to 18.05 % of an orbit. The planet is warmest on average at eccentricity 0.9, coldest at eccentricity 0.',
     );
     expect(details).toEqual([]);
   });
@@ -125,7 +134,7 @@ describe('method and cautions of a grid', () => {
     const held = {
       ...report,
       hold: 'orbitMeanInstellation',
-      cases: report.cases.map((one) => ({ ...one, universal: null })),
+      cases: unplaced(report.cases),
     };
     expect(words(held)).toContain('is held at the scenario’s value');
     expect(words(held)).not.toContain('heat-store number');
@@ -150,6 +159,10 @@ describe('readingText', () => {
     expect(readingText({ storeNumber: 2, low: 1, high: null }, place)).toContain('(above 1.00)');
     const tooLate = lagReader()({ eccentricity: 0.3, lag: 0.24, plusMinus: 0 });
     expect(readingText(tooLate, place)).toMatch(/^No heat store can be read: at this eccentricity no heat store/);
+    const nearly = { storeNumber: null, reason: 'it is late', low: 2, high: null };
+    expect(plain(readingText(nearly, place))).toBe(
+      'No heat store can be read: it is late. Its uncertainty takes in heat-store numbers above 2.00: heat capacities above 1.82 × 10⁷ J m⁻² K⁻¹.',
+    );
   });
 });
 

@@ -1,5 +1,6 @@
 /** The instruments in the margin: every number that may be moved, which cases it moves, what was kept, the ways back and out. */
 import { type Dial, dialGroups } from '../../../sim/scenario/dial.ts';
+import { choice } from '../controls.ts';
 import { element, userText } from '../element.ts';
 import { type DialView, dialView } from './dialView.ts';
 import type { CaseDials } from './protocol.ts';
@@ -109,16 +110,10 @@ export function panel(cases: readonly CaseDials[], events: PanelEvents): Panel {
 }
 
 function scopeChooser(names: readonly string[], chosen: (scope: readonly string[]) => void): HTMLElement {
-  const select = element(
-    'select',
-    {},
-    element('option', { value: '' }, 'all cases'),
-    ...names.map((name, i) =>
-      element('option', { value: String(i) }, name.length > 40 ? `${[...name].slice(0, 39).join('')}…` : name),
-    ),
+  const options = [{ value: '', label: 'all cases' }, ...names.map((name, i) => ({ value: String(i), label: name }))];
+  return choice('Move in', [{ title: 'Cases', options }], '', (value) =>
+    chosen(value === '' ? names : [names[Number(value)]!]),
   );
-  select.addEventListener('change', () => chosen(select.value === '' ? names : [names[Number(select.value)]!]));
-  return element('label', { class: 'choice' }, 'Move in ', select);
 }
 
 /** Of one case all; of several those that all have at the same value. */

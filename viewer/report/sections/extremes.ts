@@ -1,6 +1,7 @@
 /** Table 1: lowest and highest of every finding on the grid. */
 import type { GridReport } from '../../../sim/studies/grid/gridReport.ts';
 import { axesText } from '../../words/gridAxes.ts';
+import { lookOf } from '../../words/gridMembers.ts';
 import { type ExtremeCell, extremeRows } from '../../words/gridTable.ts';
 import { dataTable } from '../dataTable.ts';
 import { type Child, element, userText } from '../element.ts';
@@ -14,7 +15,7 @@ export function extremesSection(report: GridReport): HTMLElement {
     ],
     label: 'Extremes over the grid',
     corner: 'Finding',
-    columns: report.cases.map(({ name }, at) => ({ head: [caseSample(at), userText(name)] })),
+    columns: report.cases.map((one) => ({ head: [caseSample(lookOf(one)), userText(one.name)] })),
     rows: extremeRows(report).map(({ label, cells }) => ({ head: [userText(label)], cells: cells.map(content) })),
   });
   const note = element(

@@ -10,7 +10,7 @@ export function gridAnswering(report: GridReport): HTMLElement {
   const list = details.map(({ caseIndex, name, text }) =>
     element('li', {}, caseSample(caseIndex), element('p', {}, element('b', {}, userText(name), ':'), ` ${text}`)),
   );
-  const notes = [...new Set(report.cases.flatMap((one) => one.notes))];
+  const notes = [...new Set([...report.cases.flatMap((one) => one.notes), ...report.notes])];
   return element(
     'section',
     { class: 'answer', 'aria-label': 'Answer' },

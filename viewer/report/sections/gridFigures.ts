@@ -3,7 +3,7 @@ import type { GridReport } from '../../../sim/studies/grid/gridReport.ts';
 import { findingCurves } from '../../figures/findingCurves.ts';
 import { findingMap } from '../../figures/findingMap.ts';
 import { offeredFindings } from '../../words/shownFinding.ts';
-import { type Choice, chooser } from '../controls.ts';
+import { choice, controlRow } from '../controls.ts';
 import { element } from '../element.ts';
 import { type FigureView, figureView } from '../figureView.ts';
 
@@ -14,7 +14,7 @@ export interface Chosen {
 
 export function findingSection(report: GridReport, number: number): Chosen {
   const { chief, others } = offeredFindings(report);
-  const choices = (all: typeof chief): Choice[] => all.map(({ name, label }) => ({ value: name, label }));
+  const options = (all: typeof chief) => all.map(({ name: value, label }) => ({ value, label }));
   let name = (chief[0] ?? others[0])?.name ?? '';
   let caseIndex = 0;
   const isMap = report.axes.length === 2;
@@ -22,25 +22,25 @@ export function findingSection(report: GridReport, number: number): Chosen {
     isMap ? findingMap(report, caseIndex, name, style) : findingCurves(report, name, style),
   );
   const groups = [
-    { label: 'Chief findings', choices: choices(chief) },
-    { label: 'All others', choices: choices(others) },
+    { title: 'Chief findings', options: options(chief) },
+    { title: 'All others', options: options(others) },
   ];
-  const findingChooser = chooser('Finding', groups, (value) => {
+  const findingChoice = choice('Finding', groups, name, (value) => {
     name = value;
     void figure.refresh();
   });
   const cases = report.cases.map(({ name: label }, at) => ({ value: String(at), label }));
-  const caseChooser = chooser('Case', [{ label: null, choices: cases }], (value) => {
+  const caseChoice = choice('Case', [{ title: 'Cases', options: cases }], String(caseIndex), (value) => {
     caseIndex = Number(value);
     void figure.refresh();
   });
-  const controls = [findingChooser, ...(isMap && cases.length > 1 ? [caseChooser] : [])];
+  const controls = [findingChoice, ...(isMap && cases.length > 1 ? [caseChoice] : [])];
   return {
     element: element(
       'section',
       {},
       element('h2', {}, report.axes.length === 2 ? 'A finding over both inputs' : 'A finding along the input'),
-      element('div', { class: 'controls', role: 'group', 'aria-label': 'What the figure shows' }, ...controls),
+      controlRow('What the figure shows', ...controls),
       figure.element,
     ),
     figure,

@@ -6,7 +6,7 @@ import { chartNodes, universalChart } from '../../../sim/studies/grid/universalC
 import { type MarkedReading, type PlacedCase, placedCases, universalMap } from '../../figures/universalMap.ts';
 import { exact } from '../../words/number.ts';
 import { readingText } from '../../words/storeReading.ts';
-import { chooser, numberField } from '../controls.ts';
+import { choice, numberField } from '../controls.ts';
 import { element } from '../element.ts';
 import { type FigureView, figureView } from '../figureView.ts';
 
@@ -20,7 +20,10 @@ export function plainWorldsSection(
   const chart = universalChart(chartNodes(placed.map(({ place }) => place)));
   let marked: MarkedReading | null = null;
   const figure = figureView(number, (style) => universalMap(chart, placed, marked, style));
-  const form = readingForm(placed, (reading) => {
+  const { eccentricities, storeNumbers } = chart;
+  const isBeyond = (eccentricity: number, storeNumber: number): boolean =>
+    eccentricity > eccentricities.at(-1)! || storeNumber < storeNumbers[0]! || storeNumber > storeNumbers.at(-1)!;
+  const form = readingForm(placed, isBeyond, (reading) => {
     marked = reading;
     void figure.refresh();
   });
@@ -55,11 +58,17 @@ function note(): HTMLElement {
 
 const wrong = {
   eccentricity: `Give an eccentricity above 0 and up to ${largestEccentricity}.`,
-  lag: 'Give the lag in % of an orbit, above 0 and below 100.',
+  lag: 'Give the lag in % of an orbit, above −100 and below 100.',
   plusMinus: 'Give the uncertainty of the lag in % of an orbit, 0 or more.',
 };
 
-function readingForm(placed: readonly PlacedCase[], marks: (marked: MarkedReading | null) => void): HTMLElement {
+const beyondChart = 'It lies beyond the chart above.';
+
+function readingForm(
+  placed: readonly PlacedCase[],
+  isBeyond: (eccentricity: number, storeNumber: number) => boolean,
+  marks: (marked: MarkedReading | null) => void,
+): HTMLElement {
   const read = lagReader();
   const first = placed[0]!.place;
   const typed = { eccentricity: exact(Number(first.eccentricity.toPrecision(4))), lag: '', plusMinus: '0' };
@@ -72,7 +81,7 @@ function readingForm(placed: readonly PlacedCase[], marks: (marked: MarkedReadin
     const plusMinus = number(typed.plusMinus);
     const faults = [
       eccentricity > 0 && eccentricity <= largestEccentricity ? '' : wrong.eccentricity,
-      lag > 0 && lag < 100 ? '' : wrong.lag,
+      Math.abs(lag) < 100 ? '' : wrong.lag,
       plusMinus >= 0 && plusMinus < 100 ? '' : wrong.plusMinus,
     ].filter((fault) => fault !== '');
     if (faults.length > 0) {
@@ -81,8 +90,10 @@ function readingForm(placed: readonly PlacedCase[], marks: (marked: MarkedReadin
       return;
     }
     const reading = read({ eccentricity, lag: lag / 100, plusMinus: plusMinus / 100 });
-    answer.replaceChildren(readingText(reading, placed[caseAt]!.place));
-    marks(reading.storeNumber === null ? null : { eccentricity, reading });
+    const beyond = reading.storeNumber !== null && isBeyond(eccentricity, reading.storeNumber) ? [beyondChart] : [];
+    answer.replaceChildren([readingText(reading, placed[caseAt]!.place), ...beyond].join(' '));
+    const isMarked = reading.storeNumber !== null || reading.low !== null || reading.high !== null;
+    marks(isMarked ? { eccentricity, reading } : null);
   }
 
   const field = (label: string, unit: string, key: keyof typeof typed): HTMLElement =>
@@ -91,7 +102,7 @@ function readingForm(placed: readonly PlacedCase[], marks: (marked: MarkedReadin
       update();
     });
   const cases = placed.map(({ name }, at) => ({ value: String(at), label: name }));
-  const caseChooser = chooser('Case', [{ label: null, choices: cases }], (value) => {
+  const caseChoice = choice('Case', [{ title: 'Cases', options: cases }], String(caseAt), (value) => {
     caseAt = Number(value);
     update();
   });
@@ -106,7 +117,7 @@ function readingForm(placed: readonly PlacedCase[], marks: (marked: MarkedReadin
       field('Eccentricity', '', 'eccentricity'),
       field('Lag behind periapsis', '% of an orbit', 'lag'),
       field('Its uncertainty, ±', '% of an orbit', 'plusMinus'),
-      ...(cases.length > 1 ? [caseChooser] : []),
+      ...(cases.length > 1 ? [caseChoice] : []),
     ),
     answer,
   );

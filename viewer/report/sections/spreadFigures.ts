@@ -6,9 +6,10 @@ import { spreadHistogram } from '../../figures/spreadHistogram.ts';
 import { spreadScatter } from '../../figures/spreadScatter.ts';
 import { importancesOf } from '../../words/importance.ts';
 import { chiefFindings, findingSections, type SharedFinding, sharedFindings } from '../../words/spreadFindings.ts';
-import { choice, type OptionGroup } from '../choice.ts';
-import { element } from '../element.ts';
+import { choice, controlRow, type OptionGroup } from '../controls.ts';
 import { type FigureView, figureView } from '../figureView.ts';
+
+const rowName = 'What the figure shows';
 
 export function spreadFigureViews(report: SpreadReport): FigureView[] {
   const groups = bandGroups(report);
@@ -30,7 +31,7 @@ function histogramView(number: number, all: readonly SharedFinding[], report: Sp
     shown = chosen;
     void view.refresh();
   });
-  const view = figureView(number, (style) => spreadHistogram(shown, report, style), chooser(controls));
+  const view = figureView(number, (style) => spreadHistogram(shown, report, style), controlRow(rowName, controls));
   return view;
 }
 
@@ -40,7 +41,7 @@ function importanceView(number: number, all: readonly SharedFinding[], report: S
     shown = chosen;
     void view.refresh();
   });
-  const view = figureView(number, (style) => importanceBars(shown, report, style), chooser(controls));
+  const view = figureView(number, (style) => importanceBars(shown, report, style), controlRow(rowName, controls));
   return view;
 }
 
@@ -53,22 +54,19 @@ function scatterViews(number: number, all: readonly SharedFinding[], report: Spr
   const view: FigureView = figureView(
     number,
     (style) => spreadScatter(finding, input!, report, style),
-    chooser(
+    controlRow(
+      rowName,
       findingChoice(all, finding, (chosen) => {
         finding = chosen;
         void view.refresh();
       }),
-      choice('against', [{ title: 'Inputs', options: inputs }], input, (chosen) => {
+      choice('Against', [{ title: 'Inputs', options: inputs }], input, (chosen) => {
         input = chosen;
         void view.refresh();
       }),
     ),
   );
   return [view];
-}
-
-function chooser(...controls: readonly HTMLElement[]): HTMLElement {
-  return element('p', { class: 'chooser' }, ...controls);
 }
 
 function findingChoice(

@@ -192,6 +192,31 @@ describe('reading back', () => {
     expect(read({ eccentricity: 0.4, lag: 0.1, plusMinus: 0.2 })).toMatchObject({ low: null, high: null });
   });
 
+  test('a lag that no store gives still sets a limit where its uncertainty takes one in', () => {
+    const { lag } = respond(0.3, 1, 1e-12);
+    const early = read({ eccentricity: 0.3, lag: -0.02, plusMinus: lag + 0.02 });
+    expect(early).toMatchObject({ storeNumber: null, low: null, high: expect.closeTo(1, 6) });
+    const late = read({ eccentricity: 0.3, lag: 0.25, plusMinus: 0.25 - lag });
+    expect(late).toMatchObject({ storeNumber: null, low: expect.closeTo(1, 6), high: null });
+    expect(read({ eccentricity: 0.3, lag: 0.25, plusMinus: 0.01 })).toMatchObject({ low: null, high: null });
+  });
+
+  test('a run is read back: its lag gives the heat capacity that the scenario says', () => {
+    const yaml = (capacity: string) => `star: { luminosity: 0.52 Lsun, mass: 0.85 Msun }
+orbit: { semiMajorAxis: 0.48 au, eccentricity: 0.3 }
+planet: { bondAlbedo: 0.3, heatStore: { heatCapacity: ${capacity} J/m2/K } }
+`;
+    for (const capacity of ['2e5', '3e7', '6e8']) {
+      const one = readScenario(yaml(capacity), 'x.yaml').cases[0]!;
+      const { findings } = runCase(one);
+      const lag = findings.find(({ name }) => name === 'lagOfMaxOrbits')!;
+      const found = read({ eccentricity: 0.3, lag: lag.value!, plusMinus: 0 });
+      const { heatCapacityPerNumber } = universalPlace(one.model, one.world, one.options)!;
+      // At the default tolerance of 1e-6 the shortest of these lags is off by 2e-6 of itself, as measured; 5e-6 is let pass.
+      expect((found.storeNumber! * heatCapacityPerNumber) / Number(capacity)).toBeCloseTo(1, 5);
+    }
+  });
+
   test('what cannot be read is null with its reason', () => {
     const reason = (eccentricity: number, lag: number) => {
       const found = read({ eccentricity, lag, plusMinus: 0 });

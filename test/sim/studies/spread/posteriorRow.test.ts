@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest';
 import { SimError } from '../../../../sim/error.ts';
-import { effectiveRows, rowsByWeight, rowsEvenly } from '../../../../sim/studies/spread/posteriorRow.ts';
+import { rowsByWeight, rowsEvenly } from '../../../../sim/studies/spread/posteriorRow.ts';
 import { sobolDraws } from '../../../../sim/studies/spread/sobol.ts';
 
 function timesTaken(choose: (share: number) => number, rows: number, draws: number): Float64Array {
@@ -30,11 +30,6 @@ test('without weights: as with equal ones', () => {
   expect(taken).toEqual(timesTaken(rowsByWeight('file', new Float64Array(1000).fill(0.3)), 1000, 4096));
   expect(Math.min(...taken)).toBeGreaterThanOrEqual(3);
   expect(Math.max(...taken)).toBeLessThanOrEqual(6);
-});
-
-test('effective rows: equal weights count all, one weight counts one', () => {
-  expect(effectiveRows(new Float64Array(50).fill(0.1))).toBeCloseTo(50, 10);
-  expect(effectiveRows(Float64Array.of(0, 3, 0))).toBe(1);
 });
 
 test.each([
