@@ -10,18 +10,26 @@ import { temperatureThroughOrbit } from '../../figures/temperatureThroughOrbit.t
 import type { Column } from '../../words/columns.ts';
 import { hasLatitude } from '../../words/latitude.ts';
 import { type FigureView, figureView } from '../figureView.ts';
+import { orbitView } from './orbitView.ts';
 
 type Builder = (style: FigureStyle) => Figure;
+/** From its place on the page. */
+type Maker = (number: number) => FigureView;
 
 export function figureViews(columns: readonly Column[]): FigureView[] {
   const periodic = columns.filter(({ isForwardRun }) => !isForwardRun);
   const forward = columns.filter(({ isForwardRun }) => isForwardRun);
-  const builders: Builder[] = [
-    ...(periodic.length > 0 ? [(style: FigureStyle) => temperatureThroughOrbit(periodic, style)] : []),
-    ...latitudeFigures(periodic.filter(hasLatitude)),
-    ...(forward.length > 0 ? [(style: FigureStyle) => temperatureAfterStart(forward, style)] : []),
+  const makers: Maker[] = [
+    ...(periodic.length > 0 ? [plain((style) => temperatureThroughOrbit(periodic, style))] : []),
+    ...(periodic.length > 0 ? [(number: number) => orbitView(number, periodic)] : []),
+    ...latitudeFigures(periodic.filter(hasLatitude)).map(plain),
+    ...(forward.length > 0 ? [plain((style) => temperatureAfterStart(forward, style))] : []),
   ];
-  return builders.map((build, index) => figureView(index + 1, build));
+  return makers.map((make, index) => make(index + 1));
+}
+
+function plain(build: Builder): Maker {
+  return (number) => figureView(number, build);
 }
 
 /** Of the columns that tell latitudes apart. */
