@@ -3,7 +3,9 @@
 import { annualProfile } from '../../figures/annualProfile.ts';
 import type { Figure, FigureStyle } from '../../figures/figure.ts';
 import { insolationGroups, insolationMap } from '../../figures/insolationMap.ts';
+import { lagLoop } from '../../figures/lagLoop.ts';
 import { localLag } from '../../figures/localLag.ts';
+import { hasFluxSwing } from '../../figures/loopOpening.ts';
 import { temperatureAfterStart } from '../../figures/temperatureAfterStart.ts';
 import { temperatureMap } from '../../figures/temperatureMap.ts';
 import { temperatureThroughOrbit } from '../../figures/temperatureThroughOrbit.ts';
@@ -22,6 +24,7 @@ export function figureViews(columns: readonly Column[]): FigureView[] {
   const makers: Maker[] = [
     ...(periodic.length > 0 ? [plain((style) => temperatureThroughOrbit(periodic, style))] : []),
     ...(periodic.length > 0 ? [(number: number) => orbitView(number, periodic)] : []),
+    ...(periodic.some(hasFluxSwing) ? [plain((style) => lagLoop(periodic, style))] : []),
     ...latitudeFigures(periodic.filter(hasLatitude)).map(plain),
     ...(forward.length > 0 ? [plain((style) => temperatureAfterStart(forward, style))] : []),
   ];

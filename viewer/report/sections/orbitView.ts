@@ -2,6 +2,7 @@
 import { orbitFromAbove } from '../../figures/orbitFromAbove.ts';
 import { type Column, columnName } from '../../words/columns.ts';
 import { choice } from '../choice.ts';
+import { element } from '../element.ts';
 import { type FigureView, figureView } from '../figureView.ts';
 
 export function orbitView(number: number, columns: readonly Column[]): FigureView {
@@ -11,10 +12,7 @@ export function orbitView(number: number, columns: readonly Column[]): FigureVie
     shown = Number(value);
     void view.refresh();
   });
-  const view = figureView(
-    number,
-    (style) => orbitFromAbove(columns, shown, style),
-    columns.length > 1 ? chooser : null,
-  );
+  const controls = columns.length > 1 ? element('p', { class: 'chooser' }, chooser) : null;
+  const view = figureView(number, (style) => orbitFromAbove(columns, shown, style), controls);
   return view;
 }
