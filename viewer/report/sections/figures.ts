@@ -9,6 +9,7 @@ import { hasFluxSwing } from '../../figures/loopOpening.ts';
 import { temperatureAfterStart } from '../../figures/temperatureAfterStart.ts';
 import { temperatureMap } from '../../figures/temperatureMap.ts';
 import { temperatureThroughOrbit } from '../../figures/temperatureThroughOrbit.ts';
+import { hasWindows, windowBars } from '../../figures/windowBars.ts';
 import type { Column } from '../../words/columns.ts';
 import { hasLatitude } from '../../words/latitude.ts';
 import { type FigureView, figureView } from '../figureView.ts';
@@ -26,7 +27,9 @@ export function figureViews(columns: readonly Column[]): FigureView[] {
     ...(periodic.length > 0 ? [(number: number) => orbitView(number, periodic)] : []),
     ...(periodic.some(hasFluxSwing) ? [plain((style) => lagLoop(periodic, style))] : []),
     ...latitudeFigures(periodic.filter(hasLatitude)).map(plain),
+    ...(periodic.some(hasWindows) ? [plain((style) => windowBars(periodic, style))] : []),
     ...(forward.length > 0 ? [plain((style) => temperatureAfterStart(forward, style))] : []),
+    ...(forward.some(hasWindows) ? [plain((style) => windowBars(forward, style))] : []),
   ];
   return makers.map((make, index) => make(index + 1));
 }
