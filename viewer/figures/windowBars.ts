@@ -159,7 +159,7 @@ function layoutOf(plan: Plan): Partial<Layout> {
       range: [0, 1],
       domain: narrow ? [0, 1] : [...bars],
       tickvals: [0, 0.25, 0.5, 0.75, 1],
-      ticktext: [0, 25, 50, 75, 100].map((share) => `${share}${nbsp}%`),
+      ticktext: ['0', ...[25, 50, 75, 100].map((share) => `${share}${nbsp}%`)],
       title: { text: isForward ? 'Share of the run' : 'Share of the orbit’s time', standoff: 8 },
     },
     ...(narrow

@@ -1,11 +1,13 @@
 /** The figures of a run, in order. A new figure is a builder in `viewer/figures/` and a line here. */
 
+import { chartNodes, type UniversalChart, universalChart } from '../../../sim/studies/grid/universalChart.ts';
 import { annualProfile } from '../../figures/annualProfile.ts';
 import type { Figure, FigureStyle } from '../../figures/figure.ts';
 import { insolationGroups, insolationMap } from '../../figures/insolationMap.ts';
 import { lagLoop } from '../../figures/lagLoop.ts';
 import { localLag } from '../../figures/localLag.ts';
 import { hasFluxSwing } from '../../figures/loopOpening.ts';
+import { placedColumns, plainWorldChart } from '../../figures/plainWorldChart.ts';
 import { temperatureAfterStart } from '../../figures/temperatureAfterStart.ts';
 import { temperatureMap } from '../../figures/temperatureMap.ts';
 import { temperatureThroughOrbit } from '../../figures/temperatureThroughOrbit.ts';
@@ -28,6 +30,7 @@ export function figureViews(columns: readonly Column[]): FigureView[] {
     ...(periodic.some(hasFluxSwing) ? [plain((style) => lagLoop(periodic, style))] : []),
     ...latitudeFigures(periodic.filter(hasLatitude)).map(plain),
     ...(periodic.some(hasWindows) ? [plain((style) => windowBars(periodic, style))] : []),
+    ...plainWorlds(periodic),
     ...(forward.length > 0 ? [plain((style) => temperatureAfterStart(forward, style))] : []),
     ...(forward.some(hasWindows) ? [plain((style) => windowBars(forward, style))] : []),
   ];
@@ -36,6 +39,19 @@ export function figureViews(columns: readonly Column[]): FigureView[] {
 
 function plain(build: Builder): Maker {
   return (number) => figureView(number, build);
+}
+
+/** The chart is computed once, when it is first drawn. */
+function plainWorlds(columns: readonly Column[]): Maker[] {
+  const placed = placedColumns(columns);
+  if (placed.length === 0) return [];
+  let chart: UniversalChart | null = null;
+  return [
+    plain((style) => {
+      chart ??= universalChart(chartNodes(placed.map(({ place }) => place)));
+      return plainWorldChart(columns, chart, style);
+    }),
+  ];
 }
 
 /** Of the columns that tell latitudes apart. */
