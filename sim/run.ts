@@ -7,6 +7,7 @@ import type { State } from './models/model.ts';
 import { type Identity, type Origin, originOf } from './origin.ts';
 import { spreadNotes } from './scenario/spreads.ts';
 import type { CaseInput, Derived, Scenario, ScenarioCase } from './scenario/types.ts';
+import { type PlainPlace, plainPlace } from './studies/grid/storeNumber.ts';
 import type { Window, World } from './world.ts';
 
 export interface OrbitMeanCheck {
@@ -39,6 +40,8 @@ export interface CaseResult {
   readonly checks: { readonly orbitMeanInstellation: OrbitMeanCheck; readonly energyBalance: EnergyCheck };
   /** Textbook steady values for absorbing fractions ¼, ½, ⅔, 1 (K): [f L(1−A)/(4πσa²)]^¼. */
   readonly steadyByFraction: readonly { readonly fraction: number; readonly temperature: number }[];
+  /** Where the case stands among all plain lumped worlds. */
+  readonly plain: PlainPlace;
   readonly warnings: readonly string[];
   /** Both accounts kept, no state failed and every one within the tolerance; the command line exits 3 otherwise. */
   readonly passed: boolean;
@@ -83,6 +86,7 @@ export function runCase(scenarioCase: ScenarioCase): CaseResult {
     steadyByFraction: [1 / 4, 1 / 2, 2 / 3, 1].map((fraction) => {
       return { fraction, temperature: textbookTemperature(world, fraction) };
     }),
+    plain: plainPlace(model, world, options),
     warnings: [
       ...scenarioCase.warnings,
       ...solution.warnings,

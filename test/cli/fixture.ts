@@ -68,6 +68,7 @@ function fixtureCase(shape: CaseShape): CaseResult {
       { fraction: 2 / 3, temperature: 368.2 },
       { fraction: 1, temperature: 407.5 },
     ],
+    plain: { place: null, reason: 'it has more than one temperature' },
     warnings: shape.warnings ?? [],
     passed,
   };

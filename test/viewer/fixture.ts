@@ -8,6 +8,7 @@ import type { Finding } from '../../sim/findings/finding.ts';
 import type { State } from '../../sim/models/model.ts';
 import type { CaseResult, RunResult } from '../../sim/run.ts';
 import type { CaseInput } from '../../sim/scenario/types.ts';
+import type { UniversalPlace } from '../../sim/studies/grid/storeNumber.ts';
 import type { Window } from '../../sim/world.ts';
 
 export interface PlainCase {
@@ -95,6 +96,7 @@ function caseResult(plain: PlainCase, windows: readonly Window[], date: number |
       fraction,
       temperature: (4 * fraction) ** 0.25 * textbook(plain),
     })),
+    plain: plain.forward ? { place: null, reason: 'it runs from a start' } : { place: place(plain), reason: null },
     warnings: [],
     passed: true,
   };
@@ -164,6 +166,13 @@ function implicitStep(last: number, absorbed: number, stepOverCapacity: number):
 
 function textbook({ semiMajorAxis = 0.48 * 1.495978707e11, albedo = 0.3 }: PlainCase): number {
   return ((luminosity * (1 - albedo)) / (16 * Math.PI * stefanBoltzmann * semiMajorAxis ** 2)) ** 0.25;
+}
+
+/** n = 2πC/(4σT³P) of a world whose laws are those of `textbook`. */
+function place(plain: PlainCase): UniversalPlace {
+  const heatCapacityPerNumber = (4 * stefanBoltzmann * textbook(plain) ** 3 * period) / (2 * Math.PI);
+  const storeNumber = plain.heatCapacity / heatCapacityPerNumber;
+  return { eccentricity: plain.eccentricity ?? 0.62, storeNumber, heatCapacityPerNumber };
 }
 
 function shifted(dataset: Dataset, kelvin: number): Dataset {

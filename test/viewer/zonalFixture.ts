@@ -50,7 +50,8 @@ export function zonalRun(choices: ZonalChoices = {}): RunResult {
         const dataset = zonalDataset(cases[index]!, bands, samples, place * 45);
         return { ...state, dataset, findings: [...state.findings, ...zonalFindings(dataset)] };
       });
-      return { ...one, model: 'zonal', states, findings: states[0]!.findings };
+      const plain = { place: null, reason: 'it has more than one temperature' } as const;
+      return { ...one, model: 'zonal', states, findings: states[0]!.findings, plain };
     }),
   };
 }

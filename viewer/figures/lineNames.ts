@@ -12,15 +12,18 @@ export function namesBesideLines(
   height: number,
   style: FigureStyle,
 ): Partial<Annotation>[] {
-  const sign = ({ marker, colour }: Owner): string => `<span style="color:${colour}">${glyph(marker)}</span>`;
   const labels = lines.flatMap((line) => {
-    const { shortName, marker, colour, referenceFor } = line;
     const value = lastInView(line, view);
-    if (value === null) return [];
-    const signs = marker ? [{ marker, colour }] : (referenceFor ?? []);
-    const words = referenceFor ? `<i>${shortName}</i>` : shortName;
-    return [{ text: [...signs.map(sign), words].join(' '), value, colour }];
+    return value === null ? [] : [{ text: lineName(line), value, colour: line.colour }];
   });
   const [low, high] = view.y;
   return lineLabels(labels, { low, high, height }, style);
+}
+
+/** A line's name with its sign, or those of whom it belongs to; safe as a Plotly label. */
+export function lineName({ shortName, marker, colour, referenceFor }: ChartLine): string {
+  const sign = (owner: Owner): string => `<span style="color:${owner.colour}">${glyph(owner.marker)}</span>`;
+  const signs = marker ? [{ marker, colour }] : (referenceFor ?? []);
+  const words = referenceFor ? `<i>${shortName}</i>` : shortName;
+  return [...signs.map(sign), words].join(' ');
 }

@@ -101,12 +101,12 @@ function firstOfEachCase(group: Group): Group {
   );
 }
 
-function names(plainName: string): Pick<ChartLine, 'plainName' | 'name' | 'shortName'> {
+export function names(plainName: string): Pick<ChartLine, 'plainName' | 'name' | 'shortName'> {
   return { plainName, name: plainLabel(plainName, 60), shortName: plainLabel(plainName, 22) };
 }
 
 /** Filled markers for the first state of a case, open ones for the others. */
-function signOf({ caseIndex, stateIndex }: Column, theme: Theme): Owner {
+export function signOf({ caseIndex, stateIndex }: Column, theme: Theme): Owner {
   return { marker: { shape: caseMarker(caseIndex), open: stateIndex > 0 }, colour: caseColour(theme, caseIndex) };
 }
 

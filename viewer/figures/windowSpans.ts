@@ -19,12 +19,16 @@ export function distinctWindows(columns: readonly Column[], of: Window['of']): W
 
 /** Stretches of the span when the instellation lies within [from, to]; crossings by straight lines between rows. */
 export function stretchesInside(dataset: Dataset, span: Span, window: Window): Stretch[] {
-  const flux = values(dataset, 'instellation');
-  const inside = (row: number): boolean => flux[row]! >= window.from && flux[row]! <= window.to;
+  return stretchesBetween(values(dataset, 'instellation'), span, window);
+}
+
+/** The same for any variable's numbers. */
+export function stretchesBetween(data: Float64Array, span: Span, window: Pick<Window, 'from' | 'to'>): Stretch[] {
+  const inside = (row: number): boolean => data[row]! >= window.from && data[row]! <= window.to;
   const stretches: Stretch[] = [];
   let from: Seconds | null = inside(span.rows[0]!) ? span.time[0]! : null;
   for (let at = 1; at < span.rows.length; at++) {
-    for (const crossing of crossings(span, flux, at, window)) {
+    for (const crossing of crossings(span, data, at, window)) {
       if (from === null) from = crossing;
       else {
         stretches.push({ from, to: crossing });
@@ -37,9 +41,9 @@ export function stretchesInside(dataset: Dataset, span: Span, window: Window): S
 }
 
 /** Times between row `at` − 1 and row `at` when the window is entered or left, in order. */
-function crossings(span: Span, flux: Float64Array, at: number, { from, to }: Window): Seconds[] {
-  const start = flux[span.rows[at - 1]!]!;
-  const end = flux[span.rows[at]!]!;
+function crossings(span: Span, data: Float64Array, at: number, { from, to }: Pick<Window, 'from' | 'to'>): Seconds[] {
+  const start = data[span.rows[at - 1]!]!;
+  const end = data[span.rows[at]!]!;
   const shares = [from, to]
     .filter((bound) => (bound === from ? start < bound !== end < bound : start <= bound !== end <= bound))
     .map((bound) => (bound - start) / (end - start));

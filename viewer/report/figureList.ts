@@ -1,6 +1,7 @@
 /** The figures of a page, each with a name by which it is known again when the numbers behind it have moved. */
 import type { Figure, FigureStyle } from '../figures/figure.ts';
 import { plainReading, type Reading } from '../figures/reading.ts';
+import { controlRow, labelled, shortened } from './controls.ts';
 import { element } from './element.ts';
 import { type FigureView, figureView } from './figureView.ts';
 import { type ReadingChoices, readingBar } from './readingBar.ts';
@@ -8,7 +9,10 @@ import type { Setting } from './surroundings.ts';
 
 export interface FigureBuilder {
   readonly id: string;
-  readonly build: (style: FigureStyle) => Figure;
+  /** `chosen` is the place among the options of `choice`; 0 without one. */
+  readonly build: (style: FigureStyle, chosen: number) => Figure;
+  /** What the figure shows one of at a time. */
+  readonly choice?: { readonly label: string; readonly options: readonly string[] };
 }
 
 export interface FigureList {
@@ -34,6 +38,7 @@ export function figureList(first: readonly FigureBuilder[], firstChoices: Readin
   bar.offer(firstChoices);
   const box = element('div', { class: 'figure-list' });
   const views = new Map<string, FigureView>();
+  const choosers = new Map<string, Chooser>();
   const stale = new Set<FigureView>();
   const inView = new Set<Element>();
   let setting: Setting | null = null;
@@ -76,18 +81,30 @@ export function figureList(first: readonly FigureBuilder[], firstChoices: Readin
       watch.unobserve(view.element);
       view.element.remove();
       views.delete(id);
+      choosers.delete(id);
       stale.delete(view);
       inView.delete(view.element);
     }
-    for (const [index, { id, build }] of builders.entries()) {
+    for (const [index, builder] of builders.entries()) {
+      const { id } = builder;
+      const chooser = chooserOf(builder);
+      const build = (style: FigureStyle) => builder.build(style, chooser?.chosen() ?? 0);
       const known = views.get(id);
-      const view = known ?? figureView(index + 1, build);
+      const view = known ?? figureView(index + 1, build, chooser?.element ?? null);
       if (known) known.renew(index + 1, build);
       else views.set(id, view);
       stale.add(view);
       if (box.children[index] !== view.element) box.insertBefore(view.element, box.children[index] ?? null);
       if (!known) watch.observe(view.element);
     }
+  }
+
+  function chooserOf({ id, choice: offered }: FigureBuilder): Chooser | null {
+    if (offered === undefined) return null;
+    const known = choosers.get(id) ?? chooser(offered.label, () => void views.get(id)?.refresh());
+    known.offer(offered.options);
+    choosers.set(id, known);
+    return known;
   }
 
   lay(first);
@@ -113,6 +130,30 @@ export function figureList(first: readonly FigureBuilder[], firstChoices: Readin
         await view.draw(read(changed));
         await breath();
       }
+    },
+  };
+}
+
+interface Chooser {
+  readonly element: HTMLElement;
+  /** Place of what is chosen. */
+  chosen(): number;
+  /** One option needs no choice. */
+  offer(options: readonly string[]): void;
+}
+
+function chooser(label: string, changed: () => void): Chooser {
+  const select = element('select', {});
+  select.addEventListener('change', changed);
+  const row = controlRow('What the figure shows', labelled(label, select));
+  return {
+    element: row,
+    chosen: () => Math.max(0, select.selectedIndex),
+    offer(options) {
+      const chosen = Math.max(0, select.selectedIndex);
+      select.replaceChildren(...options.map((name) => element('option', {}, shortened(name))));
+      select.selectedIndex = Math.min(chosen, options.length - 1);
+      row.hidden = options.length < 2;
     },
   };
 }

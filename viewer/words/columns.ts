@@ -8,6 +8,7 @@ import type { State } from '../../sim/models/model.ts';
 import type { CaseResult, RunResult } from '../../sim/run.ts';
 import type { CaseInput, Derived } from '../../sim/scenario/types.ts';
 import type { Seconds, TdbSeconds } from '../../sim/si.ts';
+import type { PlainPlace } from '../../sim/studies/grid/storeNumber.ts';
 import type { Window } from '../../sim/world.ts';
 import { type TimeUnit, timeUnit } from './number.ts';
 
@@ -26,6 +27,8 @@ export interface Column {
   readonly inputs: readonly CaseInput[];
   readonly derived: readonly Derived[];
   readonly periapsisTime: TdbSeconds | null;
+  /** Where the case stands among all plain lumped worlds. */
+  readonly plain: PlainPlace;
 }
 
 export function columnsOf(result: RunResult): Column[] {
@@ -42,6 +45,7 @@ export function columnsOf(result: RunResult): Column[] {
       inputs: oneCase.inputs,
       derived: oneCase.derived,
       periapsisTime: periapsisTime(oneCase),
+      plain: oneCase.plain,
     })),
   );
 }

@@ -22,24 +22,38 @@ export interface UniversalPlace {
   readonly heatCapacityPerNumber: ArealHeatCapacity;
 }
 
-/** Null where the world of a case is none of these. `model` is the case's own. */
-export function universalPlace(
-  model: string,
-  world: World,
-  { start }: Pick<SolveOptions, 'start'>,
-): UniversalPlace | null {
+/** Where a case stands, or why it is none of these. */
+export type PlainPlace =
+  | { readonly place: UniversalPlace; readonly reason: null }
+  | { readonly place: null; readonly reason: string };
+
+/** `model` is the case's own. */
+export function plainPlace(model: string, world: World, { start }: Pick<SolveOptions, 'start'>): PlainPlace {
   const { surface, orbit } = world;
   const { albedo, absorbingFraction, internalHeat, heatCapacity, emission } = surface;
   const coefficient = emission.quarticCoefficient;
-  const isPlain = model === 'lumped' && albedo.ramp === null && internalHeat === 0 && start === 'periodic';
-  if (!isPlain || coefficient === null) return null;
+  if (model !== 'lumped') return none('it has more than one temperature');
+  if (start !== 'periodic') return none('it runs from a start');
+  if (albedo.ramp !== null) return none('its albedo changes with temperature');
+  if (coefficient === null) return none('its emission is no fourth power of temperature');
+  if (internalHeat !== 0) return none('heat comes from inside');
   const absorbed = absorbingFraction * (1 - albedo.warm) * instellationAtAxis(world);
   const slope = 4 * coefficient * (absorbed / coefficient) ** 0.75; // 4cT₀³
   const heatCapacityPerNumber = (orbit.period * slope) / (2 * Math.PI);
-  if (!(heatCapacityPerNumber > 0)) return null;
-  return {
-    eccentricity: orbit.eccentricity,
-    storeNumber: heatCapacity / heatCapacityPerNumber,
-    heatCapacityPerNumber,
-  };
+  if (!(heatCapacityPerNumber > 0)) return none('it absorbs no starlight');
+  const storeNumber = heatCapacity / heatCapacityPerNumber;
+  return { place: { eccentricity: orbit.eccentricity, storeNumber, heatCapacityPerNumber }, reason: null };
+}
+
+function none(reason: string): PlainPlace {
+  return { place: null, reason };
+}
+
+/** Null where the world of a case is none of these. */
+export function universalPlace(
+  model: string,
+  world: World,
+  options: Pick<SolveOptions, 'start'>,
+): UniversalPlace | null {
+  return plainPlace(model, world, options).place;
 }

@@ -1,20 +1,24 @@
 /** The figures of a run, in order. A new figure is a builder in `viewer/figures/` and a line here. */
 
+import { chartNodes, type UniversalChart, universalChart } from '../../../sim/studies/grid/universalChart.ts';
 import { annualProfile } from '../../figures/annualProfile.ts';
 import type { Figure, FigureStyle } from '../../figures/figure.ts';
 import { insolationGroups, insolationMap } from '../../figures/insolationMap.ts';
+import { lagLoop } from '../../figures/lagLoop.ts';
 import { localLag } from '../../figures/localLag.ts';
+import { hasFluxSwing } from '../../figures/loopOpening.ts';
 import { availableAxes } from '../../figures/orbitAxis.ts';
+import { orbitFromAbove } from '../../figures/orbitFromAbove.ts';
+import { placedColumns, plainWorldChart } from '../../figures/plainWorldChart.ts';
 import { temperatureAfterStart } from '../../figures/temperatureAfterStart.ts';
 import { temperatureDifference } from '../../figures/temperatureDifference.ts';
 import { temperatureMap } from '../../figures/temperatureMap.ts';
 import { temperatureThroughOrbit } from '../../figures/temperatureThroughOrbit.ts';
-import type { Column } from '../../words/columns.ts';
+import { hasWindows, windowBars } from '../../figures/windowBars.ts';
+import { type Column, columnName } from '../../words/columns.ts';
 import { hasLatitude } from '../../words/latitude.ts';
 import type { FigureBuilder } from '../figureList.ts';
 import type { ReadingChoices } from '../readingBar.ts';
-
-type Builder = (style: FigureStyle) => Figure;
 
 /** `originals` are columns as they were before a reader moved them: thin lines beside the others. */
 export function figureBuilders(columns: readonly Column[], originals: readonly Column[]): FigureBuilder[] {
@@ -22,8 +26,13 @@ export function figureBuilders(columns: readonly Column[], originals: readonly C
   const forward = columns.filter(({ isForwardRun }) => isForwardRun);
   return [
     ...(periodic.length > 0 ? [figure('temperature', (style) => throughOrbit(periodic, originals, style))] : []),
+    ...(periodic.length > 0 ? [orbit(periodic)] : []),
+    ...(periodic.some(hasFluxSwing) ? [figure('lagLoop', (style) => lagLoop(periodic, style))] : []),
     ...latitudeFigures(periodic.filter(hasLatitude)),
+    ...(periodic.some(hasWindows) ? [figure('windows', (style) => windowBars(periodic, style))] : []),
+    ...plainWorlds(periodic),
     ...(forward.length > 0 ? [figure('run', (style) => temperatureAfterStart(forward, style))] : []),
+    ...(forward.some(hasWindows) ? [figure('runWindows', (style) => windowBars(forward, style))] : []),
   ];
 }
 
@@ -46,8 +55,30 @@ export function readingChoices(columns: readonly Column[]): ReadingChoices {
   return { axes: availableAxes(periodic), cases };
 }
 
-function figure(id: string, build: Builder): FigureBuilder {
+function figure(id: string, build: (style: FigureStyle) => Figure): FigureBuilder {
   return { id, build };
+}
+
+/** One case at a time. */
+function orbit(columns: readonly Column[]): FigureBuilder {
+  return {
+    id: 'orbit',
+    build: (style, shown) => orbitFromAbove(columns, Math.min(shown, columns.length - 1), style),
+    choice: { label: 'Case', options: columns.map(columnName) },
+  };
+}
+
+/** The chart is computed once, when it is first drawn. */
+function plainWorlds(columns: readonly Column[]): FigureBuilder[] {
+  const placed = placedColumns(columns);
+  if (placed.length === 0) return [];
+  let chart: UniversalChart | null = null;
+  return [
+    figure('plainWorlds', (style) => {
+      chart ??= universalChart(chartNodes(placed.map(({ place }) => place)));
+      return plainWorldChart(columns, chart, style);
+    }),
+  ];
 }
 
 /** Of the columns that tell latitudes apart. */
