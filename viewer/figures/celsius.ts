@@ -3,6 +3,7 @@ import type { Data, Layout } from 'plotly.js-dist-min';
 import { zeroCelsius } from '../../sim/constants.ts';
 import { fixed } from '../words/number.ts';
 import type { Figure } from './figure.ts';
+import type { Moments } from './moments.ts';
 
 type Json = Record<string, unknown>;
 
@@ -15,6 +16,15 @@ export function inCelsius(figure: Figure): Figure {
     caption: words(figure.caption),
     data: figure.data.map((trace) => traceInCelsius(trace as unknown as Json, axes)),
     layout: layoutInCelsius(figure.layout, axes),
+    ...(figure.moments && axes.has('y') ? { moments: momentsInCelsius(figure.moments) } : {}),
+  };
+}
+
+function momentsInCelsius({ shareAt, placesOf }: Moments): Moments {
+  return {
+    shareAt: (x, y) => shareAt(x, y + zeroCelsius),
+    placesOf: (share) =>
+      placesOf(share).map((place) => (place.y === null ? place : { ...place, y: place.y - zeroCelsius })),
   };
 }
 

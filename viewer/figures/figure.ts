@@ -1,6 +1,7 @@
 /** What every figure builder returns: plain JSON for Plotly and the words that stand with it. */
 import type { Data, Layout } from 'plotly.js-dist-min';
 import type { LegendLine } from './chartLine.ts';
+import type { Moments } from './moments.ts';
 import type { Reading } from './reading.ts';
 import type { Theme } from './theme.ts';
 import type { View } from './view.ts';
@@ -17,6 +18,8 @@ export interface Figure {
   readonly lines: readonly LegendLine[];
   readonly data: Data[];
   readonly layout: Partial<Layout>;
+  /** Where it shows a moment of the orbit; left out where it shows none. */
+  readonly moments?: Moments;
 }
 
 /** How a figure is to be set. */

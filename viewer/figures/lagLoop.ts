@@ -11,6 +11,7 @@ import { lineLabels } from './lineLabels.ts';
 import { lineName } from './lineNames.ts';
 import { logTicks } from './logTicks.ts';
 import { hasFluxSwing, loopOpening } from './loopOpening.ts';
+import { momentsBetween } from './moments.ts';
 import { steadyCurves } from './steadyCurves.ts';
 import { stateLook } from './temperatureLines.ts';
 import { throughOrbit } from './throughOrbit.ts';
@@ -52,7 +53,13 @@ export function lagLoop(all: readonly Column[], style: FigureStyle): Figure {
       ...columns.map((column, at) => beatTrace(column, loops[at]!)),
     ],
     layout: layoutOf(what, lines, isLog, view, style),
+    moments: momentsBetween(columns, loopPlace),
   };
+}
+
+function loopPlace({ dataset }: Column): (share: number) => { x: number; y: number } {
+  const [flux, temperature] = [throughOrbit(dataset, 'instellation'), throughOrbit(dataset, 'temperature')];
+  return (share) => ({ x: flux(turn * share), y: temperature(turn * share) });
 }
 
 /** Round once, back to its first row. */

@@ -1,6 +1,7 @@
 /** One moment of the orbit on several figures: the share of the period after periapsis, and where each figure shows it. Pure. */
 import { type Column, columnName, findingValue, periodOf } from '../words/columns.ts';
 import type { Span } from './orbitSpan.ts';
+import { throughOrbit } from './throughOrbit.ts';
 import { values } from './variables.ts';
 
 /** A place in the data of a figure; a line from foot to top where `y` is null. */
@@ -17,55 +18,30 @@ export interface Moments {
   placesOf(share: number): readonly MomentPlace[];
 }
 
-/** The value of a variable at a share of the period: straight lines between rows, round the end, too. */
-export function valueAt({ dataset }: Column, name: string, share: number): number {
-  const anomaly = values(dataset, 'meanAnomaly');
-  const data = values(dataset, name);
-  const [before, after, part] = bracket(anomaly, 2 * Math.PI * share, 2 * Math.PI);
-  return data[before]! + part * (data[after]! - data[before]!);
-}
+const turn = 2 * Math.PI;
 
-/** Rows before and after a place on a circle of increasing numbers, and how far it is between them. */
-function bracket(
-  circle: ArrayLike<number>,
-  wanted: number,
-  turn: number,
-): [before: number, after: number, part: number] {
-  let low = 0;
-  let high = circle.length;
-  while (low < high) {
-    const middle = (low + high) >> 1;
-    if (circle[middle]! <= wanted) low = middle + 1;
-    else high = middle;
-  }
-  const before = (low - 1 + circle.length) % circle.length;
-  const after = low % circle.length;
-  const from = circle[before]! - (low === 0 ? turn : 0);
-  const to = circle[after]! + (low === circle.length ? turn : 0);
-  return [before, after, to > from ? (wanted - from) / (to - from) : 0];
-}
-
-/** On a chart through the orbit: a line, and a point on each curve. `span` gives the places of a column along the axis, `per` what they are divided by. */
+/** On a chart of temperature through the orbit: a line, and a point on each curve. A place along the axis is that of the span over `per`. */
 export function momentsAlong(
   columns: readonly Column[],
   span: (column: Column) => Span,
   per: number,
-  name: string | null,
+  curve: (column: Column) => (share: number) => number,
 ): Moments {
   const axes = columns.map((column) => axisOf(column, span(column), per));
+  const curves = columns.map(curve);
   return {
     shareAt: (x) => axes[0]!.shareAt(x),
     placesOf: (share) => [
       { x: axes[0]!.placeOf(share), y: null, caseIndex: null },
-      ...(name === null
-        ? []
-        : columns.map((column, i) => ({
-            x: axes[i]!.placeOf(share),
-            y: valueAt(column, name, share),
-            caseIndex: column.caseIndex,
-          }))),
+      ...columns.map(({ caseIndex }, i) => ({ x: axes[i]!.placeOf(share), y: curves[i]!(share), caseIndex })),
     ],
   };
+}
+
+/** The temperature of a column at a share of its period. */
+export function temperatureAt({ dataset }: Column): (share: number) => number {
+  const temperature = throughOrbit(dataset, 'temperature');
+  return (share) => temperature(turn * share);
 }
 
 interface Axis {
@@ -73,77 +49,96 @@ interface Axis {
   placeOf(share: number): number;
 }
 
+/** By straight lines between the points of a span. */
 function axisOf({ dataset }: Column, { time, rows }: Span, per: number): Axis {
   const anomaly = values(dataset, 'meanAnomaly');
-  const shares = rows.map((row) => anomaly[row]! / (2 * Math.PI));
+  const shares = rows.map((row) => anomaly[row]! / turn);
   const places = time.map((t) => t / per);
   return {
     shareAt(x) {
       const after = places.findIndex((place) => place >= x);
-      if (after <= 0) return after === 0 ? shares[0]! : null;
-      const step = (((shares[after]! - shares[after - 1]!) % 1) + 1) % 1;
+      if (after < 1) return null;
       const part = (x - places[after - 1]!) / (places[after]! - places[after - 1]!);
-      return (shares[after - 1]! + part * step) % 1;
+      return onCircle(shares[after - 1]! + part * onCircle(shares[after]! - shares[after - 1]!));
     },
     placeOf(share) {
-      for (let at = 1; at < shares.length; at++) {
-        const step = (((shares[at]! - shares[at - 1]!) % 1) + 1) % 1;
-        const ahead = (((share - shares[at - 1]!) % 1) + 1) % 1;
-        if (ahead <= step && step > 0) return places[at - 1]! + (ahead / step) * (places[at]! - places[at - 1]!);
+      for (let after = 1; after < shares.length; after++) {
+        const step = onCircle(shares[after]! - shares[after - 1]!);
+        const ahead = onCircle(share - shares[after - 1]!);
+        if (step > 0 && ahead <= step) {
+          return places[after - 1]! + (ahead / step) * (places[after]! - places[after - 1]!);
+        }
       }
       return places[0]!;
     },
   };
 }
 
-/** On a figure of two variables: a point for each column. `x` and `y` give its place at a share of the period. */
+function onCircle(share: number): number {
+  return share - Math.floor(share);
+}
+
+/** On a figure of two variables: a point for each column, which `place` gives at a share of the period. */
 export function momentsBetween(
   columns: readonly Column[],
-  x: (column: Column, share: number) => number,
-  y: (column: Column, share: number) => number,
+  place: (column: Column) => (share: number) => { readonly x: number; readonly y: number },
 ): Moments {
-  const shares = Array.from({ length: 361 }, (_, i) => i / 360);
-  const places = columns.map((column) => shares.map((share) => [x(column, share), y(column, share)] as const));
+  const curves = columns.map(place);
+  let traced: { x: number; y: number; share: number }[] | null = null;
   return {
-    shareAt(wantedX, wantedY) {
-      const spread = (axis: 0 | 1) => {
-        const all = places.flatMap((curve) => curve.map((place) => place[axis]));
-        return Math.max(...all) - Math.min(...all) || 1;
-      };
-      const [width, height] = [spread(0), spread(1)];
-      let best = { far: Number.POSITIVE_INFINITY, share: 0 };
-      for (const curve of places) {
-        for (const [i, place] of curve.entries()) {
-          const far = Math.hypot((place[0] - wantedX) / width, (place[1] - wantedY) / height);
-          if (far < best.far) best = { far, share: shares[i]! % 1 };
-        }
-      }
-      return best.share;
+    shareAt(x, y) {
+      traced ??= curves.flatMap((curve) =>
+        Array.from({ length: 360 }, (_, i) => ({ ...curve(i / 360), share: i / 360 })),
+      );
+      const width = extent(traced.map((one) => one.x));
+      const height = extent(traced.map((one) => one.y));
+      const far = (one: { x: number; y: number }) => Math.hypot((one.x - x) / width, (one.y - y) / height);
+      return traced.reduce((best, one) => (far(one) < far(best) ? one : best)).share;
     },
-    placesOf: (share) =>
-      columns.map((column) => ({ x: x(column, share), y: y(column, share), caseIndex: column.caseIndex })),
+    placesOf: (share) => columns.map(({ caseIndex }, i) => ({ ...curves[i]!(share), caseIndex })),
   };
 }
 
-/** What every case has at a moment: for a line of words beside the figures. */
-export function momentValues(
-  columns: readonly Column[],
-  share: number,
-): { name: string; temperature: number; instellation: number; steady: number }[] {
-  return columns.map((column) => ({
-    name: columnName(column),
-    temperature: valueAt(column, 'temperature', share),
-    instellation: valueAt(column, 'instellation', share),
-    steady: valueAt(column, 'steadyTemperature', share),
-  }));
+function extent(numbers: readonly number[]): number {
+  return Math.max(...numbers) - Math.min(...numbers) || 1;
 }
 
-/** Seconds after periapsis of a column at a share of its period. */
-export function timeAt(column: Column, share: number): number {
-  return share * periodOf(column);
+/** Across a map of one column whose axis is time: a line alone. `placeOf` gives the place of a share. */
+export function momentsAcross(shareOf: (x: number) => number, placeOf: (share: number) => number): Moments {
+  return {
+    shareAt: (x) => onCircle(shareOf(x)),
+    placesOf: (share) => [{ x: placeOf(share), y: null, caseIndex: null }],
+  };
 }
 
-/** Where the hottest moment of a column is: a good first place for a mark. */
+export interface MomentValues {
+  readonly name: string;
+  readonly caseIndex: number;
+  /** Seconds after periapsis, in the column's own period. */
+  readonly time: number;
+  /** K. */
+  readonly temperature: number;
+  readonly steady: number;
+  /** W m⁻². */
+  readonly instellation: number;
+}
+
+/** What every column has at a moment. */
+export function momentValues(columns: readonly Column[], share: number): MomentValues[] {
+  return columns.map((column) => {
+    const at = (name: string) => throughOrbit(column.dataset, name)(turn * share);
+    return {
+      name: columnName(column),
+      caseIndex: column.caseIndex,
+      time: share * periodOf(column),
+      temperature: at('temperature'),
+      steady: at('steadyTemperature'),
+      instellation: at('instellation'),
+    };
+  });
+}
+
+/** When a column is hottest. */
 export function hottestShare(column: Column): number {
   const time = findingValue(column, 'timeOfMax');
   return time === null ? 0 : time / periodOf(column);

@@ -11,6 +11,7 @@ import { plainLayout } from './chartLayout.ts';
 import { colourAt, inkOn, plotlyScale, temperatureScale } from './colourScale.ts';
 import type { Figure, FigureStyle } from './figure.ts';
 import { colourBar } from './mapKey.ts';
+import { momentsBetween } from './moments.ts';
 import { circleNames, circles, lines, sightEnd, starDisc } from './orbitLines.ts';
 import type { MarkKind } from './orbitMarks.ts';
 import { markNames } from './orbitNames.ts';
@@ -39,6 +40,10 @@ export function orbitFromAbove(columns: readonly Column[], shown: number, style:
     lines: [],
     data: [rim(plan), path(plan), arrowheads(plan), starDot(), ...signs(plan), ...sightHead(plan)],
     layout: layoutOf(plan),
+    moments: momentsBetween(
+      [column],
+      () => (share) => spotAt(plan, trueFromMean(turn * share, plan.shape.eccentricity)),
+    ),
   };
 }
 

@@ -5,9 +5,10 @@ import { axisStyle, plainLayout } from './chartLayout.ts';
 import { plotlyScale } from './colourScale.ts';
 import type { Figure, FigureStyle } from './figure.ts';
 import { latitudeTicks, poleToPole } from './latitudeAxis.ts';
-import { cellWords, type MapGrid } from './mapGrid.ts';
+import { cellWords, type MapGrid, mapTime } from './mapGrid.ts';
 import { colourBar, keyHeight, mapKey } from './mapKey.ts';
 import type { Ground, MapLine } from './mapLines.ts';
+import { momentsAcross } from './moments.ts';
 import { seasonAxisLayout } from './seasonAxis.ts';
 import { topAxisAnchor } from './topAxis.ts';
 import type { View } from './view.ts';
@@ -47,6 +48,10 @@ export function seasonMapFigure(
       topAxisAnchor('seasons', view.x[0], view.y[0]),
     ],
     layout: mapLayout(map, view),
+    moments: momentsAcross(
+      (x) => (x * grid.unit.seconds) / grid.period,
+      (share) => mapTime(grid, share * grid.period),
+    ),
   };
 }
 

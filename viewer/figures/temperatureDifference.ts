@@ -5,10 +5,12 @@ import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type ChartLine, traceOf } from './chartLine.ts';
 import type { Figure, FigureStyle } from './figure.ts';
 import { namesBesideLines } from './lineNames.ts';
+import { momentsAlong } from './moments.ts';
 import { orbitAxis } from './orbitAxis.ts';
 import { plainLabel } from './plainLabel.ts';
 import { plainReading } from './reading.ts';
 import { stateLook } from './temperatureLines.ts';
+import { throughOrbit } from './throughOrbit.ts';
 import { values } from './variables.ts';
 import type { View } from './view.ts';
 
@@ -17,15 +19,14 @@ const plotHeight = { wide: 400, narrow: 300 };
 /** Periodic columns; `reference` is one of them. Each is compared at equal shares of its own period. */
 export function temperatureDifference(columns: readonly Column[], reference: Column, style: FigureStyle): Figure {
   const axis = orbitAxis((style.reading ?? plainReading).axis, columns);
-  const ofReference = shareCurve(reference);
-  const lines = columns
-    .filter((column) => column !== reference)
-    .map((column): ChartLine => {
-      const { time, rows } = axis.span(column);
-      const own = shareCurve(column);
-      const y = rows.map((row) => own.temperature[row]! - at(ofReference, own.share[row]!));
-      return { ...stateLook(column, style.theme), x: time.map((t) => t / axis.unit.seconds), y };
-    });
+  const others = columns.filter((column) => column !== reference);
+  const lines = others.map((column): ChartLine => {
+    const { time, rows } = axis.span(column);
+    const anomaly = values(column.dataset, 'meanAnomaly');
+    const apart = difference(column, reference);
+    const x = time.map((t) => t / axis.unit.seconds);
+    return { ...stateLook(column, style.theme), x, y: rows.map((row) => apart(anomaly[row]! / turn)) };
+  });
   const name = columnName(reference);
   const all = lines.flatMap(({ y }) => y);
   const [low, high] = [Math.min(0, ...all), Math.max(0, ...all)];
@@ -42,38 +43,16 @@ export function temperatureDifference(columns: readonly Column[], reference: Col
     lines,
     data: lines.map((line) => traceOf(line, '%{y:+.1f} K')),
     layout: layoutOf(lines, view, axis.title, name, style),
+    moments: momentsAlong(others, axis.span, axis.unit.seconds, (column) => difference(column, reference)),
   };
 }
 
-interface ShareCurve {
-  /** Of the period after periapsis, 0 … 1, increasing. */
-  readonly share: readonly number[];
-  readonly temperature: Float64Array;
-}
+const turn = 2 * Math.PI;
 
-function shareCurve({ dataset }: Column): ShareCurve {
-  const anomaly = values(dataset, 'meanAnomaly');
-  return {
-    share: Array.from(anomaly, (angle) => angle / (2 * Math.PI)),
-    temperature: values(dataset, 'temperature'),
-  };
-}
-
-/** Between rows by straight lines, round the end of the orbit, too. */
-function at({ share, temperature }: ShareCurve, wanted: number): number {
-  let low = 0;
-  let high = share.length;
-  while (low < high) {
-    const middle = (low + high) >> 1;
-    if (share[middle]! <= wanted) low = middle + 1;
-    else high = middle;
-  }
-  const before = (low - 1 + share.length) % share.length;
-  const after = low % share.length;
-  const from = low === 0 ? share[before]! - 1 : share[before]!;
-  const to = low === share.length ? share[after]! + 1 : share[after]!;
-  const part = to > from ? (wanted - from) / (to - from) : 0;
-  return temperature[before]! + part * (temperature[after]! - temperature[before]!);
+/** How far a column is from the reference, at a share of the period. */
+function difference(column: Column, reference: Column): (share: number) => number {
+  const [own, other] = [column, reference].map(({ dataset }) => throughOrbit(dataset, 'temperature'));
+  return (share) => own!(turn * share) - other!(turn * share);
 }
 
 function layoutOf(

@@ -3,6 +3,7 @@ import { answerFor } from '../words/answer.ts';
 import { type Column, columnName, commonTimeUnit, periodOf } from '../words/columns.ts';
 import { hasLatitude } from '../words/latitude.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { momentsAlong, temperatureAt } from './moments.ts';
 import { allEqual, type OrbitAxis, orbitAxis } from './orbitAxis.ts';
 import { plainReading } from './reading.ts';
 import { type Moment, type TemperatureChart, temperatureFigure } from './temperatureChart.ts';
@@ -28,7 +29,7 @@ export function temperatureThroughOrbit(
     datesBelow: axis.name === 'date',
     style,
   };
-  return temperatureFigure(chart, {
+  const figure = temperatureFigure(chart, {
     name: 'temperature-through-the-orbit',
     title: columns.some(hasLatitude) ? 'Area-mean temperature through the orbit' : 'Temperature through the orbit',
     textAlternative: columns
@@ -36,6 +37,7 @@ export function temperatureThroughOrbit(
       .join(' '),
     caption: [caption(columns, axis), ...(originals.length > 0 ? [thinLines] : [])].join(' '),
   });
+  return { ...figure, moments: momentsAlong(columns, axis.span, axis.unit.seconds, temperatureAt) };
 }
 
 const thinLines = 'Thin: the same cases before their numbers were moved.';

@@ -1,9 +1,11 @@
 /** The figures of a page, each with a name by which it is known again when the numbers behind it have moved. */
 import type { Figure, FigureStyle } from '../figures/figure.ts';
 import { plainReading, type Reading } from '../figures/reading.ts';
+import type { Column } from '../words/columns.ts';
 import { controlRow, labelled, shortened } from './controls.ts';
 import { element } from './element.ts';
 import { type FigureView, figureView } from './figureView.ts';
+import { momentBar } from './momentBar.ts';
 import { type ReadingChoices, readingBar } from './readingBar.ts';
 import type { Setting } from './surroundings.ts';
 
@@ -20,7 +22,7 @@ export interface FigureList {
   /** All that are there now. */
   views(): readonly FigureView[];
   /** Other numbers: figures in view are drawn at once, the others when they come into view. */
-  show(builders: readonly FigureBuilder[], choices: ReadingChoices): void;
+  show(builders: readonly FigureBuilder[], choices: FigureChoices): void;
   /** How the figures are read; `changed` hears of what the reader chooses. */
   read(reading: Reading): void;
   onRead(changed: (reading: Reading) => void): void;
@@ -28,7 +30,12 @@ export interface FigureList {
   draw(setting: Setting, breath?: () => Promise<void>): Promise<void>;
 }
 
-export function figureList(first: readonly FigureBuilder[], firstChoices: ReadingChoices): FigureList {
+export interface FigureChoices extends ReadingChoices {
+  /** Periodic columns, whose moments can be marked. */
+  readonly columns: readonly Column[];
+}
+
+export function figureList(first: readonly FigureBuilder[], firstChoices: FigureChoices): FigureList {
   let reading = plainReading;
   let heard: (reading: Reading) => void = () => undefined;
   const bar = readingBar((chosen) => {
@@ -36,6 +43,12 @@ export function figureList(first: readonly FigureBuilder[], firstChoices: Readin
     heard(chosen);
   });
   bar.offer(firstChoices);
+  let pinned: number | null = null;
+  const moment = momentBar((share) => {
+    pinned = share;
+    mark(share);
+  });
+  moment.offer(firstChoices.columns);
   const box = element('div', { class: 'figure-list' });
   const views = new Map<string, FigureView>();
   const choosers = new Map<string, Chooser>();
@@ -62,12 +75,23 @@ export function figureList(first: readonly FigureBuilder[], firstChoices: Readin
     }
   }
 
+  function mark(share: number | null): void {
+    moment.show(share, reading.unit);
+    for (const view of views.values()) view.mark(share);
+  }
+
+  /** The pointer's moment while it is over a figure, else that of the slider. */
+  function point(share: number | null): void {
+    mark(share ?? pinned);
+  }
+
   function read(plain: Setting): Setting {
     return { ...plain, style: { ...plain.style, reading } };
   }
 
   function readAs(chosen: Reading): void {
     reading = chosen;
+    moment.show(pinned, chosen.unit);
     for (const view of views.values()) {
       view.leaveZoom();
       stale.add(view);
@@ -90,7 +114,7 @@ export function figureList(first: readonly FigureBuilder[], firstChoices: Readin
       const chooser = chooserOf(builder);
       const build = (style: FigureStyle) => builder.build(style, chooser?.chosen() ?? 0);
       const known = views.get(id);
-      const view = known ?? figureView(index + 1, build, chooser?.element ?? null);
+      const view = known ?? figureView(index + 1, build, chooser?.element ?? null, point);
       if (known) known.renew(index + 1, build);
       else views.set(id, view);
       stale.add(view);
@@ -109,10 +133,11 @@ export function figureList(first: readonly FigureBuilder[], firstChoices: Readin
 
   lay(first);
   return {
-    element: element('div', { class: 'figures' }, bar.element, box),
+    element: element('div', { class: 'figures' }, bar.element, moment.element, box),
     views: () => [...views.values()],
     show(builders, choices) {
       bar.offer(choices);
+      moment.offer(choices.columns);
       lay(builders);
       drawSeen();
     },

@@ -6,7 +6,9 @@ import { lightTheme } from '../figures/theme.ts';
 import type { View } from '../figures/view.ts';
 import { element } from './element.ts';
 import { lineSample } from './lineSample.ts';
+import { momentLayer } from './momentLayer.ts';
 import { plotly } from './plotly.ts';
+import { watchPointer } from './pointer.ts';
 import { saveFile } from './saveFile.ts';
 import type { Setting } from './surroundings.ts';
 import { watchZoom } from './zoom.ts';
@@ -21,6 +23,8 @@ export interface FigureView {
   renew(number: number, build: Build): void;
   /** The next `draw` shows the whole. */
   leaveZoom(): void;
+  /** Marks a share of the period, where the figure shows one; null for none. */
+  mark(share: number | null): void;
 }
 
 export type Build = (style: FigureStyle) => Figure;
@@ -41,12 +45,20 @@ function savedAs(setting: Setting | null): FigureStyle {
 const leastWidth = { wide: 560, narrow: 240 };
 
 /** `build` makes the figure for a style; `number` is its place on the page; `controls` stand above it. */
-export function figureView(first: number, made: Build, controls: HTMLElement | null = null): FigureView {
+export function figureView(
+  first: number,
+  made: Build,
+  controls: HTMLElement | null = null,
+  pointed: (share: number | null) => void = () => undefined,
+): FigureView {
   let number = first;
   let build = made;
   let setting: Setting | null = null;
   let view: View | null = null;
+  let drawn: Figure | null = null;
+  let marked: number | null = null;
   const plot = element('div', { class: 'plot', role: 'group' });
+  const layer = momentLayer(plot);
   const legend = element('ul', { class: 'legend' });
   const whole = button('Show all', () => show(null));
   whole.hidden = true;
@@ -70,8 +82,15 @@ export function figureView(first: number, made: Build, controls: HTMLElement | n
     whole.hidden = view === null;
     const figure = asRead(build, { ...setting.style, view });
     say(figure);
+    drawn = figure;
     legend.replaceChildren(...(setting.style.narrow ? legendEntries(figure) : []));
     await plotly().react(plot, figure.data, drawnLayout(figure, setting, widthFor(plot, setting)), config);
+    mark(marked);
+  }
+
+  function mark(share: number | null): void {
+    marked = share;
+    layer.show(share === null ? [] : (drawn?.moments?.placesOf(share) ?? []));
   }
 
   async function draw(changed: Setting): Promise<void> {
@@ -79,8 +98,9 @@ export function figureView(first: number, made: Build, controls: HTMLElement | n
     setting = changed;
     await show(view);
     if (!isFirst) return;
+    watchPointer(plot, (x, y) => pointed(x === null ? null : (drawn?.moments?.shareAt(x, y) ?? null)));
     watchZoom(plot, { zoomed: (part) => void show(part), left: () => void show(null) });
-    new ResizeObserver(() => void followWidth(plot, setting!)).observe(plot);
+    new ResizeObserver(() => void followWidth(plot, setting!).then(() => mark(marked))).observe(plot);
   }
 
   async function refresh(): Promise<void> {
@@ -98,7 +118,7 @@ export function figureView(first: number, made: Build, controls: HTMLElement | n
       'figure',
       { class: 'chart' },
       controls,
-      plot,
+      element('div', { class: 'plot-box' }, plot, layer.element),
       legend,
       element('div', { class: 'under' }, words, tools),
     ),
@@ -108,6 +128,7 @@ export function figureView(first: number, made: Build, controls: HTMLElement | n
     leaveZoom() {
       view = null;
     },
+    mark,
   };
 }
 

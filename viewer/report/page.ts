@@ -7,7 +7,7 @@ import type { FigureView } from './figureView.ts';
 import { accountsSection } from './sections/accounts.ts';
 import { answering } from './sections/answering.ts';
 import { casesSection } from './sections/cases.ts';
-import { figureBuilders, readingChoices } from './sections/figures.ts';
+import { figureBuilders, figureChoices } from './sections/figures.ts';
 import { heading } from './sections/heading.ts';
 import { inputsSection } from './sections/inputs.ts';
 import { cautionsSection, footer, methodSection } from './sections/method.ts';
@@ -45,7 +45,7 @@ export function page(original: RunResult): RunPage {
     Object.keys(sections).map((name) => [name, made(name as SectionName, original)]),
   ) as Record<SectionName, HTMLElement>;
   const builders = (result: RunResult) => figureBuilders(columnsOf(result), movedFrom(original, result));
-  const figures = figureList(builders(original), readingChoices(columnsOf(original)));
+  const figures = figureList(builders(original), figureChoices(columnsOf(original)));
   return {
     element: element(
       'main',
@@ -63,7 +63,7 @@ export function page(original: RunResult): RunPage {
     figures,
     show(result, moves) {
       for (const name of Object.keys(sections) as SectionName[]) renew(shown[name], made(name, result, moves));
-      figures.show(builders(result), readingChoices(columnsOf(result)));
+      figures.show(builders(result), figureChoices(columnsOf(result)));
     },
   };
 }

@@ -17,8 +17,7 @@ import { temperatureThroughOrbit } from '../../figures/temperatureThroughOrbit.t
 import { hasWindows, windowBars } from '../../figures/windowBars.ts';
 import { type Column, columnName } from '../../words/columns.ts';
 import { hasLatitude } from '../../words/latitude.ts';
-import type { FigureBuilder } from '../figureList.ts';
-import type { ReadingChoices } from '../readingBar.ts';
+import type { FigureBuilder, FigureChoices } from '../figureList.ts';
 
 /** `originals` are columns as they were before a reader moved them: thin lines beside the others. */
 export function figureBuilders(columns: readonly Column[], originals: readonly Column[]): FigureBuilder[] {
@@ -48,11 +47,11 @@ function throughOrbit(columns: readonly Column[], originals: readonly Column[], 
 }
 
 /** What a reader may choose for the figures of these columns. */
-export function readingChoices(columns: readonly Column[]): ReadingChoices {
+export function figureChoices(columns: readonly Column[]): FigureChoices {
   const periodic = columns.filter(({ isForwardRun }) => !isForwardRun);
-  if (periodic.length === 0) return { axes: ['time'], cases: [] };
+  if (periodic.length === 0) return { axes: ['time'], cases: [], columns: [] };
   const cases = periodic.filter(({ stateIndex }) => stateIndex === 0).map(({ caseName }) => caseName);
-  return { axes: availableAxes(periodic), cases };
+  return { axes: availableAxes(periodic), cases, columns: periodic };
 }
 
 function figure(id: string, build: (style: FigureStyle) => Figure): FigureBuilder {
