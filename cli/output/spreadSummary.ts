@@ -18,8 +18,9 @@ export function spreadSummary({ draws, seed, sampling, failed, indexRows, cases 
         }),
       ),
       findings: Object.fromEntries(
-        one.findings.map(({ name, label, unit, atCentre, summary, circular }) => {
-          return [name, { unit, label, ...summary, atCentre, ...(circular ? { circular } : {}) }];
+        one.findings.map(({ name, label, unit, atCentre, summary, circular, groups }) => {
+          const apart = groups === null ? {} : { groups };
+          return [name, { unit, label, ...summary, atCentre, ...(circular ? { circular } : {}), ...apart }];
         }),
       ),
       importance: Object.fromEntries(
@@ -33,6 +34,7 @@ export function spreadSummary({ draws, seed, sampling, failed, indexRows, cases 
           },
         ]),
       ),
+      ...(one.climates === null ? {} : { climates: one.climates }),
       bandDraws: one.bandDraws,
       idle: one.idle,
       warnings: one.warnings,

@@ -174,6 +174,7 @@ export function spreadCase(options: SpreadCaseOptions = {}): SpreadCase {
       summary,
       circular,
       histogram: histogramOf(values),
+      groups: null,
       importance,
     };
   });
@@ -188,6 +189,7 @@ export function spreadCase(options: SpreadCaseOptions = {}): SpreadCase {
     idle: [],
     findings,
     bands: [orbitBand(answers, centre), ...(zonal ? [latitudeBand(answers, centre)] : [])],
+    climates: null,
     bandDraws: fixtureDraws,
     failed: 0,
     sample: {

@@ -1,5 +1,7 @@
 /** What `spread` hands to files, terminal and page: plain data. Findings are SI; inputs are in the unit in which they were typed. */
 import type { Origin } from '../../origin.ts';
+import type { DrawnClimates } from './climates.ts';
+import type { Group } from './groups.ts';
 import type { Summary } from './percentiles.ts';
 import type { SobolIndex } from './sobolIndices.ts';
 
@@ -38,6 +40,8 @@ export interface SpreadFinding {
   readonly circular: boolean;
   /** Null where fewer than two draws have a value. */
   readonly histogram: Histogram | null;
+  /** Where the draws fall into two groups with none between, the lower first; else null. On the line of the summary. */
+  readonly groups: readonly [Group, Group] | null;
   readonly importance: Importance;
 }
 
@@ -71,6 +75,8 @@ export interface SpreadCase {
   readonly findings: readonly SpreadFinding[];
   /** Temperature through the orbit first. */
   readonly bands: readonly SpreadBand[];
+  /** Which climates the draws took; null for models without ice by latitude. */
+  readonly climates: DrawnClimates | null;
   /** Draws that the bands are made from: the first of all. */
   readonly bandDraws: number;
   /** Draws that could not be computed, or not within the tolerance. */

@@ -6,12 +6,15 @@ import { isTimeInOrbit } from '../isTimeInOrbit.ts';
 import { type BandPlace, bandSampler } from './bandSampler.ts';
 import { resamples } from './bootstrap.ts';
 import { summariseTurns, unwrapTurn } from './circular.ts';
+import { type DrawnClimates, drawnClimates } from './climates.ts';
+import { goesInSteps, twoGroups } from './groups.ts';
 import { histogramOf } from './histogram.ts';
 import { importanceByDesign, importanceByRanks, noImportance } from './importance.ts';
 import { percentileLevels, quantilesInto, type Summary, summarise } from './percentiles.ts';
 import type { PlannedCase, SpreadPlan } from './plan.ts';
 import { type RankOrder, rankOrder } from './rankMeasure.ts';
 import type { Importance, SpreadBand, SpreadCase, SpreadFinding, SpreadInput, SpreadReport } from './spreadReport.ts';
+import { climateWarnings, groupWarnings } from './spreadWarnings.ts';
 
 /** A column of a table by its name, (rows,), NaN where undefined. */
 export type ReadColumn = (name: string) => Promise<Float64Array>;
@@ -57,6 +60,7 @@ async function summariseCase(
   const periods = await tables.draws(findingColumn(plan, index, 'period'));
   const inputs = await summariseInputs(plan, index, tables.draws, scratch);
   const findings = await summariseFindings(plan, index, tables, { periods, scratch, ranks: inputs.ranks });
+  const climates = await climatesOf(plan, index, tables.draws);
   return {
     name: drawn.name,
     model: drawn.model,
@@ -64,10 +68,11 @@ async function summariseCase(
     idle: drawn.idle,
     findings: findings.told,
     bands: tables.bands === null ? [] : await bandsOf(plan, index, tables.bands),
+    climates,
     bandDraws: tables.bandDraws,
     failed: periods.reduce((count, value) => count + Number(Number.isNaN(value)), 0),
     sample: { inputs: inputs.sample, findings: findings.sample },
-    warnings: drawn.warnings,
+    warnings: [...drawn.warnings, ...climateWarnings(climates), ...groupWarnings(findings.told)],
     notes: drawn.notes,
   };
 }
@@ -86,6 +91,13 @@ async function summariseInputs(plan: SpreadPlan, index: number, read: ReadColumn
     if (plan.rowOf !== null) ranks.push(rankOrder(values.slice(0, ranked)));
   }
   return { told, sample, ranks };
+}
+
+async function climatesOf(plan: SpreadPlan, index: number, read: ReadColumn): Promise<DrawnClimates | null> {
+  const names = plan.cases[index].findings.map(({ name }) => name);
+  if (!names.includes('climates') || !names.includes('iceFractionMean')) return null;
+  const column = (name: string) => read(findingColumn(plan, index, name));
+  return drawnClimates(await column('climates'), await column('iceFractionMean'));
 }
 
 interface FindingContext {
@@ -112,6 +124,7 @@ async function summariseFindings(plan: SpreadPlan, index: number, tables: Spread
       summary: line.summary,
       circular,
       histogram: histogramOf(line.values, context.scratch),
+      groups: goesInSteps(finding.name) ? null : twoGroups(line.values, context.scratch),
       importance: await importanceOf(finding.name, line),
     });
     sample.push(Array.from(values.subarray(0, scattered), (value) => (Number.isNaN(value) ? null : value)));
