@@ -79,7 +79,7 @@ const percentilesStep: Step = {
 
 const circularStep: Step = {
   words:
-    'Times that come round with the orbit are averaged on the circle, each as a share of its draw’s own period, and shown in an orbit of the median period. Intervals are counted from half a turn before the mean to half a turn after: a time below 0 is before periapsis, at the end of the turn before.',
+    'Times that come round with the orbit are averaged on the circle, each as a share of its draw’s own period, and shown in an orbit of the median period. Intervals are counted from half a turn before the mean to half a turn after, and mean, interval and centre stand in one turn: a time below 0 is before periapsis, at the end of the turn before.',
   equation: 'tan 2πt̄ = ⟨sin 2πt⟩ / ⟨cos 2πt⟩',
   source: 'Mardia & Jupp (2000), Directional Statistics, § 2.2 and § 6.3',
 };

@@ -111,6 +111,7 @@ interface FindingContext {
 async function summariseFindings(plan: SpreadPlan, index: number, tables: SpreadTables, context: FindingContext) {
   const { findings, drawn } = plan.cases[index];
   const centre = atCentre(plan.cases[index]);
+  const periodAt = findings.findIndex(({ name }) => name === 'period');
   const importanceOf = await importanceReader(plan, index, tables, context.ranks);
   const told: SpreadFinding[] = [];
   const sample: (number | null)[][] = [];
@@ -118,9 +119,10 @@ async function summariseFindings(plan: SpreadPlan, index: number, tables: Spread
     const values = await tables.draws(findingColumn(plan, index, finding.name));
     const circular = isTimeInOrbit(finding.name) && drawn.options.start === 'periodic';
     const line = circular ? circularLine(values, context) : straightLine(values, context);
+    const middle = centre === null || Number.isNaN(centre[f]) ? null : centre[f];
     told.push({
       ...finding,
-      atCentre: centre === null || Number.isNaN(centre[f]) ? null : centre[f],
+      atCentre: middle === null ? null : line.beside(middle, centre![periodAt]),
       summary: line.summary,
       circular,
       histogram: histogramOf(line.values, context.scratch),
@@ -137,13 +139,18 @@ interface Line {
   readonly summary: Summary;
   readonly values: Float64Array;
   bring(values: Float64Array, periods: Float64Array): Float64Array;
+  /** A single run's value, where it stands beside the summary. */
+  beside(value: number, period: number): number;
 }
 
 function straightLine(values: Float64Array, { scratch }: FindingContext): Line {
-  return { summary: summarise(values, scratch), values, bring: (others) => others };
+  return { summary: summarise(values, scratch), values, bring: (others) => others, beside: (value) => value };
 }
 
-/** Turns are unwrapped around their mean, and told in seconds of an orbit of the median period. */
+/**
+ * Turns are unwrapped around their mean, and told in seconds of an orbit of the median period. A single run keeps its own seconds, in the
+ * turn that is nearest to the median.
+ */
 function circularLine(times: Float64Array, { periods, scratch }: FindingContext): Line {
   const period = summarise(periods, scratch).percentiles?.['50'] ?? 1;
   const values = overPeriod(times, periods);
@@ -152,10 +159,12 @@ function circularLine(times: Float64Array, { periods, scratch }: FindingContext)
     for (let i = 0; i < column.length; i++) column[i] = period * unwrapTurn(column[i], turns.mean ?? 0.5); // NaN stays
     return column;
   };
+  const median = turns.percentiles?.['50'];
   return {
     summary: inSeconds(turns, period),
     values: unwrap(values), // in place: ten million draws take 80 MB a column
     bring: (others, own) => unwrap(overPeriod(others, own)),
+    beside: (time, own) => (median === undefined ? time : time - own * Math.round(time / own - median)),
   };
 }
 

@@ -147,7 +147,7 @@ describe('spreadHistogram', () => {
     const period = daysPerPeriod * 86_400;
     const base = sea.findings.find(({ name }) => name === 'timeOfMax')!;
     const early = withFinding(sea, 'timeOfMax', {
-      atCentre: period - 86_400,
+      atCentre: -86_400,
       histogram: { from: -3 * 86_400, to: 2 * 86_400, counts: [1, 4, 6, 3, 1], beyond: 1 },
     });
     const one = spreadOf([early]);
