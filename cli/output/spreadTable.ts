@@ -113,13 +113,12 @@ function importanceLines(one: SpreadCase, terminal: Terminal): string[] {
   return ['temperatureMean', 'temperatureMax', 'lagOfMax'].flatMap((name) => {
     const finding = one.findings.find((candidate) => candidate.name === name);
     if (!finding) return [];
-    const { first, total, ranks } = finding.importance;
-    const parts = one.inputs.map(({ key }, i) => {
-      if (total !== null && first !== null)
-        return { key, size: total[i]!.value, text: `${key} ${share(total[i]!.value)}` };
-      return { key, size: ranks?.[i]?.value ?? 0, text: `${key} ${share(ranks?.[i]?.value ?? 0)}` };
+    const { total, ranks } = finding.importance;
+    const parts = one.inputs.flatMap(({ key }, i) => {
+      const size = total?.[i]?.value ?? ranks?.[i]?.value ?? null;
+      return size === null ? [] : [{ size, text: `${key} ${share(size)}` }];
     });
-    if (total === null && ranks === null) return [];
+    if (parts.length === 0) return [];
     const chosen = parts.toSorted((a, b) => b.size - a.size).slice(0, mostImportant);
     const head = total === null ? 'goes along with' : 'total index';
     return hanging(
@@ -130,6 +129,7 @@ function importanceLines(one: SpreadCase, terminal: Terminal): string[] {
   });
 }
 
+/** An estimate of nothing may come out below it. */
 function share(value: number): string {
   return Math.max(0, value).toFixed(2);
 }

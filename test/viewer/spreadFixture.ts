@@ -273,10 +273,11 @@ function indexImportance(
 function rankImportance(columns: readonly Float64Array[], values: Float64Array): Importance {
   const order = rankOrder(values);
   const measures = columns.map((column) => rankMeasure(rankOrder(column), order));
-  const none = measures.find(({ value }) => value === null);
-  if (none !== undefined) return { first: null, total: null, ranks: null, reason: none.reason ?? 'none' };
   const ranks = measures.map(({ value, chanceLevel }) => ({ value: value!, chanceLevel: chanceLevel! }));
-  return { first: null, total: null, ranks };
+  const none = measures.find(({ value }) => value === null);
+  return none === undefined
+    ? { first: null, total: null, ranks }
+    : { first: null, total: null, ranks: null, reason: none.reason ?? 'none' };
 }
 
 function turnsSummary(values: Float64Array): Summary {

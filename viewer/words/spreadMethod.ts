@@ -113,7 +113,7 @@ function indexSteps({ indexRows, sampling }: SpreadReport): Step[] {
 
 const rankStep: Step = {
   words:
-    'Inputs that go together have no shares of the variance. In their place stands D, from ranks alone: 0 exactly where input and finding are independent, 1 exactly where the input fixes the finding. It means what knowing the input, and all that goes along with it in the samples, tells about the finding; it does not mean that the input acts on it, and the values do not add up to 1.',
+    'Inputs that go together have no shares of the variance. In their place stands D, from ranks alone: 0 exactly where input and finding are independent, 1 exactly where the input fixes the finding. It means what knowing the input, and all that goes along with it in the samples, tells about the finding; it does not mean that the input acts on it, and the values do not add up to 1. What chance gives on average is taken off the estimate, which may therefore come out slightly below 0.',
   equation: 'D = ∫ Var P(y ≤ t | x) dF(t) / ∫ F(t) (1 − F(t)) dF(t)',
   source:
     'Dette, Siburg & Stoimenov (2013), Scand. J. Stat. 40, 21; Chatterjee (2021), J. Am. Stat. Assoc. 116, 2009; classes: Plischke, Borgonovo & Smith (2013), Eur. J. Oper. Res. 226, 536',

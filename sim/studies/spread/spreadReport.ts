@@ -50,9 +50,14 @@ export interface Importance {
   readonly first: readonly SobolIndex[] | null;
   readonly total: readonly SobolIndex[] | null;
   /** For posterior samples, whose inputs go together: dependence by ranks, and what chance alone would give. */
-  readonly ranks: readonly { readonly value: number; readonly chanceLevel: number }[] | null;
+  readonly ranks: readonly RankImportance[] | null;
   readonly reason?: string;
 }
+
+/** `value` 0 where the input tells nothing, as an estimate around it, so that it may come out slightly below; 1 where it tells all. */
+export type RankImportance =
+  | { readonly value: number; readonly chanceLevel: number }
+  | { readonly value: null; readonly chanceLevel: null; readonly reason: string };
 
 /** Percentiles of a curve, point by point: one array for each level of `percentileLevels`. NaN nowhere. */
 export interface SpreadBand {

@@ -214,6 +214,23 @@ describe('importanceBars', () => {
     expect(figure.caption).toMatch(/goes along with another shares its value/);
   });
 
+  test('ranks: no bar where nothing can be told, and the reason in words', () => {
+    const base = spreadCase({ sampling: 'posterior' });
+    const { importance } = base.findings.find(({ name }) => name === 'temperatureMax')!;
+    const unknown = { value: null, chanceLevel: null, reason: 'the input is the same in every draw' } as const;
+    const ranks = importance.ranks!.map((one, at) => (at === 0 ? unknown : one));
+    const one = spreadOf([withFinding(base, 'temperatureMax', { importance: { ...importance, ranks } })], {
+      sampling: 'posterior',
+      indexRows: 0,
+    });
+    const figure = importanceBars(shared('temperatureMax', one), one, wide);
+    expect(traces(figure)[0]!.x).toHaveLength(ranks.length - 1);
+    expect(everyNumber(figure.layout).every(Number.isFinite)).toBe(true);
+    expect(figure.textAlternative).toMatch(
+      /Of the Bond albedo it cannot be told: the input is the same in every draw\./,
+    );
+  });
+
   test('where there are none, the reason stands in their place', () => {
     const none = spreadOf([
       withFinding(sea, 'temperatureMax', {

@@ -117,6 +117,11 @@ describe('what matters most, in words', () => {
     expect(text({ first: null, total: null, ranks: nothing })).toBe(
       'No input tells more about the peak than chance alone would.',
     );
+    const reason = 'the input is the same in every draw';
+    const unknown = ranks.map((one, at) => (at === 1 ? ({ value: null, chanceLevel: null, reason } as const) : one));
+    expect(text({ first: null, total: null, ranks: unknown })).toBe(
+      'The Bond albedo tells most about the peak: D = 0.42, where chance alone stays below 0.030. Of the eccentricity it cannot be told: the input is the same in every draw.',
+    );
   });
 
   test('no indices: the reason', () => {
