@@ -71,6 +71,26 @@ const bad: [input: string | number, spec: QuantitySpec, what: string, mend: stri
   ['1 to 2 to 3 au', length, '`1 to 2 to 3 au` has more than two ends', 'Write e.g. `0.3 to 0.5 au`'],
   ['0 to 5 log', number, '`0 to 5 log` does not start above zero', 'Start a log range above zero'],
   ['5 log', number, '`log` belongs to a range', 'Write e.g. `1e5 to 1e9 J/m2/K log`'],
+  ...['lgo', 'Log', 'lg', 'ln', '(log)', 'log10', 'logarithmic', 'log-uniform'].map(
+    (word): [string, QuantitySpec, string, string] => [
+      `1 to 5 ${word}`,
+      number,
+      `\`${word}\` at the end of \`1 to 5 ${word}\` is no unit and not \`log\``,
+      'Write e.g. `1e5 to 1e9 J/m2/K log`',
+    ],
+  ),
+  [
+    '> 0.1 (95%)',
+    number,
+    '`> 0.1 (95%)` is a lower limit, which leaves open how large it may be',
+    'Write a range with both ends, e.g. `0.3 to 0.5`',
+  ],
+  [
+    '≥ 1 au',
+    length,
+    '`≥ 1 au` is a lower limit, which leaves open how large it may be',
+    'Write a range with both ends, e.g. `0.3 to 0.5 au`',
+  ],
   ['< 0.12', number, '`< 0.12` does not say how sure it is', 'Write a limit as in `< 0.12 (95%)`'],
   ['< 0.12 (0.95)', number, '`< 0.12 (0.95)` does not say how sure it is', 'Write a limit as in `< 0.12 (95%)`'],
   ['< 0.12 (100%)', number, 'a confidence of 100% is impossible', 'Write one between 0% and 100%'],
