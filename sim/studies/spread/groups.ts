@@ -3,9 +3,10 @@
  * mean may lie where no draw is, and an interval over both says little of either.
  *
  * A plain test, and no estimate of how many modes there are: the widest gap between neighbours in order that has 2.5 % of the draws,
- * and at least 8 of them, on either side must be at least a sixth of the whole reach. To look for a gap in the ordered sample is common
+ * and at least 8 of them, on either side must be at least a fifth of the whole reach. To look for a gap in the ordered sample is common
  * practice; the numbers are our own, chosen so that smooth distributions, those with long tails too, hardly ever pass for two groups
- * (see the tests). Groups that touch, or one that holds fewer draws, are not told.
+ * (see the tests). Groups that touch, or one that holds fewer draws, are not told; nor is a finding with two values only, which says yes
+ * or no, and whose mean is a share.
  */
 import { quantilesInto } from './percentiles.ts';
 
@@ -18,7 +19,7 @@ export interface Group {
 }
 
 /** Least part of the reach from the lowest draw to the highest that a gap must take. */
-const leastGap = 1 / 6;
+const leastGap = 0.2;
 /** Least share, and least number, of the draws on either side. */
 const leastShare = 0.025;
 const leastDraws = 8;
@@ -42,6 +43,7 @@ export function twoGroups(
   const gap = widestGap(defined, low, high);
   if (gap === null) return null;
   const groups = groupsAround(defined, gap);
+  if (groups.every(({ from, to }) => from === to)) return null;
   return gap.to - gap.from >= leastGap * (groups[1].to - groups[0].from) ? groups : null;
 }
 

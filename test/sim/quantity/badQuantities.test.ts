@@ -16,7 +16,12 @@ const bad: [input: string | number, spec: QuantitySpec, what: string, mend: stri
   ['', number, 'a number is missing', 'Write e.g. `0.3`'],
   ['  ', length, 'a number is missing', 'Write e.g. `0.3 au`'],
   ['au', length, '`au` is not a number', 'Write e.g. `0.3 au`'],
-  ['> 5', number, '`> 5` is not a number', 'Write e.g. `0.3`'],
+  [
+    '> 5',
+    number,
+    '`> 5` is a lower limit, which leaves open how large it may be',
+    'Write a range with both ends, e.g. `0.3 to 0.5`',
+  ],
   ['e5', number, '`e5` is not a number', 'Write e.g. `0.3`'],
   ['± 0.1', number, 'a number is missing', 'Write e.g. `0.3`'],
   ['0.3 ±', number, 'a number is missing', 'Write e.g. `0.3`'],

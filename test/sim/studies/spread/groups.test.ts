@@ -24,11 +24,12 @@ describe('two groups', () => {
     expect(twoGroups(values.toReversed())).toEqual(groups);
   });
 
-  test('two values are two groups; one value, or a few draws at the side, are not', () => {
+  test('two values say yes or no; one value, or a few draws at the side, are no groups either', () => {
     const half = Float64Array.from({ length: 64 }, (_, draw) => draw % 2);
-    expect(twoGroups(half)).toEqual([
+    expect(twoGroups(half)).toBeNull();
+    expect(twoGroups(half.map((value, draw) => (value === 0 ? 0 : 1 + draw / 1000)))).toEqual([
       { share: 0.5, from: 0, to: 0 },
-      { share: 0.5, from: 1, to: 1 },
+      { share: 0.5, from: 1.001, to: 1.063 },
     ]);
     expect(twoGroups(new Float64Array(64).fill(3))).toBeNull();
     expect(
@@ -41,10 +42,10 @@ describe('two groups', () => {
     expect(twoGroups(new Float64Array(100).fill(Number.NaN))).toBeNull();
   });
 
-  test('a gap narrower than a sixth of the reach is none', () => {
+  test('a gap narrower than a fifth of the reach is none', () => {
     const apart = (gap: number) => (share: number) => (share < 0.5 ? share : share + gap);
-    expect(twoGroups(drawn(4096, 1, apart(0.18)))).toBeNull(); // 0.18 of 1.18
-    expect(twoGroups(drawn(4096, 1, apart(0.22)))).not.toBeNull(); // 0.22 of 1.22
+    expect(twoGroups(drawn(4096, 1, apart(0.22)))).toBeNull(); // 0.22 of 1.22
+    expect(twoGroups(drawn(4096, 1, apart(0.28)))).not.toBeNull(); // 0.28 of 1.28
   });
 
   // One in 50 would mean that a report of thirty findings is wrong every other time.
