@@ -18,9 +18,10 @@ export function spreadSummary({ draws, seed, sampling, failed, indexRows, cases 
         }),
       ),
       findings: Object.fromEntries(
-        one.findings.map(({ name, label, unit, atCentre, summary, circular, groups }) => {
+        one.findings.map(({ name, label, unit, atCentre, summary, missingBecause, circular, groups }) => {
           const apart = groups === null ? {} : { groups };
-          return [name, { unit, label, ...summary, atCentre, ...(circular ? { circular } : {}), ...apart }];
+          const missing = missingBecause === null ? {} : { missingBecause };
+          return [name, { unit, label, ...summary, ...missing, atCentre, ...(circular ? { circular } : {}), ...apart }];
         }),
       ),
       importance: Object.fromEntries(

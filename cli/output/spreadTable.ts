@@ -100,13 +100,23 @@ function cellsOf(finding: SpreadFinding): string[] {
 
 /** Findings that some of the sound draws lack; draws that failed are told once, at the end. */
 function undefinedLines(findings: readonly SpreadFinding[], sound: number, terminal: Terminal): string[] {
-  return findings.flatMap(({ label, summary }) => {
-    if (summary.reason !== undefined)
-      return hanging('          ', terminal.say(`${label}: ${summary.reason}`), terminal.width);
+  return findings.flatMap(({ label, summary, missingBecause }) => {
+    const because = missingBecause === null ? '' : `; one lacks it because ${missingBecause}`;
+    if (summary.reason !== undefined) {
+      const why = summary.defined === 0 && missingBecause !== null ? `none: ${missingBecause}` : summary.reason;
+      return hanging('          ', terminal.say(`${label}: ${why}`), terminal.width);
+    }
     if (summary.defined >= sound) return [];
-    const text = `${label}: defined in ${(100 * summary.defined).toFixed(1)} % of the draws`;
+    const text = `${label}: defined in ${percentWords(summary.defined)} of the draws${because}`;
     return hanging('          ', terminal.say(text), terminal.width);
   });
+}
+
+/** One decimal, but neither all nor nothing where it is not. */
+function percentWords(share: number): string {
+  if (share > 0 && share < 5e-4) return 'less than 0.1 %';
+  if (share < 1 && share > 1 - 5e-4) return 'more than 99.9 %';
+  return `${(100 * share).toFixed(1)} %`;
 }
 
 function importanceLines(one: SpreadCase, terminal: Terminal): string[] {

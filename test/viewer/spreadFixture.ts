@@ -175,6 +175,7 @@ export function spreadCase(options: SpreadCaseOptions = {}): SpreadCase {
       circular,
       histogram: histogramOf(values),
       groups: null,
+      missingBecause: null,
       importance,
     };
   });

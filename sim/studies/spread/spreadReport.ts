@@ -36,6 +36,8 @@ export interface SpreadFinding {
   /** Of `run`, every input at its centre; null where it has none there. */
   readonly atCentre: number | null;
   readonly summary: Summary;
+  /** Why the first computed draw without the finding lacks it; null where none does, or nothing says why. */
+  readonly missingBecause: string | null;
   /** Times that come round with the orbit: summarised on the circle, in seconds of an orbit of the median period. */
   readonly circular: boolean;
   /** Null where fewer than two draws have a value. */

@@ -1,5 +1,6 @@
 /** What must be said beside the numbers of a spread, for terminal, file and page alike: several climates, draws in two groups. */
-import { formatNumber, inUnit } from '../../quantity/index.ts';
+import { formatNumber, formatQuantity, inUnit } from '../../quantity/index.ts';
+import type { World } from '../../world.ts';
 import type { DrawnClimates } from './climates.ts';
 import type { Group } from './groups.ts';
 import type { SpreadFinding } from './spreadReport.ts';
@@ -25,6 +26,13 @@ export function climateWarnings(climates: DrawnClimates | null): string[] {
         ]
       : []),
   ];
+}
+
+/** What times count from where every draw is on a circle, and has no periapsis; null where that is of no account. */
+export function circleNote({ orbit, globe }: World, isDrawn: boolean): string | null {
+  if (orbit.eccentricity > 0 || isDrawn || !globe) return null;
+  const longitude = formatQuantity(globe.solarLongitudeOfPeriapsis, 'deg', 4);
+  return `The orbit is a circle: “periapsis” is only the point that times are counted from, at solar longitude ${longitude}.`;
 }
 
 /** One sentence for all findings that fall apart, with the numbers of the chief one. */

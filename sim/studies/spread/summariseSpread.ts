@@ -13,8 +13,9 @@ import { importanceByDesign, importanceByRanks, noImportance } from './importanc
 import { percentileLevels, quantilesInto, type Summary, summarise } from './percentiles.ts';
 import type { PlannedCase, SpreadPlan } from './plan.ts';
 import { type RankOrder, rankOrder } from './rankMeasure.ts';
+import { reasonsOf } from './reasons.ts';
 import type { Importance, SpreadBand, SpreadCase, SpreadFinding, SpreadInput, SpreadReport } from './spreadReport.ts';
-import { climateWarnings, groupWarnings } from './spreadWarnings.ts';
+import { circleNote, climateWarnings, groupWarnings } from './spreadWarnings.ts';
 
 /** A column of a table by its name, (rows,), NaN where undefined. */
 export type ReadColumn = (name: string) => Promise<Float64Array>;
@@ -73,7 +74,7 @@ async function summariseCase(
     failed: periods.reduce((count, value) => count + Number(Number.isNaN(value)), 0),
     sample: { inputs: inputs.sample, findings: findings.sample },
     warnings: [...drawn.warnings, ...climateWarnings(climates), ...groupWarnings(findings.told)],
-    notes: drawn.notes,
+    notes: [...drawn.notes, ...circleNotes(plan.cases[index])],
   };
 }
 
@@ -91,6 +92,13 @@ async function summariseInputs(plan: SpreadPlan, index: number, read: ReadColumn
     if (plan.rowOf !== null) ranks.push(rankOrder(values.slice(0, ranked)));
   }
   return { told, sample, ranks };
+}
+
+function circleNotes({ drawn, inputs }: PlannedCase): string[] {
+  const isDrawn = inputs.some(({ key }) => /^orbit\.(ecc|e[CS]|sqrtE)/.test(key));
+  const world = orNull(() => drawn.worldAt(inputs.map(({ centre }) => centre)));
+  const note = world === null ? null : circleNote(world, isDrawn);
+  return note === null ? [] : [note];
 }
 
 async function climatesOf(plan: SpreadPlan, index: number, read: ReadColumn): Promise<DrawnClimates | null> {
@@ -112,6 +120,7 @@ async function summariseFindings(plan: SpreadPlan, index: number, tables: Spread
   const { findings, drawn } = plan.cases[index];
   const centre = atCentre(plan.cases[index]);
   const periodAt = findings.findIndex(({ name }) => name === 'period');
+  const missingBecause = reasonsOf(plan, index, context.periods);
   const importanceOf = await importanceReader(plan, index, tables, context.ranks);
   const told: SpreadFinding[] = [];
   const sample: (number | null)[][] = [];
@@ -124,6 +133,7 @@ async function summariseFindings(plan: SpreadPlan, index: number, tables: Spread
       ...finding,
       atCentre: middle === null ? null : line.beside(middle, centre![periodAt]),
       summary: line.summary,
+      missingBecause: line.summary.defined < 1 ? missingBecause(finding.name, values) : null,
       circular,
       histogram: histogramOf(line.values, context.scratch),
       groups: goesInSteps(finding.name) ? null : twoGroups(line.values, context.scratch),

@@ -45,6 +45,19 @@ describe('the table of findings', () => {
     ]);
   });
 
+  test('why a draw lacks it stands beside the share that has it; where none has it, alone', () => {
+    const { summary } = sea.findings.find(({ name }) => name === 'damping')!;
+    const cell = (changes: Parameters<typeof withFinding>[2]) => {
+      const told = withFinding(sea, 'damping', { missingBecause: 'the store forgets', ...changes });
+      return findingTables(spreadOf([told])).chief.find(({ name }) => name === 'damping')!.rows[0]!.cells[0]!;
+    };
+    expect(plain(cell({ summary: { ...summary, defined: 0.844 } }).detail!)).toBe(
+      'exists in 84.4 % of the draws; one lacks it because the store forgets',
+    );
+    const none = { mean: null, percentiles: null, defined: 0, reason: 'no draw has a value' };
+    expect(cell({ summary: none })).toEqual({ text: '—', reason: 'the store forgets' });
+  });
+
   test('a finding without a number says why', () => {
     const none = withFinding(sea, 'damping', {
       atCentre: null,

@@ -1,7 +1,8 @@
 import { describe, expect, test } from 'vitest';
 import { drawnClimates } from '../../../../sim/studies/spread/climates.ts';
 import type { SpreadFinding } from '../../../../sim/studies/spread/spreadReport.ts';
-import { climateWarnings, groupWarnings } from '../../../../sim/studies/spread/spreadWarnings.ts';
+import { circleNote, climateWarnings, groupWarnings } from '../../../../sim/studies/spread/spreadWarnings.ts';
+import { zonalWorld } from '../../models/zonal/worlds.ts';
 
 const none = Number.NaN;
 
@@ -30,6 +31,7 @@ function finding(name: string, label: string, unit: string, mean: number, [to, f
     unit,
     atCentre: null,
     circular: false,
+    missingBecause: null,
     histogram: null,
     importance: { first: null, total: null, ranks: null, reason: 'none' },
     summary: { mean, percentiles: null, defined: 1 },
@@ -56,4 +58,12 @@ describe('two groups in words', () => {
     expect(groupWarnings([finding('lagOfMax', 'Lag', 's', 5 * 86400, [4 * 86400, 6 * 86400])])[0]).toContain('to 4 d');
     expect(groupWarnings([{ ...finding('damping', 'Damping', '1', 1), groups: null }])).toEqual([]);
   });
+});
+
+test('on a circle, where times have nothing but a season to count from, that is said', () => {
+  expect(circleNote(zonalWorld({ e: 0, globe: { solarLongitudeOfPeriapsis: Math.PI / 2 } }), false)).toBe(
+    'The orbit is a circle: “periapsis” is only the point that times are counted from, at solar longitude 90 deg.',
+  );
+  expect(circleNote(zonalWorld({ e: 0.1 }), false)).toBeNull();
+  expect(circleNote(zonalWorld({ e: 0 }), true)).toBeNull(); // drawn: a circle at its centre only
 });

@@ -94,3 +94,31 @@ test('a run at the centre is told in the turn of the median, in its own seconds'
   expect(late.summary.percentiles!['50']).toBeCloseTo(290, 9);
   expect(late.atCentre).toBe(413);
 });
+
+test('a finding that some draws lack: the share that has it, and why one lacks it, in the words of the model', async () => {
+  const circle = text.replace('0.3 to 0.6', '0');
+  const round = planSpread({
+    text: circle,
+    file: 'c.yaml',
+    only: null,
+    draws,
+    seed: 1,
+    sampling: 'sobol',
+    samples: null,
+  });
+  // draw 3 failed; draws 7 and on lack the damping; all lack the lag
+  const column = async (name: string) =>
+    Float64Array.from({ length: draws }, (_, draw) => {
+      const lacks = draw === 3 || (name === 'damping' && draw >= 7) || name === 'lagOfMax';
+      return lacks ? Number.NaN : 1;
+    });
+  const [told] = (await summariseSpread(round, origin, tables({ draws: column }))).cases;
+  const finding = (name: string) => told!.findings.find((one) => one.name === name)!;
+  expect(told!.failed).toBe(1);
+  expect(finding('damping').summary.defined).toBe(6 / draws);
+  expect(finding('damping').missingBecause).toBe('the instellation does not vary on a circular orbit');
+  expect(finding('lagOfMax').summary).toMatchObject({ mean: null, defined: 0, reason: 'no draw has a value' });
+  expect(finding('lagOfMax').missingBecause).toBe('the temperature does not vary');
+  // a failed draw lacks it, but not for a reason of its own
+  expect(finding('temperatureMean').missingBecause).toBeNull();
+});
