@@ -29,7 +29,7 @@ const secondsPerDraw = 0.1;
 /** A run that ends sooner shows no bar. */
 const patience = 0.5;
 const eraseLine = '\r\u001b[2K';
-/** From when on a rate is worth telling: the first rows are slow, and rows differ. */
+/** From when on a rate is worth telling: counted from the first rows, which wait for threads to start; and rows differ. */
 const telling = { seconds: 5, rows: 8, surelySeconds: 30 };
 
 export function showProgress({ label, total, already, quiet, phase }: RowProgressOptions, io: BarIo): RowProgress {
@@ -42,11 +42,16 @@ export function showProgress({ label, total, already, quiet, phase }: RowProgres
   const words = () => progressWords(rows, total, (rows - already) / seconds(), phase?.rowsAfter ?? 0);
   const shown = quiet || !io.stderrIsTTY ? null : lineOnTerminal(io, seconds);
   const lines = progressOf(io, quiet || shown !== null);
+  let first: { readonly seconds: number; readonly rows: number } | null = null;
   const warn = () => {
     if (quiet || phase === undefined) return;
     const spent = seconds();
-    const isTelling = (spent > telling.seconds && rows - already >= telling.rows) || spent > telling.surelySeconds;
-    const text = isTelling ? phase.warning(total - rows, (rows - already) / spent) : null;
+    first ??= { seconds: spent, rows };
+    const since = rows - first.rows;
+    const isKnown = since >= telling.rows;
+    if (!(isKnown ? spent > telling.seconds : spent > telling.surelySeconds)) return;
+    const rate = isKnown ? since / (spent - first.seconds) : (rows - already) / spent;
+    const text = phase.warning(total - rows, rate);
     if (text === null) return;
     shown?.clear();
     io.stderr.write(`${printable(text)}\n`);

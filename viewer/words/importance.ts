@@ -87,13 +87,17 @@ export function chanceText(level: number): string {
   return fixed(Math.max(0, level), level < 0.095 ? 3 : 2);
 }
 
-/** Whole percent: an index knows no more. What an estimate puts below nothing is nothing. */
+/** Whole percent: an index knows no more. What an estimate puts below nothing is nothing, and above all is all. */
 export function wholePercent(share: number): string {
-  return `${fixed(Math.max(0, 100 * share), 0)}${nbsp}%`;
+  return `${fixed(100 * clipped(share), 0)}${nbsp}%`;
 }
 
 function wholeInterval(from: number, to: number): string {
-  return `${fixed(Math.max(0, 100 * from), 0)} to ${wholePercent(to)}`;
+  return `${fixed(100 * clipped(from), 0)} to ${wholePercent(to)}`;
+}
+
+function clipped(share: number): number {
+  return Math.min(1, Math.max(0, share));
 }
 
 /** The label as it stands within a sentence. */

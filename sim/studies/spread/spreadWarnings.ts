@@ -1,6 +1,6 @@
 /** What must be said beside the numbers of a spread, for terminal, file and page alike: several climates, draws in two groups. */
 import { formatNumber, formatQuantity, inUnit } from '../../quantity/index.ts';
-import type { World } from '../../world.ts';
+import type { SolveOptions, World } from '../../world.ts';
 import type { DrawnClimates } from './climates.ts';
 import type { Group } from './groups.ts';
 import type { SpreadFinding } from './spreadReport.ts';
@@ -33,6 +33,12 @@ export function circleNote({ orbit, globe }: World, isDrawn: boolean): string | 
   if (orbit.eccentricity > 0 || isDrawn || !globe) return null;
   const longitude = formatQuantity(globe.solarLongitudeOfPeriapsis, 'deg', 4);
   return `The orbit is a circle: “periapsis” is only the point that times are counted from, at solar longitude ${longitude}.`;
+}
+
+/** Said of models that do not count the climates of each draw; null where there can be only one. */
+export function warmestNote({ surface }: World, start: SolveOptions['start']): string | null {
+  if (surface.albedo.ramp === null || start !== 'periodic') return null;
+  return 'With ice, an orbit may allow several climates: every number here is of the warmest. `run` shows all of one planet.';
 }
 
 /** One sentence for all findings that fall apart, with the numbers of the chief one. */

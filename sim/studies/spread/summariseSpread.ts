@@ -15,7 +15,7 @@ import type { PlannedCase, SpreadPlan } from './plan.ts';
 import { type RankOrder, rankOrder } from './rankMeasure.ts';
 import { reasonsOf } from './reasons.ts';
 import type { Importance, SpreadBand, SpreadCase, SpreadFinding, SpreadInput, SpreadReport } from './spreadReport.ts';
-import { circleNote, climateWarnings, groupWarnings } from './spreadWarnings.ts';
+import { circleNote, climateWarnings, groupWarnings, warmestNote } from './spreadWarnings.ts';
 
 /** A column of a table by its name, (rows,), NaN where undefined. */
 export type ReadColumn = (name: string) => Promise<Float64Array>;
@@ -74,7 +74,7 @@ async function summariseCase(
     failed: periods.reduce((count, value) => count + Number(Number.isNaN(value)), 0),
     sample: { inputs: inputs.sample, findings: findings.sample },
     warnings: [...drawn.warnings, ...climateWarnings(climates), ...groupWarnings(findings.told)],
-    notes: [...drawn.notes, ...circleNotes(plan.cases[index])],
+    notes: [...drawn.notes, ...worldNotes(plan.cases[index])],
   };
 }
 
@@ -94,11 +94,13 @@ async function summariseInputs(plan: SpreadPlan, index: number, read: ReadColumn
   return { told, sample, ranks };
 }
 
-function circleNotes({ drawn, inputs }: PlannedCase): string[] {
+function worldNotes({ drawn, inputs, findings }: PlannedCase): string[] {
   const isDrawn = inputs.some(({ key }) => /^orbit\.(ecc|e[CS]|sqrtE)/.test(key));
   const world = orNull(() => drawn.worldAt(inputs.map(({ centre }) => centre)));
-  const note = world === null ? null : circleNote(world, isDrawn);
-  return note === null ? [] : [note];
+  if (world === null) return [];
+  const isCounted = findings.some(({ name }) => name === 'climates');
+  const notes = [circleNote(world, isDrawn), isCounted ? null : warmestNote(world, drawn.options.start)];
+  return notes.filter((note) => note !== null);
 }
 
 async function climatesOf(plan: SpreadPlan, index: number, read: ReadColumn): Promise<DrawnClimates | null> {

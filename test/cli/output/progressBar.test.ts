@@ -78,6 +78,7 @@ describe('tables one after the other', () => {
 
   test('a line says which it is, and what is left with those after it', () => {
     const { told, landed } = watched(false, { total: 512, label: 'bands', phase: phases()[1]! });
+    landed(0, 0);
     landed(10, 256); // 256 and 24,576 more at 25.6/s
     expect(told.text).toBe(
       'This will take about 17 min more (bands 10 s, indices 16 min). Shorter: fewer --draws. Ctrl-C keeps what is done.\n' +
@@ -91,6 +92,7 @@ describe('tables one after the other', () => {
   test('a long run is told once, as soon as a rate is known, and not in the way of the bar', () => {
     const all = phases();
     const { told, landed } = watched(true, { total: 4096, phase: all[0]! }, 80);
+    landed(0, 0);
     landed(4, 8); // too soon
     expect(told.text).not.toContain('This will take');
     landed(6, 2); // 10 in 6 s: 29,174 more in 4 h 51.7 min
@@ -105,6 +107,16 @@ describe('tables one after the other', () => {
     const later = watched(false, { total: 512, label: 'bands', phase: all[1]! });
     later.landed(60, 10);
     expect((told.text + later.told.text).split('This will take')).toHaveLength(2);
+  });
+
+  test('the time until the first rows is not held against the others', () => {
+    const late = watched(false, { total: 4096, phase: phases()[0]! });
+    late.landed(6, 4);
+    late.landed(9, 6); // 6 are too few
+    expect(late.told.text).toBe('');
+    late.landed(9.5, 1);
+    late.landed(9.8, 6); // 13 in 3.8 s: 29,167 more in 2 h 22.1 min
+    expect(late.told.text).toMatch(/^This will take about 2 h 23 min more/);
   });
 
   test('one slow row is enough in the end; short runs and quiet ones are told nothing', () => {

@@ -1,7 +1,13 @@
 import { describe, expect, test } from 'vitest';
 import { drawnClimates } from '../../../../sim/studies/spread/climates.ts';
 import type { SpreadFinding } from '../../../../sim/studies/spread/spreadReport.ts';
-import { circleNote, climateWarnings, groupWarnings } from '../../../../sim/studies/spread/spreadWarnings.ts';
+import {
+  circleNote,
+  climateWarnings,
+  groupWarnings,
+  warmestNote,
+} from '../../../../sim/studies/spread/spreadWarnings.ts';
+import { rampAlbedo } from '../../../../sim/surface/albedo/ramp.ts';
 import { zonalWorld } from '../../models/zonal/worlds.ts';
 
 const none = Number.NaN;
@@ -66,4 +72,11 @@ test('on a circle, where times have nothing but a season to count from, that is 
   );
   expect(circleNote(zonalWorld({ e: 0.1 }), false)).toBeNull();
   expect(circleNote(zonalWorld({ e: 0 }), true)).toBeNull(); // drawn: a circle at its centre only
+});
+
+test('where climates are not counted draw by draw, ice brings a word on which is shown', () => {
+  const ramp = rampAlbedo({ warm: 0.3, ice: 0.6, from: 258, to: 272 });
+  expect(warmestNote(zonalWorld({ albedo: ramp }), 'periodic')).toContain('every number here is of the warmest');
+  expect(warmestNote(zonalWorld({ albedo: ramp }), { temperature: 250, orbits: 2, at: 0 })).toBeNull();
+  expect(warmestNote(zonalWorld(), 'periodic')).toBeNull();
 });
