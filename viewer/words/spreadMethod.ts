@@ -16,6 +16,7 @@ export function spreadSteps(report: SpreadReport): Step[] {
     ...(has('lumped') ? [lumpedStep] : []),
     ...(has('zonal') ? [zonalStep] : []),
     percentilesStep,
+    ...(findings.some(({ groups }) => groups !== null) ? [groupsStep] : []),
     ...(findings.some(({ circular }) => circular) ? [circularStep] : []),
     ...(report.cases.some(({ bands }) => bands.length > 0) ? [bandsStep(report)] : []),
     ...(report.indexRows > 0 ? indexSteps(report) : []),
@@ -75,6 +76,10 @@ const zonalStep: Step = {
 const percentilesStep: Step = {
   words: `The 68${nbsp}% interval goes from percentile 16 to 84, the 95${nbsp}% interval from 2.5 to 97.5, of the draws that have the number. It says where the number lies if the stated spreads are right; it is no confidence interval of a mean.`,
   source: 'Percentiles: Hyndman & Fan (1996), Am. Stat. 50, 361, definition 7',
+};
+
+const groupsStep: Step = {
+  words: `Draws are said to fall into two groups where the widest gap between neighbours in order that leaves 2.5${nbsp}% of them, and 8, on either side is a fifth of their whole reach. That is a plain test with limits of our own, not a count of modes: groups that touch, or that hold fewer draws, are not told.`,
 };
 
 const circularStep: Step = {

@@ -139,6 +139,19 @@ describe('how it was computed', () => {
     expect(text).not.toContain('Dette');
   });
 
+  test('how groups are told, where there are any', () => {
+    const groups = [
+      { share: 0.2, from: 200, to: 220 },
+      { share: 0.8, from: 270, to: 300 },
+    ] as const;
+    const words = (report: ReturnType<typeof spreadOf>) =>
+      spreadSteps(report)
+        .map((step) => step.words)
+        .join(' ');
+    expect(words(spreadOf([withFinding(sea, 'temperatureMean', { groups })]))).toContain('fall into two groups where');
+    expect(words(spreadOf([sea]))).not.toContain('two groups');
+  });
+
   test('a posterior: ranks and no indices; random draws: their generator and no word of Sobol’ points', () => {
     const posterior = words(spreadOf([spreadCase({ sampling: 'posterior' })], { sampling: 'posterior', indexRows: 0 }));
     expect(posterior).toContain('Dette, Siburg & Stoimenov');
