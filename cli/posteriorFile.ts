@@ -4,7 +4,7 @@ import { dirname, relative, resolve, sep } from 'node:path';
 import { SimError } from '../sim/error.ts';
 import { parseUnit } from '../sim/quantity/index.ts';
 import { toSi } from '../sim/quantity/units.ts';
-import type { Posterior } from '../sim/scenario/posterior.ts';
+import { type Posterior, type PosteriorColumn, sampleFault } from '../sim/scenario/posterior.ts';
 import { bytesOf, textOf } from './bytes.ts';
 import type { RawColumns } from './samplesColumns.ts';
 import { columnsOfCsv } from './samplesCsv.ts';
@@ -37,7 +37,7 @@ export function samplesFrom(folder: string, { file, scenario }: ScenarioFile, cw
 /**
  * Reads CSV (RFC 4180 with a header; lines that start with # are comments) or Parquet, whichever the file is.
  * Units:  those of the columns → SI.
- * Errors: SimError that names file, row and column: no such file or column, no number, not finite, weights that are negative
+ * Errors: SimError that names file, row and column: no such file or column, no number, not finite, out of the bounds of its key, weights that are negative
  *         or all zero, no sample.
  */
 export async function readSamples(posterior: Posterior, scenarioFile: string, cwd: string): Promise<Samples> {
@@ -46,9 +46,7 @@ export async function readSamples(posterior: Posterior, scenarioFile: string, cw
   const names = [...posterior.columns.map(({ column }) => column), ...(posterior.weights ? [posterior.weights] : [])];
   const raw = await rawColumns(bytes, posterior.file, names);
   if (raw.count === 0) throw new SimError(posterior.file, 'there are no samples in it', 'Write one sample a row');
-  const values = new Map(
-    posterior.columns.map(({ column, key, unit }) => [key, inSi(checked(raw, column), unit)] as const),
-  );
+  const values = new Map(posterior.columns.map((column) => [column.key, samplesOf(raw, column)] as const));
   const weights = posterior.weights === null ? null : checkWeights(raw, posterior.weights, posterior.file);
   return { count: raw.count, values, weights, sha256: createHash('sha256').update(bytes).digest('hex') };
 }
@@ -88,7 +86,14 @@ function checkWeights(raw: RawColumns, name: string, file: string): Float64Array
   return weights;
 }
 
-function inSi(column: Float64Array, symbol: string): Float64Array {
-  const unit = parseUnit(symbol);
-  return column.map((value) => toSi(value, unit));
+/** SI, each within what its key takes. */
+function samplesOf(raw: RawColumns, about: PosteriorColumn): Float64Array {
+  const unit = parseUnit(about.unit);
+  const column = checked(raw, about.column).map((value) => toSi(value, unit));
+  const faults = [...column.keys()].filter((row) => sampleFault(about, column[row]!) !== null);
+  const [first] = faults;
+  if (first === undefined) return column;
+  const { what, mend } = sampleFault(about, column[first]!)!;
+  const others = faults.length === 1 ? '' : ` (as are ${faults.length} of ${column.length} samples)`;
+  throw new SimError(`${raw.placeOf(first)}: ${about.column}`, `${what}${others}`, mend);
 }

@@ -64,7 +64,7 @@ function numberOf(field: string, where: string): number {
   const text = field.trim();
   const value = text === '' ? Number.NaN : Number(text);
   if (!Number.isNaN(value) || /^[-+]?nan$/i.test(text)) return value;
-  if (/^[-+]?inf(?:inity)?$/i.test(text)) return Number.POSITIVE_INFINITY;
+  if (/^[-+]?inf(?:inity)?$/i.test(text)) return text.startsWith('-') ? -Infinity : Infinity;
   const what = text === '' ? 'nothing is given' : `\`${text.slice(0, 40)}\` is not a number`;
   throw new SimError(where, what, 'Write a number such as 0.62 or 1.3e7, or leave the row out');
 }

@@ -9,6 +9,8 @@ import { kinds } from '../engine/kinds.ts';
 import type { Shard } from '../engine/plan.ts';
 import type { Io } from '../io.ts';
 import { commandLine } from '../output/history.ts';
+import type { Phase } from '../output/phases.ts';
+import { spreadPhases } from '../output/spreadPhases.ts';
 import { readSamples } from '../posteriorFile.ts';
 import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
@@ -40,10 +42,12 @@ export async function spread(file: string, options: SpreadOptions, program: Prog
   const plan = planSpread(setup);
   const out = outputFolder(file, 'spread', options.out);
   const jobs = spreadJobs(plan, context);
-  const compute = (job: Job, table: string) =>
-    computeTable(job, { ...engineOptions(options, out, program, io), table }, kinds, io);
+  const hasLatitudes = plan.cases.some(({ drawn }) => drawn.model !== 'lumped');
+  const phases = spreadPhases(jobs, options.shard ?? null, hasLatitudes);
+  const compute = (job: Job, table: string, phase: Phase | undefined) =>
+    computeTable(job, { ...engineOptions(options, out, program, io), table, phase }, kinds, io);
   const computed: Computed[] = [];
-  for (const { table, job } of jobs) computed.push(await compute(job, table));
+  for (const [i, { table, job }] of jobs.entries()) computed.push(await compute(job, table, phases[i]));
   if (options.shard) {
     if (!options.quiet) tellShard(out, options.shard, io);
     return 0;

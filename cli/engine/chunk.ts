@@ -8,7 +8,8 @@ export interface Chunk extends Range, Rows {
 }
 
 /**
- * Rows [from, to) by `calculate`. An infinite number is no result: it becomes NaN, and its row a failed one.
+ * Rows [from, to) by `calculate`. An infinite number is no result: its row is a failed one, and all of it becomes NaN, so that what is
+ * counted as failed is in no percentile. (The studies see to it themselves, case by case: this is the net below them.)
  * `names` are those of the columns. Errors: when the columns are not those of the table.
  */
 export function computeChunk(calculate: Calculate, { from, to }: Range, names: readonly string[]): Chunk {
@@ -29,12 +30,12 @@ function withoutInfinities(
   const found = new Map<number, string>();
   for (const [index, values] of columns.entries()) {
     for (let row = 0; row < values.length; row++) {
-      if (Math.abs(values[row]!) !== Infinity) continue;
-      found.set(from + row, `${names[index]} is not finite`);
-      values[row] = NaN;
+      if (Math.abs(values[row]!) === Infinity && !found.has(from + row))
+        found.set(from + row, `${names[index]} is not finite`);
     }
   }
   if (found.size === 0) return failures;
+  for (const values of columns) for (const draw of found.keys()) values[draw - from] = NaN;
   for (const { draw, message } of failures) found.set(draw, message);
   return [...found].sort(([a], [b]) => a - b).map(([draw, message]) => ({ draw, message }));
 }

@@ -3,6 +3,7 @@ import { SimError } from '../../sim/error.ts';
 import { Interrupted } from '../exit.ts';
 import type { Io } from '../io.ts';
 import { commandLine } from '../output/history.ts';
+import type { Phase } from '../output/phases.ts';
 import { grouped, type RowProgress, showProgress } from '../output/progressBar.ts';
 import { writingFault } from '../output/writingFault.ts';
 import { type Interruption, listen } from './interruption.ts';
@@ -21,6 +22,8 @@ export interface ComputeOptions {
   readonly resume: boolean;
   readonly workers: number;
   readonly quiet: boolean;
+  /** Where the table is one of several. */
+  readonly phase?: Phase | undefined;
   /** With which the program was called: how to go on is told with them. */
   readonly words: readonly string[];
 }
@@ -114,7 +117,10 @@ async function fillStore(
   if (gaps.length === 0) return;
   const total = countRows([whole]);
   const already = total - countRows(gaps);
-  const progress = showProgress({ label: options.table, total, already, quiet: options.quiet }, io);
+  const progress = showProgress(
+    { label: options.table, total, already, quiet: options.quiet, phase: options.phase },
+    io,
+  );
   const workers = Math.min(options.workers, countRows(gaps));
   const pool = workers === 1 ? await inThisThread(job, kinds) : threads(job, workers, io.worker);
   try {

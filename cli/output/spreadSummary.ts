@@ -18,8 +18,10 @@ export function spreadSummary({ draws, seed, sampling, failed, indexRows, cases 
         }),
       ),
       findings: Object.fromEntries(
-        one.findings.map(({ name, label, unit, atCentre, summary, circular }) => {
-          return [name, { unit, label, ...summary, atCentre, ...(circular ? { circular } : {}) }];
+        one.findings.map(({ name, label, unit, atCentre, summary, missingBecause, circular, groups }) => {
+          const apart = groups === null ? {} : { groups };
+          const missing = missingBecause === null ? {} : { missingBecause };
+          return [name, { unit, label, ...summary, ...missing, atCentre, ...(circular ? { circular } : {}), ...apart }];
         }),
       ),
       importance: Object.fromEntries(
@@ -33,6 +35,7 @@ export function spreadSummary({ draws, seed, sampling, failed, indexRows, cases 
           },
         ]),
       ),
+      ...(one.climates === null ? {} : { climates: one.climates }),
       bandDraws: one.bandDraws,
       idle: one.idle,
       warnings: one.warnings,

@@ -100,26 +100,35 @@ function cellsOf(finding: SpreadFinding): string[] {
 
 /** Findings that some of the sound draws lack; draws that failed are told once, at the end. */
 function undefinedLines(findings: readonly SpreadFinding[], sound: number, terminal: Terminal): string[] {
-  return findings.flatMap(({ label, summary }) => {
-    if (summary.reason !== undefined)
-      return hanging('          ', terminal.say(`${label}: ${summary.reason}`), terminal.width);
+  return findings.flatMap(({ label, summary, missingBecause }) => {
+    const because = missingBecause === null ? '' : `; one lacks it because ${missingBecause}`;
+    if (summary.reason !== undefined) {
+      const why = summary.defined === 0 && missingBecause !== null ? `none: ${missingBecause}` : summary.reason;
+      return hanging('          ', terminal.say(`${label}: ${why}`), terminal.width);
+    }
     if (summary.defined >= sound) return [];
-    const text = `${label}: defined in ${(100 * summary.defined).toFixed(1)} % of the draws`;
+    const text = `${label}: defined in ${percentWords(summary.defined)} of the draws${because}`;
     return hanging('          ', terminal.say(text), terminal.width);
   });
+}
+
+/** One decimal, but neither all nor nothing where it is not. */
+function percentWords(share: number): string {
+  if (share > 0 && share < 5e-4) return 'less than 0.1 %';
+  if (share < 1 && share > 1 - 5e-4) return 'more than 99.9 %';
+  return `${(100 * share).toFixed(1)} %`;
 }
 
 function importanceLines(one: SpreadCase, terminal: Terminal): string[] {
   return ['temperatureMean', 'temperatureMax', 'lagOfMax'].flatMap((name) => {
     const finding = one.findings.find((candidate) => candidate.name === name);
     if (!finding) return [];
-    const { first, total, ranks } = finding.importance;
-    const parts = one.inputs.map(({ key }, i) => {
-      if (total !== null && first !== null)
-        return { key, size: total[i]!.value, text: `${key} ${share(total[i]!.value)}` };
-      return { key, size: ranks?.[i]?.value ?? 0, text: `${key} ${share(ranks?.[i]?.value ?? 0)}` };
+    const { total, ranks } = finding.importance;
+    const parts = one.inputs.flatMap(({ key }, i) => {
+      const size = total?.[i]?.value ?? ranks?.[i]?.value ?? null;
+      return size === null ? [] : [{ size, text: `${key} ${share(size)}` }];
     });
-    if (total === null && ranks === null) return [];
+    if (parts.length === 0) return [];
     const chosen = parts.toSorted((a, b) => b.size - a.size).slice(0, mostImportant);
     const head = total === null ? 'goes along with' : 'total index';
     return hanging(
@@ -130,6 +139,7 @@ function importanceLines(one: SpreadCase, terminal: Terminal): string[] {
   });
 }
 
+/** An estimate of nothing may come out below it. */
 function share(value: number): string {
   return Math.max(0, value).toFixed(2);
 }

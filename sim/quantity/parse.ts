@@ -42,6 +42,9 @@ const numberPattern = new RegExp(`[+-]?${unsigned}`, 'y');
 const plusMinus = /\s*(?:±|\+\/-)\s*/;
 const rangeWord = /\s+to\s+/;
 const logWord = /(?:^|\s+)log$/;
+/** What people write for it: no unit is spelled so. */
+const logSlip = /(?:^|\s)(\(?(?:LOG|Log|lgo|olg|lg|ln|logs?|log(?:-?u|a|10|e)\w*)\)?)$/;
+const logMend = 'Write e.g. `1e5 to 1e9 J/m2/K log`';
 const limitPattern = /^<\s*(.*?)\s*\(\s*([^()]*?)\s*%\s*\)$/;
 /** Behind the first number: its unit, `+up` with its unit, `-down` with its unit. */
 const upAndDown = new RegExp(`^(.*?)\\s*\\+(${unsigned})(?:\\s*|\\s*(\\S.*?)\\s+)-(${unsigned}.*)$`);
@@ -80,16 +83,23 @@ function read(text: string, spec: QuantitySpec): Reading {
   const plain = spec.dimension === 'number' ? typed.replace(vulgarFraction, spelledFraction) : typed;
   if (plain === 'isotropic') return readIsotropic(spec);
   if (plain.startsWith('<')) return readLimit(plain, spec);
+  if (/^[>≥]/.test(plain)) throw lowerLimit(plain, spec);
   const sides = plain.split(plusMinus);
   if (sides.length > 1) return readNormal(sides, plain, spec);
   const ends = plain.split(rangeWord);
   if (ends.length > 1) return readRange(ends, plain, spec);
-  if (logWord.test(plain)) throw fault('`log` belongs to a range', 'Write e.g. `1e5 to 1e9 J/m2/K log`');
+  if (logWord.test(plain)) throw fault('`log` belongs to a range', logMend);
   numberPattern.lastIndex = 0;
   const start = numberPattern.exec(plain)?.[0] ?? '';
   const split = start === '' ? null : upAndDown.exec(plain.slice(start.length));
   if (split) return readSplitNormal(start, split, spec);
   return readExact(plain, spec);
+}
+
+/** No distribution follows from it: nothing says how large the number may be. */
+function lowerLimit(plain: string, spec: QuantitySpec): SimError {
+  const what = `\`${plain}\` is a lower limit, which leaves open how large it may be`;
+  return fault(what, `Write a range with both ends, e.g. \`${sample('to ', spec)}\``);
 }
 
 /** `¼` → `1/4`. */
@@ -127,6 +137,10 @@ function readSplitNormal(start: string, split: RegExpExecArray, spec: QuantitySp
 function readRange(ends: readonly string[], plain: string, spec: QuantitySpec): Reading {
   if (ends.length > 2) throw fault(`\`${plain}\` has more than two ends`, `Write e.g. \`${sample('to ', spec)}\``);
   const isLog = logWord.test(ends[1]!);
+  const [, slip] = logSlip.exec(isLog ? '' : ends[1]!) ?? [];
+  if (slip !== undefined) {
+    throw fault(`\`${slip}\` at the end of \`${plain}\` is no unit and not \`log\``, logMend);
+  }
   const pieces = [readPiece(ends[0]!, spec), readPiece(ends[1]!.replace(logWord, ''), spec)];
   const [unit, highUnit] = resolveUnits(pieces, plain, spec);
   const low = boundedSi(pieces[0]!, unit!, spec);

@@ -1,6 +1,6 @@
 /** `posterior` of a scenario: which columns of a file of samples stand for which of its keys. The file itself is read elsewhere. */
 import { SimError } from '../error.ts';
-import { dimensions, parseUnit, sameDimension } from '../quantity/index.ts';
+import { checkBounds, dimensions, formatQuantity, parseUnit, sameDimension } from '../quantity/index.ts';
 import { numberKeyFault } from './numberKey.ts';
 import { aboutKey, numbersAt } from './schema/lookup.ts';
 import type { PosteriorKeys } from './schema/posterior.ts';
@@ -123,6 +123,21 @@ function unitFault(
   }
   const mend = dimension === 'number' ? 'Leave the unit out' : `Write e.g. ${units[0]}`;
   return { what: `\`${shorten(unit)}\` is no unit of ${phrase}`, mend, isMissing };
+}
+
+/** What is wrong with a sample (SI), and how its key would have it; null where it is taken. */
+export function sampleFault({ key, unit }: PosteriorColumn, si: number): Words | null {
+  const path = key.split('.');
+  const { cut } = aboutKey(path) ?? {};
+  const { below: _, ...openAbove } = numbersAt(path)!;
+  const taken = cut?.high === undefined ? numbersAt(path)! : { ...openAbove, max: cut.high };
+  try {
+    checkBounds(si, parseUnit(unit), `\`${formatQuantity(si, unit, 15)}\``, taken);
+    return null;
+  } catch (error) {
+    if (!(error instanceof SimError)) throw error;
+    return { what: `${error.what} of ${key}`, mend: `${error.mend}, or leave the row out` };
+  }
 }
 
 /** How the columns of a posterior stand in one case. */

@@ -50,7 +50,10 @@ const words: Partial<Record<ErrorCode, Words>> = {
   },
   BAD_SCALAR_START: (_message, text, offset) => ({
     what: `a value cannot start with ${text[offset]}`,
-    mend: 'Put the text in quotes',
+    mend:
+      text[offset] === '>'
+        ? 'Write a range with both ends in place of a lower limit, or put a text in quotes'
+        : 'Put the text in quotes',
   }),
   BAD_DQ_ESCAPE: { what: 'a backslash in a double-quoted text means nothing here', mend: "Use 'single quotes'" },
   MULTIPLE_DOCS: {

@@ -32,9 +32,22 @@ export function rowSolver(
     });
     if (typeof kept === 'string') return kept;
     if (!kept) return `the state is not known to the tolerance of ${one.options.tolerance}`;
+    const infinite = infinityIn(row);
+    if (infinite >= 0) return notFinite(batch.columns[infinite].label);
     for (let i = 0; i < columns.length; i++) columns[i][at] = row[i];
     return null;
   };
+}
+
+/** Place of the first number that is infinite; −1 where none is. */
+export function infinityIn(row: Float64Array): number {
+  for (let i = 0; i < row.length; i++) if (Math.abs(row[i]) === Number.POSITIVE_INFINITY) return i;
+  return -1;
+}
+
+/** A number beyond all bounds is no result, and the rest of its row not to be trusted. */
+export function notFinite(what: string): string {
+  return `${what} is not finite`;
 }
 
 /** What the work gives, or in words why the values are no sound planet. Other errors are our own, and pass. */

@@ -146,7 +146,17 @@ describe('CSV', () => {
     [
       'ecc,P [d]\n0.1,-inf\n',
       null,
-      'chain.csv:2: P [d]: Infinity is no finite number. Leave the row out, or correct the number.',
+      'chain.csv:2: P [d]: -Infinity is no finite number. Leave the row out, or correct the number.',
+    ],
+    [
+      'ecc,P [d]\n0.1,2\n# c\n1.2,2\n',
+      null,
+      'chain.csv:4: ecc: `1.2` is out of bounds of orbit.eccentricity. Keep it at least 0 and at most 0.9999, or leave the row out.',
+    ],
+    [
+      'ecc,P [d]\n0.1,2\n0.1,-3.5\n0.2,0\n',
+      null,
+      'chain.csv:3: P [d]: `-3.5 d` is out of bounds of orbit.period (as are 2 of 3 samples). Keep it above 0 d, or leave the row out.',
     ],
     [
       'ecc,P [d],w\n0.1,1,1\n0.2,1,-1\n',

@@ -291,3 +291,50 @@ solve: { samples: 48, tolerance: 1e-4 }
   const pole = await readColumn(place.path('out', 'bands.parquet'), 'latitudeMean.0');
   for (let draw = 0; draw < 24; draw++) expect(equator[draw]).toBeGreaterThan(pole[draw]!);
 }, 120_000);
+
+test('a latitude model says which climates its draws took, and that they fall into two groups', async () => {
+  // From a star of 0.36 Lsun on (a band more or less) a warm start stays thawed; the axis is that of 0.95 S0 at 0.48 Lsun.
+  place.write(
+    'ice.yaml',
+    zonalText
+      .replace('0.48 Lsun', '0.3 to 0.55 Lsun')
+      .replace('instellation: 0.95 S0', 'semiMajorAxis: 0.711 au')
+      .replace('bands: 36', 'bands: 18')
+      .replace('tolerance: 1e-5', 'tolerance: 1e-4'),
+  );
+  const { code, stdout } = await place.perilag(
+    'spread',
+    'ice.yaml',
+    '-o',
+    'out',
+    '--draws',
+    '32',
+    '--no-indices',
+    '--workers',
+    '1',
+  );
+  expect(code).toBe(0);
+  const [one] = summary('out').spread.cases;
+  const column = (name: string) => readColumn(place.path('out', 'draws.parquet'), name);
+  const [climates, ice, mean] = [
+    await column('climates'),
+    await column('iceFractionMean'),
+    await column('temperatureMean'),
+  ];
+  const share = (is: (draw: number) => boolean) => Array.from(climates.keys()).filter(is).length / 32;
+  expect(one.climates).toMatchObject({
+    second: share((draw) => climates[draw] === 2),
+    frozenOver: share((draw) => ice[draw]! > 0.99),
+  });
+  expect(one.climates.frozenOver).toBeGreaterThan(0.1);
+  expect(one.climates.second).toBeGreaterThan(0.1);
+  // who is frozen over has no second climate, and is the lower group
+  expect(share((draw) => ice[draw]! > 0.99 && climates[draw]! > 1)).toBe(0);
+  const [low, high] = one.findings.temperatureMean.groups;
+  expect(low.share).toBe(one.climates.frozenOver);
+  expect(mean.every((value) => value <= low.to || value >= high.from)).toBe(true);
+  const words = stdout.replace(/\s+/g, ' ');
+  expect(words).toContain('of the draws allow a second, colder climate');
+  expect(words).toContain('Mean temperature: the draws fall into two groups');
+  expect(one.warnings).toHaveLength(3);
+}, 120_000);

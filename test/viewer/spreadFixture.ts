@@ -174,6 +174,8 @@ export function spreadCase(options: SpreadCaseOptions = {}): SpreadCase {
       summary,
       circular,
       histogram: histogramOf(values),
+      groups: null,
+      missingBecause: null,
       importance,
     };
   });
@@ -188,6 +190,7 @@ export function spreadCase(options: SpreadCaseOptions = {}): SpreadCase {
     idle: [],
     findings,
     bands: [orbitBand(answers, centre), ...(zonal ? [latitudeBand(answers, centre)] : [])],
+    climates: null,
     bandDraws: fixtureDraws,
     failed: 0,
     sample: {
@@ -271,10 +274,11 @@ function indexImportance(
 function rankImportance(columns: readonly Float64Array[], values: Float64Array): Importance {
   const order = rankOrder(values);
   const measures = columns.map((column) => rankMeasure(rankOrder(column), order));
-  const none = measures.find(({ value }) => value === null);
-  if (none !== undefined) return { first: null, total: null, ranks: null, reason: none.reason ?? 'none' };
   const ranks = measures.map(({ value, chanceLevel }) => ({ value: value!, chanceLevel: chanceLevel! }));
-  return { first: null, total: null, ranks };
+  const none = measures.find(({ value }) => value === null);
+  return none === undefined
+    ? { first: null, total: null, ranks }
+    : { first: null, total: null, ranks: null, reason: none.reason ?? 'none' };
 }
 
 function turnsSummary(values: Float64Array): Summary {

@@ -284,7 +284,7 @@ function captionOf(kinds: ReadonlySet<string>, isCut: boolean): string {
       : []),
     ...(kinds.has('ranks')
       ? [
-          'The inputs go together, so that shares of the variance would mislead. Bars: D by ranks, 0 for independent, 1 where the input fixes the finding. Dotted: chance alone stays below it in 97.5 % of cases; bars below are pale. An input that merely goes along with another shares its value.',
+          'The inputs go together, so that shares of the variance would mislead. Bars: D by ranks, around 0 for independent (an estimate may come out slightly below), 1 where the input fixes the finding. Dotted: chance alone stays below it in 97.5 % of cases; bars below are pale. An input that merely goes along with another shares its value.',
         ]
       : []),
     ...(isCut ? [`The ${mostInputs} that matter most are shown.`] : []),

@@ -4,7 +4,7 @@ import type { Histogram, SpreadReport } from '../../sim/studies/spread/spreadRep
 import { inText, ledBy } from '../words/importance.ts';
 import { keptPercents, nbsp, percent } from '../words/number.ts';
 import type { FindingInCase, SharedFinding } from '../words/spreadFindings.ts';
-import { findingOf, findingWording, labelWithSymbol, scaleOf, turnOf, type Wording } from '../words/spreadNumber.ts';
+import { findingOf, findingWording, labelWithSymbol, scaleOf, type Wording } from '../words/spreadNumber.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import type { Figure, FigureStyle } from './figure.ts';
 import { type Panel, type PanelGrid, panelAxes, panelGrid, panelName } from './panels.ts';
@@ -79,24 +79,13 @@ function marksOf({ oneCase, finding }: FindingInCase, words: Wording): Mark[] {
   };
   const textbook = findingOf(oneCase, 'equilibriumTemperature');
   const isTemperature = finding.unit === 'K' && !differences.test(finding.name) && finding.name !== textbook?.name;
-  const centre = nearestTurn(finding.atCentre, finding, turnOf(finding, oneCase));
+  const centre = finding.atCentre;
   return [
     ...(centre === null ? [] : [mark('every input at its centre', 'centre', centre, 'solid')]),
     ...(isTemperature && textbook && textbook.atCentre !== null
       ? [mark('textbook', 'textbook', textbook.atCentre, 'dash')]
       : []),
   ];
-}
-
-/** On a circle the draws are counted around their mean: the centre stands in the same turn. */
-function nearestTurn(
-  value: number | null,
-  { histogram }: FindingInCase['finding'],
-  turn: number | null,
-): number | null {
-  if (value === null || turn === null || histogram === null) return value;
-  const middle = (histogram.from + histogram.to) / 2;
-  return value - turn * Math.round((value - middle) / turn);
 }
 
 function traceOf({ member, histogram, panel, colour, words }: Bars): Data {

@@ -64,13 +64,12 @@ function cloudOf(member: FindingInCase, inputKey: string, { cases }: SpreadRepor
   const inputs = oneCase.sample.inputs[at]!;
   const findings = sampleOf(oneCase, finding);
   const rows = findings.flatMap((value, row) => (value === null ? [] : [row])).slice(0, mostPoints);
-  const centre = finding.atCentre === null ? null : inTurn(finding.atCentre, finding, oneCase);
   return {
     member,
     input,
     x: rows.map((row) => inputs[row]!),
     y: rows.map((row) => findings[row]! / scale),
-    centre: centre === null ? null : { x: input.centre, y: centre / scale },
+    centre: finding.atCentre === null ? null : { x: input.centre, y: finding.atCentre / scale },
   };
 }
 
@@ -85,13 +84,6 @@ function sampleOf(oneCase: SpreadCase, finding: SpreadFinding): readonly (number
   return values.map((value, row) =>
     value === null ? null : turn * unwrapTurn(value / (own?.[row] ?? turn), middle / turn),
   );
-}
-
-function inTurn(value: number, finding: SpreadFinding, oneCase: SpreadCase): number {
-  const turn = turnOf(finding, oneCase);
-  return turn === null || finding.summary.mean === null
-    ? value
-    : turn * unwrapTurn(value / turn, finding.summary.mean / turn);
 }
 
 function tracesOf(

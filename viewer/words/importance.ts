@@ -16,6 +16,8 @@ export interface Shares {
 export interface Ranks {
   readonly kind: 'ranks';
   readonly inputs: readonly { readonly input: SpreadInput; readonly value: number; readonly chanceLevel: number }[];
+  /** Inputs of which it cannot be told. */
+  readonly unknown: readonly { readonly input: SpreadInput; readonly reason: string }[];
 }
 
 export type Importances = Shares | Ranks | { readonly kind: 'none'; readonly reason: string };
@@ -27,8 +29,10 @@ export function importancesOf({ inputs }: SpreadCase, { importance }: SpreadFind
     return { kind: 'shares', inputs: found.toSorted((a, b) => b.total.value - a.total.value) };
   }
   if (ranks !== null) {
-    const found = inputs.map((input, at) => ({ input, ...ranks[at]! }));
-    return { kind: 'ranks', inputs: found.toSorted((a, b) => b.value - a.value) };
+    const all = inputs.map((input, at) => ({ input, ...ranks[at]! }));
+    const found = all.flatMap((one) => (one.value === null ? [] : [one]));
+    const unknown = all.flatMap((one) => (one.value === null ? [{ input: one.input, reason: one.reason }] : []));
+    return { kind: 'ranks', inputs: found.toSorted((a, b) => b.value - a.value), unknown };
   }
   return { kind: 'none', reason: reason ?? 'no indices were computed' };
 }
@@ -61,7 +65,16 @@ function togetherText(inputs: Shares['inputs']): string {
   return alone < 0.9 ? `About ${wholePercent(1 - alone)} comes from inputs acting together.` : '';
 }
 
-function ranksText({ inputs }: Ranks, what: string): string {
+function ranksText(found: Ranks, what: string): string {
+  return [knownRanksText(found, what), unknownText(found)].filter((text) => text !== '').join(' ');
+}
+
+/** Of which inputs it cannot be told, and why. */
+export function unknownText({ unknown }: Ranks): string {
+  return unknown.map(({ input, reason }) => `Of the ${inText(input.label)} it cannot be told: ${reason}.`).join(' ');
+}
+
+function knownRanksText({ inputs }: Ranks, what: string): string {
   const [most, next] = inputs;
   if (!(most!.value > most!.chanceLevel)) return `No input tells more about ${what} than chance alone would.`;
   const lead = `The ${inText(most!.input.label)} tells most about ${what}: D${nbsp}=${nbsp}${fixed(most!.value, 2)}, where chance alone stays below ${chanceText(most!.chanceLevel)}`;
@@ -74,13 +87,17 @@ export function chanceText(level: number): string {
   return fixed(Math.max(0, level), level < 0.095 ? 3 : 2);
 }
 
-/** Whole percent: an index knows no more. What an estimate puts below nothing is nothing. */
+/** Whole percent: an index knows no more. What an estimate puts below nothing is nothing, and above all is all. */
 export function wholePercent(share: number): string {
-  return `${fixed(Math.max(0, 100 * share), 0)}${nbsp}%`;
+  return `${fixed(100 * clipped(share), 0)}${nbsp}%`;
 }
 
 function wholeInterval(from: number, to: number): string {
-  return `${fixed(Math.max(0, 100 * from), 0)} to ${wholePercent(to)}`;
+  return `${fixed(100 * clipped(from), 0)} to ${wholePercent(to)}`;
+}
+
+function clipped(share: number): number {
+  return Math.min(1, Math.max(0, share));
 }
 
 /** The label as it stands within a sentence. */

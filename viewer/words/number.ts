@@ -43,6 +43,11 @@ export function keptPercents(text: string): string {
   return text.replaceAll(/(\d) %/g, `$1${nbsp}%`);
 }
 
+/** A text from elsewhere whose numbers stay with what they count. */
+export function keptUnits(text: string): string {
+  return text.replaceAll(/(\d) (?=%|(?:K|d|deg|au)\b)/g, `$1${nbsp}`);
+}
+
 /** `W/m2/K` as `W m⁻² K⁻¹`, a pure number as nothing. */
 export function unitText(unit: string): string {
   if (unit === '1') return '';

@@ -74,10 +74,9 @@ function timingText(oneCase: SpreadCase, { cases }: SpreadReport): string {
   const { percentiles, defined, reason } = found.summary;
   if (percentiles === null) return `When it is hottest has no middle: ${reason ?? 'not defined'}.`;
   const words = findingWording(found, cases);
-  const shift = percentiles['50'] > 0.75 * period ? -period : 0;
   const size = (time: Seconds): string => words.text(Math.abs(time));
-  const median = momentText(percentiles['50'] + shift, size);
-  const interval = momentsText(percentiles['16'] + shift, percentiles['84'] + shift, size);
+  const median = momentText(percentiles['50'], size);
+  const interval = momentsText(percentiles['16'], percentiles['84'], size);
   const exists = defined < 1 ? `, in the ${percent(defined)} of the draws in which that time is known` : '';
   return `It is hottest ${median}, at ${at68} ${interval}${exists}.`;
 }

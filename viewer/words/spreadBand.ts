@@ -18,6 +18,8 @@ export function bandSentence({ along, positions, unit, levels }: SpreadBand): st
   const place = (at: number): string =>
     along === 'latitude' ? `at ${latitudeText(positions[at]!)}` : `${orbitShare(positions[at]!)} periapsis`;
   const interval = words.interval(low[peak]!, high[peak]!);
+  if (isFlat(median) && isFlat(widths))
+    return `the median is ${words.text(median[peak]!)} (95${nbsp}%: ${interval}), the same ${along === 'latitude' ? 'at every latitude' : 'all through the orbit'}.`;
   return `the median is highest ${place(peak)}, ${words.text(median[peak]!)} (95${nbsp}%: ${interval}); the 95${nbsp}% band is widest ${place(widest)}, ${words.text(widths[widest]!)}.`;
 }
 
@@ -26,6 +28,12 @@ function orbitShare(position: number): string {
   const share = position > 0.75 ? position - 1 : position;
   if (Math.abs(share) < 0.005) return 'at';
   return `${fixed(100 * Math.abs(share), 0)}${nbsp}% of an orbit ${share < 0 ? 'before' : 'after'}`;
+}
+
+/** What varies by less than anyone would show has no highest place. */
+function isFlat(values: Float64Array): boolean {
+  const most = values[highest(values)]!;
+  return values.every((value) => most - value <= 1e-6 * Math.abs(most));
 }
 
 function highest(values: Float64Array): number {

@@ -27,7 +27,7 @@ const sections: readonly (readonly [string, RegExp])[] = [
   ['Temperature', /^(temperature|emissionTemperature|hottestTemperature|coldestTemperature|contrast|seasonalRange)/],
   ['When', /^(timeOf|lagOf|hottestTime|coldestTime)/],
   ['Response', /^(damping|radiativeTimeConstant|stabilityMargin|fastest)/],
-  ['Latitudes and ice', /Latitude|[iI]ce/],
+  ['Latitudes and ice', /Latitude|[iI]ce|^climates$/],
   ['Steady values and the textbook', /^(steady|equilibrium|circular|fluxMean)/],
   ['Orbit', /^(period|orbitMean)/],
 ];

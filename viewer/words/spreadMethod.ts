@@ -16,6 +16,7 @@ export function spreadSteps(report: SpreadReport): Step[] {
     ...(has('lumped') ? [lumpedStep] : []),
     ...(has('zonal') ? [zonalStep] : []),
     percentilesStep,
+    ...(findings.some(({ groups }) => groups !== null) ? [groupsStep] : []),
     ...(findings.some(({ circular }) => circular) ? [circularStep] : []),
     ...(report.cases.some(({ bands }) => bands.length > 0) ? [bandsStep(report)] : []),
     ...(report.indexRows > 0 ? indexSteps(report) : []),
@@ -77,9 +78,13 @@ const percentilesStep: Step = {
   source: 'Percentiles: Hyndman & Fan (1996), Am. Stat. 50, 361, definition 7',
 };
 
+const groupsStep: Step = {
+  words: `Draws are said to fall into two groups where the widest gap between neighbours in order that leaves 2.5${nbsp}% of them, and 8, on either side is a fifth of their whole reach. That is a plain test with limits of our own, not a count of modes: groups that touch, or that hold fewer draws, are not told.`,
+};
+
 const circularStep: Step = {
   words:
-    'Times that come round with the orbit are averaged on the circle, each as a share of its draw’s own period, and shown in an orbit of the median period. Intervals are counted from half a turn before the mean to half a turn after: a time below 0 is before periapsis, at the end of the turn before.',
+    'Times that come round with the orbit are averaged on the circle, each as a share of its draw’s own period, and shown in an orbit of the median period. Intervals are counted from half a turn before the mean to half a turn after, and mean, interval and centre stand in one turn: a time below 0 is before periapsis, at the end of the turn before.',
   equation: 'tan 2πt̄ = ⟨sin 2πt⟩ / ⟨cos 2πt⟩',
   source: 'Mardia & Jupp (2000), Directional Statistics, § 2.2 and § 6.3',
 };
@@ -113,7 +118,7 @@ function indexSteps({ indexRows, sampling }: SpreadReport): Step[] {
 
 const rankStep: Step = {
   words:
-    'Inputs that go together have no shares of the variance. In their place stands D, from ranks alone: 0 exactly where input and finding are independent, 1 exactly where the input fixes the finding. It means what knowing the input, and all that goes along with it in the samples, tells about the finding; it does not mean that the input acts on it, and the values do not add up to 1.',
+    'Inputs that go together have no shares of the variance. In their place stands D, from ranks alone: 0 exactly where input and finding are independent, 1 exactly where the input fixes the finding. It means what knowing the input, and all that goes along with it in the samples, tells about the finding; it does not mean that the input acts on it, and the values do not add up to 1. What chance gives on average is taken off the estimate, which may therefore come out slightly below 0.',
   equation: 'D = ∫ Var P(y ≤ t | x) dF(t) / ∫ F(t) (1 − F(t)) dF(t)',
   source:
     'Dette, Siburg & Stoimenov (2013), Scand. J. Stat. 40, 21; Chatterjee (2021), J. Am. Stat. Assoc. 116, 2009; classes: Plischke, Borgonovo & Smith (2013), Eur. J. Oper. Res. 226, 536',

@@ -102,9 +102,10 @@ function ownDigits(value: number): string {
   return fixed(Number(value.toPrecision(2)), Math.max(0, 1 - power));
 }
 
-/** For what does not spread: five digits, without idle zeros. */
+/** For what does not spread: five digits without idle zeros; a share, which nobody measures to a hundred-thousandth, three. */
 function alike(scale: Scale): Wording {
-  return spelt(scale, (value) => exact(Number(value.toPrecision(5))), 0);
+  const digits = scale.symbol === '%' ? 3 : 5;
+  return spelt(scale, (value) => exact(Number(value.toPrecision(digits))), 0);
 }
 
 /** A power of ten is common to all numbers, so that they can be compared at a glance: `(1.3 to 11.9) × 10⁷`. */

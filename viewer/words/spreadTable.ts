@@ -43,11 +43,20 @@ function groupOf({ name, label, inCases }: SharedFinding, report: SpreadReport):
 }
 
 function cellsOf({ finding }: FindingInCase, { cases }: SpreadReport): Cell[] {
-  const { summary, atCentre } = finding;
+  const { summary, atCentre, missingBecause } = finding;
   const words = findingWording(finding, cases);
   const centre = atCentre === null ? 'none at centre' : `centre ${words.text(atCentre)}`;
-  const share = summary.defined < 1 ? { detail: `exists in ${percent(summary.defined)} of the draws` } : {};
+  const share =
+    summary.defined < 1
+      ? {
+          detail: `exists in ${percent(summary.defined)} of the draws${missingBecause === null ? '' : `; one lacks it because ${missingBecause}`}`,
+        }
+      : {};
   if (summary.mean === null || summary.percentiles === null) {
+    if (summary.defined === 0) {
+      const why = missingBecause ?? summary.reason ?? 'not defined';
+      return [{ text: '—', reason: why }, { text: '—', detail: centre }, { text: '—' }, { text: '—' }];
+    }
     const reason = summary.reason ?? 'not defined';
     return [{ text: '—', reason, ...share }, { text: '—', detail: centre }, { text: '—' }, { text: '—' }];
   }

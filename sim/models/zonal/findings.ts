@@ -19,6 +19,8 @@ export interface ZonalStability {
   /** What the bands leave of error: Richardson's estimate for the area mean, and that of local extremes. */
   readonly bandError: Kelvin;
   readonly localError: Kelvin;
+  /** How many stable states the starts ended in; null where one of them ended in none. */
+  readonly climates: number | null;
 }
 
 export function zonalFindings(
@@ -73,6 +75,7 @@ export function zonalFindings(
     ...iceFindings(year, dataset),
     ...localLags(year),
     marginFinding(stability.margin),
+    climatesFinding(stability.climates),
     ...windows.flatMap((window) => windowFindings(year, window)),
   ];
 }
@@ -100,6 +103,12 @@ function marginFinding(margin: number | null): Finding {
     value: null,
     reason: 'the store forgets within a step of the year: its multiplier is not resolved',
   };
+}
+
+function climatesFinding(climates: number | null): Finding {
+  const base = { name: 'climates', unit: '1', label: 'Stable climates found' };
+  if (climates !== null) return { ...base, value: climates };
+  return { ...base, value: null, reason: 'one of the two starts reached no climate' };
 }
 
 const degrees = 180 / Math.PI;

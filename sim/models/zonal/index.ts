@@ -56,6 +56,7 @@ function solvePeriodic(world: World, globe: Globe, options: SolveOptions, window
       errorEstimate: state.errorEstimate,
       bandError: bandErrorOf(state, coarse),
       localError: localErrorOf(state, coarse),
+      climates: failures.length > 0 ? null : found.length,
     };
     return {
       label,

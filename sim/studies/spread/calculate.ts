@@ -1,5 +1,5 @@
 /** The arithmetic of a spread's tables: rows from their numbers alone, so that any worker may compute any of them. */
-import { caught, rowSolver } from '../rowSolver.ts';
+import { caught, infinityIn, notFinite, rowSolver } from '../rowSolver.ts';
 import { bandSampler } from './bandSampler.ts';
 import { designPlace } from './indexDesign.ts';
 import { planSpread, type SpreadPlan, type SpreadSetup } from './plan.ts';
@@ -77,7 +77,9 @@ export function bandsCalculator(setup: SpreadSetup): CalculateRows {
     for (let row = 0; row < to - from; row++) {
       for (const [c, sampler] of samplers.entries()) {
         if (sampler.columns.length === 0) continue;
-        const found = caught(() => sampler.at(values[c][row]));
+        const curve = caught(() => sampler.at(values[c][row]));
+        const isInfinite = typeof curve !== 'string' && infinityIn(curve) >= 0;
+        const found = isInfinite ? notFinite('the temperature') : curve;
         if (typeof found === 'string') failed.add(from + row, c, found);
         else for (let i = 0; i < found.length; i++) columns[c][i][row] = found[i];
       }

@@ -3,7 +3,7 @@
  * angle over 2π. A time of 0.99 and one of 0.01 are neighbours, and their mean is 0, not 0.5.
  * Source: Mardia & Jupp (2000) Directional Statistics §2.2 (mean direction, resultant length) and §6.3 (Rayleigh's test).
  */
-import { percentilesInto, type Summary, undefinedSummary } from './percentiles.ts';
+import { type Percentiles, percentileLevels, percentilesInto, type Summary, undefinedSummary } from './percentiles.ts';
 
 export interface CircularSummary extends Summary {
   /** 0 when the draws point all around, 1 when they agree; null where no draw has a value. */
@@ -20,8 +20,9 @@ function leastResultant(count: number): number {
 
 /**
  * Shape:  turns (draws,) in draw order with NaN where a draw has none, left alone; scratch at least as long, overwritten.
- * Units:  turns. The mean lies in [0, 1). Percentiles are counted from half a turn before the mean to half a turn after, and
- *         do not jump: 2.5 % may be −0.02, which is the end of the turn before.
+ * Units:  turns. Percentiles are counted from half a turn before the mean to half a turn after, and do not jump: 2.5 % may be −0.02,
+ *         which is the end of the turn before. Mean and percentiles are of the same turn, that in which the median lies above −¼ and
+ *         not above ¾: a median shortly before the turn begins anew is told as before it.
  */
 export function summariseTurns(
   turns: Float64Array,
@@ -35,7 +36,14 @@ export function summariseTurns(
     return { ...undefinedSummary(defined, noDirection(resultantLength)), resultantLength };
   }
   const mean = wrapTurn(Math.atan2(sine, cosine) / (2 * Math.PI));
-  return { mean, percentiles: percentilesInto(unwrapInto(turns, mean, scratch)), defined, resultantLength };
+  return { ...inCustomaryTurn(mean, percentilesInto(unwrapInto(turns, mean, scratch))), defined, resultantLength };
+}
+
+function inCustomaryTurn(mean: number, percentiles: Percentiles): { mean: number; percentiles: Percentiles } {
+  const turns = Math.ceil(percentiles['50'] - 0.75);
+  if (turns === 0) return { mean, percentiles };
+  const moved = Object.fromEntries(percentileLevels.map((level) => [level, percentiles[level] - turns]));
+  return { mean: mean - turns, percentiles: moved as Percentiles };
 }
 
 /** The same direction, written within half a turn of `centre`: from centre − ½ to below centre + ½. */

@@ -1,9 +1,9 @@
 /** Which input matters to a finding: by Sobol' indices where inputs are drawn apart, by ranks where posterior samples keep them together. */
 import type { Resamples } from './bootstrap.ts';
 import { designValues } from './indexDesign.ts';
-import { type RankOrder, rankMeasure } from './rankMeasure.ts';
+import { type RankMeasure, type RankOrder, rankMeasure } from './rankMeasure.ts';
 import { sobolIndices } from './sobolIndices.ts';
-import type { Importance } from './spreadReport.ts';
+import type { Importance, RankImportance } from './spreadReport.ts';
 
 export interface DesignColumns {
   /** Of the draws, (rows or more,). */
@@ -32,12 +32,14 @@ export function importanceByRanks(
   finding: RankOrder,
   rows: ArrayLike<number>,
 ): Importance {
-  const measures = inputs.map((input) => rankMeasure(input, finding, rows));
-  const ranks = measures.map(({ value, chanceLevel }) => ({ value, chanceLevel }));
-  if (ranks.every(({ value }) => value === null)) return noImportance(measures[0]?.reason ?? 'no input is drawn');
-  return {
-    first: null,
-    total: null,
-    ranks: ranks.map(({ value, chanceLevel }) => ({ value: value ?? 0, chanceLevel: chanceLevel ?? 0 })),
-  };
+  const ranks = inputs.map((input) => rankImportance(rankMeasure(input, finding, rows)));
+  const known = ranks.filter(({ value }) => value !== null);
+  if (known.length > 0) return { first: null, total: null, ranks };
+  return noImportance(ranks.map((one) => (one.value === null ? one.reason : ''))[0] ?? 'no input is drawn');
+}
+
+function rankImportance({ value, chanceLevel, reason }: RankMeasure): RankImportance {
+  if (value === null || chanceLevel === null)
+    return { value: null, chanceLevel: null, reason: reason ?? 'not defined' };
+  return { value, chanceLevel };
 }

@@ -1,5 +1,7 @@
 /** What `spread` hands to files, terminal and page: plain data. Findings are SI; inputs are in the unit in which they were typed. */
 import type { Origin } from '../../origin.ts';
+import type { DrawnClimates } from './climates.ts';
+import type { Group } from './groups.ts';
 import type { Summary } from './percentiles.ts';
 import type { SobolIndex } from './sobolIndices.ts';
 
@@ -34,10 +36,14 @@ export interface SpreadFinding {
   /** Of `run`, every input at its centre; null where it has none there. */
   readonly atCentre: number | null;
   readonly summary: Summary;
+  /** Why the first computed draw without the finding lacks it; null where none does, or nothing says why. */
+  readonly missingBecause: string | null;
   /** Times that come round with the orbit: summarised on the circle, in seconds of an orbit of the median period. */
   readonly circular: boolean;
   /** Null where fewer than two draws have a value. */
   readonly histogram: Histogram | null;
+  /** Where the draws fall into two groups with none between, the lower first; else null. On the line of the summary. */
+  readonly groups: readonly [Group, Group] | null;
   readonly importance: Importance;
 }
 
@@ -46,9 +52,14 @@ export interface Importance {
   readonly first: readonly SobolIndex[] | null;
   readonly total: readonly SobolIndex[] | null;
   /** For posterior samples, whose inputs go together: dependence by ranks, and what chance alone would give. */
-  readonly ranks: readonly { readonly value: number; readonly chanceLevel: number }[] | null;
+  readonly ranks: readonly RankImportance[] | null;
   readonly reason?: string;
 }
+
+/** `value` 0 where the input tells nothing, as an estimate around it, so that it may come out slightly below; 1 where it tells all. */
+export type RankImportance =
+  | { readonly value: number; readonly chanceLevel: number }
+  | { readonly value: null; readonly chanceLevel: null; readonly reason: string };
 
 /** Percentiles of a curve, point by point: one array for each level of `percentileLevels`. NaN nowhere. */
 export interface SpreadBand {
@@ -71,6 +82,8 @@ export interface SpreadCase {
   readonly findings: readonly SpreadFinding[];
   /** Temperature through the orbit first. */
   readonly bands: readonly SpreadBand[];
+  /** Which climates the draws took; null for models without ice by latitude. */
+  readonly climates: DrawnClimates | null;
   /** Draws that the bands are made from: the first of all. */
   readonly bandDraws: number;
   /** Draws that could not be computed, or not within the tolerance. */

@@ -6,12 +6,16 @@ import { isTimeInOrbit } from '../isTimeInOrbit.ts';
 import { type BandPlace, bandSampler } from './bandSampler.ts';
 import { resamples } from './bootstrap.ts';
 import { summariseTurns, unwrapTurn } from './circular.ts';
+import { type DrawnClimates, drawnClimates } from './climates.ts';
+import { goesInSteps, twoGroups } from './groups.ts';
 import { histogramOf } from './histogram.ts';
 import { importanceByDesign, importanceByRanks, noImportance } from './importance.ts';
 import { percentileLevels, quantilesInto, type Summary, summarise } from './percentiles.ts';
 import type { PlannedCase, SpreadPlan } from './plan.ts';
 import { type RankOrder, rankOrder } from './rankMeasure.ts';
+import { reasonsOf } from './reasons.ts';
 import type { Importance, SpreadBand, SpreadCase, SpreadFinding, SpreadInput, SpreadReport } from './spreadReport.ts';
+import { circleNote, climateWarnings, groupWarnings, warmestNote } from './spreadWarnings.ts';
 
 /** A column of a table by its name, (rows,), NaN where undefined. */
 export type ReadColumn = (name: string) => Promise<Float64Array>;
@@ -57,6 +61,7 @@ async function summariseCase(
   const periods = await tables.draws(findingColumn(plan, index, 'period'));
   const inputs = await summariseInputs(plan, index, tables.draws, scratch);
   const findings = await summariseFindings(plan, index, tables, { periods, scratch, ranks: inputs.ranks });
+  const climates = await climatesOf(plan, index, tables.draws);
   return {
     name: drawn.name,
     model: drawn.model,
@@ -64,11 +69,12 @@ async function summariseCase(
     idle: drawn.idle,
     findings: findings.told,
     bands: tables.bands === null ? [] : await bandsOf(plan, index, tables.bands),
+    climates,
     bandDraws: tables.bandDraws,
     failed: periods.reduce((count, value) => count + Number(Number.isNaN(value)), 0),
     sample: { inputs: inputs.sample, findings: findings.sample },
-    warnings: drawn.warnings,
-    notes: drawn.notes,
+    warnings: [...drawn.warnings, ...climateWarnings(climates), ...groupWarnings(findings.told)],
+    notes: [...drawn.notes, ...worldNotes(plan.cases[index])],
   };
 }
 
@@ -88,6 +94,22 @@ async function summariseInputs(plan: SpreadPlan, index: number, read: ReadColumn
   return { told, sample, ranks };
 }
 
+function worldNotes({ drawn, inputs, findings }: PlannedCase): string[] {
+  const isDrawn = inputs.some(({ key }) => /^orbit\.(ecc|e[CS]|sqrtE)/.test(key));
+  const world = orNull(() => drawn.worldAt(inputs.map(({ centre }) => centre)));
+  if (world === null) return [];
+  const isCounted = findings.some(({ name }) => name === 'climates');
+  const notes = [circleNote(world, isDrawn), isCounted ? null : warmestNote(world, drawn.options.start)];
+  return notes.filter((note) => note !== null);
+}
+
+async function climatesOf(plan: SpreadPlan, index: number, read: ReadColumn): Promise<DrawnClimates | null> {
+  const names = plan.cases[index].findings.map(({ name }) => name);
+  if (!names.includes('climates') || !names.includes('iceFractionMean')) return null;
+  const column = (name: string) => read(findingColumn(plan, index, name));
+  return drawnClimates(await column('climates'), await column('iceFractionMean'));
+}
+
 interface FindingContext {
   /** Of each draw, s. */
   readonly periods: Float64Array;
@@ -99,6 +121,8 @@ interface FindingContext {
 async function summariseFindings(plan: SpreadPlan, index: number, tables: SpreadTables, context: FindingContext) {
   const { findings, drawn } = plan.cases[index];
   const centre = atCentre(plan.cases[index]);
+  const periodAt = findings.findIndex(({ name }) => name === 'period');
+  const missingBecause = reasonsOf(plan, index, context.periods);
   const importanceOf = await importanceReader(plan, index, tables, context.ranks);
   const told: SpreadFinding[] = [];
   const sample: (number | null)[][] = [];
@@ -106,12 +130,15 @@ async function summariseFindings(plan: SpreadPlan, index: number, tables: Spread
     const values = await tables.draws(findingColumn(plan, index, finding.name));
     const circular = isTimeInOrbit(finding.name) && drawn.options.start === 'periodic';
     const line = circular ? circularLine(values, context) : straightLine(values, context);
+    const middle = centre === null || Number.isNaN(centre[f]) ? null : centre[f];
     told.push({
       ...finding,
-      atCentre: centre === null || Number.isNaN(centre[f]) ? null : centre[f],
+      atCentre: middle === null ? null : line.beside(middle, centre![periodAt]),
       summary: line.summary,
+      missingBecause: line.summary.defined < 1 ? missingBecause(finding.name, values) : null,
       circular,
       histogram: histogramOf(line.values, context.scratch),
+      groups: goesInSteps(finding.name) ? null : twoGroups(line.values, context.scratch),
       importance: await importanceOf(finding.name, line),
     });
     sample.push(Array.from(values.subarray(0, scattered), (value) => (Number.isNaN(value) ? null : value)));
@@ -124,13 +151,18 @@ interface Line {
   readonly summary: Summary;
   readonly values: Float64Array;
   bring(values: Float64Array, periods: Float64Array): Float64Array;
+  /** A single run's value, where it stands beside the summary. */
+  beside(value: number, period: number): number;
 }
 
 function straightLine(values: Float64Array, { scratch }: FindingContext): Line {
-  return { summary: summarise(values, scratch), values, bring: (others) => others };
+  return { summary: summarise(values, scratch), values, bring: (others) => others, beside: (value) => value };
 }
 
-/** Turns are unwrapped around their mean, and told in seconds of an orbit of the median period. */
+/**
+ * Turns are unwrapped around their mean, and told in seconds of an orbit of the median period. A single run keeps its own seconds, in the
+ * turn that is nearest to the median.
+ */
 function circularLine(times: Float64Array, { periods, scratch }: FindingContext): Line {
   const period = summarise(periods, scratch).percentiles?.['50'] ?? 1;
   const values = overPeriod(times, periods);
@@ -139,10 +171,12 @@ function circularLine(times: Float64Array, { periods, scratch }: FindingContext)
     for (let i = 0; i < column.length; i++) column[i] = period * unwrapTurn(column[i], turns.mean ?? 0.5); // NaN stays
     return column;
   };
+  const median = turns.percentiles?.['50'];
   return {
     summary: inSeconds(turns, period),
     values: unwrap(values), // in place: ten million draws take 80 MB a column
     bring: (others, own) => unwrap(overPeriod(others, own)),
+    beside: (time, own) => (median === undefined ? time : time - own * Math.round(time / own - median)),
   };
 }
 

@@ -147,7 +147,7 @@ describe('spreadHistogram', () => {
     const period = daysPerPeriod * 86_400;
     const base = sea.findings.find(({ name }) => name === 'timeOfMax')!;
     const early = withFinding(sea, 'timeOfMax', {
-      atCentre: period - 86_400,
+      atCentre: -86_400,
       histogram: { from: -3 * 86_400, to: 2 * 86_400, counts: [1, 4, 6, 3, 1], beyond: 1 },
     });
     const one = spreadOf([early]);
@@ -212,6 +212,23 @@ describe('importanceBars', () => {
     const { ranks } = posterior.cases[0]!.findings.find(({ name }) => name === 'temperatureMax')!.importance;
     expect(figure.layout.shapes!.map(({ x0 }) => x0)).toEqual(ranks!.map(() => ranks![0]!.chanceLevel));
     expect(figure.caption).toMatch(/goes along with another shares its value/);
+  });
+
+  test('ranks: no bar where nothing can be told, and the reason in words', () => {
+    const base = spreadCase({ sampling: 'posterior' });
+    const { importance } = base.findings.find(({ name }) => name === 'temperatureMax')!;
+    const unknown = { value: null, chanceLevel: null, reason: 'the input is the same in every draw' } as const;
+    const ranks = importance.ranks!.map((one, at) => (at === 0 ? unknown : one));
+    const one = spreadOf([withFinding(base, 'temperatureMax', { importance: { ...importance, ranks } })], {
+      sampling: 'posterior',
+      indexRows: 0,
+    });
+    const figure = importanceBars(shared('temperatureMax', one), one, wide);
+    expect(traces(figure)[0]!.x).toHaveLength(ranks.length - 1);
+    expect(everyNumber(figure.layout).every(Number.isFinite)).toBe(true);
+    expect(figure.textAlternative).toMatch(
+      /Of the Bond albedo it cannot be told: the input is the same in every draw\./,
+    );
   });
 
   test('where there are none, the reason stands in their place', () => {

@@ -4,6 +4,7 @@ import {
   exact,
   fixed,
   kelvin,
+  keptUnits,
   list,
   percent,
   significant,
@@ -77,4 +78,10 @@ describe('numbers for readers', () => {
     expect(list(['a'])).toBe('a');
     expect(list(['a', 'b', 'c'])).toBe('a, b and c');
   });
+});
+
+test('numbers of a text from elsewhere stay with their units', () => {
+  expect(keptUnits('16 % of them from 228 to 238.9 K, 4 d later; 3 do not')).toBe(
+    '16\u00a0% of them from 228 to 238.9\u00a0K, 4\u00a0d later; 3 do not',
+  );
 });

@@ -4,7 +4,7 @@ import type { SobolIndex } from '../../../sim/studies/spread/sobolIndices.ts';
 import type { SpreadCase, SpreadReport } from '../../../sim/studies/spread/spreadReport.ts';
 import { importanceText } from '../../../viewer/words/importance.ts';
 import { failureText, spreadAnswer } from '../../../viewer/words/spreadAnswer.ts';
-import { daysPerPeriod, spreadCase, spreadOf, withFinding } from '../spreadFixture.ts';
+import { spreadCase, spreadOf, withFinding } from '../spreadFixture.ts';
 
 const plain = (text: string): string => text.replaceAll('\u00a0', ' ');
 const lead = (report: SpreadReport): string => plain(spreadAnswer(report).lead);
@@ -55,8 +55,7 @@ describe('spreadAnswer', () => {
   test('a time on both sides of periapsis, and one at the end of the orbit', () => {
     const both = spreadOf([timed(peaking(usual), -3 * days, -2 * days, 1 * days, 4 * days, 5 * days)]);
     expect(lead(both)).toMatch(/hottest 1\.0 d after periapsis, at 68 % from 2\.0 d before to 4\.0 d after it/);
-    const end = daysPerPeriod * days;
-    const late = spreadOf([timed(peaking(usual), end - 9 * days, end - 6 * days, end - 4 * days, end - 2 * days, end)]);
+    const late = spreadOf([timed(peaking(usual), -9 * days, -6 * days, -4 * days, -2 * days, 0)]);
     expect(lead(late)).toMatch(/hottest 4\.0 d before periapsis, at 68 % between 2\.0 d and 6\.0 d before it/);
   });
 
@@ -117,6 +116,11 @@ describe('what matters most, in words', () => {
     const nothing = ranks.map(({ chanceLevel }) => ({ value: 0.01, chanceLevel }));
     expect(text({ first: null, total: null, ranks: nothing })).toBe(
       'No input tells more about the peak than chance alone would.',
+    );
+    const reason = 'the input is the same in every draw';
+    const unknown = ranks.map((one, at) => (at === 1 ? ({ value: null, chanceLevel: null, reason } as const) : one));
+    expect(text({ first: null, total: null, ranks: unknown })).toBe(
+      'The Bond albedo tells most about the peak: D = 0.42, where chance alone stays below 0.030. Of the eccentricity it cannot be told: the input is the same in every draw.',
     );
   });
 

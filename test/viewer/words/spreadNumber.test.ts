@@ -69,6 +69,16 @@ describe('numbers of a spread', () => {
     expect(plain(inputWording(inputs[3]!).number(4e7))).toBe('4.0 × 10⁷');
   });
 
+  test('a share that does not spread has three digits, whatever it is exactly', () => {
+    const scale = { one: 0.01, symbol: '%' };
+    expect(plain(wordingOf(summaryOf(0.91553, 0.91553, 0.91553, 0.91553, 0.91553), null, scale).text(0.91553))).toBe(
+      '91.6 %',
+    );
+    expect(plain(wordingOf({ mean: null, percentiles: null, defined: 0 }, 0.0012345, scale).text(0.0012345))).toBe(
+      '0.123 %',
+    );
+  });
+
   test('a time before periapsis keeps its sign in tables', () => {
     const early = withFinding(one, 'timeOfMax', {
       summary: summaryOf(-172_800, -86_400, 43_200, 172_800, 259_200),

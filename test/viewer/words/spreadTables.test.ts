@@ -45,6 +45,19 @@ describe('the table of findings', () => {
     ]);
   });
 
+  test('why a draw lacks it stands beside the share that has it; where none has it, alone', () => {
+    const { summary } = sea.findings.find(({ name }) => name === 'damping')!;
+    const cell = (changes: Parameters<typeof withFinding>[2]) => {
+      const told = withFinding(sea, 'damping', { missingBecause: 'the store forgets', ...changes });
+      return findingTables(spreadOf([told])).chief.find(({ name }) => name === 'damping')!.rows[0]!.cells[0]!;
+    };
+    expect(plain(cell({ summary: { ...summary, defined: 0.844 } }).detail!)).toBe(
+      'exists in 84.4 % of the draws; one lacks it because the store forgets',
+    );
+    const none = { mean: null, percentiles: null, defined: 0, reason: 'no draw has a value' };
+    expect(cell({ summary: none })).toEqual({ text: '—', reason: 'the store forgets' });
+  });
+
   test('a finding without a number says why', () => {
     const none = withFinding(sea, 'damping', {
       atCentre: null,
@@ -124,6 +137,19 @@ describe('how it was computed', () => {
       expect(text).toContain(part);
     expect(text).toContain('rather too wide than too narrow');
     expect(text).not.toContain('Dette');
+  });
+
+  test('how groups are told, where there are any', () => {
+    const groups = [
+      { share: 0.2, from: 200, to: 220 },
+      { share: 0.8, from: 270, to: 300 },
+    ] as const;
+    const words = (report: ReturnType<typeof spreadOf>) =>
+      spreadSteps(report)
+        .map((step) => step.words)
+        .join(' ');
+    expect(words(spreadOf([withFinding(sea, 'temperatureMean', { groups })]))).toContain('fall into two groups where');
+    expect(words(spreadOf([sea]))).not.toContain('two groups');
   });
 
   test('a posterior: ranks and no indices; random draws: their generator and no word of Sobol’ points', () => {

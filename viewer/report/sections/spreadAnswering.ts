@@ -1,5 +1,6 @@
 /** The answer of a spread first, then what stands against it. */
 import type { SpreadReport } from '../../../sim/studies/spread/spreadReport.ts';
+import { keptUnits } from '../../words/number.ts';
 import { failureText, spreadAnswer } from '../../words/spreadAnswer.ts';
 import { cutText } from '../../words/spreadInputs.ts';
 import { element, userText } from '../element.ts';
@@ -18,9 +19,9 @@ export function spreadAnswering(report: SpreadReport): HTMLElement {
     element('p', { class: 'lead' }, lead),
     list.length > 0 ? element('ul', { class: 'details' }, ...list) : null,
     ...said.map((text) => notice('Caution', null, text)),
-    ...cautionNotices(report.cases),
+    ...cautionNotices(report.cases.map(({ name, warnings }) => ({ name, warnings: warnings.map(keptUnits) }))),
     ...cautionNotices(
-      report.cases.map(({ name, notes }) => ({ name, warnings: notes })),
+      report.cases.map(({ name, notes }) => ({ name, warnings: notes.map(keptUnits) })),
       'Note',
     ),
   );

@@ -50,6 +50,8 @@ test('beyond the end of the cold one the warm one is left, and the cold start is
   expect(states).toEqual([['warm', true, true]]);
   expect(failures).toHaveLength(1);
   expect(failures![0]).toMatch(/^From the cold start no climate was reached: it stopped at 253\.\d K mean, known to/);
+  const climates = runAt(0.979).states[0]!.findings.find(({ name }) => name === 'climates');
+  expect(climates).toMatchObject({ value: null, reason: 'one of the two starts reached no climate' });
   const result = runCase(at(0.979));
   expect(result.passed).toBe(false);
   expect(result.warnings).toContain(failures![0]);

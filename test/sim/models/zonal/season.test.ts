@@ -104,6 +104,7 @@ describe('ice and albedo', () => {
       ['cold', true],
     ]);
     expect(warnings.join()).toContain('a warm and a cold climate');
+    expect(states.map((state) => finding(state, 'climates'))).toEqual([2, 2]);
     expect(finding(states[1], 'iceFractionMean')).toBeCloseTo(1, 6);
     expect(finding(states[1], 'iceEdgeNorthMin')).toBeCloseTo(0, 6);
   });
@@ -173,6 +174,7 @@ describe('a store so small that polar night cools within hours', () => {
   test('is followed on finer steps where the first lose their way', () => {
     const [only] = solve(fast, { tolerance: 1e-4 }).states;
     expect(only.converged).toBe(true);
+    expect(finding(only, 'climates')).toBe(1);
     expect(only.energyBalance.relativeDifference).toBeLessThan(1e-3);
     // Without feedback of ice the margin is one, also where the multiplier is below the smallest number.
     expect(only.stabilityMargin).toBeCloseTo(1, 9);

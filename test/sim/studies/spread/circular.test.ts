@@ -21,7 +21,7 @@ test.each([
 ])('wrapped normal at $centre: mean, percentiles and resultant length', ({ centre, deviation }) => {
   const { mean, percentiles, defined, resultantLength } = summariseTurns(wrappedNormal(centre, deviation));
   expect(Math.abs(unwrapTurn(mean!, centre) - centre)).toBeLessThan(1e-4);
-  expect(mean! >= 0 && mean! < 1).toBe(true);
+  expect(percentiles!['50'] > -0.25 && percentiles!['50'] <= 0.75).toBe(true);
   expect(defined).toBe(1);
   expect(Math.abs(resultantLength! - Math.exp(-((2 * Math.PI * deviation) ** 2) / 2))).toBeLessThan(1e-4);
   // The percentiles do not jump where the turn ends.
@@ -36,6 +36,22 @@ test('two neighbours across the end of the turn have their mean between them', (
   expect(mean).toBeCloseTo(0.01, 12);
   expect(percentiles!['50']).toBeCloseTo(0.01, 12);
   expect(percentiles!['2.5']).toBeCloseTo(-0.009, 12);
+});
+
+// A median in the last quarter of the turn is told as before its beginning, and all the rest with it.
+test.each([
+  { centre: 0.74, told: 0.74 },
+  { centre: 0.76, told: -0.24 },
+  { centre: 0.98, told: -0.02 },
+])('mean and percentiles are of one turn: around $centre they are told around $told', ({ centre, told }) => {
+  const { mean, percentiles } = summariseTurns(
+    Float64Array.of(-0.02, -0.01, 0, 0.01, 0.05).map((x) => (x + centre) % 1),
+  );
+  expect(percentiles!['50']).toBeCloseTo(told, 12);
+  // Expanding tan: the mean on the line less (2π)² μ₃/6, with μ₃ = 12.7e-6 the third moment of the five.
+  expect(mean).toBeCloseTo(told + 0.006 - ((2 * Math.PI) ** 2 * 12.7e-6) / 6, 5);
+  expect(percentiles!['2.5']).toBeCloseTo(told - 0.019, 12);
+  expect(percentiles!['97.5']).toBeCloseTo(told + 0.046, 12);
 });
 
 test('no direction: draws all around, or opposite', () => {

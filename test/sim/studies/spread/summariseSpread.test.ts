@@ -61,11 +61,64 @@ test('times on both sides of periapsis lie on one line, those of the further run
     ({ name }) => name === 'timeOfMax',
   )!;
   expect(circular).toBe(true);
-  expect(Math.min(summary.mean!, period - summary.mean!)).toBeLessThan(0.1); // the mean itself lies in [0, period)
-  const { '2.5': low, '97.5': high } = summary.percentiles!;
+  const { '2.5': low, '50': median, '97.5': high } = summary.percentiles!;
+  expect(Math.abs(summary.mean!)).toBeLessThan(0.1);
+  expect(Math.abs(median)).toBeLessThan(0.1);
   expect(high - low).toBeCloseTo(19, 1); // 95 % of 20 s; 512 points in equal intervals
   expect(histogram!.to - histogram!.from).toBeLessThan(20);
   const [first, second] = importance.total!;
   expect(first!.value).toBeCloseTo(1, 1);
   expect(Math.abs(second!.value)).toBeLessThan(1e-9);
+});
+
+test('a run at the centre is told in the turn of the median, in its own seconds', async () => {
+  const one = plan.cases[0]!;
+  const at = (name: string) => one.findings.findIndex((finding) => finding.name === name);
+  const told = async (centreTime: number, drawTime: number) => {
+    const into = (_: unknown, row: Float64Array) => {
+      row[at('period')] = 410;
+      row[at('timeOfMax')] = centreTime;
+      return true;
+    };
+    const moved: SpreadPlan = { ...plan, cases: [{ ...one, batch: { ...one.batch, into } }] };
+    const column = async (name: string) => new Float64Array(draws).fill(name === 'timeOfMax' ? drawTime : 400);
+    const [found] = (await summariseSpread(moved, origin, tables({ draws: column }))).cases;
+    return found!.findings[at('timeOfMax')]!;
+  };
+  const after = await told(405, 2);
+  expect([after.atCentre, after.summary.percentiles!['50']]).toEqual([-5, 2]);
+  const before = await told(3, 398);
+  expect(before.atCentre).toBe(3);
+  expect(before.summary.mean).toBeCloseTo(-2, 9);
+  const late = await told(3, 290); // below three quarters: the turn that has begun
+  expect(late.summary.percentiles!['50']).toBeCloseTo(290, 9);
+  expect(late.atCentre).toBe(413);
+});
+
+test('a finding that some draws lack: the share that has it, and why one lacks it, in the words of the model', async () => {
+  const circle = text.replace('0.3 to 0.6', '0');
+  const round = planSpread({
+    text: circle,
+    file: 'c.yaml',
+    only: null,
+    draws,
+    seed: 1,
+    sampling: 'sobol',
+    samples: null,
+  });
+  // draw 3 failed; draws 7 and on lack the damping; all lack the lag
+  const column = async (name: string) =>
+    Float64Array.from({ length: draws }, (_, draw) => {
+      const lacks = draw === 3 || (name === 'damping' && draw >= 7) || name === 'lagOfMax';
+      return lacks ? Number.NaN : 1;
+    });
+  const [told] = (await summariseSpread(round, origin, tables({ draws: column }))).cases;
+  const finding = (name: string) => told!.findings.find((one) => one.name === name)!;
+  expect(told!.failed).toBe(1);
+  expect(finding('damping').summary.defined).toBe(6 / draws);
+  expect(finding('damping').missingBecause).toBe('the instellation does not vary on a circular orbit');
+  expect(finding('lagOfMax').summary).toMatchObject({ mean: null, defined: 0, reason: 'no draw has a value' });
+  expect(finding('lagOfMax').missingBecause).toBe('the temperature does not vary');
+  // a failed draw lacks it, but not for a reason of its own
+  expect(finding('temperatureMean').missingBecause).toBeNull();
 });

@@ -1,0 +1,84 @@
+/** What must be said beside the numbers of a spread, for terminal, file and page alike: several climates, draws in two groups. */
+import { formatNumber, formatQuantity, inUnit } from '../../quantity/index.ts';
+import type { SolveOptions, World } from '../../world.ts';
+import type { DrawnClimates } from './climates.ts';
+import type { Group } from './groups.ts';
+import type { SpreadFinding } from './spreadReport.ts';
+
+/** Nothing where all draws are thawed, with one climate each. */
+export function climateWarnings(climates: DrawnClimates | null): string[] {
+  if (climates === null) return [];
+  const { second, iceFree, partlyFrozen, frozenOver } = climates;
+  const kinds = [
+    { share: iceFree, words: 'free of ice' },
+    { share: partlyFrozen, words: 'partly under ice' },
+    { share: frozenOver, words: 'frozen over' },
+  ].filter(({ share }) => share > 0);
+  return [
+    ...(second !== null && second > 0
+      ? [
+          `${shareWords(second)} of the draws allow a second, colder climate that lasts as well. Every number here is of the warm one; which of them a planet is in depends on its past.`,
+        ]
+      : []),
+    ...(kinds.length > 1
+      ? [
+          `The draws are of several climates: ${listed(kinds.map(({ share, words }) => `${shareWords(share)} ${words}`))} (area and time under ice below 1 %, between, above 99 %).`,
+        ]
+      : []),
+  ];
+}
+
+/** What times count from where every draw is on a circle, and has no periapsis; null where that is of no account. */
+export function circleNote({ orbit, globe }: World, isDrawn: boolean): string | null {
+  if (orbit.eccentricity > 0 || isDrawn || !globe) return null;
+  const longitude = formatQuantity(globe.solarLongitudeOfPeriapsis, 'deg', 4);
+  return `The orbit is a circle: “periapsis” is only the point that times are counted from, at solar longitude ${longitude}.`;
+}
+
+/** Said of models that do not count the climates of each draw; null where there can be only one. */
+export function warmestNote({ surface }: World, start: SolveOptions['start']): string | null {
+  if (surface.albedo.ramp === null || start !== 'periodic') return null;
+  return 'With ice, an orbit may allow several climates: every number here is of the warmest. `run` shows all of one planet.';
+}
+
+/** One sentence for all findings that fall apart, with the numbers of the chief one. */
+export function groupWarnings(findings: readonly SpreadFinding[]): string[] {
+  const apart = findings.filter(({ groups }) => groups !== null);
+  const chief = ['temperatureMean', 'temperatureMax']
+    .map((name) => apart.find((finding) => finding.name === name))
+    .find((finding) => finding !== undefined);
+  const [told = apart[0]] = [chief];
+  if (told === undefined) return [];
+  const others = apart.filter((finding) => finding !== told).map(({ label }) => label);
+  const rest =
+    others.length === 0
+      ? ''
+      : ` So do those of ${others.length > 3 ? `${others.length} other findings` : listed(others)}.`;
+  return [
+    `${groupWords(told)}${rest} Histograms show both groups; a mean or an interval over both may tell of neither.`,
+  ];
+}
+
+function groupWords({ label, unit, groups, summary: { mean } }: SpreadFinding): string {
+  const [low, high] = groups!;
+  const symbol = unit === 's' ? 'd' : unit;
+  const number = (value: number) => formatNumber(unit === 's' ? inUnit(value, 'd') : value, 4);
+  const text = (value: number) => (symbol === '1' ? number(value) : `${number(value)} ${symbol}`);
+  const reach = ({ share, from, to }: Group) => {
+    return `${shareWords(share)} of them ${number(from) === number(to) ? `at ${text(from)}` : `from ${number(from)} to ${text(to)}`}`;
+  };
+  const isOfNone = mean !== null && mean > low.to && mean < high.from;
+  const average = isOfNone ? `: the mean, ${text(mean)}, is that of no draw` : '';
+  return `${label}: the draws fall into two groups, ${reach(low)} and ${reach(high)}, none between${average}.`;
+}
+
+/** Digits that a share of some thousand draws has: whole percent in the middle, a tenth near the ends. */
+function shareWords(share: number): string {
+  const percent = 100 * share;
+  if (percent > 0 && percent < 0.05) return 'Fewer than 0.1 %';
+  return `${percent < 9.95 || percent > 90.05 ? Number(percent.toFixed(1)) : Math.round(percent)} %`;
+}
+
+function listed(words: readonly string[]): string {
+  return words.length < 2 ? (words[0] ?? '') : `${words.slice(0, -1).join(', ')} and ${words.at(-1)}`;
+}
