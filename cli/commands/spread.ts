@@ -1,10 +1,8 @@
 /** `perilag spread`: the uncertain inputs of a scenario drawn many times, as percentiles, as tables, and which of them matters most. */
-import { availableParallelism } from 'node:os';
 import { resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
 import { planSpread, type SpreadSetup } from '../../sim/studies/spread/plan.ts';
-import { type Computed, computeTable } from '../engine/compute.ts';
-import type { Job } from '../engine/job.ts';
+import { type Computed, computeInPool, withPool } from '../engine/compute.ts';
 import { kinds } from '../engine/kinds.ts';
 import type { Shard } from '../engine/plan.ts';
 import type { Io } from '../io.ts';
@@ -40,10 +38,12 @@ export async function spread(file: string, options: SpreadOptions, program: Prog
   const plan = planSpread(setup);
   const out = outputFolder(file, 'spread', options.out);
   const jobs = spreadJobs(plan, context);
-  const compute = (job: Job, table: string) =>
-    computeTable(job, { ...engineOptions(options, out, program, io), table }, kinds, io);
-  const computed: Computed[] = [];
-  for (const { table, job } of jobs) computed.push(await compute(job, table));
+  const computed = await withPool(options.workers ?? null, kinds, io, async (pool) => {
+    const found: Computed[] = [];
+    for (const { table, job } of jobs)
+      found.push(await computeInPool(job, { ...engineOptions(options, out, program, io), table }, pool, io));
+    return found;
+  });
   if (options.shard) {
     if (!options.quiet) tellShard(out, options.shard, io);
     return 0;
@@ -97,7 +97,6 @@ function engineOptions(options: SpreadOptions, out: string, program: Program, io
     folder: resolve(io.cwd, out),
     shard: options.shard ?? null,
     resume: options.resume ?? false,
-    workers: options.workers ?? availableParallelism(),
     quiet: options.quiet ?? false,
     words: program.words,
   };

@@ -5,7 +5,7 @@ import type { JobRecord, Range } from './job.ts';
 import { differences, shardWords } from './manifest.ts';
 import { missing } from './plan.ts';
 import { findStore, type Store, workFolder } from './store.ts';
-import { type Piece, type TableFiles, writeTable } from './table.ts';
+import { type Piece, sourceOf, type TableFiles, writeTable } from './table.ts';
 
 export interface Gathered {
   readonly files: TableFiles;
@@ -30,7 +30,7 @@ export async function gatherTable(
   refuseGaps(stores);
   const { job } = first.manifest;
   try {
-    return { files: await writeTable({ folder: out, table, job }, piecesOf(stores), checkpoint), job };
+    return { files: await writeTable({ folder: out, table, job }, sourceOf(piecesOf(stores)), checkpoint), job };
   } catch (error) {
     throw writingFault(out, error);
   }

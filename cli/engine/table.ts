@@ -22,6 +22,25 @@ export interface Piece extends Range {
   read(): Rows;
 }
 
+/** Where the rows of a table come from, a row group at a time and in order. */
+export interface Source {
+  /** Pieces that cover a row group once, as soon as all are there. Errors: when they will never be. */
+  group(range: Range): Promise<readonly Piece[]>;
+}
+
+/** Of pieces that cover all rows once, none of them over the edge of a row group. */
+export function sourceOf(pieces: readonly Piece[]): Source {
+  const sorted = pieces.toSorted((a, b) => a.from - b.from);
+  let next = 0;
+  return {
+    group: async ({ to }) => {
+      const start = next;
+      while (next < sorted.length && sorted[next]!.from < to) next++;
+      return sorted.slice(start, next);
+    },
+  };
+}
+
 export interface TableFiles {
   readonly path: string;
   readonly rows: number;
@@ -37,23 +56,22 @@ export function tablePaths(folder: string, table: string): { readonly path: stri
 }
 
 /**
- * Writes the files of a table from pieces that cover all its rows once, none of them over the edge of a row group. Holds one
- * group at a time. `checkpoint` is called between groups, and may throw. The Parquet file comes last: where it stands, all is done.
+ * Writes the files of a table, a row group as soon as it is there. Holds one group at a time. `checkpoint` is called between
+ * groups, and may throw. The Parquet file comes last: where it stands, all is done.
  */
 export async function writeTable(
   { folder, table, job }: { readonly folder: string; readonly table: string; readonly job: JobRecord },
-  pieces: readonly Piece[],
+  source: Source,
   checkpoint: () => void,
 ): Promise<TableFiles> {
   const { createParquet } = await import('../output/parquet.ts');
   const { path, failedPath } = tablePaths(folder, table);
-  const sorted = pieces.toSorted((a, b) => a.from - b.from);
   await makeFolder(folder);
   await removeAbandoned(folder);
   return land(path, async (temporary) => {
     const file = createParquet(temporary, columnsOf(job));
     try {
-      const failed = await land(failedPath, (list) => fill(file.append, list, job, sorted, checkpoint));
+      const failed = await land(failedPath, (list) => fill(file.append, list, job, source, checkpoint));
       if (failed === 0) await rm(failedPath);
       file.finish({ settings: JSON.stringify(job.settings), fingerprint: fingerprintOf(job), failed: String(failed) });
       return { path, rows: job.rows, failed, failedPath: failed === 0 ? null : failedPath };
@@ -81,17 +99,18 @@ async function fill(
   append: (from: number, columns: readonly Float64Array[]) => void,
   listPath: string,
   job: JobRecord,
-  pieces: readonly Piece[],
+  source: Source,
   checkpoint: () => void,
 ): Promise<number> {
   const list = openSync(listPath, 'w');
   let failed = 0;
-  let next = 0;
   try {
     writeText(list, failedHeader(job.inputs));
     for (let from = 0; from < job.rows; from += groupRows) {
-      const group = emptyGroup(from, Math.min(groupRows, job.rows - from), columnsOf(job).length);
-      while (next < pieces.length && pieces[next]!.from < from + groupRows) copyInto(group, pieces[next++]!);
+      const to = Math.min(from + groupRows, job.rows);
+      const pieces = await source.group({ from, to });
+      const group = emptyGroup(from, to - from, columnsOf(job).length);
+      for (const piece of pieces) copyInto(group, piece);
       append(from, group.columns);
       writeText(list, group.failures.map((failure) => failedLine(failure, group, job.inputs.length)).join(''));
       failed += group.failures.length;
