@@ -178,10 +178,20 @@ function resumeLine(words: readonly string[]): string {
   return commandLine(words.includes('--resume') ? words : [...words, '--resume']);
 }
 
+/** Says that something is kept only where something is. */
 async function attempt<T>(folder: string, { words }: ComputeOptions, work: () => Promise<T>): Promise<T> {
   try {
     return await work();
   } catch (error) {
+    if (!hasRows(folder)) throw writingFault(folder, error);
     throw writingFault(folder, error, `What is finished stays there. When this is mended, go on: ${resumeLine(words)}`);
+  }
+}
+
+function hasRows(folder: string): boolean {
+  try {
+    return (findStore(folder)?.chunks().length ?? 0) > 0;
+  } catch {
+    return false; // it cannot even be read
   }
 }

@@ -49,6 +49,11 @@ export interface TableFiles {
   readonly failedPath: string | null;
 }
 
+/** What a row of a table is called where rows are listed: a draw, or a node of a grid. */
+function rowName(table: string): string {
+  return table === 'grid' ? 'node' : 'draw';
+}
+
 /** `failed.csv` for the draws themselves, `failed-indices.csv` for a table `indices`. */
 export function tablePaths(folder: string, table: string): { readonly path: string; readonly failedPath: string } {
   const failed = table === 'draws' ? 'failed.csv' : `failed-${table}.csv`;
@@ -71,7 +76,7 @@ export async function writeTable(
   return land(path, async (temporary) => {
     const file = createParquet(temporary, columnsOf(job));
     try {
-      const failed = await land(failedPath, (list) => fill(file.append, list, job, source, checkpoint));
+      const failed = await land(failedPath, (list) => fill(file.append, list, { ...job, table }, source, checkpoint));
       if (failed === 0) await rm(failedPath);
       file.finish({ settings: JSON.stringify(job.settings), fingerprint: fingerprintOf(job), failed: String(failed) });
       return { path, rows: job.rows, failed, failedPath: failed === 0 ? null : failedPath };
@@ -98,14 +103,14 @@ export async function finishedTable(folder: string, table: string, job: JobRecor
 async function fill(
   append: (from: number, columns: readonly Float64Array[]) => void,
   listPath: string,
-  job: JobRecord,
+  job: JobRecord & { readonly table: string },
   source: Source,
   checkpoint: () => void,
 ): Promise<number> {
   const list = openSync(listPath, 'w');
   let failed = 0;
   try {
-    writeText(list, failedHeader(job.inputs));
+    writeText(list, failedHeader(rowName(job.table), job.inputs));
     for (let from = 0; from < job.rows; from += groupRows) {
       const to = Math.min(from + groupRows, job.rows);
       const pieces = await source.group({ from, to });
@@ -139,8 +144,8 @@ function copyInto({ from, columns, failures }: Group, piece: Piece): void {
   failures.push(...rows.failures);
 }
 
-function failedHeader(inputs: readonly Column[]): string {
-  return `${['draw', ...inputs.map(({ name, unit }) => csvHeader(name, unit)), 'message'].map(csvField).join(',')}\n`;
+function failedHeader(row: string, inputs: readonly Column[]): string {
+  return `${[row, ...inputs.map(({ name, unit }) => csvHeader(name, unit)), 'message'].map(csvField).join(',')}\n`;
 }
 
 /** An input that could not even be drawn is empty. */

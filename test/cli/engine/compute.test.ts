@@ -47,6 +47,12 @@ describe('computeTable', () => {
     expect(lines[2]).toBe(`1999,${hashed(1, 1999, 0)},"no world, ""1999"""`);
   });
 
+  test('what failed of a grid is listed by its node', async () => {
+    const { files } = await place.compute(demoJob(10, { failEvery: 5 }), 'a', { table: 'grid' });
+    expect(files!.failedPath).toBe(place.path('a', 'failed-grid.csv'));
+    expect(readFileSync(files!.failedPath!, 'utf8')).toMatch(/^node,planet\.bondAlbedo,message\n4,/);
+  });
+
   test('without failures there is no list of them, not even an old one', async () => {
     await (await place.compute(job, 'a')).discardWork();
     const { files } = await place.compute(demoJob(100), 'a');
@@ -205,13 +211,11 @@ describe('--resume', () => {
 });
 
 describe('a folder that cannot be written', () => {
-  test('is named, with how to go on', async () => {
+  test('is named; how to go on is said only where something is kept', async () => {
     writeFileSync(place.path('file'), 'precious');
     const run = place.compute(job, 'file');
     await expect(run).rejects.toBeInstanceOf(SimError);
-    await expect(run).rejects.toThrow(
-      /file\/draws\.work: .* go on: perilag spread 'a planet\.yaml' -o file --resume\.$/,
-    );
+    await expect(run).rejects.toThrow(/file\/draws\.work: .*\. Choose another folder with -o\.$/);
     expect(readFileSync(place.path('file'), 'utf8')).toBe('precious');
   });
 
