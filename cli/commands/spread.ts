@@ -1,6 +1,7 @@
 /** `perilag spread`: the uncertain inputs of a scenario drawn many times, as percentiles, as tables, and which of them matters most. */
 import { resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
+import { casesDrawn } from '../../sim/scenario/drawn.ts';
 import { planSpread, type SpreadSetup } from '../../sim/studies/spread/plan.ts';
 import { type Computed, computeInPool, withPool } from '../engine/compute.ts';
 import { kinds } from '../engine/kinds.ts';
@@ -51,7 +52,11 @@ export async function spread(file: string, options: SpreadOptions, program: Prog
   const files = Object.fromEntries(
     jobs.map(({ table }, i) => [table, computed[i]!.files]),
   ) as unknown as SpreadTableFiles;
-  const code = await finishSpread({ plan, context, files, out, item: item! }, options, io);
+  const code = await finishSpread(
+    { plan, context, files, settings: jobs[0]!.job.settings, out, item: item! },
+    options,
+    io,
+  );
   for (const one of computed) await one.discardWork();
   return code;
 }
@@ -63,8 +68,8 @@ async function whatToDraw(
   io: Io,
 ): Promise<{ context: SpreadContext; setup: SpreadSetup }> {
   const { scenario, text, file, sha256 } = item;
-  const samples = scenario.posterior ? await readSamples(scenario.posterior, file, io.cwd) : null;
   const chosen = only && only.length > 0 ? scenario.cases.map(({ name }) => name) : null;
+  const samples = await samplesOf(item, chosen, io);
   const sampling = random ? 'random' : 'sobol';
   const settled = { draws, seed: seed ?? seedOf(item), sampling, only: chosen } as const;
   return {
@@ -80,6 +85,14 @@ async function whatToDraw(
       ...settled,
     },
   };
+}
+
+/** Null where no chosen case draws from the posterior: its inputs are then drawn one by one, as without it. */
+async function samplesOf({ scenario, text, file }: ScenarioFile, chosen: readonly string[] | null, io: Io) {
+  if (!scenario.posterior) return null;
+  const drawn = casesDrawn(text, file, chosen ?? undefined);
+  const isUsed = drawn.some(({ inputs }) => inputs.some(({ column }) => column !== null));
+  return isUsed ? readSamples(scenario.posterior, file, io.cwd) : null;
 }
 
 /** The scenario's own, or 1. Errors: SimError where cases have different ones: all take the same draws. */

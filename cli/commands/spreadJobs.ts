@@ -6,8 +6,11 @@ import { bandColumnName } from '../../sim/studies/spread/summariseSpread.ts';
 import type { Column, Job } from '../engine/job.ts';
 import type { SpreadContext } from './spreadContext.ts';
 
+/** All that a spread may write. */
+export const spreadTables = ['draws', 'bands', 'indices'] as const;
+
 export interface SpreadJob {
-  readonly table: 'draws' | 'bands' | 'indices';
+  readonly table: (typeof spreadTables)[number];
   readonly job: Job;
 }
 
