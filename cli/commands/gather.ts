@@ -5,6 +5,7 @@ import { readScenario } from '../../sim/scenario/read.ts';
 import { planSpread } from '../../sim/studies/spread/plan.ts';
 import { gatherTable } from '../engine/gather.ts';
 import { settingsApart } from '../engine/manifest.ts';
+import { requireMemory } from '../engine/room.ts';
 import { findStore, tablesIn, workFolder } from '../engine/store.ts';
 import type { Io } from '../io.ts';
 import { readSamples } from '../posteriorFile.ts';
@@ -14,6 +15,7 @@ import { requireName } from './outputFolder.ts';
 import type { Program } from './run.ts';
 import type { SpreadContext } from './spreadContext.ts';
 import { finishSpread, type SpreadTableFiles } from './spreadFiles.ts';
+import { heldBySpread } from './spreadJobs.ts';
 
 export interface GatherOptions {
   readonly out: string;
@@ -32,6 +34,8 @@ export async function gather(
   const paths = folders.map((folder) => resolve(io.cwd, folder));
   const tables = tablesOf(paths, folders);
   refuseMixture(paths[0]!, tables, program);
+  const { job } = findStore(workFolder(paths[0]!, 'draws'))!.manifest;
+  requireMemory('draws', job, heldBySpread);
   const out = resolve(io.cwd, options.out);
   const gathered = [];
   for (const table of tables) gathered.push({ table, ...(await gatherTable(paths, table, out)) });

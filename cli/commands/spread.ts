@@ -6,6 +6,7 @@ import { planSpread, type SpreadSetup } from '../../sim/studies/spread/plan.ts';
 import { type Computed, computeInPool, withPool } from '../engine/compute.ts';
 import { kinds } from '../engine/kinds.ts';
 import type { Shard } from '../engine/plan.ts';
+import { requireMemory } from '../engine/room.ts';
 import type { Io } from '../io.ts';
 import { commandLine } from '../output/history.ts';
 import { readSamples } from '../posteriorFile.ts';
@@ -15,7 +16,7 @@ import { outputFolder } from './outputFolder.ts';
 import type { Program } from './run.ts';
 import type { SpreadContext } from './spreadContext.ts';
 import { finishSpread, type SpreadTableFiles } from './spreadFiles.ts';
-import { spreadJobs } from './spreadJobs.ts';
+import { heldBySpread, spreadJobs } from './spreadJobs.ts';
 
 export interface SpreadOptions {
   readonly draws: number;
@@ -39,6 +40,7 @@ export async function spread(file: string, options: SpreadOptions, program: Prog
   const plan = planSpread(setup);
   const out = outputFolder(file, 'spread', options.out);
   const jobs = spreadJobs(plan, context);
+  if (!options.shard) for (const { job } of jobs) requireMemory('--draws', job, heldBySpread);
   const computed = await withPool(options.workers ?? null, kinds, io, async (pool) => {
     const found: Computed[] = [];
     for (const { table, job } of jobs)

@@ -11,6 +11,7 @@ import { columnsOf, fingerprintOf, type Job, type Kinds, recordOf } from './job.
 import { type LanesWork, runLanes } from './lanes.ts';
 import { countRows, missing, type Shard, shardRange } from './plan.ts';
 import { type Pool, poolOf } from './pool.ts';
+import { requireDisk } from './room.ts';
 import { findStore, openStore, type Store, workFolder } from './store.ts';
 import { finishedTable, type TableFiles, writeTable } from './table.ts';
 
@@ -84,7 +85,11 @@ export async function computeInPool(job: Job, options: ComputeOptions, pool: Poo
       const files = await finishedTable(options.folder, options.table, recordOf(job));
       if (files !== null) return computed(files, folder, leftOver(folder, job));
     }
-    const store = await openStore(folder, manifestOf(job, options), options.resume);
+    const manifest = manifestOf(job, options);
+    const missingRows = countRows([manifest.range]) - countRows(findStore(folder)?.chunks() ?? []);
+    const warning = await requireDisk(options.folder, { missingRows, job, isTable: options.shard === null });
+    if (warning !== null) say(`warning: ${warning}`);
+    const store = await openStore(folder, manifest, options.resume);
     const found = countRows(store.chunks());
     if (found > 0) say(`${options.table}: going on with ${grouped(found)} finished rows`);
     const interruption = listen(io.signals, () =>
