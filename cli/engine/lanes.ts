@@ -28,6 +28,11 @@ const leastSeen = 0.03;
 /** This thread takes shorter chunks than others: meanwhile it neither writes nor hears. */
 const ownShare = 0.5;
 
+/** Chunks under way to the disk: where it is slow, this thread waits for it rather than pile them up in memory. */
+function landingAtMost({ workers }: Pool): number {
+  return workers + 2;
+}
+
 /** All ends when nothing is left, something fails, or a signal came; what runs is finished first. Errors: the first of them. */
 export async function runLanes(work: LanesWork): Promise<void> {
   const { job, pool, store, progress, interruption } = work;
@@ -77,8 +82,8 @@ export async function runLanes(work: LanesWork): Promise<void> {
         beginThreads();
       }
       // Signals are heard, files land, and threads get new work before this thread computes again.
-      do await setImmediate();
-      while (landing.size > pool.workers && goesOn());
+      await setImmediate();
+      while (landing.size > landingAtMost(pool) && goesOn()) await Promise.race(landing).catch(() => undefined);
     }
   };
   if (pool.threads > 0 || pool.atOnce) beginThreads();
