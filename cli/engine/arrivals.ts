@@ -12,7 +12,7 @@ export interface Arrivals extends Source {
 }
 
 /** Chunks of so many groups from the one that is waited for are kept as they came; others are read from the store. */
-const groupsKept = 4;
+const groupsKept = 2;
 
 interface Waiting {
   readonly range: Range;
