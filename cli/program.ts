@@ -72,7 +72,7 @@ function program(words: readonly string[], io: Io, outcome: { code: number }): C
     .option('--no-indices', 'leave out which input matters, and the runs that it needs')
     .option(
       '--workers <n>',
-      'threads (default: one a processor); the numbers do not depend on it',
+      'threads (default: as the work asks for); the numbers do not depend on it',
       wholeNumber('--workers', 1, 512),
     )
     .option('--shard <i/n>', 'compute one part of n only, to be joined by gather', shardOf)

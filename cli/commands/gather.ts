@@ -5,6 +5,7 @@ import { readScenario } from '../../sim/scenario/read.ts';
 import { planSpread } from '../../sim/studies/spread/plan.ts';
 import { gatherTable } from '../engine/gather.ts';
 import { settingsApart } from '../engine/manifest.ts';
+import { requireMemory } from '../engine/room.ts';
 import { findStore, tablesIn, workFolder } from '../engine/store.ts';
 import type { Io } from '../io.ts';
 import { readSamples } from '../posteriorFile.ts';
@@ -14,6 +15,7 @@ import { requireName } from './outputFolder.ts';
 import type { Program } from './run.ts';
 import type { SpreadContext } from './spreadContext.ts';
 import { finishSpread, type SpreadTableFiles } from './spreadFiles.ts';
+import { heldBySpread } from './spreadJobs.ts';
 
 export interface GatherOptions {
   readonly out: string;
@@ -30,8 +32,10 @@ export async function gather(
 ): Promise<number> {
   requireName(options.out, 'Name one, e.g. `-o results`');
   const paths = folders.map((folder) => resolve(io.cwd, folder));
-  const tables = tablesOf(paths[0]!, folders[0]!);
+  const tables = tablesOf(paths, folders);
   refuseMixture(paths[0]!, tables, program);
+  const { job } = findStore(workFolder(paths[0]!, 'draws'))!.manifest;
+  requireMemory('draws', job, heldBySpread);
   const out = resolve(io.cwd, options.out);
   const gathered = [];
   for (const table of tables) gathered.push({ table, ...(await gatherTable(paths, table, out)) });
@@ -49,13 +53,29 @@ export async function gather(
   const files = Object.fromEntries(
     gathered.map(({ table, files: made }) => [table, made]),
   ) as unknown as SpreadTableFiles;
-  return finishSpread({ plan, context, files, out: options.out, item }, options, io);
+  return finishSpread(
+    { plan, context, files, settings: gathered[0]!.job.settings, out: options.out, item },
+    options,
+    io,
+  );
 }
 
-function tablesOf(path: string, named: string): readonly string[] {
-  const tables = foundTables(path);
-  if (tables.includes('draws')) return tables;
-  throw new SimError(named, 'no rows of draws are kept there', 'Name the output folders of the shards');
+/** The tables that all folders have. Errors: SimError where one has others than the first: nothing is left out unsaid. */
+function tablesOf(paths: readonly string[], named: readonly string[]): readonly string[] {
+  const found = paths.map(foundTables);
+  const without = found.findIndex((tables) => !tables.includes('draws'));
+  if (without >= 0)
+    throw new SimError(named[without]!, 'no rows of draws are kept there', 'Name the output folders of the shards');
+  const [first] = found as [readonly string[], ...(readonly string[])[]];
+  for (const [i, tables] of found.entries()) {
+    const apart = [...new Set([...first, ...tables])].find((table) => first.includes(table) !== tables.includes(table));
+    if (apart === undefined) continue;
+    const [has, lacks] = first.includes(apart) ? [named[0], named[i]] : [named[i], named[0]];
+    const what = `${has} holds rows of ${apart}, ${lacks} holds none: they are parts of different runs`;
+    const mend = apart === 'indices' ? ', all of them with --no-indices or none' : '';
+    throw new SimError(`${named[0]} and ${named[i]}`, what, `Compute all shards with the same options${mend}`);
+  }
+  return first;
 }
 
 /** The tables of one folder are of one run, and of this program: else what is told of the draws is not what made them. */
@@ -86,9 +106,9 @@ function scenarioOf({ text, file, sha256, only }: SpreadContext): ScenarioFile {
   return onlyCases([item], only ?? [])[0]!;
 }
 
-/** The file of samples must be the one that the shards drew from. */
+/** The file of samples must be the one that the shards drew from; null where they drew from none. */
 async function samplesOf({ scenario, file }: ScenarioFile, { samplesSha256 }: SpreadContext, io: Io) {
-  if (!scenario.posterior) return null;
+  if (!scenario.posterior || samplesSha256 === null) return null;
   const samples = await readSamples(scenario.posterior, file, io.cwd);
   if (samples.sha256 === samplesSha256) return samples;
   throw new SimError(scenario.posterior.file, 'it is not the file that the shards drew from', 'Put that file back');

@@ -11,6 +11,7 @@ import { csvRecords } from '../csvRecords.ts';
 import { computeTable } from '../engine/compute.ts';
 import type { Job } from '../engine/job.ts';
 import { kinds } from '../engine/kinds.ts';
+import { type Held, requireMemory } from '../engine/room.ts';
 import type { TableFiles } from '../engine/table.ts';
 import { exitCode } from '../exit.ts';
 import type { Io } from '../io.ts';
@@ -45,6 +46,9 @@ export interface GridOptions {
 /** Below this many nodes of a quick model a thread takes longer to start than the work. */
 const fewNodes = 4000;
 
+/** All columns; every number again as an object of the report, as a text of the page, and all of them in one text of the CSV. */
+const heldByGrid: Held = { columns: Number.POSITIVE_INFINITY, heapANumber: 45, textANumber: 19 };
+
 /** Gives the exit code. Errors: SimError and ScenarioError for the input's faults; Interrupted after a signal. */
 export async function grid(file: string, options: GridOptions, program: Program, io: Io): Promise<number> {
   const [item] = onlyCases([readScenarioFile(file, io.cwd)], options.only ?? []);
@@ -52,8 +56,10 @@ export async function grid(file: string, options: GridOptions, program: Program,
   const plan = planGrid(setup);
   const out = outputFolder(file, 'grid', options.out);
   const folder = resolve(io.cwd, out);
+  const job = jobOf(plan, item!, program);
+  requireMemory('--steps', job, heldByGrid);
   const computed = await computeTable(
-    jobOf(plan, item!, program),
+    job,
     {
       table: 'grid',
       folder,

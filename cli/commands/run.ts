@@ -69,22 +69,32 @@ function filesOf(
   io: Io,
 ): readonly OutputFile[] {
   const { scenario } = item;
+  const scenarioYaml = scenarioYamlText(scenario, samplesFrom(folder, item, io.cwd));
   return [
     { name: 'summary.json', pieces: [summaryText(result)] },
     { name: 'series.csv', pieces: [seriesText(result)] },
-    ...(hasFields(result) ? [fieldsOf(scenario, result, program)] : []),
-    { name: 'scenario.yaml', pieces: [scenarioYamlText(scenario, samplesFrom(folder, item, io.cwd))] },
+    ...(hasFields(result) ? [fieldsOf(scenario, scenarioYaml, result, program)] : []),
+    { name: 'scenario.yaml', pieces: [scenarioYaml] },
     { name: 'report.html', pieces: reportPieces({ result, tree: scenario.tree }, io.reportTemplate) },
   ];
 }
 
 /** What writes it is large, and loaded only when there is something to write. */
-function fieldsOf(scenario: Scenario, result: RunResult, { version, words }: Program): OutputFile {
+function fieldsOf(
+  scenario: Scenario,
+  scenarioYaml: string,
+  result: RunResult,
+  { version, words }: Program,
+): OutputFile {
   return {
     name: 'fields.nc',
     write: async (path, checkpoint) => {
       const { writeNetcdf } = await import('../output/netcdf.ts');
-      await writeNetcdf(path, fieldsFile(result, scenario, historyLine(new Date(), version, words)), checkpoint);
+      await writeNetcdf(
+        path,
+        fieldsFile(result, scenario, scenarioYaml, historyLine(new Date(), version, words)),
+        checkpoint,
+      );
     },
   };
 }

@@ -1,15 +1,14 @@
 /** `perilag spread`: the uncertain inputs of a scenario drawn many times, as percentiles, as tables, and which of them matters most. */
-import { availableParallelism } from 'node:os';
 import { resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
+import { casesDrawn } from '../../sim/scenario/drawn.ts';
 import { planSpread, type SpreadSetup } from '../../sim/studies/spread/plan.ts';
-import { type Computed, computeTable } from '../engine/compute.ts';
-import type { Job } from '../engine/job.ts';
+import { type Computed, computeInPool, withPool } from '../engine/compute.ts';
 import { kinds } from '../engine/kinds.ts';
 import type { Shard } from '../engine/plan.ts';
+import { requireMemory } from '../engine/room.ts';
 import type { Io } from '../io.ts';
 import { commandLine } from '../output/history.ts';
-import type { Phase } from '../output/phases.ts';
 import { spreadPhases } from '../output/spreadPhases.ts';
 import { readSamples } from '../posteriorFile.ts';
 import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
@@ -18,7 +17,7 @@ import { outputFolder } from './outputFolder.ts';
 import type { Program } from './run.ts';
 import type { SpreadContext } from './spreadContext.ts';
 import { finishSpread, type SpreadTableFiles } from './spreadFiles.ts';
-import { spreadJobs } from './spreadJobs.ts';
+import { heldBySpread, spreadJobs } from './spreadJobs.ts';
 
 export interface SpreadOptions {
   readonly draws: number;
@@ -44,10 +43,15 @@ export async function spread(file: string, options: SpreadOptions, program: Prog
   const jobs = spreadJobs(plan, context);
   const hasLatitudes = plan.cases.some(({ drawn }) => drawn.model !== 'lumped');
   const phases = spreadPhases(jobs, options.shard ?? null, hasLatitudes);
-  const compute = (job: Job, table: string, phase: Phase | undefined) =>
-    computeTable(job, { ...engineOptions(options, out, program, io), table, phase }, kinds, io);
-  const computed: Computed[] = [];
-  for (const [i, { table, job }] of jobs.entries()) computed.push(await compute(job, table, phases[i]));
+  if (!options.shard) for (const { job } of jobs) requireMemory('--draws', job, heldBySpread);
+  const computed = await withPool(options.workers ?? null, kinds, io, async (pool) => {
+    const found: Computed[] = [];
+    for (const [i, { table, job }] of jobs.entries()) {
+      const settled = { ...engineOptions(options, out, program, io), table, phase: phases[i] };
+      found.push(await computeInPool(job, settled, pool, io));
+    }
+    return found;
+  });
   if (options.shard) {
     if (!options.quiet) tellShard(out, options.shard, io);
     return 0;
@@ -55,7 +59,11 @@ export async function spread(file: string, options: SpreadOptions, program: Prog
   const files = Object.fromEntries(
     jobs.map(({ table }, i) => [table, computed[i]!.files]),
   ) as unknown as SpreadTableFiles;
-  const code = await finishSpread({ plan, context, files, out, item: item! }, options, io);
+  const code = await finishSpread(
+    { plan, context, files, settings: jobs[0]!.job.settings, out, item: item! },
+    options,
+    io,
+  );
   for (const one of computed) await one.discardWork();
   return code;
 }
@@ -67,8 +75,8 @@ async function whatToDraw(
   io: Io,
 ): Promise<{ context: SpreadContext; setup: SpreadSetup }> {
   const { scenario, text, file, sha256 } = item;
-  const samples = scenario.posterior ? await readSamples(scenario.posterior, file, io.cwd) : null;
   const chosen = only && only.length > 0 ? scenario.cases.map(({ name }) => name) : null;
+  const samples = await samplesOf(item, chosen, io);
   const sampling = random ? 'random' : 'sobol';
   const settled = { draws, seed: seed ?? seedOf(item), sampling, only: chosen } as const;
   return {
@@ -86,6 +94,14 @@ async function whatToDraw(
   };
 }
 
+/** Null where no chosen case draws from the posterior: its inputs are then drawn one by one, as without it. */
+async function samplesOf({ scenario, text, file }: ScenarioFile, chosen: readonly string[] | null, io: Io) {
+  if (!scenario.posterior) return null;
+  const drawn = casesDrawn(text, file, chosen ?? undefined);
+  const isUsed = drawn.some(({ inputs }) => inputs.some(({ column }) => column !== null));
+  return isUsed ? readSamples(scenario.posterior, file, io.cwd) : null;
+}
+
 /** The scenario's own, or 1. Errors: SimError where cases have different ones: all take the same draws. */
 function seedOf({ scenario }: ScenarioFile): number {
   const [seed, ...others] = new Set(
@@ -101,7 +117,6 @@ function engineOptions(options: SpreadOptions, out: string, program: Program, io
     folder: resolve(io.cwd, out),
     shard: options.shard ?? null,
     resume: options.resume ?? false,
-    workers: options.workers ?? availableParallelism(),
     quiet: options.quiet ?? false,
     words: program.words,
   };

@@ -5,6 +5,8 @@ import { runScenario } from '../../sim/run.ts';
 import type { SpreadPlan } from '../../sim/studies/spread/plan.ts';
 import type { SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
 import { summariseSpread } from '../../sim/studies/spread/summariseSpread.ts';
+import { clearEarlier } from '../engine/earlier.ts';
+import type { Settings } from '../engine/job.ts';
 import type { TableFiles } from '../engine/table.ts';
 import { exitCode } from '../exit.ts';
 import type { Io } from '../io.ts';
@@ -16,11 +18,12 @@ import { spreadSummary } from '../output/spreadSummary.ts';
 import { spreadLines } from '../output/spreadTable.ts';
 import { summaryOf } from '../output/summary.ts';
 import { terminalOf } from '../output/terminal.ts';
+import { printable } from '../output/text.ts';
 import { writtenText } from '../output/written.ts';
 import { samplesFrom } from '../posteriorFile.ts';
 import type { ScenarioFile } from '../scenarioFile.ts';
 import type { SpreadContext } from './spreadContext.ts';
-import { bandDrawsOf, indexRowsOf } from './spreadJobs.ts';
+import { bandDrawsOf, indexRowsOf, spreadTables } from './spreadJobs.ts';
 
 export interface SpreadTableFiles {
   readonly draws: TableFiles;
@@ -32,6 +35,8 @@ export interface FinishedSpread {
   readonly plan: SpreadPlan;
   readonly context: SpreadContext;
   readonly files: SpreadTableFiles;
+  /** Of the tables: all have the same. */
+  readonly settings: Settings;
   /** As the user named it. */
   readonly out: string;
   readonly item: ScenarioFile;
@@ -56,6 +61,7 @@ export async function finishSpread(
     { name: 'scenario.yaml', pieces: [scenarioYamlText(item.scenario, samplesFrom(folder, item, io.cwd))] },
     { name: 'report.html', pieces: pagePieces({ spread: report }, io.reportTemplate) },
   ]);
+  await tellEarlier(folder, finished, io);
   if (options.json) io.stdout.write(`${jsonText(summary)}\n`);
   if (!options.quiet) show(report, finished, options.json ?? false, io);
   return tellFailures(report, plan.setup.draws, finished.files.draws, io);
@@ -90,6 +96,18 @@ function show(report: SpreadReport, { files, out }: FinishedSpread, json: boolea
   const paths = tables.flatMap(({ path, failedPath }) => [path, ...(failedPath === null ? [] : [failedPath])]);
   const beside = ['summary.json', ...paths.map((path) => basename(path)), 'scenario.yaml'];
   io.stderr.write(writtenText(out, beside, terminal));
+}
+
+/** Tables of another run that this one did not replace would be taken for its own: they go, and that is said. */
+async function tellEarlier(folder: string, { files, settings, out }: FinishedSpread, io: Io): Promise<void> {
+  const absent = spreadTables.filter((table) => files[table] === undefined);
+  const { removed, unfinished } = await clearEarlier(folder, absent, settings);
+  if (removed.length > 0)
+    io.stderr.write(
+      `removed from ${printable(out)}, as of an earlier spread with other settings: ${removed.join(', ')}\n`,
+    );
+  if (unfinished.length > 0)
+    io.stderr.write(`${unfinished.join(', ')} in ${printable(out)}: rows of this spread, to go on with by --resume\n`);
 }
 
 function tellFailures({ failed }: SpreadReport, draws: number, { failedPath }: TableFiles, io: Io): number {

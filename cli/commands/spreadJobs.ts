@@ -4,12 +4,19 @@ import { furtherRuns } from '../../sim/studies/spread/indexDesign.ts';
 import type { SpreadPlan } from '../../sim/studies/spread/plan.ts';
 import { bandColumnName } from '../../sim/studies/spread/summariseSpread.ts';
 import type { Column, Job } from '../engine/job.ts';
+import type { Held } from '../engine/room.ts';
 import type { SpreadContext } from './spreadContext.ts';
 
+/** All that a spread may write. */
+export const spreadTables = ['draws', 'bands', 'indices'] as const;
+
 export interface SpreadJob {
-  readonly table: 'draws' | 'bands' | 'indices';
+  readonly table: (typeof spreadTables)[number];
   readonly job: Job;
 }
+
+/** `summariseSpread` reads a column at a time: its values, the same unwrapped, the periods, scratch, and one or two that wait to be cleared. */
+export const heldBySpread: Held = { columns: 6, heapANumber: 0, textANumber: 0 };
 
 /** Draws that become curves: a year of many latitudes takes long, and shows its spread in fewer. */
 const mostBands = 4096;

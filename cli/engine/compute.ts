@@ -4,12 +4,15 @@ import { Interrupted } from '../exit.ts';
 import type { Io } from '../io.ts';
 import { commandLine } from '../output/history.ts';
 import type { Phase } from '../output/phases.ts';
-import { grouped, type RowProgress, showProgress } from '../output/progressBar.ts';
+import { grouped, showProgress } from '../output/progressBar.ts';
 import { writingFault } from '../output/writingFault.ts';
+import { arrivalsOf } from './arrivals.ts';
 import { type Interruption, listen } from './interruption.ts';
-import { columnsOf, fingerprintOf, type Job, type Kinds, type Range, recordOf } from './job.ts';
-import { countRows, missing, planChunks, type Shard, shardRange } from './plan.ts';
-import { inThisThread, type Pool, threads } from './pool.ts';
+import { columnsOf, fingerprintOf, type Job, type Kinds, recordOf } from './job.ts';
+import { type LanesWork, runLanes } from './lanes.ts';
+import { countRows, missing, type Shard, shardRange } from './plan.ts';
+import { type Pool, poolOf } from './pool.ts';
+import { requireDisk } from './room.ts';
 import { findStore, openStore, type Store, workFolder } from './store.ts';
 import { finishedTable, type TableFiles, writeTable } from './table.ts';
 
@@ -20,7 +23,6 @@ export interface ComputeOptions {
   readonly folder: string;
   readonly shard: Shard | null;
   readonly resume: boolean;
-  readonly workers: number;
   readonly quiet: boolean;
   /** Where the table is one of several. */
   readonly phase?: Phase | undefined;
@@ -38,16 +40,44 @@ export interface Computed {
   discardWork(): Promise<void>;
 }
 
-/** How many chunks are under way: while one is written, a worker computes another; alone, a thread can do but one thing. */
-function lanesFor(workers: number): number {
-  return workers === 1 ? 1 : 2 * workers;
+/** What a table is computed with. */
+interface Run {
+  readonly options: ComputeOptions;
+  readonly io: EngineIo;
+  readonly pool: Pool;
+  readonly interruption: Interruption;
+}
+
+/** Calls `work` with a pool for all the tables of a command (`poolOf`), and lets the threads go when it has ended. */
+export async function withPool<T>(
+  workers: number | null,
+  kinds: Kinds,
+  io: Pick<Io, 'worker'>,
+  work: (pool: Pool) => Promise<T>,
+): Promise<T> {
+  const pool = poolOf(workers, kinds, io.worker);
+  try {
+    return await work(pool);
+  } finally {
+    await pool.close();
+  }
+}
+
+/** `computeInPool` for a command with one table. */
+export async function computeTable(
+  job: Job,
+  options: ComputeOptions & { readonly workers: number | null },
+  kinds: Kinds,
+  io: EngineIo,
+): Promise<Computed> {
+  return withPool(options.workers, kinds, io, (pool) => computeInPool(job, options, pool, io));
 }
 
 /**
  * Computes the rows of `job` that are not there yet, and writes the table. The bytes depend on the job alone.
  * Errors: SimError when the folder cannot be written, or holds other rows; Interrupted after a signal. What is finished stays.
  */
-export async function computeTable(job: Job, options: ComputeOptions, kinds: Kinds, io: EngineIo): Promise<Computed> {
+export async function computeInPool(job: Job, options: ComputeOptions, pool: Pool, io: EngineIo): Promise<Computed> {
   requireSound(job, options.shard);
   const folder = workFolder(options.folder, options.table);
   const say = (text: string) => {
@@ -58,19 +88,19 @@ export async function computeTable(job: Job, options: ComputeOptions, kinds: Kin
       const files = await finishedTable(options.folder, options.table, recordOf(job));
       if (files !== null) return computed(files, folder, leftOver(folder, job));
     }
-    const store = await openStore(folder, manifestOf(job, options), options.resume);
+    const manifest = manifestOf(job, options);
+    const missingRows = countRows([manifest.range]) - countRows(findStore(folder)?.chunks() ?? []);
+    const warning = await requireDisk(options.folder, { missingRows, job, isTable: options.shard === null });
+    if (warning !== null) say(`warning: ${warning}`);
+    const store = await openStore(folder, manifest, options.resume);
     const found = countRows(store.chunks());
     if (found > 0) say(`${options.table}: going on with ${grouped(found)} finished rows`);
     const interruption = listen(io.signals, () =>
       say(`${io.stderrIsTTY ? '\n' : ''}Stopping: what is running is finished first. Another signal stops it at once.`),
     );
     try {
-      await fillStore(job, store, options, kinds, io, interruption);
-      if (options.shard !== null) return computed(null, folder, null);
-      const pieces = store.chunks().map((range) => ({ ...range, read: () => store.read(range) }));
-      const target = { folder: options.folder, table: options.table, job: recordOf(job) };
-      const files = await writeTable(target, pieces, () => requireGoing(interruption, store, options));
-      return computed(files, folder, store);
+      const files = await fillAndWrite(job, store, { options, io, pool, interruption });
+      return computed(files, folder, files === null ? null : store);
     } finally {
       interruption.off();
     }
@@ -104,13 +134,32 @@ function manifestOf(job: Job, { table, shard }: ComputeOptions) {
   return { table, job: recordOf(job), fingerprint: fingerprintOf(recordOf(job)), range, shard };
 }
 
+/** Computes what is missing, and writes the table meanwhile; null for a shard. */
+async function fillAndWrite(job: Job, store: Store, run: Run): Promise<TableFiles | null> {
+  const { options, interruption } = run;
+  const arrivals = arrivalsOf(store);
+  const target = { folder: options.folder, table: options.table, job: recordOf(job) };
+  let stopped = false;
+  const writing =
+    options.shard === null ? writeTable(target, arrivals, () => requireGoing(interruption, store, options)) : null;
+  writing?.catch(() => {
+    stopped = true; // told below
+  });
+  try {
+    await fillStore(job, store, run, { landed: arrivals.landed, stopped: () => stopped });
+  } catch (error) {
+    arrivals.fail(error);
+    await writing?.catch(() => undefined); // it leaves nothing of its own
+    throw error;
+  }
+  return writing;
+}
+
 async function fillStore(
   job: Job,
   store: Store,
-  options: ComputeOptions,
-  kinds: Kinds,
-  io: EngineIo,
-  interruption: Interruption,
+  { options, io, pool, interruption }: Run,
+  others: Pick<LanesWork, 'landed' | 'stopped'>,
 ): Promise<void> {
   const whole = store.manifest.range;
   const gaps = missing(whole, store.chunks());
@@ -121,46 +170,12 @@ async function fillStore(
     { label: options.table, total, already, quiet: options.quiet, phase: options.phase },
     io,
   );
-  const workers = Math.min(options.workers, countRows(gaps));
-  const pool = workers === 1 ? await inThisThread(job, kinds) : threads(job, workers, io.worker);
   try {
-    await runLanes(pool, store, gaps, workers, progress, interruption);
+    await runLanes({ job, gaps, store, pool, progress, interruption, ...others });
   } finally {
     progress.clear();
-    await pool.close();
   }
   requireGoing(interruption, store, options);
-}
-
-/** Each lane takes a chunk, has it computed, writes it; all end when nothing is left, one fails, or a signal came. */
-async function runLanes(
-  pool: Pool,
-  store: Store,
-  gaps: readonly Range[],
-  workers: number,
-  progress: RowProgress,
-  interruption: Interruption,
-): Promise<void> {
-  const plan = planChunks(gaps, workers);
-  let failed = false;
-  const lane = async () => {
-    while (!interruption.requested && !failed) {
-      const range = plan.next();
-      if (range === null) return;
-      try {
-        const chunk = await pool.compute(range);
-        plan.took(range, chunk.seconds);
-        await store.land(chunk);
-        progress.landed(range.to - range.from);
-      } catch (error) {
-        failed = true;
-        throw error;
-      }
-    }
-  };
-  const ends = await Promise.allSettled(Array.from({ length: lanesFor(workers) }, lane));
-  const broken = ends.find((end) => end.status === 'rejected');
-  if (broken !== undefined) throw broken.reason;
 }
 
 /** Errors: Interrupted, saying what is kept and how to go on, when a signal has come and something is left to do. */
@@ -174,10 +189,20 @@ function resumeLine(words: readonly string[]): string {
   return commandLine(words.includes('--resume') ? words : [...words, '--resume']);
 }
 
+/** Says that something is kept only where something is. */
 async function attempt<T>(folder: string, { words }: ComputeOptions, work: () => Promise<T>): Promise<T> {
   try {
     return await work();
   } catch (error) {
+    if (!hasRows(folder)) throw writingFault(folder, error);
     throw writingFault(folder, error, `What is finished stays there. When this is mended, go on: ${resumeLine(words)}`);
+  }
+}
+
+function hasRows(folder: string): boolean {
+  try {
+    return (findStore(folder)?.chunks().length ?? 0) > 0;
+  } catch {
+    return false; // it cannot even be read
   }
 }

@@ -5,7 +5,7 @@ import type { JobRecord, Range } from './job.ts';
 import { differences, shardWords } from './manifest.ts';
 import { missing } from './plan.ts';
 import { findStore, type Store, workFolder } from './store.ts';
-import { type Piece, type TableFiles, writeTable } from './table.ts';
+import { type Piece, sourceOf, type TableFiles, writeTable } from './table.ts';
 
 export interface Gathered {
   readonly files: TableFiles;
@@ -26,11 +26,12 @@ export async function gatherTable(
   const stores = folders.map((folder) => requireStore(folder, table));
   const [first, ...others] = stores as [Store, ...Store[]];
   for (const store of others) refuseMixture(first, store);
+  refuseDivisions(stores);
   refuseOverlaps(stores);
   refuseGaps(stores);
   const { job } = first.manifest;
   try {
-    return { files: await writeTable({ folder: out, table, job }, piecesOf(stores), checkpoint), job };
+    return { files: await writeTable({ folder: out, table, job }, sourceOf(piecesOf(stores)), checkpoint), job };
   } catch (error) {
     throw writingFault(out, error);
   }
@@ -47,6 +48,20 @@ function refuseMixture(first: Store, other: Store): void {
   if (found.length === 0) return;
   const both = `${first.folder} and ${other.folder}`;
   throw new SimError(both, `these are parts of different runs (${found.join('; ')})`, 'Gather the shards of one run');
+}
+
+/** Shards of 3/64 and of 5/32 overlap in some rows and miss others: what is wrong is the division. */
+function refuseDivisions(stores: readonly Store[]): void {
+  const [first, ...others] = stores as [Store, ...Store[]];
+  const countOf = ({ manifest }: Store) => manifest.shard?.count ?? null;
+  const other = others.find((store) => countOf(store) !== countOf(first));
+  if (other === undefined) return;
+  const words = ({ manifest, folder }: Store) => `${shardWords(manifest.shard)} is in ${folder}`;
+  throw new SimError(
+    `${first.folder} and ${other.folder}`,
+    `these are parts of different divisions (${words(first)}, ${words(other)})`,
+    'Gather the shards of one division, e.g. 1/64 to 64/64',
+  );
 }
 
 function piecesOf(stores: readonly Store[]): readonly Piece[] {

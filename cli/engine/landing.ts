@@ -1,12 +1,16 @@
 /** Files appear whole or not at all, also when the process is killed or the power fails: written beside, synced, renamed. */
+import { closeSync, fsync, openSync, renameSync, writeSync } from 'node:fs';
 import { open, readdir, rename, rm } from 'node:fs/promises';
 import { hostname } from 'node:os';
 import { join } from 'node:path';
+import { promisify } from 'node:util';
 import { isAlive } from '../output/folder.ts';
+
+const fsyncFile = promisify(fsync);
 
 /** `write` makes the file under another name; it stands at `path` only when all of it is on the disk. */
 export async function land<T>(path: string, write: (temporary: string) => Promise<T>): Promise<T> {
-  const temporary = `${path}.${hostname()}-${process.pid}.tmp`;
+  const temporary = temporaryName(path);
   try {
     const result = await write(temporary);
     await sync(temporary);
@@ -18,16 +22,33 @@ export async function land<T>(path: string, write: (temporary: string) => Promis
   }
 }
 
-/** These bytes, one piece after the other. */
+/**
+ * These bytes, one piece after the other. All but the waiting for the disk happens at once: a thread that computes, too, comes
+ * round to it seldom.
+ */
 export async function landBytes(path: string, pieces: readonly Uint8Array[]): Promise<void> {
-  await land(path, async (temporary) => {
-    const file = await open(temporary, 'w');
+  const temporary = temporaryName(path);
+  try {
+    const file = openSync(temporary, 'w');
     try {
-      for (const piece of pieces) await file.writeFile(piece);
+      for (const piece of pieces) writeAll(file, piece);
+      await fsyncFile(file);
     } finally {
-      await file.close();
+      closeSync(file);
     }
-  });
+    renameSync(temporary, path);
+  } catch (error) {
+    await rm(temporary, { force: true });
+    throw error;
+  }
+}
+
+function writeAll(file: number, bytes: Uint8Array): void {
+  for (let at = 0; at < bytes.length; ) at += writeSync(file, bytes, at);
+}
+
+function temporaryName(path: string): string {
+  return `${path}.${hostname()}-${process.pid}.tmp`;
 }
 
 async function sync(path: string): Promise<void> {

@@ -61,8 +61,8 @@ export function differences(
 
 /** In which settings two jobs differ, whatever they compute from them: the tables of one run have the same. */
 export function settingsApart(
-  first: JobRecord,
-  second: JobRecord,
+  first: Pick<JobRecord, 'settings'>,
+  second: Pick<JobRecord, 'settings'>,
   words: readonly [string, string],
 ): readonly string[] {
   const names = [...new Set([...Object.keys(first.settings), ...Object.keys(second.settings)])];

@@ -35,10 +35,12 @@ export function countRows(ranges: readonly Range[]): number {
 }
 
 export interface Plan {
-  /** The next chunk, or null when all are given out. Never over the edge of a row group. */
-  next(): Range | null;
+  /** The next chunk, or null when all are given out. Never over the edge of a row group. `share` of the time wished for. */
+  next(share?: number): Range | null;
   /** How long some rows took: the next chunks are measured by it. */
   took(range: Range, seconds: number): void;
+  /** How long what is not given out would take one worker, by the last chunk; Infinity before the first. */
+  secondsLeft(): number;
 }
 
 /** A first chunk of one row, then up to eight times as many as were seen to go well, towards the time wished for. */
@@ -47,18 +49,18 @@ export function planChunks(gaps: readonly Range[], workers: number): Plan {
   let left = countRows(gaps);
   let seen = 0;
   let secondsPerRow = Infinity;
-  const size = () => {
+  const size = (share: number) => {
     if (seen === 0) return 1;
-    const wished = wishedSeconds / secondsPerRow;
+    const wished = (share * wishedSeconds) / secondsPerRow;
     const fair = Math.max(left / (2 * workers), leastSeconds / secondsPerRow);
     return Math.max(1, Math.floor(Math.min(growth * seen, wished, fair, groupRows)));
   };
   return {
-    next: () => {
+    next: (share = 1) => {
       const gap = queue[0];
       if (gap === undefined) return null;
       const { from } = gap;
-      const to = Math.min(from + size(), gap.to, (Math.floor(from / groupRows) + 1) * groupRows);
+      const to = Math.min(from + size(share), gap.to, (Math.floor(from / groupRows) + 1) * groupRows);
       left -= to - from;
       gap.from = to;
       if (gap.from === gap.to) queue.shift();
@@ -68,5 +70,6 @@ export function planChunks(gaps: readonly Range[], workers: number): Plan {
       seen = Math.max(seen, to - from);
       secondsPerRow = Math.max(seconds, 1e-9) / (to - from);
     },
+    secondsLeft: () => (left === 0 ? 0 : left * secondsPerRow),
   };
 }

@@ -1,16 +1,14 @@
-/** The worker's side: takes a job's setup once, then ranges of rows, and answers with their numbers. */
-import { parentPort, workerData } from 'node:worker_threads';
+/** The worker's side: is told of setups and jobs, then of ranges of rows, and answers with their numbers. */
+import { parentPort } from 'node:worker_threads';
 import { SimError } from '../../sim/error.ts';
 import { type Chunk, computeChunk } from './chunk.ts';
-import { calculateOf, type Kinds, type Range } from './job.ts';
+import { type Calculate, calculateOf, type Kinds, type Range } from './job.ts';
 
-/** What crosses to a worker when it starts. */
-export interface WorkerData {
-  readonly kind: string;
-  readonly setup: unknown;
-  /** Of the columns. */
-  readonly names: readonly string[];
-}
+/** What crosses to a worker. Jobs and setups have numbers, so that those which several jobs share cross once. */
+export type Order =
+  | { readonly setup: number; readonly data: unknown }
+  | { readonly job: number; readonly kind: string; readonly names: readonly string[]; readonly setup: number }
+  | { readonly ticket: number; readonly job: number; readonly range: Range };
 
 /** An error, as it crosses between threads; `mend` only of a SimError. */
 export interface Fault {
@@ -19,23 +17,40 @@ export interface Fault {
   readonly parts: { readonly where: string; readonly what: string; readonly mend: string } | null;
 }
 
-export type Answer = { readonly chunk: Chunk } | { readonly fault: Fault };
+export type Answer = { readonly ticket: number } & ({ readonly chunk: Chunk } | { readonly fault: Fault });
+
+interface Known {
+  readonly calculate: Promise<Calculate>;
+  /** Of the columns. */
+  readonly names: readonly string[];
+}
 
 /** Answers this thread's owner until it lets go. */
-export async function serve(kinds: Kinds): Promise<void> {
+export function serve(kinds: Kinds): void {
   const port = parentPort!;
-  const { kind, setup, names } = workerData as WorkerData;
-  const calculate = calculateOf({ kind, setup }, kinds);
-  calculate.catch(() => undefined); // told with the first answer
-  port.on('message', async (range: Range) => {
-    try {
-      const chunk = computeChunk(await calculate, range, names);
-      const buffers = chunk.columns.map(({ buffer }) => buffer as ArrayBuffer);
-      port.postMessage({ chunk } satisfies Answer, [...new Set(buffers)]);
-    } catch (error) {
-      port.postMessage({ fault: faultOf(error) } satisfies Answer);
+  const setups = new Map<number, unknown>();
+  const jobs = new Map<number, Known>();
+  port.on('message', async (order: Order) => {
+    if ('data' in order) setups.set(order.setup, order.data);
+    else if ('kind' in order) jobs.set(order.job, knownOf(order.kind, setups.get(order.setup), order.names, kinds));
+    else {
+      const { ticket, job, range } = order;
+      try {
+        const { calculate, names } = jobs.get(job)!;
+        const chunk = computeChunk(await calculate, range, names);
+        const buffers = chunk.columns.map(({ buffer }) => buffer as ArrayBuffer);
+        port.postMessage({ ticket, chunk } satisfies Answer, [...new Set(buffers)]);
+      } catch (error) {
+        port.postMessage({ ticket, fault: faultOf(error) } satisfies Answer);
+      }
     }
   });
+}
+
+function knownOf(kind: string, setup: unknown, names: readonly string[], kinds: Kinds): Known {
+  const calculate = calculateOf({ kind, setup }, kinds);
+  calculate.catch(() => undefined); // told with the first answer
+  return { calculate, names };
 }
 
 function faultOf(error: unknown): Fault {

@@ -22,12 +22,36 @@ export interface Piece extends Range {
   read(): Rows;
 }
 
+/** Where the rows of a table come from, a row group at a time and in order. */
+export interface Source {
+  /** Pieces that cover a row group once, as soon as all are there. Errors: when they will never be. */
+  group(range: Range): Promise<readonly Piece[]>;
+}
+
+/** Of pieces that cover all rows once, none of them over the edge of a row group. */
+export function sourceOf(pieces: readonly Piece[]): Source {
+  const sorted = pieces.toSorted((a, b) => a.from - b.from);
+  let next = 0;
+  return {
+    group: async ({ to }) => {
+      const start = next;
+      while (next < sorted.length && sorted[next]!.from < to) next++;
+      return sorted.slice(start, next);
+    },
+  };
+}
+
 export interface TableFiles {
   readonly path: string;
   readonly rows: number;
   readonly failed: number;
   /** Where the failed draws are listed; null when none failed. */
   readonly failedPath: string | null;
+}
+
+/** What a row of a table is called where rows are listed: a draw, or a node of a grid. */
+function rowName(table: string): string {
+  return table === 'grid' ? 'node' : 'draw';
 }
 
 /** `failed.csv` for the draws themselves, `failed-indices.csv` for a table `indices`. */
@@ -37,23 +61,22 @@ export function tablePaths(folder: string, table: string): { readonly path: stri
 }
 
 /**
- * Writes the files of a table from pieces that cover all its rows once, none of them over the edge of a row group. Holds one
- * group at a time. `checkpoint` is called between groups, and may throw. The Parquet file comes last: where it stands, all is done.
+ * Writes the files of a table, a row group as soon as it is there. Holds one group at a time. `checkpoint` is called between
+ * groups, and may throw. The Parquet file comes last: where it stands, all is done.
  */
 export async function writeTable(
   { folder, table, job }: { readonly folder: string; readonly table: string; readonly job: JobRecord },
-  pieces: readonly Piece[],
+  source: Source,
   checkpoint: () => void,
 ): Promise<TableFiles> {
   const { createParquet } = await import('../output/parquet.ts');
   const { path, failedPath } = tablePaths(folder, table);
-  const sorted = pieces.toSorted((a, b) => a.from - b.from);
   await makeFolder(folder);
   await removeAbandoned(folder);
   return land(path, async (temporary) => {
     const file = createParquet(temporary, columnsOf(job));
     try {
-      const failed = await land(failedPath, (list) => fill(file.append, list, job, sorted, checkpoint));
+      const failed = await land(failedPath, (list) => fill(file.append, list, { ...job, table }, source, checkpoint));
       if (failed === 0) await rm(failedPath);
       file.finish({ settings: JSON.stringify(job.settings), fingerprint: fingerprintOf(job), failed: String(failed) });
       return { path, rows: job.rows, failed, failedPath: failed === 0 ? null : failedPath };
@@ -80,18 +103,19 @@ export async function finishedTable(folder: string, table: string, job: JobRecor
 async function fill(
   append: (from: number, columns: readonly Float64Array[]) => void,
   listPath: string,
-  job: JobRecord,
-  pieces: readonly Piece[],
+  job: JobRecord & { readonly table: string },
+  source: Source,
   checkpoint: () => void,
 ): Promise<number> {
   const list = openSync(listPath, 'w');
   let failed = 0;
-  let next = 0;
   try {
-    writeText(list, failedHeader(job.inputs));
+    writeText(list, failedHeader(rowName(job.table), job.inputs));
     for (let from = 0; from < job.rows; from += groupRows) {
-      const group = emptyGroup(from, Math.min(groupRows, job.rows - from), columnsOf(job).length);
-      while (next < pieces.length && pieces[next]!.from < from + groupRows) copyInto(group, pieces[next++]!);
+      const to = Math.min(from + groupRows, job.rows);
+      const pieces = await source.group({ from, to });
+      const group = emptyGroup(from, to - from, columnsOf(job).length);
+      for (const piece of pieces) copyInto(group, piece);
       append(from, group.columns);
       writeText(list, group.failures.map((failure) => failedLine(failure, group, job.inputs.length)).join(''));
       failed += group.failures.length;
@@ -120,8 +144,8 @@ function copyInto({ from, columns, failures }: Group, piece: Piece): void {
   failures.push(...rows.failures);
 }
 
-function failedHeader(inputs: readonly Column[]): string {
-  return `${['draw', ...inputs.map(({ name, unit }) => csvHeader(name, unit)), 'message'].map(csvField).join(',')}\n`;
+function failedHeader(row: string, inputs: readonly Column[]): string {
+  return `${[row, ...inputs.map(({ name, unit }) => csvHeader(name, unit)), 'message'].map(csvField).join(',')}\n`;
 }
 
 /** An input that could not even be drawn is empty. */

@@ -2,4 +2,4 @@
 import { kinds } from './kinds.ts';
 import { serve } from './serve.ts';
 
-void serve(kinds);
+serve(kinds);

@@ -21,7 +21,6 @@ import { cfUnit } from './cfUnit.ts';
 import { isForward } from './columns.ts';
 import { groupNames } from './groupNames.ts';
 import type { NetcdfAttributes, NetcdfFile, NetcdfGroup, NetcdfVariable } from './netcdf.ts';
-import { scenarioYamlText } from './scenarioYaml.ts';
 
 /** Is there anything for `fields.nc`: a variable on more than time? */
 export function hasFields({ cases }: RunResult): boolean {
@@ -30,7 +29,7 @@ export function hasFields({ cases }: RunResult): boolean {
 }
 
 /** `history` is when and how the file was made, which only the caller knows. */
-export function fieldsFile(result: RunResult, scenario: Scenario, history: string): NetcdfFile {
+export function fieldsFile(result: RunResult, scenario: Scenario, scenarioYaml: string, history: string): NetcdfFile {
   const names = groupNames(result.cases.map(({ name }) => name));
   const groups = result.cases.map((item, index) => {
     return [names[index]!, caseGroup(item, scenario.cases[index]!.world.orbit.periapsisTime)] as const;
@@ -42,7 +41,7 @@ export function fieldsFile(result: RunResult, scenario: Scenario, history: strin
       history,
       source: `${result.program.name} ${result.program.version}`,
       groups: groups.flatMap(([name, group]) => Object.keys(group.groups).map((state) => `${name}/${state}`)).join(' '),
-      scenario: scenarioYamlText(scenario),
+      scenario: scenarioYaml,
     },
     dimensions: {},
     variables: {},

@@ -1,5 +1,5 @@
 /** Files of samples: CSV and Parquet read to the last bit, and what is wrong with one told by file, row and column. */
-import { mkdirSync } from 'node:fs';
+import { mkdirSync, readFileSync } from 'node:fs';
 import { gzipSync } from 'node:zlib';
 import { parquetWriteBuffer } from 'hyparquet-writer';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
@@ -8,7 +8,7 @@ import { readSamples, samplesFrom } from '../../cli/posteriorFile.ts';
 import { readScenarioFile } from '../../cli/scenarioFile.ts';
 import { secondsPerDay } from '../../sim/constants.ts';
 import type { Posterior } from '../../sim/scenario/posterior.ts';
-import { type Workplace, workplace } from './support.ts';
+import { type Workplace, workplace, zonalText } from './support.ts';
 
 let here: Workplace;
 beforeAll(() => {
@@ -260,4 +260,16 @@ posterior: { file: chain one.csv, columns: { ecc: orbit.eccentricity } }
   const samples = await readSamples(again.scenario.posterior!, again.file, here.folder);
   expect(samples.values.get('orbit.eccentricity')).toEqual(Float64Array.of(0.6, 0.61));
   expect(samplesFrom(here.path('in'), again, here.folder)).toBe('chain one.csv');
+});
+
+test('the scenario inside fields.nc names the samples from where it lies', async () => {
+  mkdirSync(here.path('in'), { recursive: true });
+  here.write(
+    'in/z.yaml',
+    `${zonalText}posterior: { file: chain.csv, columns: { tilt: { key: planet.obliquity, unit: deg } } }\n`,
+  );
+  const { code } = await here.perilag('run', 'in/z.yaml', '-o', 'results/deep', '--quiet');
+  expect(code).toBe(0);
+  // An attribute of text lies in the file as it is.
+  expect(readFileSync(here.path('results/deep/fields.nc')).includes('file: ../../in/chain.csv')).toBe(true);
 });

@@ -19,14 +19,14 @@ export function drawsCalculator(setup: SpreadSetup): CalculateRows {
   return (from, to) => {
     const table = emptyTable(plan, to - from);
     const failed = failureList(plan);
-    const { values } = drawnValues(plan, from, to);
+    const drawn = drawnInputs(plan, from, to);
     for (let row = 0; row < to - from; row++) {
-      for (const [c, inputs] of values.entries()) {
-        const message = solve[c](inputs[row], table.findings[c], row);
+      for (let c = 0; c < solve.length; c++) {
+        const message = solve[c](drawn.values(c, row), table.findings[c], row);
         if (message !== null) failed.add(from + row, c, message);
       }
     }
-    fillInputs(plan, values, table.inputs);
+    fillInputs(plan, drawn.columns, table.inputs);
     return { columns: [...table.inputs, ...table.findings.flat()], failures: failed.list() };
   };
 }
@@ -39,24 +39,23 @@ export function indicesCalculator(setup: SpreadSetup): CalculateRows {
   const plan = planSpread(setup);
   const solve = plan.cases.map(({ drawn, batch }) => rowSolver(drawn, batch));
   const count = plan.dimensions.length;
+  const matrices = designMatrices(plan);
   return (from, to) => {
     const table = emptyTable(plan, to - from);
     const failed = failureList(plan);
-    const values = plan.cases.map((): Float64Array[] => []);
+    const columns = plan.cases.map(({ inputs }) => inputs.map(() => new Float64Array(to - from)));
     for (let run = from; run < to; run++) {
       const { row, changed } = designPlace(run, count);
+      matrices.turnTo(row);
       for (const [c, { inputs }] of plan.cases.entries()) {
-        const drawn = Float64Array.from(inputs, ({ dimension, at }) => {
-          const isFromB = changed === 'all' || changed === dimension;
-          return at(plan.draws.at(row, isFromB ? count + dimension : dimension));
-        });
-        values[c].push(drawn);
+        const values = matrices.values(c, changed);
+        for (let i = 0; i < values.length; i++) columns[c][i][run - from] = values[i];
         const isRunOfA = changed !== 'all' && inputs.every(({ dimension }) => dimension !== changed);
-        const message = isRunOfA ? null : solve[c](drawn, table.findings[c], run - from);
+        const message = isRunOfA ? null : solve[c](values, table.findings[c], run - from);
         if (message !== null) failed.add(run, c, message);
       }
     }
-    fillInputs(plan, values, table.inputs);
+    fillInputs(plan, columns, table.inputs);
     return { columns: [...table.inputs, ...table.findings.flat()], failures: failed.list() };
   };
 }
@@ -73,11 +72,11 @@ export function bandsCalculator(setup: SpreadSetup): CalculateRows {
   return (from, to) => {
     const columns = samplers.map((sampler) => sampler.columns.map(() => new Float64Array(to - from).fill(Number.NaN)));
     const failed = failureList(plan);
-    const { values } = drawnValues(plan, from, to);
+    const drawn = drawnInputs(plan, from, to);
     for (let row = 0; row < to - from; row++) {
       for (const [c, sampler] of samplers.entries()) {
         if (sampler.columns.length === 0) continue;
-        const curve = caught(() => sampler.at(values[c][row]));
+        const curve = caught(() => sampler.at(drawn.values(c, row)));
         const isInfinite = typeof curve !== 'string' && infinityIn(curve) >= 0;
         const found = isInfinite ? notFinite('the temperature') : curve;
         if (typeof found === 'string') failed.add(from + row, c, found);
@@ -88,19 +87,53 @@ export function bandsCalculator(setup: SpreadSetup): CalculateRows {
   };
 }
 
-/** SI values of every case's inputs for draws from … to − 1. */
-function drawnValues({ cases, draws, dimensions }: SpreadPlan, from: number, to: number) {
+/** SI values of every case's inputs for draws from … to − 1: by column, and those of one draw, in scratch of their own. */
+function drawnInputs({ cases, draws, dimensions }: SpreadPlan, from: number, to: number) {
   const shares = dimensions.map((_, dimension) => {
     const column = new Float64Array(to - from);
     draws.fillInto(dimension, from, column);
     return column;
   });
-  const values = cases.map(({ inputs }) =>
-    Array.from({ length: to - from }, (_, row) => {
-      return Float64Array.from(inputs, ({ dimension, at }) => at(shares[dimension][row]));
-    }),
+  const columns = cases.map(({ inputs }) =>
+    inputs.map(({ dimension, at }) => shares[dimension].map((share) => at(share))),
   );
-  return { values };
+  const scratch = cases.map(({ inputs }) => new Float64Array(inputs.length));
+  return {
+    columns,
+    values(c: number, row: number): Float64Array {
+      const values = scratch[c];
+      for (let i = 0; i < values.length; i++) values[i] = columns[c][i][row];
+      return values;
+    },
+  };
+}
+
+/** SI values of every case's inputs in one row of the design, which many runs share. */
+function designMatrices({ cases, draws, dimensions }: SpreadPlan) {
+  const inputsOf = () => cases.map(({ inputs }) => new Float64Array(inputs.length));
+  const [a, b, mixed] = [inputsOf(), inputsOf(), inputsOf()];
+  let current = -1;
+  return {
+    turnTo(row: number): void {
+      if (row === current) return;
+      current = row;
+      for (const [c, { inputs }] of cases.entries()) {
+        for (const [i, { dimension, at }] of inputs.entries()) {
+          a[c][i] = at(draws.at(row, dimension));
+          b[c][i] = at(draws.at(row, dimensions.length + dimension));
+        }
+      }
+    },
+    /** A with what is changed from B; in scratch. */
+    values(c: number, changed: number | 'all'): Float64Array {
+      const { inputs } = cases[c];
+      for (let i = 0; i < inputs.length; i++) {
+        const isFromB = changed === 'all' || changed === inputs[i].dimension;
+        mixed[c][i] = isFromB ? b[c][i] : a[c][i];
+      }
+      return mixed[c];
+    },
+  };
 }
 
 function emptyTable({ cases, inputColumns }: SpreadPlan, rows: number) {
@@ -110,13 +143,14 @@ function emptyTable({ cases, inputColumns }: SpreadPlan, rows: number) {
 
 function fillInputs(
   { cases, inputColumns }: SpreadPlan,
-  values: readonly (readonly Float64Array[])[],
+  columns: readonly (readonly Float64Array[])[],
   into: readonly Float64Array[],
 ): void {
   for (const [index, { of }] of inputColumns.entries()) {
     const { case: c, input } = of[0];
     const about = cases[c].inputs[input];
-    for (let row = 0; row < into[index].length; row++) into[index][row] = about.shown(values[c][row][input]);
+    const values = columns[c][input];
+    for (let row = 0; row < values.length; row++) into[index][row] = about.shown(values[row]);
   }
 }
 

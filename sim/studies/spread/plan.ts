@@ -75,8 +75,17 @@ export interface SpreadPlan {
 /** Dimension of the choice of a row, where there are samples. */
 export const rowDimension = 'posterior';
 
-/** Errors: as `casesDrawn`; SimError where nothing is uncertain, or a spread has nothing within its bounds. */
+/** Of setups that are in use: the tables of a spread share theirs. */
+const known = new WeakMap<SpreadSetup, SpreadPlan>();
+
+/** The same plan for the same setup. Errors: as `casesDrawn`; SimError where nothing is uncertain, or a spread has nothing within its bounds. */
 export function planSpread(setup: SpreadSetup): SpreadPlan {
+  const plan = known.get(setup) ?? newPlan(setup);
+  known.set(setup, plan);
+  return plan;
+}
+
+function newPlan(setup: SpreadSetup): SpreadPlan {
   const drawn = casesDrawn(setup.text, setup.file, setup.only ?? undefined);
   const keys = [
     ...new Set(drawn.flatMap(({ inputs }) => inputs.filter(({ column }) => column === null).map(({ key }) => key))),

@@ -6,7 +6,7 @@ import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { Worker } from 'node:worker_threads';
 import { afterEach, beforeEach, expect, test } from 'vitest';
-import type { Answer, WorkerData } from '../../../cli/engine/serve.ts';
+import type { Answer, Order } from '../../../cli/engine/serve.ts';
 import { threeCasesText } from '../support.ts';
 
 const dist = (name: string) => fileURLToPath(new URL(`../../../dist/${name}`, import.meta.url));
@@ -28,15 +28,22 @@ test('a run neither holds nor loads the Parquet library and the worker', () => {
 
 test('the worker starts from dist alone, and answers', async () => {
   copyFileSync(dist('worker.cjs'), join(home, 'worker.cjs'));
-  const workerData: WorkerData = { kind: 'nonesuch', setup: null, names: [] };
-  const worker = new Worker(join(home, 'worker.cjs'), { workerData });
+  const worker = new Worker(join(home, 'worker.cjs'));
+  const orders: Order[] = [
+    { setup: 0, data: null },
+    { job: 1, kind: 'nonesuch', names: [], setup: 0 },
+    { ticket: 7, job: 1, range: { from: 0, to: 1 } },
+  ];
   const answer = await new Promise<Answer>((resolve, reject) => {
     worker.on('message', resolve);
     worker.on('error', reject);
-    worker.postMessage({ from: 0, to: 1 });
+    for (const order of orders) worker.postMessage(order);
   });
   await worker.terminate();
-  expect(answer).toMatchObject({ fault: { message: 'no arithmetic is called "nonesuch": see cli/engine/kinds.ts' } });
+  expect(answer).toMatchObject({
+    ticket: 7,
+    fault: { message: 'no arithmetic is called "nonesuch": see cli/engine/kinds.ts' },
+  });
 });
 
 test('the Parquet library works from dist alone, and its licence is told', () => {

@@ -1,4 +1,4 @@
-import { existsSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, readdirSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { Interrupted } from '../../../cli/exit.ts';
 import { SimError } from '../../../sim/error.ts';
@@ -45,6 +45,12 @@ describe('computeTable', () => {
     expect(lines).toHaveLength(42);
     expect(lines[0]).toBe('draw,planet.bondAlbedo,message');
     expect(lines[2]).toBe(`1999,${hashed(1, 1999, 0)},"no world, ""1999"""`);
+  });
+
+  test('what failed of a grid is listed by its node', async () => {
+    const { files } = await place.compute(demoJob(10, { failEvery: 5 }), 'a', { table: 'grid' });
+    expect(files!.failedPath).toBe(place.path('a', 'failed-grid.csv'));
+    expect(readFileSync(files!.failedPath!, 'utf8')).toMatch(/^node,planet\.bondAlbedo,message\n4,/);
   });
 
   test('without failures there is no list of them, not even an old one', async () => {
@@ -99,14 +105,19 @@ describe('a signal', () => {
     expect(readdirSync(place.path('a'))).toEqual(['draws.work']);
   });
 
-  test('while the table is written: nothing of it is left, the rows are', async () => {
-    const large = demoJob(200_000, { failEvery: 1000 });
-    const watch = setInterval(() => {
+  test.each([1, 2])('while the table is written: nothing of it is left, the rows are (%i workers)', async (workers) => {
+    const large = demoJob(400_000, { failEvery: 1000, price: 2 });
+    const written = () => {
       const names = existsSync(place.path('a')) ? readdirSync(place.path('a')) : [];
-      if (names.some((name) => name.startsWith('draws.parquet.'))) place.signal();
-    }, 1);
-    await expect(place.compute(large, 'a')).rejects.toThrow('200,000 of 200,000 rows are kept');
-    clearInterval(watch);
+      const temporary = names.find((name) => name.startsWith('draws.parquet.'));
+      return temporary !== undefined && statSync(place.path('a', temporary)).size > 0;
+    };
+    const watch = setInterval(() => written() && place.signal(), 1);
+    try {
+      await expect(place.compute(large, 'a', { workers })).rejects.toThrow(/[\d,]{6,} of 400,000 rows are kept/);
+    } finally {
+      clearInterval(watch);
+    }
     expect(readdirSync(place.path('a'))).toEqual(['draws.work']);
   });
 });
@@ -200,13 +211,11 @@ describe('--resume', () => {
 });
 
 describe('a folder that cannot be written', () => {
-  test('is named, with how to go on', async () => {
+  test('is named; how to go on is said only where something is kept', async () => {
     writeFileSync(place.path('file'), 'precious');
     const run = place.compute(job, 'file');
     await expect(run).rejects.toBeInstanceOf(SimError);
-    await expect(run).rejects.toThrow(
-      /file\/draws\.work: .* go on: perilag spread 'a planet\.yaml' -o file --resume\.$/,
-    );
+    await expect(run).rejects.toThrow(/file\/draws\.work: .*\. Choose another folder with -o\.$/);
     expect(readFileSync(place.path('file'), 'utf8')).toBe('precious');
   });
 

@@ -2,4 +2,4 @@
 import { serve } from '../../../cli/engine/serve.ts';
 import { demoKinds } from './demo.ts';
 
-void serve(demoKinds);
+serve(demoKinds);

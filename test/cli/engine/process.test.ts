@@ -95,19 +95,37 @@ test('a file that may not grow: exit 2 with the folder’s name; with room it go
     expect(readFileSync(join(small, name)).equals(readFileSync(join(whole, name))), name).toBe(true);
 });
 
-/** A disk of 1 MB, where this user may mount one. */
-function smallDisk(): string | null {
+/** A disk of so many MB, where this user may mount one. */
+function smallDisk(size: number): string | null {
   const folder = join(home, 'disk');
   mkdirSync(folder);
-  return spawnSync('mount', ['-t', 'tmpfs', '-o', 'size=1m', 'tmpfs', folder]).status === 0 ? folder : null;
+  return spawnSync('mount', ['-t', 'tmpfs', '-o', `size=${size}m`, 'tmpfs', folder]).status === 0 ? folder : null;
 }
 
-test('a disk that is full: exit 2, what was finished stays', (context) => {
-  const disk = smallDisk();
+test('a disk too small for the rows: told before they are computed', (context) => {
+  const disk = smallDisk(1);
   if (disk === null) return context.skip('no right to mount a small disk here');
   try {
     const full = spawnSync(process.execPath, words(disk, '60000', '0', '1'), { cwd: root, encoding: 'utf8' });
     expect(full.status).toBe(2);
+    expect(full.stderr).toMatch(
+      /disk: 60,000 rows take 1\.92 MB of disk while they are computed, and 1\.05 MB are free there\. Make room,/,
+    );
+    expect(readdirSync(disk)).toEqual([]);
+  } finally {
+    spawnSync('umount', [disk]);
+  }
+});
+
+test('a disk that is full: warned of, exit 2, what was finished stays', (context) => {
+  const disk = smallDisk(3);
+  if (disk === null) return context.skip('no right to mount a small disk here');
+  try {
+    const full = spawnSync(process.execPath, words(disk, '60000', '0', '1'), { cwd: root, encoding: 'utf8' });
+    expect(full.status).toBe(2);
+    expect(full.stderr).toMatch(
+      /^warning: .*disk: rows and table together may take 3\.84 MB, and 3\.15 MB are free there\n/,
+    );
     expect(full.stderr).toContain('draws.work: the disk is full. What is finished stays there.');
     expect(chunks(disk).length).toBeGreaterThan(3);
   } finally {

@@ -10,6 +10,8 @@ import { demoKinds } from './demo.ts';
 
 export const demoWorker = fileURLToPath(new URL('demoWorker.mjs', import.meta.url));
 
+type EngineOptions = ComputeOptions & { readonly workers: number };
+
 export interface Bench {
   readonly home: string;
   path(...names: string[]): string;
@@ -20,7 +22,7 @@ export interface Bench {
   /** It comes now. */
   signal(): void;
   listeners(): number;
-  compute(job: Job, folder: string, options?: Partial<ComputeOptions>): Promise<Computed>;
+  compute(job: Job, folder: string, options?: Partial<EngineOptions>): Promise<Computed>;
   /** `draws.parquet` and `failed.csv`, as one text. */
   bytes(folder: string): string;
   remove(): void;

@@ -41,11 +41,11 @@ function zonalResult(): RunResult {
 /** Only what the fields need of a scenario; the first case has a date. */
 function zonalScenario(periapsisTime: number | null): Scenario {
   const cases = [periapsisTime, null].map((time) => ({ world: { orbit: { periapsisTime: time } } }));
-  return { asUnderstood, cases } as unknown as Scenario;
+  return { cases } as unknown as Scenario;
 }
 
 const zonalFile = (periapsisTime: number | null = null) =>
-  fieldsFile(zonalResult(), zonalScenario(periapsisTime), history);
+  fieldsFile(zonalResult(), zonalScenario(periapsisTime), asUnderstood, history);
 const warmOf = (file: NetcdfFile) => file.groups.Shallow_sea_5_m!.groups.warm!;
 
 describe('fieldsFile', () => {
@@ -137,7 +137,7 @@ describe('fieldsFile', () => {
     expect(warmOf(zonalFile(beyond)).variables.time!.attributes).toEqual(elapsed);
     const result = zonalResult();
     const forward = result.cases.map((item) => ({ ...item, states: [{ ...item.states[0]!, label: 'forward' }] }));
-    const file = fieldsFile({ ...result, cases: forward }, zonalScenario(seconds), history);
+    const file = fieldsFile({ ...result, cases: forward }, zonalScenario(seconds), asUnderstood, history);
     expect(file.groups.Shallow_sea_5_m!.groups.forward!.variables.time!.attributes).toEqual(elapsed);
   });
 
