@@ -1,6 +1,7 @@
 /** What every figure builder returns: plain JSON for Plotly and the words that stand with it. */
 import type { Data, Layout } from 'plotly.js-dist-min';
 import type { LegendLine } from './chartLine.ts';
+import type { FigureTable } from './figureTable.ts';
 import type { Theme } from './theme.ts';
 import type { View } from './view.ts';
 
@@ -16,6 +17,8 @@ export interface Figure {
   readonly lines: readonly LegendLine[];
   readonly data: Data[];
   readonly layout: Partial<Layout>;
+  /** The data for a file, where the traces do not tell it all, or tell it for the eye; made only when asked for. */
+  readonly table?: () => FigureTable;
 }
 
 /** How a figure is to be set. */

@@ -1,12 +1,13 @@
 /** A figure on the page: drawn by Plotly, redrawn as the surroundings change, saved on request. */
 import type { Config, Layout } from 'plotly.js-dist-min';
 import type { Figure, FigureStyle } from '../figures/figure.ts';
+import { figureCsv } from '../figures/figureCsv.ts';
 import { lightTheme } from '../figures/theme.ts';
 import type { View } from '../figures/view.ts';
 import { element } from './element.ts';
 import { lineSample } from './lineSample.ts';
 import { plotly } from './plotly.ts';
-import { saveFile } from './saveFile.ts';
+import { saveFile, saveText } from './saveFile.ts';
 import type { Setting } from './surroundings.ts';
 import { watchZoom } from './zoom.ts';
 
@@ -38,9 +39,10 @@ export function figureView(number: number, build: Build, controls: HTMLElement |
   const legend = element('ul', { class: 'legend' });
   const whole = button('Show all', () => show(null));
   whole.hidden = true;
-  const saving = (['svg', 'png'] as const).map((format) =>
-    button(`Save ${format.toUpperCase()}`, () => save(build, format)),
-  );
+  const saving = [
+    ...(['svg', 'png'] as const).map((format) => button(`Save ${format.toUpperCase()}`, () => save(build, format))),
+    button('Save CSV', () => saveNumbers(build)),
+  ];
   const tools = element('p', { class: 'tools' }, whole, ...saving);
   const words = element('figcaption', controls === null ? {} : { 'aria-live': 'polite' });
 
@@ -119,4 +121,9 @@ async function save(build: Build, format: 'svg' | 'png'): Promise<void> {
   const picture = { data, layout: { ...layout, ...size, paper_bgcolor: '#ffffff' } };
   const scale = format === 'png' ? pngScale : 1;
   saveFile(`${name}.${format}`, await plotly().toImage(picture, { format, ...size, scale }));
+}
+
+function saveNumbers(build: Build): void {
+  const figure = build(savedStyle);
+  saveText(`${figure.name}.csv`, 'text/csv', figureCsv(figure));
 }

@@ -3,7 +3,15 @@ import { element } from './element.ts';
 
 /** Content as a data URL, which is unpacked here: a page without network may not fetch even that. */
 export function saveFile(name: string, dataUrl: string): void {
-  const url = URL.createObjectURL(unpacked(dataUrl));
+  saveBlob(name, unpacked(dataUrl));
+}
+
+export function saveText(name: string, type: string, text: string): void {
+  saveBlob(name, new Blob([text], { type: `${type};charset=utf-8` }));
+}
+
+function saveBlob(name: string, content: Blob): void {
+  const url = URL.createObjectURL(content);
   element('a', { href: url, download: name }).click();
   setTimeout(() => URL.revokeObjectURL(url), 10_000);
 }
