@@ -49,6 +49,7 @@ describe.skipIf(!hasBrowser)('the report in Chromium', () => {
       'Corvane b under three ground assumptions',
       'The cases',
       'The two accounts',
+      'Numbers',
       'Inputs',
       'How it was computed',
       'What the numbers are not',

@@ -10,6 +10,7 @@ import { figureViews } from './sections/figures.ts';
 import { heading } from './sections/heading.ts';
 import { inputsSection } from './sections/inputs.ts';
 import { cautionsSection, footer, methodSection } from './sections/method.ts';
+import { numbersSection } from './sections/numbers.ts';
 
 export interface Page {
   readonly element: HTMLElement;
@@ -28,6 +29,7 @@ export function page(result: RunResult): Page {
     casesSection(result.cases, columns),
     ...figures.map((view) => view.element),
     accountsSection(result, columns),
+    numbersSection(result, columns),
     inputsSection(result.cases),
     methodSection(result),
     cautionsSection(result),
