@@ -6,6 +6,8 @@ import { planSpread } from '../../sim/studies/spread/plan.ts';
 import { gatherTable } from '../engine/gather.ts';
 import { settingsApart } from '../engine/manifest.ts';
 import { findStore, tablesIn, workFolder } from '../engine/store.ts';
+import { type FigureOptions, figureRequest } from '../figures/request.ts';
+import { writeFigures } from '../figures/write.ts';
 import type { Io } from '../io.ts';
 import { readSamples } from '../posteriorFile.ts';
 import type { ScenarioFile } from '../scenarioFile.ts';
@@ -15,7 +17,7 @@ import type { Program } from './run.ts';
 import type { SpreadContext } from './spreadContext.ts';
 import { finishSpread, type SpreadTableFiles } from './spreadFiles.ts';
 
-export interface GatherOptions {
+export interface GatherOptions extends FigureOptions {
   readonly out: string;
   readonly json?: boolean;
   readonly quiet?: boolean;
@@ -29,6 +31,7 @@ export async function gather(
   io: Io,
 ): Promise<number> {
   requireName(options.out, 'Name one, e.g. `-o results`');
+  const figures = figureRequest(options, io);
   const paths = folders.map((folder) => resolve(io.cwd, folder));
   const tables = tablesOf(paths[0]!, folders[0]!);
   refuseMixture(paths[0]!, tables, program);
@@ -49,7 +52,9 @@ export async function gather(
   const files = Object.fromEntries(
     gathered.map(({ table, files: made }) => [table, made]),
   ) as unknown as SpreadTableFiles;
-  return finishSpread({ plan, context, files, out: options.out, item }, options, io);
+  const code = await finishSpread({ plan, context, files, out: options.out, item }, options, io);
+  const figuresCode = await writeFigures([options.out], figures, options, io);
+  return code || figuresCode;
 }
 
 function tablesOf(path: string, named: string): readonly string[] {

@@ -184,7 +184,7 @@ function layoutOf(blocks: readonly Block[], kinds: ReadonlySet<string>, style: F
       visible: !isEmpty,
       range: rangeOf(blocks),
       tickformat: isRanks ? '' : '.0%',
-      nticks: narrow ? 5 : 11,
+      nticks: 6,
       gridcolor: theme.hairline,
       zeroline: true,
       zerolinecolor: theme.quiet,

@@ -2,9 +2,9 @@
 import type { Config, Layout } from 'plotly.js-dist-min';
 import type { Figure, FigureStyle } from '../figures/figure.ts';
 import { figureCsv } from '../figures/figureCsv.ts';
-import { lightTheme } from '../figures/theme.ts';
 import type { View } from '../figures/view.ts';
 import { element } from './element.ts';
+import { figurePicture, type Picture, type PictureFormat, type PictureSize, pictureStyle } from './figurePicture.ts';
 import { lineSample } from './lineSample.ts';
 import { plotly } from './plotly.ts';
 import { saveFile, saveText } from './saveFile.ts';
@@ -17,17 +17,16 @@ export interface FigureView {
   draw(setting: Setting): Promise<void>;
   /** Call when what `build` makes has changed: words and picture, the whole of it. */
   refresh(): Promise<void>;
+  /** For a file; it need not be drawn on the page. */
+  picture(format: PictureFormat, size: PictureSize): Promise<Picture>;
 }
 
 type Build = (style: FigureStyle) => Figure;
 
 /** A double click is answered by the page: Plotly would go back to the last view that it was given. */
 const config: Partial<Config> = { displayModeBar: false, doubleClick: false, showTips: false };
-/** For papers: light and wide whatever the screen is. */
-const savedStyle: FigureStyle = { theme: lightTheme, narrow: false, view: null };
-const savedWidth = 1100;
-/** Device pixels to each CSS pixel of a saved PNG. */
-const pngScale = 3;
+/** Of a picture that the reader saves. */
+const savedSize = { svg: { width: 1100, scale: 1 }, png: { width: 1100, scale: 3 } } as const;
 /** Below this Plotly has no room between its margins, and writes positions that are no numbers. */
 const leastWidth = { wide: 560, narrow: 240 };
 
@@ -47,7 +46,7 @@ export function figureView(number: number, build: Build, controls: HTMLElement |
   const words = element('figcaption', controls === null ? {} : { 'aria-live': 'polite' });
 
   function describe(): void {
-    const { title, textAlternative, caption } = build(savedStyle);
+    const { title, textAlternative, caption } = build(pictureStyle);
     plot.setAttribute('aria-label', `${title}. ${textAlternative}`);
     const finding = controls === null ? [] : [textAlternative, ' '];
     words.replaceChildren(element('b', {}, `Figure ${number}. ${title}. `), ...finding, caption);
@@ -88,6 +87,7 @@ export function figureView(number: number, build: Build, controls: HTMLElement |
     ),
     draw,
     refresh,
+    picture: (format, size) => figurePicture(build, format, size),
   };
 }
 
@@ -115,15 +115,12 @@ function button(label: string, pressed: () => unknown): HTMLButtonElement {
   return made;
 }
 
-async function save(build: Build, format: 'svg' | 'png'): Promise<void> {
-  const { data, layout, name } = build(savedStyle);
-  const size = { width: savedWidth, height: layout.height! };
-  const picture = { data, layout: { ...layout, ...size, paper_bgcolor: '#ffffff' } };
-  const scale = format === 'png' ? pngScale : 1;
-  saveFile(`${name}.${format}`, await plotly().toImage(picture, { format, ...size, scale }));
+async function save(build: Build, format: PictureFormat): Promise<void> {
+  const { name, dataUrl } = await figurePicture(build, format, savedSize[format]);
+  saveFile(`${name}.${format}`, dataUrl);
 }
 
 function saveNumbers(build: Build): void {
-  const figure = build(savedStyle);
+  const figure = build(pictureStyle);
   saveText(`${figure.name}.csv`, 'text/csv', figureCsv(figure));
 }

@@ -1,6 +1,7 @@
 /** Where the page starts: reads what it carries, lays out the words at once, draws figures when Plotly is there. */
 import type { Origin } from '../../sim/origin.ts';
 import { element } from './element.ts';
+import { offerFigures } from './exportFigures.ts';
 import type { FigureView } from './figureView.ts';
 import { gridPage } from './gridPage.ts';
 import { type Page, page } from './page.ts';
@@ -17,6 +18,7 @@ function start(): void {
     const { title, file } = scenario;
     document.title = title ?? file;
     document.body.append(main);
+    offerFigures(figures);
     addEventListener('DOMContentLoaded', () => void drawAll(figures));
   } catch (error) {
     if (!(error instanceof PageError)) throw error;
