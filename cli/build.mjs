@@ -32,6 +32,7 @@ const { metafile } = await build({
   footer: { js: 'return module.exports})' },
   supported: { 'dynamic-import': false }, // what lies outside is required
   plugins: [hdf5Outside, parquetOutside],
+  external: ['playwright-core'], // loaded from node_modules, and only for --figures
   legalComments: 'none',
   metafile: true,
   logLevel: 'warning',

@@ -137,7 +137,17 @@ function program(words: readonly string[], io: Io, outcome: { code: number }): C
       const { schema } = await import('./commands/schema.ts');
       outcome.code = schema(io);
     });
+  for (const command of perilag.commands) if (withReport.has(command.name())) offerFigures(command);
   return perilag;
+}
+
+const withReport: ReadonlySet<string> = new Set(['run', 'trace', 'spread', 'grid', 'gather']);
+
+function offerFigures(command: Command): void {
+  command
+    .option('--figures <formats>', 'also every figure as a file for a paper, drawn in an installed Chromium: svg,png')
+    .option('--figure-width <width>', "how wide these are, e.g. '9 cm' or '7 in' (default: 180 mm)")
+    .option('--browser <path>', 'the Chromium or Chrome that draws them (default: $PERILAG_BROWSER, or the one found)');
 }
 
 const completeCommands: Readonly<Record<string, string>> = {

@@ -7,6 +7,8 @@ import { gatherTable } from '../engine/gather.ts';
 import { settingsApart } from '../engine/manifest.ts';
 import { requireMemory } from '../engine/room.ts';
 import { findStore, tablesIn, workFolder } from '../engine/store.ts';
+import { type FigureOptions, figureRequest } from '../figures/request.ts';
+import { writeFigures } from '../figures/write.ts';
 import type { Io } from '../io.ts';
 import { readSamples } from '../posteriorFile.ts';
 import type { ScenarioFile } from '../scenarioFile.ts';
@@ -17,7 +19,7 @@ import type { SpreadContext } from './spreadContext.ts';
 import { finishSpread, type SpreadTableFiles } from './spreadFiles.ts';
 import { heldBySpread } from './spreadJobs.ts';
 
-export interface GatherOptions {
+export interface GatherOptions extends FigureOptions {
   readonly out: string;
   readonly json?: boolean;
   readonly quiet?: boolean;
@@ -31,6 +33,7 @@ export async function gather(
   io: Io,
 ): Promise<number> {
   requireName(options.out, 'Name one, e.g. `-o results`');
+  const figures = figureRequest(options, io);
   const paths = folders.map((folder) => resolve(io.cwd, folder));
   const tables = tablesOf(paths, folders);
   refuseMixture(paths[0]!, tables, program);
@@ -53,11 +56,13 @@ export async function gather(
   const files = Object.fromEntries(
     gathered.map(({ table, files: made }) => [table, made]),
   ) as unknown as SpreadTableFiles;
-  return finishSpread(
+  const code = await finishSpread(
     { plan, context, files, settings: gathered[0]!.job.settings, out: options.out, item },
     options,
     io,
   );
+  const figuresCode = await writeFigures([options.out], figures, options, io);
+  return code || figuresCode;
 }
 
 /** The tables that all folders have. Errors: SimError where one has others than the first: nothing is left out unsaid. */

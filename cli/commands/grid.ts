@@ -13,7 +13,8 @@ import type { Job } from '../engine/job.ts';
 import { kinds } from '../engine/kinds.ts';
 import { type Held, requireMemory } from '../engine/room.ts';
 import type { TableFiles } from '../engine/table.ts';
-import { exitCode } from '../exit.ts';
+import { type FigureOptions, figureRequest } from '../figures/request.ts';
+import { writeFigures } from '../figures/write.ts';
 import type { Io } from '../io.ts';
 import { writeFolder } from '../output/folder.ts';
 import { gridCsvText, gridNetcdf, gridSummary } from '../output/gridFiles.ts';
@@ -30,7 +31,7 @@ import { onlyCases } from './only.ts';
 import { outputFolder } from './outputFolder.ts';
 import type { Program } from './run.ts';
 
-export interface GridOptions {
+export interface GridOptions extends FigureOptions {
   readonly along: readonly string[];
   readonly steps: number;
   readonly of?: string;
@@ -55,6 +56,7 @@ export async function grid(file: string, options: GridOptions, program: Program,
   const setup = setupOf(item!, options);
   const plan = planGrid(setup);
   const out = outputFolder(file, 'grid', options.out);
+  const figures = figureRequest(options, io);
   const folder = resolve(io.cwd, out);
   const job = jobOf(plan, item!, program);
   requireMemory('--steps', job, heldByGrid);
@@ -90,7 +92,7 @@ export async function grid(file: string, options: GridOptions, program: Program,
   ]);
   await computed.discardWork();
   show(report, out, options, io);
-  return exitCode.done;
+  return writeFigures([out], figures, options, io);
 }
 
 function setupOf({ text, file, scenario }: ScenarioFile, { along, hold, steps, of, only }: GridOptions): GridSetup {

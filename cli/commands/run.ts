@@ -4,6 +4,8 @@ import { SimError } from '../../sim/error.ts';
 import { type RunResult, runScenario } from '../../sim/run.ts';
 import type { Scenario } from '../../sim/scenario/types.ts';
 import { exitCode } from '../exit.ts';
+import { type FigureOptions, figureRequest } from '../figures/request.ts';
+import { writeFigures } from '../figures/write.ts';
 import type { Io } from '../io.ts';
 import { accountLines } from '../output/accounts.ts';
 import { fieldsFile, hasFields } from '../output/fields.ts';
@@ -24,7 +26,7 @@ import { readScenarioFiles, type ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
 import { requireName } from './outputFolder.ts';
 
-export interface RunOptions {
+export interface RunOptions extends FigureOptions {
   readonly out?: string;
   readonly only?: readonly string[];
   readonly fractions?: boolean;
@@ -43,6 +45,7 @@ export async function run(files: readonly string[], options: RunOptions, program
   const read = readScenarioFiles(files, io.cwd);
   const chosen = onlyCases(read, options.only ?? []);
   const folders = outputFolders(chosen, options.out);
+  const figures = figureRequest(options, io);
   const results: RunResult[] = [];
   for (const [index, item] of chosen.entries()) {
     const result = runScenario(item.scenario, { sha256: item.sha256, version: program.version });
@@ -57,7 +60,8 @@ export async function run(files: readonly string[], options: RunOptions, program
     io.stdout.write(`${jsonText(summaries.length === 1 ? summaries[0] : summaries)}\n`);
   }
   const misses = results.map((result) => tellMisses(result, io));
-  return misses.includes(true) ? exitCode.notWithinTolerance : exitCode.done;
+  const figuresCode = await writeFigures(folders, figures, options, io);
+  return misses.includes(true) ? exitCode.notWithinTolerance : figuresCode;
 }
 
 /** The report is the last: it is what the others stand beside. */

@@ -7,6 +7,8 @@ import { type Computed, computeInPool, withPool } from '../engine/compute.ts';
 import { kinds } from '../engine/kinds.ts';
 import type { Shard } from '../engine/plan.ts';
 import { requireMemory } from '../engine/room.ts';
+import { type FigureOptions, type FigureRequest, figureRequest } from '../figures/request.ts';
+import { writeFigures } from '../figures/write.ts';
 import type { Io } from '../io.ts';
 import { commandLine } from '../output/history.ts';
 import { spreadPhases } from '../output/spreadPhases.ts';
@@ -19,7 +21,7 @@ import type { SpreadContext } from './spreadContext.ts';
 import { finishSpread, type SpreadTableFiles } from './spreadFiles.ts';
 import { heldBySpread, spreadJobs } from './spreadJobs.ts';
 
-export interface SpreadOptions {
+export interface SpreadOptions extends FigureOptions {
   readonly draws: number;
   readonly seed?: number;
   readonly workers?: number;
@@ -36,6 +38,7 @@ export interface SpreadOptions {
 
 /** Gives the exit code. Errors: SimError and ScenarioError for the input's faults; Interrupted after a signal. */
 export async function spread(file: string, options: SpreadOptions, program: Program, io: Io): Promise<number> {
+  const figures = figuresAskedFor(options, io);
   const [item] = onlyCases([readScenarioFile(file, io.cwd)], options.only ?? []);
   const { context, setup } = await whatToDraw(item!, options, program, io);
   const plan = planSpread(setup);
@@ -65,7 +68,15 @@ export async function spread(file: string, options: SpreadOptions, program: Prog
     io,
   );
   for (const one of computed) await one.discardWork();
-  return code;
+  const figuresCode = await writeFigures([out], figures, options, io);
+  return code || figuresCode;
+}
+
+/** A part of a spread has no report yet. */
+function figuresAskedFor(options: SpreadOptions, io: Io): FigureRequest | null {
+  const figures = figureRequest(options, io);
+  if (figures === null || !options.shard) return figures;
+  throw new SimError('--figures', 'a shard writes no report to draw them from', 'Give it to `perilag gather`');
 }
 
 async function whatToDraw(

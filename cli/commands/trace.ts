@@ -8,6 +8,8 @@ import { type CaseAlong, casesAlong } from '../../sim/scenario/caseAlong.ts';
 import { reportedAlong, traceAlong } from '../../sim/studies/traceAlong.ts';
 import type { TraceReport, TraceReportCase } from '../../sim/studies/traceReport.ts';
 import { exitCode } from '../exit.ts';
+import { type FigureOptions, figureRequest } from '../figures/request.ts';
+import { writeFigures } from '../figures/write.ts';
 import type { Io } from '../io.ts';
 import { writeFolder } from '../output/folder.ts';
 import { jsonText } from '../output/json.ts';
@@ -25,7 +27,7 @@ import { onlyCases } from './only.ts';
 import { outputFolder } from './outputFolder.ts';
 import type { Program } from './run.ts';
 
-export interface TraceCommandOptions {
+export interface TraceCommandOptions extends FigureOptions {
   readonly along: readonly string[];
   readonly out?: string;
   readonly only?: readonly string[];
@@ -38,6 +40,7 @@ export async function trace(file: string, options: TraceCommandOptions, program:
   const along = readAlong(onlyRange(options.along));
   const [item] = onlyCases([readScenarioFile(file, io.cwd)], options.only ?? []);
   const folder = outputFolder(file, 'trace', options.out);
+  const figures = figureRequest(options, io);
   const names = item!.scenario.cases.map(({ name }) => name);
   const cases = casesAlong(item!.text, file, along, names);
   const progress = progressOf(io, options.quiet);
@@ -46,7 +49,9 @@ export async function trace(file: string, options: TraceCommandOptions, program:
   const place = resolve(io.cwd, folder);
   await writeFolder(place, filesOf(report, item!, place, io));
   show(report, folder, options, io);
-  return tellUnfinished(report, io) ? exitCode.notWithinTolerance : exitCode.done;
+  const isUnfinished = tellUnfinished(report, io);
+  const figuresCode = await writeFigures([folder], figures, options, io);
+  return isUnfinished ? exitCode.notWithinTolerance : figuresCode;
 }
 
 /** Errors: SimError for several: a trace follows one input. */

@@ -49,6 +49,7 @@ describe.skipIf(!hasBrowser)('the report in Chromium', () => {
       'Corvane b under three ground assumptions',
       'The cases',
       'The two accounts',
+      'Numbers',
       'Inputs',
       'How it was computed',
       'What the numbers are not',
@@ -162,6 +163,7 @@ describe.skipIf(!hasBrowser)('the report in Chromium', () => {
   test.each([
     ['svg', /^<svg[^>]* width="1100"/],
     ['png', /^\x89PNG/],
+    ['csv', /^series,time_after_periapsis_d,temperature_K\n/],
   ] as const)('saves the figure as %s', async (format, start) => {
     const page = await openReport(plainRun({ cases: [sea] }), { colorScheme: 'dark' });
     const waiting = page.waitForEvent('download');
@@ -170,7 +172,7 @@ describe.skipIf(!hasBrowser)('the report in Chromium', () => {
     expect(download.suggestedFilename()).toBe(`temperature-through-the-orbit.${format}`);
     const content = await readFile((await download.path())!, 'latin1');
     expect(content).toMatch(start);
-    if (format === 'svg') expect(content).toContain('shallow sea');
+    if (format !== 'png') expect(content).toContain('shallow sea');
   });
 
   test('prints in light colours at the width of paper, and returns to the screen', async () => {

@@ -8,6 +8,7 @@ import { type Bands, bandMeans, bandRanges, bandsOf, fieldOf } from './bands.ts'
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type ChartLine, traceOf } from './chartLine.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { type FigureTable, words } from './figureTable.ts';
 import { insolationGroups } from './insolationMap.ts';
 import { poleToPole } from './latitudeAxis.ts';
 import { latitudeAxisLayout, latitudeMargins, latitudeWords } from './latitudeChart.ts';
@@ -55,6 +56,28 @@ export function annualProfile(columns: readonly Column[], style: FigureStyle): F
       latitudeWords(profiles[0]!.bands, view.y[0]),
     ],
     layout: profileLayout(columns, lines, view, style),
+    table: () => tableOf(profiles),
+  };
+}
+
+function tableOf(profiles: readonly Profile[]): FigureTable {
+  return {
+    columns: [
+      words('case'),
+      words('state'),
+      { name: 'Latitude', unit: 'deg' },
+      { name: 'Mean temperature', unit: 'K' },
+      { name: 'Lowest temperature', unit: 'K' },
+      { name: 'Highest temperature', unit: 'K' },
+      { name: 'Mean insolation', unit: fluxUnit },
+    ],
+    rows: profiles.flatMap(({ column, bands, mean, low, high }) => {
+      const { caseName, state, dataset } = column;
+      const insolation = bandMeans(dataset, fieldOf(dataset, 'bandInsolation'));
+      return bands.middlesDeg.map((latitudeDeg, band) => {
+        return [caseName, state.label, latitudeDeg, mean[band], low[band], high[band], insolation[band]];
+      });
+    }),
   };
 }
 

@@ -10,6 +10,7 @@ import { endsText } from '../words/traceAnswer.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import type { ChartLine } from './chartLine.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { type FigureTable, words } from './figureTable.ts';
 import { type CaseLook, foldLabels } from './foldLabels.ts';
 import { namesBesideLines } from './lineNames.ts';
 import { plainLabel } from './plainLabel.ts';
@@ -45,6 +46,29 @@ export function climateLoop({ cases, along }: TraceReport, style: FigureStyle): 
     lines: looks.map((look) => rightmost(look, along)),
     data: looks.flatMap((look) => tracesOf(look, along, style)),
     layout: loopLayout(looks, along, view, style),
+    table: () => tableOf(cases, along),
+  };
+}
+
+/** Every point in the order in which its branch runs, so that the lines can be drawn again. */
+function tableOf(cases: readonly TraceCase[], { label, unit }: Along): FigureTable {
+  return {
+    columns: [
+      ...['case', 'branch', 'stable', 'fold'].map(words),
+      { name: label, unit },
+      { name: 'Mean temperature', unit: 'K' },
+      { name: 'Lowest temperature', unit: 'K' },
+      { name: 'Highest temperature', unit: 'K' },
+      words('ice fraction'),
+    ],
+    rows: cases.flatMap(({ name, branches }) =>
+      branches.flatMap(({ points }, branch) =>
+        points.map((point) => {
+          const { stable, fold, value, temperatureMean, temperatureMin, temperatureMax, iceFraction } = point;
+          return [name, branch + 1, stable, fold, value, temperatureMean, temperatureMin, temperatureMax, iceFraction];
+        }),
+      ),
+    ),
   };
 }
 

@@ -1,6 +1,7 @@
 /** What every figure builder returns: plain JSON for Plotly and the words that stand with it. */
 import type { Data, Layout } from 'plotly.js-dist-min';
 import type { LegendLine } from './chartLine.ts';
+import type { FigureTable } from './figureTable.ts';
 import type { Moments } from './moments.ts';
 import type { Reading } from './reading.ts';
 import type { Theme } from './theme.ts';
@@ -20,6 +21,8 @@ export interface Figure {
   readonly layout: Partial<Layout>;
   /** Where it shows a moment of the orbit; left out where it shows none. */
   readonly moments?: Moments;
+  /** The data for a file, where the traces do not tell it all, or tell it for the eye; made only when asked for. */
+  readonly table?: () => FigureTable;
 }
 
 /** How a figure is to be set. */

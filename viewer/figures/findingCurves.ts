@@ -9,6 +9,7 @@ import { extremesOf, type ShownFinding, shownFinding } from '../words/shownFindi
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type ChartLine, glyph, traceOf } from './chartLine.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { nodesTable } from './figureTable.ts';
 import { fileName } from './fileName.ts';
 import { axisRange, gridAxisLayout } from './gridAxisLayout.ts';
 import { namesBesideLines } from './lineNames.ts';
@@ -36,6 +37,7 @@ export function findingCurves(report: GridReport, name: string, style: FigureSty
     lines,
     data: lines.map((line, at) => gapped(line, shown, at, report)),
     layout: layoutOf(report, axis, shown, scale, lines, view, style),
+    table: () => nodesTable(report, shown, [...report.cases.keys()]),
   };
 }
 

@@ -9,6 +9,7 @@ import { plainLayout } from './chartLayout.ts';
 import { plotlyScale, temperatureScale } from './colourScale.ts';
 import { type ContourDrawing, levelContours } from './contourLines.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { nodesTable } from './figureTable.ts';
 import { fileName } from './fileName.ts';
 import { axisRange, cellEdges, gridAxisLayout } from './gridAxisLayout.ts';
 import { colourBar } from './mapKey.ts';
@@ -61,6 +62,7 @@ export function findingMap(report: GridReport, caseIndex: number, name: string, 
     }),
     data: [...(shown.range === null ? [] : [colours(map, rows)]), ...contours.data, ...marks(map)],
     layout: layoutOf(map, contours.annotations),
+    table: () => nodesTable(report, shown, [caseIndex]),
   };
 }
 

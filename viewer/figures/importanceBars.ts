@@ -17,6 +17,7 @@ import type { SharedFinding } from '../words/spreadFindings.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import type { LegendLine } from './chartLine.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { type FigureTable, words } from './figureTable.ts';
 import { caseSign } from './panels.ts';
 import { plainLabel } from './plainLabel.ts';
 import { caseColour, caseMarker } from './theme.ts';
@@ -55,7 +56,34 @@ export function importanceBars(shared: SharedFinding, report: SpreadReport, styl
     lines: legend(kinds, style),
     data: blocks.flatMap((block) => tracesOf(block, style)),
     layout: layoutOf(blocks, kinds, style),
+    table: () => tableOf(shared),
   };
+}
+
+/** Every input, also those that the figure has no room for; a case without numbers says why. */
+function tableOf({ inCases }: SharedFinding): FigureTable {
+  return {
+    columns: [
+      ...['case', 'input', 'key', 'first order', 'first order 2.5', 'first order 97.5'].map(words),
+      ...['total', 'total 2.5', 'total 97.5', 'dependence by ranks', 'chance level', 'reason'].map(words),
+    ],
+    rows: inCases.flatMap(({ oneCase, finding }) => importanceRows(oneCase.name, importancesOf(oneCase, finding))),
+  };
+}
+
+function importanceRows(caseName: string, found: Importances): FigureTable['rows'] {
+  if (found.kind === 'none') return [[caseName, ...Array<null>(10).fill(null), found.reason]];
+  if (found.kind === 'ranks') {
+    return found.inputs.map(({ input: { label, key }, value, chanceLevel }) => {
+      return [caseName, label, key, ...Array<null>(6).fill(null), value, chanceLevel, null];
+    });
+  }
+  const index = ({ value, percentiles }: Shares['inputs'][number]['first']): number[] => {
+    return [value, percentiles['2.5'], percentiles['97.5']];
+  };
+  return found.inputs.map(({ input: { label, key }, first, total }) => {
+    return [caseName, label, key, ...index(first), ...index(total), null, null, null];
+  });
 }
 
 /** Said once where it holds for every case. */
@@ -156,7 +184,7 @@ function layoutOf(blocks: readonly Block[], kinds: ReadonlySet<string>, style: F
       visible: !isEmpty,
       range: rangeOf(blocks),
       tickformat: isRanks ? '' : '.0%',
-      nticks: narrow ? 5 : 11,
+      nticks: 6,
       gridcolor: theme.hairline,
       zeroline: true,
       zerolinecolor: theme.quiet,

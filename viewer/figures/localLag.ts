@@ -8,6 +8,7 @@ import { bandsOf } from './bands.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type ChartLine, traceOf } from './chartLine.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { type FigureTable, words } from './figureTable.ts';
 import { poleToPole } from './latitudeAxis.ts';
 import { latitudeAxisLayout, latitudeMargins, latitudeWords } from './latitudeChart.ts';
 import { namesBesideLines } from './lineNames.ts';
@@ -45,6 +46,27 @@ export function localLag(columns: readonly Column[], style: FigureStyle): Figure
     lines,
     data: [latitudeWords(bandsOf(columns[0]!.dataset), 0), ...lagLines.map((one) => brokenTrace(one, unit))],
     layout: lagLayout(lines, view, unit, style),
+    table: () => tableOf(lagLines, unit),
+  };
+}
+
+/** Every latitude, empty where no lag is defined. */
+function tableOf(lagLines: readonly LagLine[], unit: TimeUnit): FigureTable {
+  return {
+    columns: [
+      words('case'),
+      words('state'),
+      { name: 'Latitude', unit: 'deg' },
+      { name: 'Lag', unit: unit.symbol },
+      { name: 'Hottest after periapsis', unit: unit.symbol },
+    ],
+    rows: lagLines.flatMap(({ column, lags }) =>
+      bandsOf(column.dataset).middlesDeg.map((latitudeDeg, band) => {
+        const found = lags[band] ?? null;
+        const times = found === null ? [null, null] : [found.lag / unit.seconds, found.hottest / unit.seconds];
+        return [column.caseName, column.state.label, latitudeDeg, ...times];
+      }),
+    ),
   };
 }
 

@@ -4,12 +4,13 @@ import type { Column } from '../words/columns.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { plotlyScale } from './colourScale.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { type FigureColumn, type FigureTable, words } from './figureTable.ts';
 import { latitudeTicks, poleToPole } from './latitudeAxis.ts';
 import { cellWords, type MapGrid, mapTime } from './mapGrid.ts';
 import { colourBar, keyHeight, mapKey } from './mapKey.ts';
 import type { Ground, MapLine } from './mapLines.ts';
 import { momentsAcross } from './moments.ts';
-import { seasonAxisLayout } from './seasonAxis.ts';
+import { seasonAt, seasonAxisLayout } from './seasonAxis.ts';
 import { topAxisAnchor } from './topAxis.ts';
 import type { View } from './view.ts';
 
@@ -18,6 +19,8 @@ export interface SeasonMap {
   readonly grid: MapGrid;
   /** South to north, a row a band. */
   readonly z: number[][];
+  /** What else the data of the figure tell of each cell, laid out as `z`. */
+  readonly beside?: { readonly column: FigureColumn; readonly z: number[][] };
   readonly quantity: 'Temperature' | 'Insolation';
   readonly unit: string;
   readonly ground: Ground;
@@ -34,12 +37,12 @@ const narrowAxisRoom = 68;
 
 export function seasonMapFigure(
   map: SeasonMap,
-  words: Pick<Figure, 'name' | 'title' | 'textAlternative' | 'caption'>,
+  said: Pick<Figure, 'name' | 'title' | 'textAlternative' | 'caption'>,
 ): Figure {
   const { grid, lines, marks, style } = map;
   const view = style.view ?? { x: grid.range, y: poleToPole };
   return {
-    ...words,
+    ...said,
     lines,
     data: [
       colours(map),
@@ -51,6 +54,35 @@ export function seasonMapFigure(
     moments: momentsAcross(
       (x) => (x * grid.unit.seconds) / grid.period,
       (share) => mapTime(grid, share * grid.period),
+    ),
+    table: () => tableOf(map),
+  };
+}
+
+/** A row for each cell: the middle of its time and its latitude. */
+function tableOf({ column, grid, z, quantity, unit, beside }: SeasonMap): FigureTable {
+  const { caseName, state } = column;
+  const seasons = grid.times.map((time) => seasonAt(grid.seasons, time));
+  return {
+    columns: [
+      words('case'),
+      words('state'),
+      { name: 'Time after periapsis', unit: grid.unit.symbol },
+      { name: 'Solar longitude', unit: 'deg' },
+      { name: 'Latitude', unit: 'deg' },
+      { name: quantity, unit },
+      ...(beside ? [beside.column] : []),
+    ],
+    rows: z.flatMap((row, band) =>
+      row.map((value, at) => [
+        caseName,
+        state.label,
+        grid.times[at],
+        seasons[at],
+        grid.bands.middlesDeg[band],
+        value,
+        ...(beside ? [beside.z[band]![at]] : []),
+      ]),
     ),
   };
 }

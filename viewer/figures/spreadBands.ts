@@ -1,5 +1,6 @@
 /** Figure: a curve with its spread, as nested bands around the median, a panel for each case. Pure. */
 import type { Annotation, Data, Layout, ScatterData } from 'plotly.js-dist-min';
+import { percentileLevels } from '../../sim/studies/spread/percentiles.ts';
 import type { SpreadBand, SpreadCase, SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
 import { ledBy } from '../words/importance.ts';
 import { keptPercents, list, unitText } from '../words/number.ts';
@@ -9,6 +10,7 @@ import { apsides, apsisNames } from './apsides.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import { type LegendLine, lastInView } from './chartLine.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { type FigureTable, words } from './figureTable.ts';
 import { latitudePlace, poleToPole } from './latitudeAxis.ts';
 import { latitudeAxisLayout } from './latitudeChart.ts';
 import { lineLabels } from './lineLabels.ts';
@@ -69,6 +71,28 @@ export function spreadBands(group: BandGroup, report: SpreadReport, style: Figur
     lines: legend(drawn[0]!, style),
     data: drawn.flatMap((one) => tracesOf(one, group, style)),
     layout: layoutOf(drawn, group, grid, view, report.cases.length > 1, style),
+    table: () => tableOf(group),
+  };
+}
+
+/** The curve where it was computed, each place once. */
+function tableOf({ members, along, label, unit }: BandGroup): FigureTable {
+  const value = (what: string) => ({ name: `${label} ${what}`, unit });
+  return {
+    columns: [
+      words('case'),
+      along === 'orbit' ? words('share of the orbit since periapsis') : { name: 'Latitude', unit: 'deg' },
+      ...percentileLevels.map((level) => value(`percentile ${level}`)),
+      value('with every input at its centre'),
+    ],
+    rows: members.flatMap(({ oneCase, band: { positions, levels, atCentre } }) =>
+      Array.from(positions, (position, at) => [
+        oneCase.name,
+        position,
+        ...levels.map((level) => level[at]),
+        atCentre[at],
+      ]),
+    ),
   };
 }
 

@@ -7,6 +7,7 @@ import type { FindingInCase, SharedFinding } from '../words/spreadFindings.ts';
 import { findingOf, findingWording, labelWithSymbol, scaleOf, type Wording } from '../words/spreadNumber.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { type FigureTable, words } from './figureTable.ts';
 import { type Panel, type PanelGrid, panelAxes, panelGrid, panelName } from './panels.ts';
 import { plainLabel } from './plainLabel.ts';
 import { caseColour } from './theme.ts';
@@ -57,6 +58,37 @@ export function spreadHistogram(shared: SharedFinding, report: SpreadReport, sty
     lines: [],
     data: bars.map(traceOf),
     layout: layoutOf(bars, shared, report, grid, style),
+    table: () => tableOf(bars, label, scaleOf(shared, report.cases).symbol),
+  };
+}
+
+/** A row for each bin; beside it, what the case's marks say. */
+function tableOf(bars: readonly Bars[], label: string, unit: string): FigureTable {
+  return {
+    columns: [
+      words('case'),
+      { name: `${label} from`, unit },
+      { name: `${label} to`, unit },
+      words('draws'),
+      words('share of the draws'),
+      { name: 'every input at its centre', unit },
+      { name: 'textbook', unit },
+    ],
+    rows: bars.flatMap(({ member, histogram, words: { scale }, marks }) => {
+      const { from, to, counts, beyond } = histogram;
+      const width = (to - from) / counts.length / scale.one;
+      const total = counts.reduce((sum, count) => sum + count, 0) + beyond;
+      const mark = (wanted: Mark['short']) => marks.find(({ short }) => short === wanted)?.value;
+      return counts.map((count, bin) => [
+        member.oneCase.name,
+        from / scale.one + bin * width,
+        from / scale.one + (bin + 1) * width,
+        count,
+        count / Math.max(1, total),
+        mark('centre'),
+        mark('textbook'),
+      ]);
+    }),
   };
 }
 

@@ -9,6 +9,7 @@ import type { FindingInCase, SharedFinding } from '../words/spreadFindings.ts';
 import { findingOf, labelWithSymbol, scaleOf, turnOf } from '../words/spreadNumber.ts';
 import { axisStyle, plainLayout } from './chartLayout.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { type FigureTable, words } from './figureTable.ts';
 import { type PanelGrid, panelAxes, panelGrid, panelName } from './panels.ts';
 import { plainLabel } from './plainLabel.ts';
 import { caseColour } from './theme.ts';
@@ -52,6 +53,23 @@ export function spreadScatter(
     lines: [],
     data: clouds.flatMap((cloud, at) => tracesOf(cloud, grid, at, style)),
     layout: layoutOf(clouds, shared, report, grid, style),
+    table: () => tableOf(clouds, shared, report),
+  };
+}
+
+function tableOf(clouds: readonly Cloud[], shared: SharedFinding, { cases }: SpreadReport): FigureTable {
+  const input = clouds[0]?.input;
+  return {
+    columns: [
+      words('case'),
+      words('point'),
+      { name: input?.label ?? 'input', unit: input?.unit ?? '' },
+      { name: shared.label, unit: scaleOf(shared, cases).symbol },
+    ],
+    rows: clouds.flatMap(({ member: { oneCase }, x, y, centre }) => [
+      ...(centre === null ? [] : [[oneCase.name, 'every input at its centre', centre.x, centre.y]]),
+      ...x.map((value, at) => [oneCase.name, 'draw', value, y[at]]),
+    ]),
   };
 }
 
@@ -95,7 +113,7 @@ function tracesOf(
   const panel = panels[at]!;
   const colour = caseColour(theme, member.caseIndex);
   const common = { type: 'scatter', mode: 'markers', xaxis: panel.x, yaxis: panel.y } as const;
-  const words = `%{y:.4~g}<br>${plainLabel(input.label, 40)} %{x:.4~g} ${unitText(input.unit)}<extra></extra>`;
+  const hover = `%{y:.4~g}<br>${plainLabel(input.label, 40)} %{x:.4~g} ${unitText(input.unit)}<extra></extra>`;
   return [
     {
       ...common,
@@ -103,7 +121,7 @@ function tracesOf(
       x: [...x],
       y: [...y],
       marker: { color: translucent(colour, 0.55), size: 5 },
-      hovertemplate: words,
+      hovertemplate: hover,
     },
     ...(centre === null
       ? []
@@ -114,7 +132,7 @@ function tracesOf(
             x: [centre.x],
             y: [centre.y],
             marker: { symbol: 'circle' as const, color: theme.paper, size: 11, line: { color: theme.ink, width: 2 } },
-            hovertemplate: `every input at its centre<br>${words}`,
+            hovertemplate: `every input at its centre<br>${hover}`,
           },
         ]),
   ];

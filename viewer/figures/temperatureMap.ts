@@ -34,6 +34,7 @@ export function temperatureMap(columns: readonly Column[], shown: number, style:
       column,
       grid,
       z,
+      beside: { column: { name: 'Ice fraction', unit: '' }, z: ice },
       quantity: 'Temperature',
       unit: 'K',
       ground,

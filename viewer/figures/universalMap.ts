@@ -12,6 +12,7 @@ import type { LegendLine } from './chartLine.ts';
 import { plotlyScale, temperatureScale } from './colourScale.ts';
 import { casedContours, levelContours } from './contourLines.ts';
 import type { Figure, FigureStyle } from './figure.ts';
+import { type FigureTable, words } from './figureTable.ts';
 import { decadeTicks } from './gridAxisLayout.ts';
 import { colourBar } from './mapKey.ts';
 import { plainLabel } from './plainLabel.ts';
@@ -68,6 +69,31 @@ export function universalMap(
     lines: legend(placed),
     data: [colours(chart, style), ...solid.data, ...dashed.data, ...markers(placed), ...readingMarks(marked, chart)],
     layout: layoutOf(placed, [...solid.annotations, ...dashed.annotations], view, style),
+    table: () => tableOf(chart, placed, marked),
+  };
+}
+
+/** The nodes of the chart; then what is marked on it, by eccentricity and heat-store number alone. */
+function tableOf(
+  { eccentricities, storeNumbers, lag, damping }: UniversalChart,
+  placed: readonly PlacedCase[],
+  marked: MarkedReading | null,
+): FigureTable {
+  const nodes = Array.from(eccentricities).flatMap((eccentricity, row) =>
+    Array.from(storeNumbers, (storeNumber, column) => {
+      const at = row * storeNumbers.length + column;
+      return ['chart', null, eccentricity, storeNumber, 100 * lag[at]!, damping[at]!];
+    }),
+  );
+  const cases = placed.map(({ name, place }) => ['case', name, place.eccentricity, place.storeNumber, null, null]);
+  const readings = marked === null ? [] : [['read back', null, marked.eccentricity, marked.reading.storeNumber]];
+  return {
+    columns: [
+      ...['what', 'case', 'eccentricity', 'heat-store number'].map(words),
+      { name: 'lag', unit: '% of an orbit' },
+      words('damping'),
+    ],
+    rows: [...nodes, ...cases, ...readings.map((reading) => [...reading, null, null])],
   };
 }
 

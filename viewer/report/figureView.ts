@@ -2,14 +2,15 @@
 import type { Config, Layout } from 'plotly.js-dist-min';
 import { inCelsius } from '../figures/celsius.ts';
 import type { Figure, FigureStyle } from '../figures/figure.ts';
-import { lightTheme } from '../figures/theme.ts';
+import { figureCsv } from '../figures/figureCsv.ts';
 import type { View } from '../figures/view.ts';
 import { element } from './element.ts';
+import { figurePicture, type Picture, type PictureFormat, type PictureSize, pictureStyle } from './figurePicture.ts';
 import { lineSample } from './lineSample.ts';
 import { momentLayer } from './momentLayer.ts';
 import { plotly } from './plotly.ts';
 import { watchPointer } from './pointer.ts';
-import { saveFile } from './saveFile.ts';
+import { saveFile, saveText } from './saveFile.ts';
 import type { Setting } from './surroundings.ts';
 import { watchZoom } from './zoom.ts';
 
@@ -25,22 +26,16 @@ export interface FigureView {
   leaveZoom(): void;
   /** Marks a share of the period, where the figure shows one; null for none. */
   mark(share: number | null): void;
+  /** For a file; it need not be drawn on the page. */
+  picture(format: PictureFormat, size: PictureSize): Promise<Picture>;
 }
 
 export type Build = (style: FigureStyle) => Figure;
 
 /** A double click is answered by the page: Plotly would go back to the last view that it was given. */
 const config: Partial<Config> = { displayModeBar: false, doubleClick: false, showTips: false };
-/** For papers: light and wide whatever the screen is. */
-const savedStyle: FigureStyle = { theme: lightTheme, narrow: false, view: null };
-const savedWidth = 1100;
-/** Device pixels to each CSS pixel of a saved PNG. */
-const pngScale = 3;
-/** What is saved is read as it is shown. */
-function savedAs(setting: Setting | null): FigureStyle {
-  const reading = setting?.style.reading;
-  return reading === undefined ? savedStyle : { ...savedStyle, reading };
-}
+/** Of a picture that the reader saves. */
+const savedSize = { svg: { width: 1100, scale: 1 }, png: { width: 1100, scale: 3 } } as const;
 /** Below this Plotly has no room between its margins, and writes positions that are no numbers. */
 const leastWidth = { wide: 560, narrow: 240 };
 
@@ -62,13 +57,18 @@ export function figureView(
   const legend = element('ul', { class: 'legend' });
   const whole = button('Show all', () => show(null));
   whole.hidden = true;
-  const saving = (['svg', 'png'] as const).map((format) =>
-    button(`Save ${format.toUpperCase()}`, () =>
-      save((style) => asRead(build, { ...style, ...savedAs(setting) }), format),
-    ),
-  );
+  const saving = [
+    ...(['svg', 'png'] as const).map((format) => button(`Save ${format.toUpperCase()}`, () => save(asShown(), format))),
+    button('Save CSV', () => saveNumbers(asShown())),
+  ];
   const tools = element('p', { class: 'tools' }, whole, ...saving);
   const words = element('figcaption', controls === null ? {} : { 'aria-live': 'polite' });
+
+  /** For a file: read as it is on the page. */
+  function asShown(): Build {
+    const reading = setting?.style.reading;
+    return (style) => asRead(build, reading === undefined ? style : { ...style, reading });
+  }
 
   function say({ title, textAlternative, caption }: Figure): void {
     plot.setAttribute('aria-label', `${title}. ${textAlternative}`);
@@ -112,7 +112,7 @@ export function figureView(
     build = next;
   }
 
-  say(build(savedStyle));
+  say(build(pictureStyle));
   return {
     element: element(
       'figure',
@@ -129,6 +129,7 @@ export function figureView(
       view = null;
     },
     mark,
+    picture: (format, size) => figurePicture(asShown(), format, size),
   };
 }
 
@@ -161,10 +162,12 @@ function button(label: string, pressed: () => unknown): HTMLButtonElement {
   return made;
 }
 
-async function save(build: Build, format: 'svg' | 'png'): Promise<void> {
-  const { data, layout, name } = build(savedStyle);
-  const size = { width: savedWidth, height: layout.height! };
-  const picture = { data, layout: { ...layout, ...size, paper_bgcolor: '#ffffff' } };
-  const scale = format === 'png' ? pngScale : 1;
-  saveFile(`${name}.${format}`, await plotly().toImage(picture, { format, ...size, scale }));
+async function save(build: Build, format: PictureFormat): Promise<void> {
+  const { name, dataUrl } = await figurePicture(build, format, savedSize[format]);
+  saveFile(`${name}.${format}`, dataUrl);
+}
+
+function saveNumbers(build: Build): void {
+  const figure = build(pictureStyle);
+  saveText(`${figure.name}.csv`, 'text/csv', figureCsv(figure));
 }

@@ -11,6 +11,7 @@ import { figureBuilders, figureChoices } from './sections/figures.ts';
 import { heading } from './sections/heading.ts';
 import { inputsSection } from './sections/inputs.ts';
 import { cautionsSection, footer, methodSection } from './sections/method.ts';
+import { numbersSection } from './sections/numbers.ts';
 
 export interface Page {
   readonly element: HTMLElement;
@@ -31,6 +32,7 @@ const sections = {
   answer: (result: RunResult, _: RunResult, moves: string | null) => answering(result, moves),
   cases: (result: RunResult, original: RunResult) => casesSection(result.cases, columnsOf(result), columnsOf(original)),
   accounts: (result: RunResult) => accountsSection(result, columnsOf(result)),
+  numbers: (result: RunResult) => numbersSection(result, columnsOf(result)),
   inputs: (result: RunResult) => inputsSection(result.cases),
   method: methodSection,
   cautions: cautionsSection,
@@ -55,6 +57,7 @@ export function page(original: RunResult): RunPage {
       shown.cases,
       figures.element,
       shown.accounts,
+      shown.numbers,
       shown.inputs,
       shown.method,
       shown.cautions,

@@ -1,6 +1,8 @@
 /** Where the page starts: reads what it carries, lays out the words at once, draws figures when Plotly is there. */
 import type { Origin } from '../../sim/origin.ts';
 import { element } from './element.ts';
+import { offerFigures } from './exportFigures.ts';
+import type { FigureView } from './figureView.ts';
 import { gridPage } from './gridPage.ts';
 import { live } from './live/live.ts';
 import { type Page, page } from './page.ts';
@@ -13,6 +15,8 @@ import { tracePage } from './tracePage.ts';
 interface LaidOut {
   readonly element: HTMLElement;
   readonly scenario: Origin['scenario'];
+  /** Those that are there now, in their order on the page. */
+  figures(): readonly FigureView[];
   draw(setting: Setting, breath?: () => Promise<void>): Promise<void>;
   /** Once all is drawn. */
   started?(): void;
@@ -21,10 +25,11 @@ interface LaidOut {
 function start(): void {
   const block = document.getElementById('perilag-data');
   try {
-    const { scenario, element: main, draw, started } = laidOut(readPage(block?.textContent ?? ''));
+    const { scenario, element: main, figures, draw, started } = laidOut(readPage(block?.textContent ?? ''));
     const { title, file } = scenario;
     document.title = title ?? file;
     document.body.append(main);
+    offerFigures(figures);
     const begin = () => void drawAll(draw).then(started);
     if (document.readyState === 'loading') addEventListener('DOMContentLoaded', begin);
     else begin();
@@ -43,9 +48,9 @@ function laidOut(carried: Carried): LaidOut {
   const { result, tree } = carried;
   const made = page(result);
   const { scenario } = result;
-  if (tree === null) return { element: made.element, scenario, draw: made.figures.draw };
+  if (tree === null) return { element: made.element, scenario, figures: made.figures.views, draw: made.figures.draw };
   const { element: whole, begin } = live(made, result, tree);
-  return { element: whole, scenario, draw: made.figures.draw, started: begin };
+  return { element: whole, scenario, figures: made.figures.views, draw: made.figures.draw, started: begin };
 }
 
 /** A page whose figures are there from the start. */
@@ -53,6 +58,7 @@ function fixed({ element: whole, figures }: Page, { scenario }: Pick<Origin, 'sc
   return {
     element: whole,
     scenario,
+    figures: () => figures,
     async draw(setting, breath = async () => undefined) {
       for (const figure of figures) {
         await figure.draw(setting);

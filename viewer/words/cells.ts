@@ -54,7 +54,7 @@ export function without(found: Finding | undefined): Cell {
 }
 
 /** An error bound must not shrink by rounding. */
-function roundedUp(value: number, decimals: number): number {
+export function roundedUp(value: number, decimals: number): number {
   const unit = 10 ** -decimals;
   return Math.ceil(value / unit - 1e-9) * unit;
 }

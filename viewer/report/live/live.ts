@@ -192,7 +192,7 @@ function run(page: RunPage, original: RunResult, tree: unknown, box: HTMLElement
   async function save(): Promise<void> {
     const name = original.scenario.file.replace(/^.*[\\/]/, '').replace(/\.(?:ya?ml|json)$/i, '');
     try {
-      saveText(`${name}-moved.yaml`, await solver.write(presentCases(state, names)));
+      saveText(`${name}-moved.yaml`, 'text/plain', await solver.write(presentCases(state, names)));
     } catch (error) {
       controls?.fail({ where: null, message: (error as Error).message });
     }
