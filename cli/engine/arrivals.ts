@@ -20,6 +20,15 @@ interface Waiting {
   readonly reject: (error: unknown) => void;
 }
 
+/** Two functions, each with a scope of its own: in one scope what reads from the store would hold the chunk as well. */
+function held(chunk: Chunk): Piece {
+  return { from: chunk.from, to: chunk.to, read: () => chunk };
+}
+
+function stored(store: Store, range: Range): Piece {
+  return { ...range, read: () => store.read(range) };
+}
+
 /** Of a store for all rows of a table; what is there already counts. */
 export function arrivalsOf(store: Store): Arrivals {
   const groups = new Map<number, Piece[]>();
@@ -30,7 +39,7 @@ export function arrivalsOf(store: Store): Arrivals {
     if (pieces === undefined) groups.set(group, [piece]);
     else pieces.push(piece);
   };
-  for (const range of store.chunks()) add({ ...range, read: () => store.read(range) });
+  for (const range of store.chunks()) add(stored(store, range));
   let next = 0;
   let waiting: Waiting | null = null;
   let failure: { readonly error: unknown } | null = null;
@@ -55,7 +64,7 @@ export function arrivalsOf(store: Store): Arrivals {
     landed: (chunk) => {
       const { from, to } = chunk;
       const isNear = groupOf(chunk) < next + groupsKept;
-      add({ from, to, read: isNear ? () => chunk : () => store.read({ from, to }) });
+      add(isNear ? held(chunk) : stored(store, { from, to }));
       look();
     },
     fail: (error) => {
