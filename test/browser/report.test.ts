@@ -24,19 +24,22 @@ describe.skipIf(!hasBrowser)('the report in Chromium', () => {
   test('opens from disk and draws every line with the run’s own numbers', async () => {
     const run = plainRun();
     const page = await openReport(run);
-    const lines = await page.locator('.plot').evaluate((plot) =>
-      (plot as unknown as Drawn)._fullData.map(({ type, name, y }) => ({
-        type,
-        name,
-        peak: Math.max(...Array.from(y)),
-      })),
-    );
+    const lines = await page
+      .locator('.plot')
+      .first()
+      .evaluate((plot) =>
+        (plot as unknown as Drawn)._fullData.map(({ type, name, y }) => ({
+          type,
+          name,
+          peak: Math.max(...Array.from(y)),
+        })),
+      );
     expect(lines.map(({ type }) => type)).toEqual(Array(6).fill('scatter'));
     for (const { name, states } of run.cases) {
       const peak = Math.max(...states[0]!.dataset.variables.temperature!.data);
       expect(lines.find((line) => line.name === name)?.peak).toBe(peak);
     }
-    const paths = page.locator('.plot .scatterlayer .trace .lines path');
+    const paths = page.locator('.plot').first().locator('.scatterlayer .trace .lines path');
     expect(await paths.count()).toBe(5);
     for (const path of await paths.all()) expect((await path.getAttribute('d'))!.length).toBeGreaterThan(20);
     expect(await page.locator('.plot .x2axislayer-above text, .plot .x2tick text').count()).toBeGreaterThan(2);
@@ -87,7 +90,12 @@ describe.skipIf(!hasBrowser)('the report in Chromium', () => {
       .evaluateAll((plots) => plots.map((plot) => plot.getAttribute('aria-label')));
     expect(labels.map((label) => label?.split('.')[0])).toEqual([
       'Temperature through the orbit',
+      'The orbit from above, coloured by temperature',
+      'The lag loop: temperature against instellation',
+      'Time in windows',
+      'Damping and lag of every plain lumped world',
       'Temperature after the start',
+      'Time in windows after the start',
     ]);
   });
 
@@ -108,7 +116,11 @@ describe.skipIf(!hasBrowser)('the report in Chromium', () => {
 
   test('figures follow the colour scheme while the page is open', async () => {
     const page = await openReport(plainRun({ cases: [sea] }), { colorScheme: 'light' });
-    const ink = () => page.locator('.plot').evaluate((plot) => (plot as unknown as Drawn).layout.font.color);
+    const ink = () =>
+      page
+        .locator('.plot')
+        .first()
+        .evaluate((plot) => (plot as unknown as Drawn).layout.font.color);
     const light = await ink();
     await page.emulateMedia({ colorScheme: 'dark' });
     await expect.poll(ink).not.toBe(light);
@@ -133,7 +145,11 @@ describe.skipIf(!hasBrowser)('the report in Chromium', () => {
 
   test('the figure follows the width of the window', async () => {
     const page = await openReport(plainRun({ cases: [sea] }));
-    const width = () => page.locator('.plot').evaluate((plot) => (plot as unknown as Drawn).layout.width);
+    const width = () =>
+      page
+        .locator('.plot')
+        .first()
+        .evaluate((plot) => (plot as unknown as Drawn).layout.width);
     const before = await width();
     await page.setViewportSize({ width: 900, height: 900 });
     await expect.poll(width).toBeLessThan(before);
@@ -167,7 +183,10 @@ describe.skipIf(!hasBrowser)('the report in Chromium', () => {
   ] as const)('saves the figure as %s', async (format, start) => {
     const page = await openReport(plainRun({ cases: [sea] }), { colorScheme: 'dark' });
     const waiting = page.waitForEvent('download');
-    await page.getByRole('button', { name: `Save ${format.toUpperCase()}` }).click();
+    await page
+      .getByRole('button', { name: `Save ${format.toUpperCase()}` })
+      .first()
+      .click();
     const download = await waiting;
     expect(download.suggestedFilename()).toBe(`temperature-through-the-orbit.${format}`);
     const content = await readFile((await download.path())!, 'latin1');
@@ -178,10 +197,13 @@ describe.skipIf(!hasBrowser)('the report in Chromium', () => {
   test('prints in light colours at the width of paper, and returns to the screen', async () => {
     const page = await openReport(plainRun({ cases: [sea] }), { colorScheme: 'dark' });
     const look = () =>
-      page.locator('.plot').evaluate((plot) => {
-        const { width, font } = (plot as unknown as Drawn).layout;
-        return { width, colour: font.color };
-      });
+      page
+        .locator('.plot')
+        .first()
+        .evaluate((plot) => {
+          const { width, font } = (plot as unknown as Drawn).layout;
+          return { width, colour: font.color };
+        });
     const screen = await look();
     await page.evaluate(() => dispatchEvent(new Event('beforeprint')));
     await expect.poll(look).toEqual({ width: 680, colour: '#1c2024' });

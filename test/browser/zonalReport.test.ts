@@ -28,24 +28,27 @@ describe.skipIf(!hasBrowser)('the report of a run with latitudes in Chromium', (
   const titles = (page: Page): Promise<string[]> =>
     page.locator('.chart figcaption b').evaluateAll((heads) => heads.map((head) => head.textContent!.trim()));
 
-  test('a figure a state, in order, then profile and lag', async () => {
+  test('the orbit, a map a state, in order, then profile, lag and windows', async () => {
     const page = await openReport(zonalRun());
     expect(await titles(page)).toEqual([
       'Figure 1. Area-mean temperature through the orbit.',
-      'Figure 2. Temperature by latitude and season: tilted sea, warm state.',
-      'Figure 3. Temperature by latitude and season: tilted sea, cold state.',
-      'Figure 4. Temperature by latitude and season: upright sea.',
-      'Figure 5. Insolation by latitude and season: tilted sea.',
-      'Figure 6. Insolation by latitude and season: upright sea.',
-      'Figure 7. Annual mean by latitude.',
-      'Figure 8. Local lag by latitude.',
+      'Figure 2. The orbit from above, coloured by area-mean temperature: tilted sea, warm state.',
+      'Figure 3. The lag loop: area-mean temperature against instellation.',
+      'Figure 4. Temperature by latitude and season: tilted sea, warm state.',
+      'Figure 5. Temperature by latitude and season: tilted sea, cold state.',
+      'Figure 6. Temperature by latitude and season: upright sea.',
+      'Figure 7. Insolation by latitude and season: tilted sea.',
+      'Figure 8. Insolation by latitude and season: upright sea.',
+      'Figure 9. Annual mean by latitude.',
+      'Figure 10. Local lag by latitude.',
+      'Figure 11. Time in windows.',
     ]);
   });
 
   test('the map is drawn with the run’s own numbers: a picture of the field, lines of freezing and ice, both time axes', async () => {
     const run = zonalRun({ ...one, samples: 180 });
     const page = await openReport(run);
-    const map = page.locator('.plot').nth(1);
+    const map = page.locator('.plot').nth(3);
     const traces = await map.evaluate((plot) =>
       (plot as unknown as Drawn)._fullData.map(({ type, z }) => ({
         type,
@@ -69,7 +72,7 @@ describe.skipIf(!hasBrowser)('the report of a run with latitudes in Chromium', (
 
   test('the pointer reads temperature, latitude, time and season', async () => {
     const page = await openReport(zonalRun(one));
-    const map = page.locator('.plot').nth(1);
+    const map = page.locator('.plot').nth(3);
     await map.scrollIntoViewIfNeeded();
     const box = (await map.locator('.nsewdrag').boundingBox())!;
     await page.mouse.move(box.x + 0.6 * box.width, box.y + 0.4 * box.height);
@@ -82,7 +85,7 @@ describe.skipIf(!hasBrowser)('the report of a run with latitudes in Chromium', (
 
   test('the profile’s pointer reads the latitude in degrees, and both panels', async () => {
     const page = await openReport(zonalRun(one));
-    const profile = page.locator('.plot').nth(3);
+    const profile = page.locator('.plot').nth(5);
     await profile.scrollIntoViewIfNeeded();
     const box = (await profile.locator('.nsewdrag').first().boundingBox())!;
     await page.mouse.move(box.x + 0.5 * box.width, box.y + 0.5 * box.height);
@@ -96,7 +99,7 @@ describe.skipIf(!hasBrowser)('the report of a run with latitudes in Chromium', (
 
   test('zooming a map refines the seasons and offers a way back', async () => {
     const page = await openReport(zonalRun(one));
-    const map = page.locator('.plot').nth(1);
+    const map = page.locator('.plot').nth(3);
     await map.scrollIntoViewIfNeeded();
     const seasons = (): Promise<string[]> => map.locator('.x2tick text').allTextContents();
     const before = await seasons();
@@ -106,7 +109,7 @@ describe.skipIf(!hasBrowser)('the report of a run with latitudes in Chromium', (
     await page.mouse.move(box.x + 0.45 * box.width, box.y + 0.6 * box.height, { steps: 5 });
     await page.mouse.up();
     await expect.poll(seasons).not.toEqual(before);
-    await page.locator('.chart').nth(1).getByRole('button', { name: 'Show all' }).click();
+    await page.locator('.chart').nth(3).getByRole('button', { name: 'Show all' }).click();
     await expect.poll(seasons).toEqual(before);
   });
 
@@ -154,8 +157,8 @@ describe.skipIf(!hasBrowser)('the report of a run with latitudes in Chromium', (
       const page = await openReport(zonalRun(), options);
       const [content, screen] = await page.evaluate(() => [document.documentElement.scrollWidth, innerWidth]);
       expect(content).toBeLessThanOrEqual(screen!);
-      const key = page.locator('.chart').nth(1).locator('.legend li');
-      const beside = page.locator('.plot').nth(1).locator('.annotation-text', { hasText: 'edge of the ice' });
+      const key = page.locator('.chart').nth(3).locator('.legend li');
+      const beside = page.locator('.plot').nth(3).locator('.annotation-text', { hasText: 'edge of the ice' });
       expect((await key.count()) > 0).toBe((await beside.count()) === 0);
     },
   );
@@ -163,7 +166,7 @@ describe.skipIf(!hasBrowser)('the report of a run with latitudes in Chromium', (
   test('saves a map as SVG with its key and its colours', async () => {
     const page = await openReport(zonalRun(one), { colorScheme: 'dark' });
     const waiting = page.waitForEvent('download');
-    await page.locator('.chart').nth(1).getByRole('button', { name: 'Save SVG' }).click();
+    await page.locator('.chart').nth(3).getByRole('button', { name: 'Save SVG' }).click();
     const download = await waiting;
     expect(download.suggestedFilename()).toBe('temperature-by-latitude-and-season.svg');
     const content = await readFile((await download.path())!, 'utf8');

@@ -40,8 +40,8 @@ const strip = [0.64, 1] as const;
 export function windowBars(columns: readonly Column[], style: FigureStyle): Figure {
   const plan = planOf(columns, style);
   return {
-    name: 'time-in-windows',
-    title: 'Time in windows',
+    name: `time-in-windows${plan.isForward ? '-after-the-start' : ''}`,
+    title: `Time in windows${plan.isForward ? ' after the start' : ''}`,
     textAlternative: plan.blocks.map(({ block }) => windowSentence(block, plan.unit)).join(' '),
     caption: caption(columns, plan),
     lines: [],

@@ -120,6 +120,7 @@ describe('time in windows', () => {
   test('a run from a start counts shares of the run, from start to end', () => {
     const figure = figureOf({ cases: [{ name: 'rock', heatCapacity: 2e6, forward: true }] });
     expect(plain(figure.layout.xaxis!.title!.text)).toBe('Share of the run');
+    expect(figure.title).toBe('Time in windows after the start');
     expect(figure.layout.xaxis2!.range).toEqual([0, 1]);
     expect(figure.layout.shapes!.some(({ name }) => name === 'periapsis')).toBe(false);
   });

@@ -5,7 +5,7 @@ import { runCase } from '../../../../sim/run.ts';
 import { readScenario } from '../../../../sim/scenario/read.ts';
 import { plainResponder } from '../../../../sim/studies/grid/plainResponse.ts';
 import { lagReader } from '../../../../sim/studies/grid/readBack.ts';
-import { universalPlace } from '../../../../sim/studies/grid/storeNumber.ts';
+import { plainPlace, universalPlace } from '../../../../sim/studies/grid/storeNumber.ts';
 import { chartNodes, universalChart } from '../../../../sim/studies/grid/universalChart.ts';
 
 const respond = plainResponder();
@@ -128,12 +128,35 @@ ${rest}`;
     }
   });
 
-  test('worlds that are not plain have none', () => {
-    expect(placeOf(text(', internalHeat: 2 W/m2'))).toBeNull();
-    expect(placeOf(text(', emission: { linear: { a: 203.3 W/m2, b: 2.09 W/m2/K } }'))).toBeNull();
-    expect(placeOf(text('', 'solve: { start: { temperature: 250 K, orbits: 3 } }'))).toBeNull();
-    const icy = text('').replace('bondAlbedo: 0.3', 'albedo: { warm: 0.3, ice: 0.6, from: 258 K, to: 273 K }');
-    expect(placeOf(icy)).toBeNull();
+  test.each([
+    ['internalHeat: 2 W/m2', text(', internalHeat: 2 W/m2'), 'heat comes from inside'],
+    [
+      'a linear law of emission',
+      text(', emission: { linear: { a: 203.3 W/m2, b: 2.09 W/m2/K } }'),
+      'its emission is no fourth power of temperature',
+    ],
+    ['a start', text('', 'solve: { start: { temperature: 250 K, orbits: 3 } }'), 'it runs from a start'],
+    [
+      'a ramp of the albedo',
+      text('').replace('bondAlbedo: 0.3', 'albedo: { warm: 0.3, ice: 0.6, from: 258 K, to: 273 K }'),
+      'its albedo changes with temperature',
+    ],
+  ])('with %s a world has none, and says why', (_, yaml, reason) => {
+    const { model, world, options } = caseOf(yaml);
+    expect(plainPlace(model, world, options)).toEqual({ place: null, reason });
+    expect(placeOf(yaml)).toBeNull();
+  });
+
+  test('a world that absorbs nothing has none', () => {
+    const { model, world, options } = caseOf(text(''));
+    const white = { ...world, surface: { ...world.surface, absorbingFraction: 0 } };
+    expect(plainPlace(model, white, options)).toEqual({ place: null, reason: 'it absorbs no starlight' });
+  });
+
+  test('a model with latitudes has none; a run carries the place of each case', () => {
+    const { world, options } = caseOf(text(''));
+    expect(plainPlace('zonal', world, options)).toEqual({ place: null, reason: 'it has more than one temperature' });
+    expect(runCase(caseOf(text(''))).plain).toEqual({ place: placeOf(text('')), reason: null });
   });
 });
 
