@@ -177,7 +177,7 @@ function signs(plan: Plan): Data[] {
 
 function layoutOf(plan: Plan): Partial<Layout> {
   const { view, height, style } = plan;
-  const margin = style.narrow ? { l: 4, r: 4, t: 4, b: 64 } : { l: 8, r: 224, t: 8, b: 8 };
+  const margin = style.narrow ? { l: 4, r: 4, t: 4, b: 64 } : { l: 8, r: 136, t: 8, b: 8 };
   const bare = { showgrid: false, zeroline: false, showticklabels: false, ticks: '' } as const;
   return {
     ...plainLayout(style),
