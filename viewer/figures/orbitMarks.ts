@@ -26,7 +26,7 @@ export function orbitMarks(
   const apsis = (kind: 'periapsis' | 'apoapsis', trueAnomaly: Radians): OrbitMark => ({
     kind,
     trueAnomaly,
-    label: narrow ? kind : `${kind}, ${lengthText(trueAnomaly)}`,
+    label: narrow ? kind : `${kind}<br>${lengthText(trueAnomaly)}`,
   });
   return [
     ...(shape.eccentricity > 0 ? [apsis('periapsis', 0), apsis('apoapsis', Math.PI)] : []),
@@ -38,7 +38,7 @@ export function orbitMarks(
           {
             kind: 'transit' as const,
             trueAnomaly: seen.transit,
-            label: narrow ? 'transit' : 'transit, to the observer',
+            label: 'transit',
           },
           { kind: 'eclipse' as const, trueAnomaly: seen.eclipse, label: 'eclipse' },
         ]),
@@ -49,7 +49,7 @@ function extremeMark(column: Column, shape: OrbitShape, kind: 'hottest' | 'colde
   const trueAnomaly = extremeAnomaly(column, shape, kind);
   const temperature = findingValue(column, kind === 'hottest' ? 'temperatureMax' : 'temperatureMin');
   if (trueAnomaly === null || temperature === null) return [];
-  return [{ kind, trueAnomaly, label: narrow ? kelvin(temperature) : `${kind}, ${kelvin(temperature)}` }];
+  return [{ kind, trueAnomaly, label: narrow ? kelvin(temperature) : `${kind}<br>${kelvin(temperature)}` }];
 }
 
 /** Null where the temperature has no moment at which it is the greatest, or the least. */

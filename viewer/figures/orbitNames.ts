@@ -6,7 +6,8 @@ import { type Plan, spotAt } from './orbitPlan.ts';
 import { headingAt, type Place } from './orbitShape.ts';
 import { spreadLabels } from './spreadLabels.ts';
 
-const nameGap = 19;
+/** Names are of two lines where there is room. */
+const nameGap = { wide: 32, narrow: 19 };
 const nameAway = 24;
 
 /** Outside the orbit, each with a leader to its sign; those of a side keep clear of each other. */
@@ -18,7 +19,7 @@ export function markNames(plan: Plan): Partial<Annotation>[] {
   return [true, false].flatMap((isRight) => {
     const side = named.filter(({ away }) => away.x >= 0 === isRight);
     const wanted = side.map(({ at, away }) => (at.y - view.y[0]) * pixels + away.y);
-    const places = spreadLabels(wanted, nameGap, 9, plan.height - 9);
+    const places = spreadLabels(wanted, style.narrow ? nameGap.narrow : nameGap.wide, 14, plan.height - 14);
     return side.map(({ mark, at, away }, index) => ({
       x: at.x,
       xref: 'x',
@@ -34,6 +35,7 @@ export function markNames(plan: Plan): Partial<Annotation>[] {
       standoff: 7,
       xanchor: isRight ? 'left' : 'right',
       yanchor: 'middle',
+      align: isRight ? 'left' : 'right',
       font: { color: style.theme.ink, size: style.narrow ? 11 : 12 },
     }));
   });

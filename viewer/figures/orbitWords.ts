@@ -47,7 +47,7 @@ export function orbitCaption(plan: Plan, isOneOfMany: boolean): string {
     ...(conjunctions(column) === null
       ? ['Without an argument of periapsis transit and eclipse have no place.']
       : [
-          'Dashed: the line of sight. In transit the planet stands nearest to the observer, in eclipse behind the star; whether it crosses the disc depends on the tilt of the orbit.',
+          'Dashed: the line of sight, its arrow to the observer. In transit the planet stands nearest to the observer, in eclipse behind the star; whether it crosses the disc depends on the tilt of the orbit.',
         ]),
     starWords(starSize(plan)),
     ...(shape.eccentricity > 0

@@ -133,14 +133,15 @@ function shareText(share: number, { whole }: WindowRow, unit: TimeUnit): string 
 }
 
 /** The orbit mean of the instellation is what a slow climate feels. */
-function meanText({ meanInside }: Pick<WindowRow, 'meanInside'>): string {
+function meanText({ meanInside }: WindowRow): string {
   return meanInside === null ? '' : `orbit mean ${meanInside ? 'inside' : 'outside'}`;
 }
 
-/** What holds for every row of a block, or null. */
-function sharedMean({ rows }: WindowBlock): boolean | null {
-  const { meanInside } = rows[0]!;
-  return rows.every((row) => row.meanInside === meanInside) ? meanInside : null;
+/** Of a whole block. */
+function meansText({ rows }: WindowBlock): string {
+  const inside = rows.filter(({ meanInside }) => meanInside === true).length;
+  if (inside === 0 || inside === rows.length) return meanText(rows[0]!);
+  return `orbit mean inside in ${inside} of ${rows.length}`;
 }
 
 function layoutOf(plan: Plan): Partial<Layout> {
@@ -226,7 +227,7 @@ function heading({ block, head }: PlacedBlock, { style }: Plan): Partial<Annotat
   const unit = window.of === 'temperature' ? 'K' : 'W/m2';
   const limits = `${exact(Number(window.from.toPrecision(5)))} to ${withUnit(exact(Number(window.to.toPrecision(5))), unit)}`;
   const isUnknown = rows.every(({ share }) => share === null);
-  const mean = meanText({ meanInside: style.narrow ? null : sharedMean(block) });
+  const mean = style.narrow ? '' : meansText(block);
   const quiet = isUnknown
     ? ''
     : [isSame ? limits : 'limits differ by case', mean].filter((text) => text !== '').join(', ');
@@ -249,7 +250,6 @@ function heading({ block, head }: PlacedBlock, { style }: Plan): Partial<Annotat
 function rowTexts({ block, rows }: PlacedBlock, { style, unit }: Plan): Partial<Annotation>[] {
   const { theme, narrow } = style;
   const at = { showarrow: false, yref: 'y', font: { color: theme.ink, size: 12 } } as const;
-  const isOwn = !narrow && sharedMean(block) === null;
   return block.rows.flatMap((row, index): Partial<Annotation>[] => {
     const y = narrow ? rows[index]! - 15 : rows[index]!;
     const name: Partial<Annotation> = {
@@ -264,7 +264,7 @@ function rowTexts({ block, rows }: PlacedBlock, { style, unit }: Plan): Partial<
     const isUnknown = row.share === null;
     const text = isUnknown
       ? `<i>${plainLabel(row.reason ?? '', narrow ? 34 : 100)}</i>`
-      : [shareText(row.share, row, unit), isOwn ? meanText(row) : ''].filter((part) => part !== '').join(' · ');
+      : shareText(row.share, row, unit);
     const number: Partial<Annotation> = narrow
       ? { ...at, x: 1, xref: 'paper', xanchor: 'right', y: isUnknown ? rows[index]! : y, text }
       : { ...at, x: row.share ?? 0, xref: 'x', xanchor: 'left', xshift: 6, y, text };

@@ -58,7 +58,7 @@ describe('the orbit from above', () => {
     expect(bearing('transit')).toBeCloseTo(345, 9);
     expect(bearing('to the observer')).toBeCloseTo(345, 9);
     expect(bearing('eclipse')).toBeCloseTo(165, 9);
-    expect(words(figure)).toEqual(expect.arrayContaining(['transit, to the observer', 'eclipse']));
+    expect(words(figure)).toEqual(expect.arrayContaining(['transit', 'eclipse']));
     expect(figure.textAlternative).toMatch(/In transit it has .* in eclipse /);
   });
 
@@ -81,7 +81,7 @@ describe('the orbit from above', () => {
   });
 
   test('apsides carry their distances', () => {
-    expect(words(figureOf())).toEqual(expect.arrayContaining(['periapsis, 0.182 au', 'apoapsis, 0.778 au']));
+    expect(words(figureOf())).toEqual(expect.arrayContaining(['periapsis<br>0.182 au', 'apoapsis<br>0.778 au']));
   });
 
   test('arrowheads point the way the planet goes, more of them where it is slow', () => {
