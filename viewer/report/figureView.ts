@@ -112,7 +112,6 @@ export function figureView(
     build = next;
   }
 
-  say(build(pictureStyle));
   return {
     element: element(
       'figure',

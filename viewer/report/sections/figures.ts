@@ -67,17 +67,20 @@ function orbit(columns: readonly Column[]): FigureBuilder {
   };
 }
 
-/** The chart is computed once, when it is first drawn. */
 function plainWorlds(columns: readonly Column[]): FigureBuilder[] {
   const placed = placedColumns(columns);
   if (placed.length === 0) return [];
-  let chart: UniversalChart | null = null;
-  return [
-    figure('plainWorlds', (style) => {
-      chart ??= universalChart(chartNodes(placed.map(({ place }) => place)));
-      return plainWorldChart(columns, chart, style);
-    }),
-  ];
+  const chart = () => chartOver(chartNodes(placed.map(({ place }) => place)));
+  return [figure('plainWorlds', (style) => plainWorldChart(columns, chart(), style))];
+}
+
+/** The chart of all plain worlds takes tenths of a second, and is the same until a case leaves it: the last one is kept. */
+let lastChart: { readonly nodes: string; readonly chart: UniversalChart } | null = null;
+
+function chartOver(nodes: Parameters<typeof universalChart>[0]): UniversalChart {
+  const key = JSON.stringify(nodes);
+  if (lastChart?.nodes !== key) lastChart = { nodes: key, chart: universalChart(nodes) };
+  return lastChart.chart;
 }
 
 /** Of the columns that tell latitudes apart. */
