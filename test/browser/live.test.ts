@@ -64,7 +64,7 @@ describe.skipIf(!hasBrowser)('the live report in Chromium', () => {
 
   test('every slider answers to the keyboard, and the sentence is that of the command line', async () => {
     const page = await openLive(single);
-    const sliders = page.getByRole('slider');
+    const sliders = page.getByRole('complementary').getByRole('slider');
     const count = await sliders.count();
     expect(count).toBe(
       readScenario(single, 'x.yaml').cases[0]!.inputs.filter(

@@ -1,14 +1,17 @@
 /** The live page: what the reader moves goes to the solver, and its answers to the page. */
-import type { CaseResult, RunResult } from '../../../sim/run.ts';
+import type { RunResult } from '../../../sim/run.ts';
 import type { EditedCase } from '../../../sim/scenario/edited.ts';
 import { plainReading } from '../../figures/reading.ts';
+import { answer } from '../../words/answer.ts';
 import { movesText, nameFor } from '../../words/moves.ts';
 import { element } from '../element.ts';
 import type { RunPage } from '../page.ts';
 import { saveText } from '../saveFile.ts';
-import { type Panel, panel } from './panel.ts';
+import { stateLink } from './link.ts';
+import { type Panel, type PanelEvents, panel } from './panel.ts';
 import type { CaseDials } from './protocol.ts';
-import { type Fault, type Solver, startSolver } from './solver.ts';
+import { resultsOf } from './results.ts';
+import { type SolverEvents, startSolver } from './solver.ts';
 import {
   dropped,
   editsOf,
@@ -30,137 +33,114 @@ export interface Live {
   begin(): void;
 }
 
-/** Results that are kept for the way back: the last ones. */
-const mostRemembered = 64;
 const wide = matchMedia('(min-width: 76rem)');
 
 export function live(page: RunPage, original: RunResult, tree: unknown): Live {
-  const box = element('div', { class: 'instrument-box' });
+  const box = element('div', { class: 'instrument-box' }, element('p', { class: 'run-line' }, 'Getting ready …'));
   const drawer = element('details', { class: 'instruments' }, element('summary', {}, 'Move an assumption'), box);
   const adjust = () => {
     drawer.open = wide.matches;
   };
   adjust();
   wide.addEventListener('change', adjust);
-  box.append(element('p', { class: 'run-line' }, 'Getting ready …'));
+  const column = element('aside', { class: 'instrument-column', 'aria-label': 'Move an assumption' }, drawer);
   return {
-    element: element(
-      'div',
-      { class: 'live' },
-      element('aside', { class: 'instrument-column', 'aria-label': 'Move an assumption' }, drawer),
-      page.element,
-    ),
+    element: element('div', { class: 'live' }, column, page.element),
     begin: () => run(page, original, tree, box),
   };
 }
 
+/** All that changes stands here; what can be told without it has its own file. */
 function run(page: RunPage, original: RunResult, tree: unknown, box: HTMLElement): void {
   const names = original.cases.map(({ name }) => name);
-  const remembered = new Map<string, CaseResult>();
+  const results = resultsOf(original);
+  /** What the whole page was to show when a request was made. */
   const wholes = new WeakMap<readonly EditedCase[], readonly EditedCase[]>();
+  const spoken = speaker();
   let state = unmoved;
+  let reading = plainReading;
   let known: readonly CaseDials[] = [];
   let controls: Panel | null = null;
   let shown = original;
-  let writing = 0;
-  let reading = plainReading;
-  const linkOf = () => [toHash(state, names), readingToHash(reading)].filter((part) => part !== '').join('&');
-  page.figures.onRead((chosen) => {
-    reading = chosen;
-    linkSoon();
-  });
 
-  const solver: Solver = startSolver(tree, original.scenario.file, {
+  const solverEvents: SolverEvents = {
     opened(cases) {
       known = cases.filter(({ name }) => names.includes(name));
-      controls = panel(known, {
-        moved: (caseNames, key, text) =>
-          change(
-            text === null || isOriginal(caseNames, key, text)
-              ? reset(state, caseNames, key)
-              : moved(state, caseNames, key, text),
-          ),
-        resetAll: () => change(unmoved),
-        keep: (caseNames) => change(withKept(caseNames)),
-        drop: (name) => change(dropped(state, name)),
-        save: () => void save(),
-      });
-      box.replaceChildren(controls.element);
+      controls = panel(known, panelEvents);
+      box.replaceChildren(controls.element, spoken.element);
       controls.show(state, siOf);
-      takeLink();
-      addEventListener('hashchange', takeLink);
+      link.follow();
       document.body.dataset.live = 'yes';
     },
-    ran(results, requested, seconds) {
-      for (const [i, result] of results.entries()) remember(requested[i]!, result);
+    ran(found, requested, seconds) {
+      for (const [i, result] of found.entries()) results.keep(requested[i]!, result);
       controls?.fail(null);
-      controls?.tell(
-        `Computed in ${seconds < 0.0995 ? Math.max(1, Math.round(1000 * seconds)) : Math.round(100 * seconds) * 10} ms.`,
-      );
+      controls?.tell(`Computed in ${roughly(1000 * seconds)} ms.`);
       show(wholes.get(requested) ?? []);
     },
-    failed: (fault: Fault) => controls?.fail(fault),
-    unavailable() {
-      box.replaceChildren(
-        element(
-          'p',
-          { class: 'run-line' },
-          'This browser lets no page from disk compute: the figures stay as the file has them.',
-        ),
-      );
+    failed: (fault) => controls?.fail(fault),
+    unavailable(why) {
+      box.replaceChildren(element('p', { class: 'run-line' }, `${why}: the figures stay as the file has them.`));
     },
+  };
+  const panelEvents: PanelEvents = {
+    moved(caseNames, key, text) {
+      const isBack = text === null || isOriginal(caseNames, key, text);
+      change(isBack ? reset(state, caseNames, key) : moved(state, caseNames, key, text));
+    },
+    resetAll: () => change(unmoved),
+    keep: (caseNames) => change(withKept(caseNames)),
+    drop: (name) => change(dropped(state, name)),
+    save: () => void save(),
+  };
+  const link = stateLink(
+    () => [toHash(state, names), readingToHash(reading)].filter((part) => part !== '').join('&'),
+    (hash) => {
+      reading = readingFromHash(hash, names);
+      page.figures.read(reading);
+      change(fromHash(hash, names, hasDial));
+    },
+  );
+  const solver = startSolver(tree, original.scenario.file, solverEvents);
+  page.figures.onRead((chosen) => {
+    reading = chosen;
+    link.changed();
   });
 
   function change(next: LiveState): void {
     state = next;
     controls?.show(state, siOf);
-    linkSoon();
-    request();
-  }
-
-  function linkSoon(): void {
-    clearTimeout(writing);
-    writing = setTimeout(writeLink, 200) as unknown as number;
-  }
-
-  function request(): void {
+    link.changed();
     const whole = presentCases(state, names);
-    const missing = whole.filter((one) => resultOf(one) === undefined);
-    if (missing.length === 0) {
-      solver.forget();
-      controls?.fail(null);
-      controls?.tell('');
-      show(whole);
+    const missing = whole.filter((one) => results.of(one) === undefined);
+    if (missing.length > 0) {
+      wholes.set(missing, whole);
+      solver.run(missing);
       return;
     }
-    wholes.set(missing, whole);
-    solver.run(missing);
-  }
-
-  function resultOf(one: EditedCase): CaseResult | undefined {
-    const isOwn = one.edits.length === 0 && one.name === one.from;
-    return isOwn ? original.cases.find(({ name }) => name === one.name) : remembered.get(JSON.stringify(one));
-  }
-
-  function remember(one: EditedCase, result: CaseResult): void {
-    remembered.set(JSON.stringify(one), result);
-    const [oldest] = remembered.keys();
-    if (remembered.size > mostRemembered && oldest !== undefined) remembered.delete(oldest);
+    solver.forget();
+    controls?.fail(null);
+    controls?.tell('');
+    show(whole);
   }
 
   function show(whole: readonly EditedCase[]): void {
-    const cases = whole.map(resultOf);
-    if (!cases.every((one) => one !== undefined)) return;
-    const isOriginal = whole.every(({ edits, name }, i) => edits.length === 0 && name === names[i]);
-    shown = isOriginal ? original : { ...original, cases };
+    const found = results.whole(whole);
+    if (found === null) return;
+    shown = found;
     page.show(shown, movesText(whole, known));
     controls?.show(state, siOf);
+    spoken.say(answer(shown).lead);
     document.body.dataset.shown = String(Number(document.body.dataset.shown ?? 0) + 1);
   }
 
   function siOf(caseName: string, key: string): number | null {
     const inputs = shown.cases.find(({ name }) => name === caseName)?.inputs;
     return inputs?.find((input) => input.key === key)?.value ?? null;
+  }
+
+  function hasDial(caseName: string, key: string): boolean {
+    return known.some(({ name, dials }) => name === caseName && dials.some((dial) => dial.key === key));
   }
 
   function isOriginal(caseNames: readonly string[], key: string, text: string): boolean {
@@ -173,22 +153,6 @@ function run(page: RunPage, original: RunResult, tree: unknown, box: HTMLElement
     return movedNames.reduce((now, name) => kept(now, name, nameFor(name, editsOf(now, name), known), names), state);
   }
 
-  function takeLink(): void {
-    const hash = location.hash.replace(/^#/, '');
-    if (hash === linkOf()) return;
-    reading = readingFromHash(hash, names);
-    page.figures.read(reading);
-    const isKnown = (caseName: string, key: string) =>
-      known.some(({ name, dials }) => name === caseName && dials.some((dial) => dial.key === key));
-    change(fromHash(hash, names, isKnown));
-  }
-
-  function writeLink(): void {
-    const hash = linkOf();
-    if (hash !== location.hash.replace(/^#/, ''))
-      history.replaceState(null, '', hash === '' ? location.pathname : `#${hash}`);
-  }
-
   async function save(): Promise<void> {
     const name = original.scenario.file.replace(/^.*[\\/]/, '').replace(/\.(?:ya?ml|json)$/i, '');
     try {
@@ -197,4 +161,24 @@ function run(page: RunPage, original: RunResult, tree: unknown, box: HTMLElement
       controls?.fail({ where: null, message: (error as Error).message });
     }
   }
+}
+
+/** Two digits, at least 1. */
+function roughly(milliseconds: number): number {
+  return Math.max(1, Number(milliseconds.toPrecision(2)));
+}
+
+/** Says a sentence to those who do not see it, when the numbers have come to rest. */
+function speaker(): { readonly element: HTMLElement; say(sentence: string): void } {
+  const line = element('p', { class: 'spoken', role: 'status' });
+  let timer = 0;
+  return {
+    element: line,
+    say(sentence) {
+      clearTimeout(timer);
+      timer = setTimeout(() => {
+        line.textContent = sentence;
+      }, 700) as unknown as number;
+    },
+  };
 }

@@ -55,8 +55,9 @@ export function startSolver(tree: unknown, file: string, events: SolverEvents): 
   function start(): Worker {
     const worker = new Worker(script);
     worker.onmessage = ({ data }: MessageEvent<Answer>) => hear(worker, data);
-    worker.onerror = () => {
-      if (!isOpen) events.unavailable(cannotStart);
+    worker.onerror = ({ message }) => {
+      if (isOpen) giveUp(worker, message);
+      else events.unavailable(cannotStart);
     };
     post(worker, { kind: 'open', tree, file });
     return worker;
@@ -89,6 +90,18 @@ export function startSolver(tree: unknown, file: string, events: SolverEvents): 
     shown = answer.id;
     if (answer.kind === 'ran') events.ran(answer.cases, job.cases, answer.seconds);
     else if (answer.kind === 'failed') events.failed(answer, job.cases);
+  }
+
+  /** A worker that has died takes nothing with it but the request that it was at. */
+  function giveUp(worker: Worker, message: string): void {
+    const hand = team.find((one) => one.worker === worker);
+    if (!hand) return;
+    const { job } = hand;
+    worker.terminate();
+    hand.worker = start();
+    hand.job = null;
+    if (job) events.failed({ where: null, message: message || 'The computation ended without a word.' }, job.cases);
+    deal();
   }
 
   /** Gives what waits to a free hand, a new one, or one that has been at something old for too long. */
