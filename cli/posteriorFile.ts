@@ -42,12 +42,13 @@ export function samplesFrom(folder: string, { file, scenario }: ScenarioFile, cw
  */
 export async function readSamples(posterior: Posterior, scenarioFile: string, cwd: string): Promise<Samples> {
   const path = samplesPath(posterior, scenarioFile, cwd);
-  const bytes = bytesOf(posterior.file, path, 'a file of samples');
+  const named = relative(cwd, path) || posterior.file;
+  const bytes = bytesOf(named, path, 'a file of samples');
   const names = [...posterior.columns.map(({ column }) => column), ...(posterior.weights ? [posterior.weights] : [])];
-  const raw = await rawColumns(bytes, posterior.file, names);
-  if (raw.count === 0) throw new SimError(posterior.file, 'there are no samples in it', 'Write one sample a row');
+  const raw = await rawColumns(bytes, named, names);
+  if (raw.count === 0) throw new SimError(named, 'there are no samples in it', 'Write one sample a row');
   const values = new Map(posterior.columns.map((column) => [column.key, samplesOf(raw, column)] as const));
-  const weights = posterior.weights === null ? null : checkWeights(raw, posterior.weights, posterior.file);
+  const weights = posterior.weights === null ? null : checkWeights(raw, posterior.weights, named);
   return { count: raw.count, values, weights, sha256: createHash('sha256').update(bytes).digest('hex') };
 }
 

@@ -24,7 +24,7 @@ const where = '--along';
 /** Of what a user may copy from a message. */
 const most = 100;
 const sample = 'star.luminosity=0.8 to 1.3 Lsun';
-const refusal = 'is a setting, a word, a date or a table, along which no climate can be followed';
+const refusal = 'is a setting, a word, a date or a table, not a number that can run over a range';
 
 /**
  * `star.luminosity=0.8 to 1.3 Lsun`, or with ` log` behind it.

@@ -131,7 +131,7 @@ function refuseList(name: string, tree: Branch, { key }: Along): void {
   const listAt = path.findIndex((_, depth) => subtree(tree, path.slice(0, depth))?.kind === 'list');
   if (listAt < 0) return;
   const what = `${path.slice(0, listAt).join('.')} of case \`${name}\` is a list, and ${key} would replace all of it`;
-  throw new SimError(where, what, 'Write a single form in the scenario, or follow another key');
+  throw new SimError(where, what, 'Write a single form in the scenario, or name another key');
 }
 
 /** No section of a scenario: in one patch, nothing replaces anything. */
@@ -152,8 +152,8 @@ function checkProbes(name: string, alongs: readonly Along[], probes: Probes): vo
   }
   for (const [i, { key }] of alongs.entries()) {
     if (probes.matters(i)) continue;
-    const what = `the climate of case \`${name}\` does not depend on ${key}`;
-    throw new SimError(where, what, 'Follow another key, or leave the case out with --only');
+    const what = `nothing that is computed for case \`${name}\` depends on ${key}`;
+    throw new SimError(where, what, 'Name another key, or leave the case out with --only');
   }
 }
 

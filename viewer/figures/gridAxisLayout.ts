@@ -6,6 +6,7 @@ import { axisPlace, rangeOf } from '../words/gridAxes.ts';
 import { exact, raised } from '../words/number.ts';
 import { axisStyle } from './chartLayout.ts';
 import type { FigureStyle } from './figure.ts';
+import { logTicks } from './logTicks.ts';
 import { plainLabel } from './plainLabel.ts';
 import { multiples } from './roomyTicks.ts';
 
@@ -20,7 +21,7 @@ export function gridAxisLayout(
     title: { text: plainLabel(axisTitle(rangeOf(axis)), 60), standoff: 8 },
     range: [...range],
     nticks: style.narrow ? 5 : 10,
-    ...(axis.log && spansDecades(range) ? decadeTicks(range, style) : {}),
+    ...(axis.log ? (spansDecades(range) ? decadeTicks(range, style) : logTicks(range, style.narrow ? 5 : 9)) : {}),
     exponentformat: 'power',
     showgrid: false,
   };

@@ -73,7 +73,8 @@ export function shownFinding(report: Pick<GridReport, 'cases'>, name: string): S
   const cases = si.map((values) => values.map((value) => (value === null ? null : value / per)));
   const range = finite.length === 0 ? null : ([Math.min(...finite) / per, Math.max(...finite) / per] as const);
   const log = range !== null && !known?.circular && range[0] > 0 && range[1] > wide * range[0];
-  const number = numberText(range ?? [0, 1], log);
+  const isCount = symbol === '' && finite.every(Number.isInteger);
+  const number = isCount ? exact : numberText(range ?? [0, 1], log);
   return {
     name,
     label: known === undefined ? name : shownLabel(known),

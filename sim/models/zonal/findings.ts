@@ -3,6 +3,7 @@ import { stefanBoltzmann } from '../../constants.ts';
 import type { Dataset } from '../../dataset/dataset.ts';
 import type { Finding } from '../../findings/finding.ts';
 import { instellationWindowFindings } from '../../findings/instellationWindow.ts';
+import { wholeShare } from '../../findings/wholeShare.ts';
 import { worldFindings } from '../../findings/world.ts';
 import type { Kelvin } from '../../si.ts';
 import type { Curve } from '../../solve/curve.ts';
@@ -106,7 +107,7 @@ function marginFinding(margin: number | null): Finding {
 }
 
 function climatesFinding(climates: number | null): Finding {
-  const base = { name: 'climates', unit: '1', label: 'Stable climates found' };
+  const base = { name: 'climates', unit: '1', label: 'Number of stable climates found' };
   if (climates !== null) return { ...base, value: climates };
   return { ...base, value: null, reason: 'one of the two starts reached no climate' };
 }
@@ -178,7 +179,7 @@ function temperatureWindow(year: ZonalYear, { name, from, to }: Window): Finding
   const surfaces = surfacesOf(year);
   const shares = surfaces.map(({ curve }) => shareBetween(curve, from, to, identity));
   const area = (of: (share: number) => number) =>
-    surfaces.reduce((sum, surface, i) => sum + surface.area * of(shares[i]), 0);
+    wholeShare(surfaces.reduce((sum, surface, i) => sum + surface.area * of(shares[i]), 0));
   const seasons = year.curves.bands.map((curve) => longestSeason(curve, from, to));
   const longest = seasons.reduce((best, season, i) => (season > seasons[best] ? i : best), 0);
   const none = { value: null, reason: 'no latitude is ever inside' };

@@ -1,6 +1,8 @@
 /** Ice edges through the year, and how much of the globe is under ice. */
+
 import type { Dataset } from '../../dataset/dataset.ts';
 import type { Finding } from '../../findings/finding.ts';
+import { wholeShare } from '../../findings/wholeShare.ts';
 import type { Seconds } from '../../si.ts';
 import type { ZonalYear } from './year.ts';
 
@@ -29,7 +31,7 @@ export function iceFindings(year: ZonalYear, dataset: Dataset): Finding[] {
     ...edgeFindings(south),
     capFraction(north, time, period),
     capFraction(south, time, period),
-    { name: 'iceFractionMean', value: mean, unit: '1', label: 'Area and time under ice' },
+    { name: 'iceFractionMean', value: wholeShare(mean), unit: '1', label: 'Area and time under ice' },
   ];
 }
 

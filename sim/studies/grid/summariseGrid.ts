@@ -27,7 +27,7 @@ export function summariseGrid(
   return {
     ...origin,
     axes: plan.axes.map(({ along: { key, label, unit, log }, nodes }) => {
-      return { key, label, unit, log, nodes: Float64Array.from(nodes, ({ value }) => inUnit(value, unit)) };
+      return { key, label, unit, log, nodes: Float64Array.from(nodes, ({ text }) => Number.parseFloat(text)) };
     }),
     hold: plan.setup.hold,
     cases: plan.cases.map((one) => {

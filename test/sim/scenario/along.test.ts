@@ -113,31 +113,31 @@ describe('readAlong', () => {
     ],
     [
       'planet.bands=18 to 90',
-      '--along: `planet.bands` is a setting, a word, a date or a table, along which no climate can be followed. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
+      '--along: `planet.bands` is a setting, a word, a date or a table, not a number that can run over a range. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
     ],
     [
       'planet.insolation=1 to 2',
-      '--along: `planet.insolation` is a setting, a word, a date or a table, along which no climate can be followed. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
+      '--along: `planet.insolation` is a setting, a word, a date or a table, not a number that can run over a range. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
     ],
     [
       'planet.rotationPeriod=10 h to 20 h',
-      '--along: `planet.rotationPeriod` is a setting, a word, a date or a table, along which no climate can be followed. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
+      '--along: `planet.rotationPeriod` is a setting, a word, a date or a table, not a number that can run over a range. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
     ],
     [
       'orbit.periapsisTime=2461103.71 TDB to 2461104.2 TDB',
-      '--along: `orbit.periapsisTime` is a setting, a word, a date or a table, along which no climate can be followed. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
+      '--along: `orbit.periapsisTime` is a setting, a word, a date or a table, not a number that can run over a range. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
     ],
     [
       'solve.tolerance=1e-6 to 1e-3',
-      '--along: `solve.tolerance` is a setting, a word, a date or a table, along which no climate can be followed. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
+      '--along: `solve.tolerance` is a setting, a word, a date or a table, not a number that can run over a range. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
     ],
     [
       'model=lumped to zonal',
-      '--along: `model` is a setting, a word, a date or a table, along which no climate can be followed. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
+      '--along: `model` is a setting, a word, a date or a table, not a number that can run over a range. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
     ],
     [
       'cases.sea=1 to 2',
-      '--along: `cases.sea` is a setting, a word, a date or a table, along which no climate can be followed. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
+      '--along: `cases.sea` is a setting, a word, a date or a table, not a number that can run over a range. Name a number of the star, the orbit or the planet, e.g. `star.luminosity=0.8 to 1.3 Lsun`.',
     ],
     ['star.luminosity=1.3 Lsun', '--along: `1.3 Lsun` is not a range. Write e.g. `star.luminosity=0.8 to 1.3 Lsun`.'],
     [
@@ -217,11 +217,11 @@ describe('casesAlong', () => {
   test.each([
     [
       'planet.heatStore.mixedLayer=1 to 2 m',
-      '--along: planet.heatStore of case `stack` is a list, and planet.heatStore.mixedLayer would replace all of it. Write a single form in the scenario, or follow another key.',
+      '--along: planet.heatStore of case `stack` is a list, and planet.heatStore.mixedLayer would replace all of it. Write a single form in the scenario, or name another key.',
     ],
     [
       'planet.obliquity=0 to 90 deg',
-      '--along: the climate of case `sea` does not depend on planet.obliquity. Follow another key, or leave the case out with --only.',
+      '--along: nothing that is computed for case `sea` depends on planet.obliquity. Name another key, or leave the case out with --only.',
     ],
     [
       'orbit.eccentricity=0.5 to 0.99995',

@@ -121,7 +121,7 @@ describe('casesOver refuses', () => {
     ],
     [
       ['planet.obliquity=0 to 90 deg'],
-      '--along: the climate of case `sea` does not depend on planet.obliquity. Follow another key, or leave the case out with --only.',
+      '--along: nothing that is computed for case `sea` depends on planet.obliquity. Name another key, or leave the case out with --only.',
     ],
     [
       ['orbit.period=20 to 30 d', 'orbit.semiMajorAxis=0.4 to 0.5 au'],
