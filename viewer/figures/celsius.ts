@@ -79,7 +79,9 @@ function traceInCelsius(trace: Json, axes: ReadonlySet<string>): Data {
     moved.customdata = shifted(trace.customdata);
     moved.hovertemplate = String(moved.hovertemplate).replaceAll(/(%\{customdata[^}]*\}) K/g, '$1 °C');
   }
-  for (const key of ['name', 'text'] as const) if (trace[key] !== undefined) moved[key] = wordsIn(trace[key]);
+  for (const key of ['name', 'text', 'customdata', 'hovertemplate'] as const) {
+    if (moved[key] !== undefined) moved[key] = wordsIn(moved[key]);
+  }
   return moved as unknown as Data;
 }
 

@@ -51,6 +51,7 @@ export function figureList(first: readonly FigureBuilder[], firstChoices: Figure
   moment.offer(firstChoices.columns);
   const box = element('div', { class: 'figure-list' });
   const views = new Map<string, FigureView>();
+  let order: readonly string[] = [];
   const choosers = new Map<string, Chooser>();
   const stale = new Set<FigureView>();
   const inView = new Set<Element>();
@@ -100,6 +101,7 @@ export function figureList(first: readonly FigureBuilder[], firstChoices: Figure
   }
 
   function lay(builders: readonly FigureBuilder[]): void {
+    order = builders.map(({ id }) => id);
     for (const [id, view] of views) {
       if (builders.some((one) => one.id === id)) continue;
       watch.unobserve(view.element);
@@ -134,7 +136,7 @@ export function figureList(first: readonly FigureBuilder[], firstChoices: Figure
   lay(first);
   return {
     element: element('div', { class: 'figures' }, bar.element, moment.element, box),
-    views: () => [...views.values()],
+    views: () => order.map((id) => views.get(id)!),
     show(builders, choices) {
       bar.offer(choices);
       moment.offer(choices.columns);

@@ -3,6 +3,8 @@ import { annualProfile } from '../../../viewer/figures/annualProfile.ts';
 import { inCelsius } from '../../../viewer/figures/celsius.ts';
 import type { Figure } from '../../../viewer/figures/figure.ts';
 import { insolationGroups, insolationMap } from '../../../viewer/figures/insolationMap.ts';
+import { lagLoop } from '../../../viewer/figures/lagLoop.ts';
+import { orbitFromAbove } from '../../../viewer/figures/orbitFromAbove.ts';
 import { temperatureDifference } from '../../../viewer/figures/temperatureDifference.ts';
 import { temperatureMap } from '../../../viewer/figures/temperatureMap.ts';
 import { temperatureThroughOrbit } from '../../../viewer/figures/temperatureThroughOrbit.ts';
@@ -18,6 +20,8 @@ const figures: readonly (readonly [name: string, figure: Figure])[] = [
   ['through the orbit', temperatureThroughOrbit(plain, style)],
   ['by latitude and season', temperatureMap(zonal, 0, style)],
   ['by latitude', annualProfile(zonal, style)],
+  ['from above', orbitFromAbove(plain, 0, style)],
+  ['against instellation', lagLoop(plain, style)],
 ];
 
 /** Every text of the JSON. */

@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
+import { axisNames, plainReading } from '../../../../viewer/figures/reading.ts';
 import {
   dropped,
   editsOf,
@@ -8,6 +9,8 @@ import {
   type LiveState,
   moved,
   presentCases,
+  readingFromHash,
+  readingToHash,
   reset,
   toHash,
   unmoved,
@@ -64,6 +67,19 @@ describe('a link', () => {
       }),
       { seed: 5, numRuns: 300 },
     );
+  });
+
+  test('brings back how figures are read, and leaves out what is plain', () => {
+    for (const axis of axisNames) {
+      for (const unit of ['K', 'degC'] as const) {
+        for (const against of [null, ...names]) {
+          const reading = { axis, unit, against };
+          expect(readingFromHash(`#${readingToHash(reading)}`, names)).toEqual(reading);
+        }
+      }
+    }
+    expect(readingToHash(plainReading)).toBe('');
+    expect(readingFromHash('#by=__proto__&in=F&from=nobody', names)).toEqual(plainReading);
   });
 
   test('what is not understood is left out', () => {
