@@ -42,7 +42,10 @@ export interface SpreadFinding {
   readonly circular: boolean;
   /** Null where fewer than two draws have a value. */
   readonly histogram: Histogram | null;
-  /** Where the draws fall into two groups with none between, the lower first; else null. On the line of the summary. */
+  /**
+   * Where the draws fall into two groups with none between, the lower first; else null. Where `circular`, on the circle: a group
+   * may reach across periapsis, and stands whole.
+   */
   readonly groups: readonly [Group, Group] | null;
   readonly importance: Importance;
 }

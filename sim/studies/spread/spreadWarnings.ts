@@ -54,12 +54,15 @@ export function groupWarnings(findings: readonly SpreadFinding[]): string[] {
     others.length === 0
       ? ''
       : ` So do those of ${others.length > 3 ? `${others.length} other findings` : listed(others)}.`;
+  const round = apart.some(({ circular }) => circular)
+    ? ' Times come round with the orbit: a group that reaches across the ends of a histogram stands at both.'
+    : '';
   return [
-    `${groupWords(told)}${rest} Histograms show both groups; a mean or an interval over both may tell of neither.`,
+    `${groupWords(told)}${rest} Histograms show both groups; a mean or an interval over both may tell of neither.${round}`,
   ];
 }
 
-function groupWords({ label, unit, groups, summary: { mean } }: SpreadFinding): string {
+function groupWords({ label, unit, groups, circular, summary: { mean } }: SpreadFinding): string {
   const [low, high] = groups!;
   const symbol = unit === 's' ? 'd' : unit;
   const number = (value: number) => formatNumber(unit === 's' ? inUnit(value, 'd') : value, 4);
@@ -67,9 +70,12 @@ function groupWords({ label, unit, groups, summary: { mean } }: SpreadFinding): 
   const reach = ({ share, from, to }: Group) => {
     return `${shareWords(share)} of them ${number(from) === number(to) ? `at ${text(from)}` : `from ${number(from)} to ${text(to)}`}`;
   };
-  const isOfNone = mean !== null && mean > low.to && mean < high.from;
+  // on the circle nothing lies beyond both groups
+  const isOfNone =
+    mean !== null &&
+    (circular ? !groups!.some(({ from, to }) => mean >= from && mean <= to) : mean > low.to && mean < high.from);
   const average = isOfNone ? `: the mean, ${text(mean)}, is that of no draw` : '';
-  return `${label}: the draws fall into two groups, ${reach(low)} and ${reach(high)}, none between${average}.`;
+  return `${label}: the draws fall into two groups${circular ? ' on the orbit' : ''}, ${reach(low)} and ${reach(high)}, none between${average}.`;
 }
 
 /** Digits that a share of some thousand draws has: whole percent in the middle, a tenth near the ends. */

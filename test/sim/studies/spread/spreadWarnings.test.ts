@@ -60,6 +60,20 @@ describe('two groups in words', () => {
     expect(groupWarnings([mean, ...many])[0]).toContain('So do those of 4 other findings.');
   });
 
+  test('on the circle a mean beyond both groups is that of no draw either', () => {
+    const round = { ...finding('timeOfMax', 'Time of maximum', 's', 8 * 86400), circular: true };
+    const groups = [
+      { share: 0.5, from: 3 * 86400, to: 4 * 86400 },
+      { share: 0.5, from: 6 * 86400, to: 7 * 86400 },
+    ] as const;
+    const [said] = groupWarnings([{ ...round, groups }]);
+    expect(said).toContain('two groups on the orbit, 50 % of them from 3 to 4 d and 50 % of them from 6 to 7 d');
+    expect(said).toContain('the mean, 8 d, is that of no draw');
+    expect(said).toContain('stands at both');
+    const within = { ...round, groups, summary: { ...round.summary, mean: 6.5 * 86400 } };
+    expect(groupWarnings([within])[0]).not.toContain('of no draw');
+  });
+
   test('times are told in days; nothing is said where none falls apart', () => {
     expect(groupWarnings([finding('lagOfMax', 'Lag', 's', 5 * 86400, [4 * 86400, 6 * 86400])])[0]).toContain('to 4 d');
     expect(groupWarnings([{ ...finding('damping', 'Damping', '1', 1), groups: null }])).toEqual([]);

@@ -95,6 +95,31 @@ test('a run at the centre is told in the turn of the median, in its own seconds'
   expect(late.atCentre).toBe(413);
 });
 
+test.each([0.5, 0.3])(
+  'opposite seasons, %s of the draws about periapsis: two groups with their own shares',
+  async (share) => {
+    const period = 400 * 86_400;
+    // 8 d around periapsis, and around half an orbit after it
+    const timeAt = (draw: number) => {
+      const u = plan.draws.at(draw, 0);
+      const days = u < share ? 8 * (u / share - 0.5) : 200 + 8 * ((u - share) / (1 - share) - 0.5);
+      return ((days + 400) % 400) * 86_400;
+    };
+    const column = async (name: string) =>
+      Float64Array.from({ length: draws }, (_, draw) => (name === 'timeOfMax' ? timeAt(draw) : period));
+    const [told] = (await summariseSpread(plan, origin, tables({ draws: column }))).cases;
+    const { groups } = told!.findings.find(({ name }) => name === 'timeOfMax')!;
+    expect(groups!.map(({ share }) => share)).toEqual([expect.closeTo(share, 2), expect.closeTo(1 - share, 2)]);
+    const ends = groups!.flatMap(({ from, to }) => [from / 86_400, to / 86_400]);
+    for (const [i, end] of [-4, 4, 196, 204].entries()) expect(Math.abs(ends[i]! - end)).toBeLessThan(0.1);
+    expect(told!.warnings.find((text) => text.startsWith('Time of maximum'))).toMatch(
+      share === 0.5
+        ? /two groups on the orbit, 50 % of them from −?-?[34]\.\d+ to [34]\.?\d* d and 50 % of them from 196/
+        : /two groups on the orbit, 30 % of them from −?-?[34]\.\d+ to [34]\.?\d* d and 70 % of them from 196/,
+    );
+  },
+);
+
 test('a finding that some draws lack: the share that has it, and why one lacks it, in the words of the model', async () => {
   const circle = text.replace('0.3 to 0.6', '0');
   const round = planSpread({
