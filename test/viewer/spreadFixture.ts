@@ -267,8 +267,8 @@ function indexImportance(
   inputs: number,
 ): Importance {
   const further = Float64Array.from(answers, (answer) => answer.findings[finding]!);
-  const { first, total, reason } = sobolIndices(designValues(values, further, inputs), again);
-  return { first, total, ranks: null, ...(reason === undefined ? {} : { reason }) };
+  const { first, total, leftOut, reason } = sobolIndices(designValues(values, further, inputs), again);
+  return { first, total, ranks: null, leftOut, ...(reason === undefined ? {} : { reason }) };
 }
 
 function rankImportance(columns: readonly Float64Array[], values: Float64Array): Importance {
@@ -277,8 +277,8 @@ function rankImportance(columns: readonly Float64Array[], values: Float64Array):
   const ranks = measures.map(({ value, chanceLevel }) => ({ value: value!, chanceLevel: chanceLevel! }));
   const none = measures.find(({ value }) => value === null);
   return none === undefined
-    ? { first: null, total: null, ranks }
-    : { first: null, total: null, ranks: null, reason: none.reason ?? 'none' };
+    ? { first: null, total: null, ranks, leftOut: 0 }
+    : { first: null, total: null, ranks: null, leftOut: 0, reason: none.reason ?? 'none' };
 }
 
 function turnsSummary(values: Float64Array): Summary {

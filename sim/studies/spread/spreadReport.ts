@@ -56,6 +56,8 @@ export interface Importance {
   readonly total: readonly SobolIndex[] | null;
   /** For posterior samples, whose inputs go together: dependence by ranks, and what chance alone would give. */
   readonly ranks: readonly RankImportance[] | null;
+  /** Share of the rows of the index design left out whole because one of their runs failed or lacks the finding; 0 without indices. */
+  readonly leftOut: number;
   readonly reason?: string;
 }
 

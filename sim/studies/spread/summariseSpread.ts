@@ -15,7 +15,14 @@ import type { PlannedCase, SpreadPlan } from './plan.ts';
 import { type RankOrder, rankOrder } from './rankMeasure.ts';
 import { reasonsOf } from './reasons.ts';
 import type { Importance, SpreadBand, SpreadCase, SpreadFinding, SpreadInput, SpreadReport } from './spreadReport.ts';
-import { circleNote, climateWarnings, groupWarnings, warmestNote } from './spreadWarnings.ts';
+import {
+  circleNote,
+  climateWarnings,
+  cutWarnings,
+  groupWarnings,
+  leftOutWarnings,
+  warmestNote,
+} from './spreadWarnings.ts';
 
 /** A column of a table by its name, (rows,), NaN where undefined. */
 export type ReadColumn = (name: string) => Promise<Float64Array>;
@@ -73,7 +80,13 @@ async function summariseCase(
     bandDraws: tables.bandDraws,
     failed: periods.reduce((count, value) => count + Number(Number.isNaN(value)), 0),
     sample: { inputs: inputs.sample, findings: findings.sample },
-    warnings: [...drawn.warnings, ...climateWarnings(climates), ...groupWarnings(findings.told)],
+    warnings: [
+      ...drawn.warnings,
+      ...cutWarnings(inputs.told),
+      ...climateWarnings(climates),
+      ...groupWarnings(findings.told),
+      ...leftOutWarnings(findings.told),
+    ],
     notes: [...drawn.notes, ...worldNotes(plan.cases[index])],
   };
 }

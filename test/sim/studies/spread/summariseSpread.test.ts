@@ -1,4 +1,5 @@
 import { expect, test } from 'vitest';
+import { spreadSummary } from '../../../../cli/output/spreadSummary.ts';
 import { SimError } from '../../../../sim/error.ts';
 import { originOf } from '../../../../sim/origin.ts';
 import { readScenario } from '../../../../sim/scenario/read.ts';
@@ -119,6 +120,35 @@ test.each([0.5, 0.3])(
     );
   },
 );
+
+test('what was cut away, and rows that indices lack, are among the warnings', async () => {
+  const wide = planSpread({ ...plan.setup, text: text.replace('0.1 to 0.5', '0.1 ± 0.2') });
+  // in a tenth of the rows the run of B lacks the damping
+  const further = furtherRuns(draws, 2);
+  const value = (row: number) => wide.draws.at(row, 0);
+  const report = await summariseSpread(
+    wide,
+    origin,
+    tables({
+      draws: async () => Float64Array.from({ length: draws }, (_, row) => value(row)),
+      indices: async (name) =>
+        Float64Array.from({ length: further }, (_, run) => {
+          const { row, changed } = designPlace(run, 2);
+          if (name === 'damping' && changed === 'all' && row % 10 === 0) return Number.NaN;
+          return wide.draws.at(row, changed === 'all' || changed === 0 ? 2 : 0);
+        }),
+    }),
+  );
+  const [told] = report.cases;
+  const importance = (name: string) => told!.findings.find((one) => one.name === name)!.importance;
+  expect(importance('damping').leftOut).toBeCloseTo(52 / 512, 12);
+  expect(importance('temperatureMean').leftOut).toBe(0);
+  expect(told!.warnings).toContainEqual(expect.stringMatching(/of planet\.bondAlbedo 0\.1 ± 0\.2 lies beyond what/));
+  expect(told!.warnings).toContainEqual(expect.stringMatching(/indices of Damping.* leave out 10 % of the rows/));
+  const summary = spreadSummary(report).cases[0]!;
+  expect(summary.importance.damping).toMatchObject({ leftOut: 52 / 512 });
+  expect(summary.warnings).toEqual(told!.warnings);
+});
 
 test('a finding that some draws lack: the share that has it, and why one lacks it, in the words of the model', async () => {
   const circle = text.replace('0.3 to 0.6', '0');
