@@ -25,13 +25,14 @@ export function spreadSummary({ draws, seed, sampling, failed, indexRows, cases 
         }),
       ),
       importance: Object.fromEntries(
-        one.findings.map(({ name, importance: { first, total, ranks, reason } }) => [
+        one.findings.map(({ name, importance: { first, total, ranks, leftOut, reason } }) => [
           name,
           {
             ...(reason === undefined ? {} : { reason }),
             ...byInput(one.inputs, 'first', first),
             ...byInput(one.inputs, 'total', total),
             ...byInput(one.inputs, 'ranks', ranks),
+            ...(first === null && total === null ? {} : { leftOut }),
           },
         ]),
       ),

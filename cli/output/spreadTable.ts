@@ -1,6 +1,7 @@
 /** What `spread` shows of each case: the chief findings with their intervals, what matters most, what was not drawn. */
 import { formatNumber, inUnit } from '../../sim/quantity/index.ts';
 import { percentileLevels } from '../../sim/studies/spread/percentiles.ts';
+import { percentWords } from '../../sim/studies/spread/percentWords.ts';
 import type { SpreadCase, SpreadFinding, SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
 import { panels } from './grid.ts';
 import type { Terminal } from './terminal.ts';
@@ -64,12 +65,6 @@ function caseLines(one: SpreadCase, draws: number, terminal: Terminal): string[]
     ...panels(grid, terminal).flatMap((panel, index) => (index === 0 ? panel : ['', ...panel])),
     ...undefinedLines(findings, (draws - one.failed) / draws, terminal),
     ...importanceLines(one, terminal),
-    ...one.inputs
-      .filter(({ truncatedShare }) => truncatedShare > 0.05)
-      .flatMap(({ key, text, truncatedShare }) => {
-        const cut = `${(100 * truncatedShare).toFixed(1)} % of ${key} ${text} lies beyond what is physical and was cut away`;
-        return hanging('warning   ', terminal.say(cut), terminal.width);
-      }),
     ...one.idle.flatMap(({ key, reason }) => hanging('not drawn ', terminal.say(`${key}: ${reason}`), terminal.width)),
     ...one.warnings.flatMap((text) => hanging('warning   ', terminal.say(text), terminal.width)),
     ...one.notes.flatMap((text) => hanging('note      ', terminal.say(text), terminal.width)),
@@ -110,13 +105,6 @@ function undefinedLines(findings: readonly SpreadFinding[], sound: number, termi
     const text = `${label}: defined in ${percentWords(summary.defined)} of the draws${because}`;
     return hanging('          ', terminal.say(text), terminal.width);
   });
-}
-
-/** One decimal, but neither all nor nothing where it is not. */
-function percentWords(share: number): string {
-  if (share > 0 && share < 5e-4) return 'less than 0.1 %';
-  if (share < 1 && share > 1 - 5e-4) return 'more than 99.9 %';
-  return `${(100 * share).toFixed(1)} %`;
 }
 
 function importanceLines(one: SpreadCase, terminal: Terminal): string[] {

@@ -1,11 +1,11 @@
 /** Many worlds to findings with any model: by its own batch, or by solving one world after another. */
-import { SimError } from '../error.ts';
 import type { Finding } from '../findings/finding.ts';
 import type { SolveOptions, Window, World } from '../world.ts';
+import { columnNumbers } from './columnNumbers.ts';
 import type { Batch, Model } from './model.ts';
 
 /**
- * `template`: any world of the batch; a model without a batch of its own solves it to learn the set of findings.
+ * `template`: any world of the batch; a model without a batch of its own solves it to learn the set of findings, and not once more when it is asked for.
  * Errors: SimError for a name in `only` that is no finding; for such a model also those of solving the template.
  */
 export function batchOf(
@@ -25,24 +25,29 @@ function solvedOneByOne(
   template: World,
   only: readonly string[] | undefined,
 ): Batch {
-  const { findings } = model.solve(template, options, windows).states[0];
-  const chosen = only === undefined ? findings : only.map((name) => named(findings, name));
-  const columns = chosen.map(({ name, unit, label }) => ({ name, unit, label }));
+  const solved = (world: World): Solved => {
+    const [{ findings, converged, label }] = model.solve(world, options, windows).states;
+    return { findings, isKept: converged && label !== 'cold' };
+  };
+  const learnt = solved(template);
+  const columns = columnNumbers(learnt.findings, only).map((place) => {
+    const { name, unit, label } = learnt.findings[place];
+    return { name, unit, label };
+  });
   return {
     columns,
     into(world, row) {
-      const [first] = model.solve(world, options, windows).states;
+      const { findings, isKept } = world === template ? learnt : solved(world);
       for (const [i, { name }] of columns.entries()) {
-        row[i] = first.findings.find((finding) => finding.name === name)?.value ?? Number.NaN;
+        row[i] = findings.find((finding) => finding.name === name)?.value ?? Number.NaN;
       }
-      return first.converged && first.label !== 'cold';
+      return isKept;
     },
   };
 }
 
-function named(findings: readonly Finding[], name: string): Finding {
-  const found = findings.find((finding) => finding.name === name);
-  if (found !== undefined) return found;
-  const names = findings.map((finding) => finding.name).join(', ');
-  throw new SimError('of', `“${name}” is no finding of this model`, `Choose from ${names}`);
+/** What is kept of a solution: not its dataset. */
+interface Solved {
+  readonly findings: readonly Finding[];
+  readonly isKept: boolean;
 }

@@ -13,7 +13,7 @@ import {
 import { normalQuantile } from '../../sim/quantity/normalQuantile.ts';
 import { type Resamples, resamples } from '../../sim/studies/spread/bootstrap.ts';
 import { summariseTurns, unwrapTurn } from '../../sim/studies/spread/circular.ts';
-import { designInto, designValues, furtherRuns } from '../../sim/studies/spread/indexDesign.ts';
+import { designPlace, designRuns, designValues, furtherRuns } from '../../sim/studies/spread/indexDesign.ts';
 import { percentileLevels, quantilesInto, type Summary, summarise } from '../../sim/studies/spread/percentiles.ts';
 import { rankMeasure, rankOrder } from '../../sim/studies/spread/rankMeasure.ts';
 import { sobolDraws } from '../../sim/studies/spread/sobol.ts';
@@ -251,11 +251,15 @@ interface Design {
 
 function furtherAnswers(inputs: readonly Drawn[]): Design {
   const draws = sobolDraws(1);
-  const columns = inputs.map(({ quantile }, input) => {
-    const shares = new Float64Array(furtherRuns(indexRows, inputs.length));
-    designInto(draws, inputs.length, input, 0, shares);
-    return shares.map(quantile);
-  });
+  const runs = furtherRuns(indexRows, inputs.length);
+  const valuesAt = designRuns(
+    draws,
+    inputs.length,
+    inputs.map(({ quantile }, dimension) => ({ dimension, at: quantile })),
+  );
+  const columns = inputs.map(() => new Float64Array(runs));
+  for (let run = 0; run < runs; run++)
+    for (const [input, value] of valuesAt(designPlace(run, inputs.length)).entries()) columns[input]![run] = value;
   const answers = Array.from(columns[0]!, (_, run) => answerAt(columns, run));
   return { answers, again: resamples(indexRows, 1, 100) };
 }
@@ -267,8 +271,8 @@ function indexImportance(
   inputs: number,
 ): Importance {
   const further = Float64Array.from(answers, (answer) => answer.findings[finding]!);
-  const { first, total, reason } = sobolIndices(designValues(values, further, inputs), again);
-  return { first, total, ranks: null, ...(reason === undefined ? {} : { reason }) };
+  const { first, total, leftOut, reason } = sobolIndices(designValues(values, further, inputs), again);
+  return { first, total, ranks: null, leftOut, ...(reason === undefined ? {} : { reason }) };
 }
 
 function rankImportance(columns: readonly Float64Array[], values: Float64Array): Importance {
@@ -277,8 +281,8 @@ function rankImportance(columns: readonly Float64Array[], values: Float64Array):
   const ranks = measures.map(({ value, chanceLevel }) => ({ value: value!, chanceLevel: chanceLevel! }));
   const none = measures.find(({ value }) => value === null);
   return none === undefined
-    ? { first: null, total: null, ranks }
-    : { first: null, total: null, ranks: null, reason: none.reason ?? 'none' };
+    ? { first: null, total: null, ranks, leftOut: 0 }
+    : { first: null, total: null, ranks: null, leftOut: 0, reason: none.reason ?? 'none' };
 }
 
 function turnsSummary(values: Float64Array): Summary {

@@ -1,7 +1,8 @@
 /** The uncertain inputs as they were drawn. Pure. */
 import type { SpreadInput, SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
+import { largestCut } from '../../sim/studies/spread/spreadWarnings.ts';
 import type { Cell } from './cells.ts';
-import { list, nbsp, percent, unitText } from './number.ts';
+import { nbsp, percent, unitText } from './number.ts';
 import { inputWording } from './spreadNumber.ts';
 
 export interface DrawnRow {
@@ -19,9 +20,6 @@ export interface IdleRow {
   readonly label: string;
   readonly reason: string;
 }
-
-/** Above this the published spread is no longer what is drawn. */
-export const largestCut = 0.05;
 
 export function drawnColumns({ sampling }: SpreadReport): string[] {
   const source = sampling === 'posterior' ? 'From' : 'As written';
@@ -66,14 +64,6 @@ function cellsOf(input: SpreadInput): Cell[] {
 function cutCell(share: number): Cell {
   if (share === 0) return { text: 'nothing' };
   return share > largestCut ? { text: percent(share), reason: `more than 5${nbsp}%` } : { text: percent(share) };
-}
-
-/** What a reader must know of spreads that were cut; null where little was. */
-export function cutText({ cases }: SpreadReport): string | null {
-  const cut = cases.flatMap(({ inputs }) => inputs.filter(({ truncatedShare }) => truncatedShare > largestCut));
-  const labels = [...new Set(cut.map(({ label }) => label))];
-  if (labels.length === 0) return null;
-  return `Of the spread of ${list(labels)} more than 5${nbsp}% lies beyond what is physical and was cut away: what is drawn is no longer the spread as published. A spread that keeps within bounds would describe it better.`;
 }
 
 /** Each once; with the cases that it concerns where not all. */

@@ -79,7 +79,7 @@ const percentilesStep: Step = {
 };
 
 const groupsStep: Step = {
-  words: `Draws are said to fall into two groups where the widest gap between neighbours in order that leaves 2.5${nbsp}% of them, and 8, on either side is a fifth of their whole reach. That is a plain test with limits of our own, not a count of modes: groups that touch, or that hold fewer draws, are not told.`,
+  words: `Draws are said to fall into two groups where the widest gap between neighbours in order that leaves 2.5${nbsp}% of them, and 8, on either side is a fifth of their whole reach. That is a plain test with limits of our own, not a count of modes: groups that touch, or that hold fewer draws, are not told. Times that come round with the orbit are cut at the widest arc without a draw first.`,
 };
 
 const circularStep: Step = {

@@ -1,8 +1,9 @@
 /** Many lumped worlds straight to their findings. */
 import { emptySheet } from '../../findings/sheet.ts';
 import type { SolveOptions, Window } from '../../world.ts';
+import { columnNumbers } from '../columnNumbers.ts';
 import type { Batch } from '../model.ts';
-import { columnNumbers, lumpedColumns, wantedOf } from './columns.ts';
+import { lumpedColumns, wantedOf } from './columns.ts';
 import { lumpedSolver } from './solver.ts';
 
 export function lumpedBatch(options: SolveOptions, windows: readonly Window[], only?: readonly string[]): Batch {

@@ -1,5 +1,4 @@
 /** The findings of the lumped model in their order: what stands where in a sheet. */
-import { SimError } from '../../error.ts';
 import type { FindingColumn } from '../../findings/finding.ts';
 import { instellationWindowColumns } from '../../findings/instellationWindow.ts';
 import { worldColumns } from '../../findings/world.ts';
@@ -98,15 +97,4 @@ export function wantedOf(columns: readonly number[]): Wanted {
     fastest: has(at.fastestWarming, at.timeOfFastestWarming, at.fastestCooling, at.timeOfFastestCooling),
     windows: columns.some((column) => column >= at.windows),
   };
-}
-
-/** Column numbers of the names wanted, in their order; all of them without names. */
-export function columnNumbers(columns: readonly FindingColumn[], only: readonly string[] | undefined): number[] {
-  if (only === undefined) return columns.map((_, i) => i);
-  return only.map((name) => {
-    const found = columns.findIndex((column) => column.name === name);
-    if (found >= 0) return found;
-    const names = columns.map((column) => column.name).join(', ');
-    throw new SimError('of', `“${name}” is no finding of this model`, `Choose from ${names}`);
-  });
 }

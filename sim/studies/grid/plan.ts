@@ -56,7 +56,10 @@ export interface GridPlan {
 
 const where = '--of';
 
-/** Errors: as `readAlong`, `readHold` and `casesOver`; SimError at `--of` for a name that is no finding. */
+/**
+ * Errors: as `readAlong`, `readHold` and `casesOver`; SimError at `--of` for a name that is no finding, at `--along` for a case
+ * that no node finds sound.
+ */
 export function planGrid(setup: GridSetup): GridPlan {
   const alongs = setup.alongs.map(readAlong);
   if (alongs.length > 2) throw new SimError('--along', `${alongs.length} ranges are given`, 'Give one or two');
@@ -134,20 +137,30 @@ function wantedOf(of: readonly string[], caseName: string, { columns }: Batch): 
   throw new SimError(where, what, 'Ask for one that it has, or leave the case out with --only');
 }
 
-/** Values of the first node at which a case is sound; there is one, or `casesOver` would have refused it. */
+/**
+ * Values of the first node at which a case is sound. `casesOver` has found it sound somewhere, which with an even number of steps may
+ * lie between the nodes alone.
+ * Errors: SimError at `--along` where it is sound at none.
+ */
 function firstSound(over: CaseOver, axes: readonly GridPlanAxis[]): number[] {
   const count = axes.reduce((product, { nodes }) => product * nodes.length, 1);
-  let fault: unknown;
+  let first: SimError | null = null;
   for (let node = 0; node < count; node++) {
+    const values = valuesAt(axes, node);
     try {
-      const values = valuesAt(axes, node);
       over.worldAt(values);
       return values;
     } catch (error) {
-      fault = error;
+      if (!(error instanceof SimError)) throw error;
+      first ??= error;
     }
   }
-  throw fault;
+  const why = first ? `; at the first: ${first.where}: ${first.what}` : '';
+  throw new SimError(
+    '--along',
+    `case \`${over.name}\` is sound at none of the ${count} nodes, though between them${why}`,
+    'Give a narrower range, or more --steps',
+  );
 }
 
 /** SI values of the axes at a node; the second axis runs fastest. */

@@ -1,7 +1,7 @@
 /** The arithmetic of a spread's tables: rows from their numbers alone, so that any worker may compute any of them. */
 import { caught, infinityIn, notFinite, rowSolver } from '../rowSolver.ts';
 import { bandSampler } from './bandSampler.ts';
-import { designPlace } from './indexDesign.ts';
+import { designPlace, designRuns } from './indexDesign.ts';
 import { planSpread, type SpreadPlan, type SpreadSetup } from './plan.ts';
 
 /** Rows [from, to): a column each, NaN where undefined, and the rows that failed. */
@@ -39,18 +39,17 @@ export function indicesCalculator(setup: SpreadSetup): CalculateRows {
   const plan = planSpread(setup);
   const solve = plan.cases.map(({ drawn, batch }) => rowSolver(drawn, batch));
   const count = plan.dimensions.length;
-  const matrices = designMatrices(plan);
+  const valuesAt = plan.cases.map(({ inputs }) => designRuns(plan.draws, count, inputs));
   return (from, to) => {
     const table = emptyTable(plan, to - from);
     const failed = failureList(plan);
     const columns = plan.cases.map(({ inputs }) => inputs.map(() => new Float64Array(to - from)));
     for (let run = from; run < to; run++) {
-      const { row, changed } = designPlace(run, count);
-      matrices.turnTo(row);
+      const place = designPlace(run, count);
       for (const [c, { inputs }] of plan.cases.entries()) {
-        const values = matrices.values(c, changed);
+        const values = valuesAt[c](place);
         for (let i = 0; i < values.length; i++) columns[c][i][run - from] = values[i];
-        const isRunOfA = changed !== 'all' && inputs.every(({ dimension }) => dimension !== changed);
+        const isRunOfA = place.changed !== 'all' && inputs.every(({ dimension }) => dimension !== place.changed);
         const message = isRunOfA ? null : solve[c](values, table.findings[c], run - from);
         if (message !== null) failed.add(run, c, message);
       }
@@ -104,34 +103,6 @@ function drawnInputs({ cases, draws, dimensions }: SpreadPlan, from: number, to:
       const values = scratch[c];
       for (let i = 0; i < values.length; i++) values[i] = columns[c][i][row];
       return values;
-    },
-  };
-}
-
-/** SI values of every case's inputs in one row of the design, which many runs share. */
-function designMatrices({ cases, draws, dimensions }: SpreadPlan) {
-  const inputsOf = () => cases.map(({ inputs }) => new Float64Array(inputs.length));
-  const [a, b, mixed] = [inputsOf(), inputsOf(), inputsOf()];
-  let current = -1;
-  return {
-    turnTo(row: number): void {
-      if (row === current) return;
-      current = row;
-      for (const [c, { inputs }] of cases.entries()) {
-        for (const [i, { dimension, at }] of inputs.entries()) {
-          a[c][i] = at(draws.at(row, dimension));
-          b[c][i] = at(draws.at(row, dimensions.length + dimension));
-        }
-      }
-    },
-    /** A with what is changed from B; in scratch. */
-    values(c: number, changed: number | 'all'): Float64Array {
-      const { inputs } = cases[c];
-      for (let i = 0; i < inputs.length; i++) {
-        const isFromB = changed === 'all' || changed === inputs[i].dimension;
-        mixed[c][i] = isFromB ? b[c][i] : a[c][i];
-      }
-      return mixed[c];
     },
   };
 }

@@ -16,14 +16,14 @@ export interface DesignColumns {
 }
 
 export function noImportance(reason: string): Importance {
-  return { first: null, total: null, ranks: null, reason };
+  return { first: null, total: null, ranks: null, leftOut: 0, reason };
 }
 
 /** One index for each dimension of `own`. */
 export function importanceByDesign({ draws, further, dimensions, own }: DesignColumns, again: Resamples): Importance {
   const { a, b, ab } = designValues(draws, further, dimensions);
-  const { first, total, reason } = sobolIndices({ a, b, ab: own.map((dimension) => ab[dimension]) }, again);
-  return { first, total, ranks: null, ...(reason === undefined ? {} : { reason }) };
+  const { first, total, leftOut, reason } = sobolIndices({ a, b, ab: own.map((dimension) => ab[dimension]) }, again);
+  return { first, total, ranks: null, leftOut, ...(reason === undefined ? {} : { reason }) };
 }
 
 /** `rows`: which sample each draw took, so that repeats do not count as independent. */
@@ -34,7 +34,7 @@ export function importanceByRanks(
 ): Importance {
   const ranks = inputs.map((input) => rankImportance(rankMeasure(input, finding, rows)));
   const known = ranks.filter(({ value }) => value !== null);
-  if (known.length > 0) return { first: null, total: null, ranks };
+  if (known.length > 0) return { first: null, total: null, ranks, leftOut: 0 };
   return noImportance(ranks.map((one) => (one.value === null ? one.reason : ''))[0] ?? 'no input is drawn');
 }
 

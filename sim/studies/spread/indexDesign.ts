@@ -23,16 +23,36 @@ export function designPlace(run: number, inputs: number): DesignPlace {
   return { row: Math.floor(run / (inputs + 1)), changed: block === 0 ? 'all' : block - 1 };
 }
 
+export interface DesignInput {
+  /** Of the draws in A; in B it is as many further as A has dimensions. */
+  readonly dimension: number;
+  /** Value at a number in (0, 1). */
+  at(share: number): number;
+}
+
 /**
- * Numbers in (0, 1) of one input for the further runs first, first + 1, …
- * Shape:  input 0 … inputs − 1 has dimension `input` in A and `inputs + input` in B; out (runs,) is overwritten.
+ * From a place to the values of some inputs there, in scratch: one at a time. Runs of a row that follow one another share its draws.
+ * Shape:  dimensions: of A; a dimension may serve no input, or several.
  */
-export function designInto(draws: UniformDraws, inputs: number, input: number, first: number, out: Float64Array): void {
-  for (let j = 0; j < out.length; j++) {
-    const { row, changed } = designPlace(first + j, inputs);
-    const isFromB = changed === 'all' || changed === input;
-    out[j] = draws.at(row, isFromB ? inputs + input : input);
-  }
+export function designRuns(
+  draws: UniformDraws,
+  dimensions: number,
+  inputs: readonly DesignInput[],
+): (place: DesignPlace) => Float64Array {
+  const values = () => new Float64Array(inputs.length);
+  const [a, b, mixed] = [values(), values(), values()];
+  let current = -1;
+  return ({ row, changed }) => {
+    for (const [i, { dimension, at }] of inputs.entries()) {
+      if (row !== current) {
+        a[i] = at(draws.at(row, dimension));
+        b[i] = at(draws.at(row, dimensions + dimension));
+      }
+      mixed[i] = changed === 'all' || changed === dimension ? b[i] : a[i];
+    }
+    current = row;
+    return mixed;
+  };
 }
 
 /**

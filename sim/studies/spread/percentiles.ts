@@ -48,7 +48,7 @@ export function undefinedSummary(defined: number, reason: string): Summary {
 }
 
 /** What is not NaN, moved to the front of scratch. */
-function definedInto(values: Float64Array, scratch: Float64Array): Float64Array {
+export function definedInto(values: Float64Array, scratch: Float64Array): Float64Array {
   let count = 0;
   for (let i = 0; i < values.length; i++) if (!Number.isNaN(values[i])) scratch[count++] = values[i];
   return scratch.subarray(0, count);

@@ -42,7 +42,10 @@ export interface SpreadFinding {
   readonly circular: boolean;
   /** Null where fewer than two draws have a value. */
   readonly histogram: Histogram | null;
-  /** Where the draws fall into two groups with none between, the lower first; else null. On the line of the summary. */
+  /**
+   * Where the draws fall into two groups with none between, the lower first; else null. Where `circular`, on the circle: a group
+   * may reach across periapsis, and stands whole.
+   */
   readonly groups: readonly [Group, Group] | null;
   readonly importance: Importance;
 }
@@ -53,6 +56,8 @@ export interface Importance {
   readonly total: readonly SobolIndex[] | null;
   /** For posterior samples, whose inputs go together: dependence by ranks, and what chance alone would give. */
   readonly ranks: readonly RankImportance[] | null;
+  /** Share of the rows of the index design left out whole because one of their runs failed or lacks the finding; 0 without indices. */
+  readonly leftOut: number;
   readonly reason?: string;
 }
 

@@ -1,9 +1,13 @@
-/** What must be said beside the numbers of a spread, for terminal, file and page alike: several climates, draws in two groups. */
+/**
+ * What must be said beside the numbers of a spread, for terminal, file and page alike: several climates, draws in two groups, spreads that were cut, rows
+ * that indices lack.
+ */
 import { formatNumber, formatQuantity, inUnit } from '../../quantity/index.ts';
 import type { SolveOptions, World } from '../../world.ts';
 import type { DrawnClimates } from './climates.ts';
 import type { Group } from './groups.ts';
-import type { SpreadFinding } from './spreadReport.ts';
+import { percentFirst, percentWords } from './percentWords.ts';
+import type { SpreadFinding, SpreadInput } from './spreadReport.ts';
 
 /** Nothing where all draws are thawed, with one climate each. */
 export function climateWarnings(climates: DrawnClimates | null): string[] {
@@ -17,12 +21,12 @@ export function climateWarnings(climates: DrawnClimates | null): string[] {
   return [
     ...(second !== null && second > 0
       ? [
-          `${shareWords(second)} of the draws allow a second, colder climate that lasts as well. Every number here is of the warm one; which of them a planet is in depends on its past.`,
+          `${percentFirst(second)} of the draws allow a second, colder climate that lasts as well. Every number here is of the warm one; which of them a planet is in depends on its past.`,
         ]
       : []),
     ...(kinds.length > 1
       ? [
-          `The draws are of several climates: ${listed(kinds.map(({ share, words }) => `${shareWords(share)} ${words}`))} (area and time under ice below 1 %, between, above 99 %).`,
+          `The draws are of several climates: ${listed(kinds.map(({ share, words }) => `${percentWords(share)} ${words}`))} (area and time under ice below 1 %, between, above 99 %).`,
         ]
       : []),
   ];
@@ -54,29 +58,58 @@ export function groupWarnings(findings: readonly SpreadFinding[]): string[] {
     others.length === 0
       ? ''
       : ` So do those of ${others.length > 3 ? `${others.length} other findings` : listed(others)}.`;
+  const round = apart.some(({ circular }) => circular)
+    ? ' Times come round with the orbit: a group that reaches across the ends of a histogram stands at both.'
+    : '';
   return [
-    `${groupWords(told)}${rest} Histograms show both groups; a mean or an interval over both may tell of neither.`,
+    `${groupWords(told)}${rest} Histograms show both groups; a mean or an interval over both may tell of neither.${round}`,
   ];
 }
 
-function groupWords({ label, unit, groups, summary: { mean } }: SpreadFinding): string {
+/** Above this share a published spread is no longer what is drawn. */
+export const largestCut = 0.05;
+
+/** One sentence for each input of which much was cut away. */
+export function cutWarnings(inputs: readonly Pick<SpreadInput, 'key' | 'text' | 'truncatedShare'>[]): string[] {
+  return inputs
+    .filter(({ truncatedShare }) => truncatedShare > largestCut)
+    .map(
+      ({ key, text, truncatedShare }) =>
+        `${percentFirst(truncatedShare)} of ${key} ${text} lies beyond what is physical and was cut away: what is drawn is no longer the spread as published. A spread that keeps within bounds would describe it better.`,
+    );
+}
+
+/** Above this share of rows left out, indices are of other draws than the finding's interval. */
+const largestLeftOut = 0.05;
+
+/** One sentence for all findings whose indices are of part of the rows; nothing for those that have none. */
+export function leftOutWarnings(findings: readonly SpreadFinding[]): string[] {
+  const partly = findings
+    .filter(({ importance: { total, leftOut } }) => total !== null && leftOut > largestLeftOut)
+    .toSorted((a, b) => b.importance.leftOut - a.importance.leftOut);
+  if (partly.length === 0) return [];
+  const [{ importance }] = partly;
+  const names = partly.length > 3 ? `${partly.length} findings` : listed(partly.map(({ label }) => label));
+  const share = `${partly.length > 1 ? 'up to ' : ''}${percentWords(importance.leftOut)}`;
+  return [
+    `Which input matters: the indices of ${names} leave out ${share} of the rows of runs, in which one failed or lacks the finding. They tell of the other rows alone.`,
+  ];
+}
+
+function groupWords({ label, unit, groups, circular, summary: { mean } }: SpreadFinding): string {
   const [low, high] = groups!;
   const symbol = unit === 's' ? 'd' : unit;
   const number = (value: number) => formatNumber(unit === 's' ? inUnit(value, 'd') : value, 4);
   const text = (value: number) => (symbol === '1' ? number(value) : `${number(value)} ${symbol}`);
   const reach = ({ share, from, to }: Group) => {
-    return `${shareWords(share)} of them ${number(from) === number(to) ? `at ${text(from)}` : `from ${number(from)} to ${text(to)}`}`;
+    return `${percentWords(share)} of them ${number(from) === number(to) ? `at ${text(from)}` : `from ${number(from)} to ${text(to)}`}`;
   };
-  const isOfNone = mean !== null && mean > low.to && mean < high.from;
+  // on the circle nothing lies beyond both groups
+  const isOfNone =
+    mean !== null &&
+    (circular ? !groups!.some(({ from, to }) => mean >= from && mean <= to) : mean > low.to && mean < high.from);
   const average = isOfNone ? `: the mean, ${text(mean)}, is that of no draw` : '';
-  return `${label}: the draws fall into two groups, ${reach(low)} and ${reach(high)}, none between${average}.`;
-}
-
-/** Digits that a share of some thousand draws has: whole percent in the middle, a tenth near the ends. */
-function shareWords(share: number): string {
-  const percent = 100 * share;
-  if (percent > 0 && percent < 0.05) return 'Fewer than 0.1 %';
-  return `${percent < 9.95 || percent > 90.05 ? Number(percent.toFixed(1)) : Math.round(percent)} %`;
+  return `${label}: the draws fall into two groups${circular ? ' on the orbit' : ''}, ${reach(low)} and ${reach(high)}, none between${average}.`;
 }
 
 function listed(words: readonly string[]): string {

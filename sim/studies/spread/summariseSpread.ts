@@ -7,7 +7,7 @@ import { type BandPlace, bandSampler } from './bandSampler.ts';
 import { resamples } from './bootstrap.ts';
 import { summariseTurns, unwrapTurn } from './circular.ts';
 import { type DrawnClimates, drawnClimates } from './climates.ts';
-import { goesInSteps, twoGroups } from './groups.ts';
+import { type Group, goesInSteps, twoArcs, twoGroups } from './groups.ts';
 import { histogramOf } from './histogram.ts';
 import { importanceByDesign, importanceByRanks, noImportance } from './importance.ts';
 import { percentileLevels, quantilesInto, type Summary, summarise } from './percentiles.ts';
@@ -15,7 +15,14 @@ import type { PlannedCase, SpreadPlan } from './plan.ts';
 import { type RankOrder, rankOrder } from './rankMeasure.ts';
 import { reasonsOf } from './reasons.ts';
 import type { Importance, SpreadBand, SpreadCase, SpreadFinding, SpreadInput, SpreadReport } from './spreadReport.ts';
-import { circleNote, climateWarnings, groupWarnings, warmestNote } from './spreadWarnings.ts';
+import {
+  circleNote,
+  climateWarnings,
+  cutWarnings,
+  groupWarnings,
+  leftOutWarnings,
+  warmestNote,
+} from './spreadWarnings.ts';
 
 /** A column of a table by its name, (rows,), NaN where undefined. */
 export type ReadColumn = (name: string) => Promise<Float64Array>;
@@ -73,7 +80,13 @@ async function summariseCase(
     bandDraws: tables.bandDraws,
     failed: periods.reduce((count, value) => count + Number(Number.isNaN(value)), 0),
     sample: { inputs: inputs.sample, findings: findings.sample },
-    warnings: [...drawn.warnings, ...climateWarnings(climates), ...groupWarnings(findings.told)],
+    warnings: [
+      ...drawn.warnings,
+      ...cutWarnings(inputs.told),
+      ...climateWarnings(climates),
+      ...groupWarnings(findings.told),
+      ...leftOutWarnings(findings.told),
+    ],
     notes: [...drawn.notes, ...worldNotes(plan.cases[index])],
   };
 }
@@ -138,7 +151,7 @@ async function summariseFindings(plan: SpreadPlan, index: number, tables: Spread
       missingBecause: line.summary.defined < 1 ? missingBecause(finding.name, values) : null,
       circular,
       histogram: histogramOf(line.values, context.scratch),
-      groups: goesInSteps(finding.name) ? null : twoGroups(line.values, context.scratch),
+      groups: goesInSteps(finding.name) ? null : line.groups,
       importance: await importanceOf(finding.name, line),
     });
     sample.push(Array.from(values.subarray(0, scattered), (value) => (Number.isNaN(value) ? null : value)));
@@ -150,23 +163,31 @@ async function summariseFindings(plan: SpreadPlan, index: number, tables: Spread
 interface Line {
   readonly summary: Summary;
   readonly values: Float64Array;
+  readonly groups: readonly [Group, Group] | null;
   bring(values: Float64Array, periods: Float64Array): Float64Array;
   /** A single run's value, where it stands beside the summary. */
   beside(value: number, period: number): number;
 }
 
 function straightLine(values: Float64Array, { scratch }: FindingContext): Line {
-  return { summary: summarise(values, scratch), values, bring: (others) => others, beside: (value) => value };
+  return {
+    summary: summarise(values, scratch),
+    values,
+    groups: twoGroups(values, scratch),
+    bring: (others) => others,
+    beside: (value) => value,
+  };
 }
 
 /**
- * Turns are unwrapped around their mean, and told in seconds of an orbit of the median period. A single run keeps its own seconds, in the
- * turn that is nearest to the median.
+ * Turns are unwrapped around their mean, and told in seconds of an orbit of the median period; groups each as a
+ * whole (see `twoArcs`). A single run keeps its own seconds, in the turn that is nearest to the median.
  */
 function circularLine(times: Float64Array, { periods, scratch }: FindingContext): Line {
   const period = summarise(periods, scratch).percentiles?.['50'] ?? 1;
   const values = overPeriod(times, periods);
   const turns = summariseTurns(values, scratch);
+  const groups = twoArcs(values, turns.mean, scratch);
   const unwrap = (column: Float64Array) => {
     for (let i = 0; i < column.length; i++) column[i] = period * unwrapTurn(column[i], turns.mean ?? 0.5); // NaN stays
     return column;
@@ -175,9 +196,14 @@ function circularLine(times: Float64Array, { periods, scratch }: FindingContext)
   return {
     summary: inSeconds(turns, period),
     values: unwrap(values), // in place: ten million draws take 80 MB a column
+    groups: groups && [overTime(groups[0], period), overTime(groups[1], period)],
     bring: (others, own) => unwrap(overPeriod(others, own)),
     beside: (time, own) => (median === undefined ? time : time - own * Math.round(time / own - median)),
   };
+}
+
+function overTime({ share, from, to }: Group, period: number): Group {
+  return { share, from: from * period, to: to * period };
 }
 
 /** From a finding to which inputs matter to it. */

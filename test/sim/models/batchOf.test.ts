@@ -1,6 +1,7 @@
 import { expect, test } from 'vitest';
 import { batchOf } from '../../../sim/models/batchOf.ts';
 import { lumpedModel } from '../../../sim/models/lumped/index.ts';
+import type { Model } from '../../../sim/models/model.ts';
 import { zonalModel } from '../../../sim/models/zonal/index.ts';
 import { periodic, world } from './lumped/worlds.ts';
 import { degrees, zonalWorld } from './zonal/worlds.ts';
@@ -31,6 +32,28 @@ test('a model without a batch of its own is solved one world after another', () 
     );
   }
   expect(() => batchOf(model, periodic, windows, worlds[0], ['temperature'])).toThrow(/no finding/);
+});
+
+test('the world that findings are learnt from is solved once, to the same bits', () => {
+  const zonal = zonalModel();
+  let solved = 0;
+  const model: Model = {
+    ...zonal,
+    solve(...of) {
+      solved++;
+      return zonal.solve(...of);
+    },
+  };
+  const globe = { bands: 18, obliquity: 23 * degrees, solarLongitudeOfPeriapsis: 0, heatTransport: 0.6 };
+  const [one, other] = [0.1, 0.3].map((e) => zonalWorld({ q: 340, e, heatCapacity: 2e8, globe }));
+  const batch = batchOf(model, periodic, windows, one);
+  const row = new Float64Array(batch.columns.length);
+  expect(batch.into(one, row)).toBe(true);
+  expect(solved).toBe(1);
+  const [warm] = zonal.solve(one, periodic, windows).states;
+  expect(Array.from(row)).toEqual(warm.findings.map(({ value }) => value ?? Number.NaN));
+  batch.into(other, row);
+  expect(solved).toBe(2);
 });
 
 test('a model with a batch of its own solves nothing to begin', () => {

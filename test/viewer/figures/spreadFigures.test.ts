@@ -234,7 +234,13 @@ describe('importanceBars', () => {
   test('where there are none, the reason stands in their place', () => {
     const none = spreadOf([
       withFinding(sea, 'temperatureMax', {
-        importance: { first: null, total: null, ranks: null, reason: 'the finding is the same in every run' },
+        importance: {
+          first: null,
+          total: null,
+          ranks: null,
+          leftOut: 0,
+          reason: 'the finding is the same in every run',
+        },
       }),
       rock,
     ]);
@@ -261,6 +267,7 @@ describe('importanceBars', () => {
           first: times(finding.importance.first!) as typeof finding.importance.first,
           total: times(finding.importance.total!) as typeof finding.importance.total,
           ranks: null,
+          leftOut: 0,
         },
       }),
       inputs: times(sea.inputs) as typeof sea.inputs,

@@ -27,6 +27,7 @@ function peaking(percentiles: Percentiles, defined = 1, base = spreadCase()): Sp
       first: [index(0.61, 0.55, 0.67), index(0.2, 0.15, 0.25), index(0.04, 0, 0.08), index(0, -0.02, 0.02)],
       total: [index(0.63, 0.58, 0.68), index(0.22, 0.18, 0.26), index(0.05, 0.03, 0.07), index(0, 0, 0)],
       ranks: null,
+      leftOut: 0,
     },
   });
 }

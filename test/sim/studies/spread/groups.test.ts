@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { normalQuantile } from '../../../../sim/quantity/normalQuantile.ts';
-import { goesInSteps, twoGroups } from '../../../../sim/studies/spread/groups.ts';
+import { goesInSteps, twoArcs, twoGroups } from '../../../../sim/studies/spread/groups.ts';
 import { pseudoRandomDraws } from '../../../../sim/studies/spread/pseudoRandom.ts';
 
 function drawn(draws: number, seed: number, quantile: (share: number) => number): Float64Array {
@@ -62,6 +62,58 @@ describe('two groups', () => {
     for (const quantile of Object.values(smooth)) {
       for (let seed = 1; seed <= 50; seed++) expect(twoGroups(drawn(512, seed, quantile))).toBeNull();
     }
+  });
+});
+
+describe('two groups on a circle', () => {
+  /** Around 0 and around half a turn, 0.02 to either side. */
+  const opposite = (share: number) =>
+    drawn(1000, 1, (u) => (u < share ? u / share : 12.5 + (u - share) / (1 - share)) * 0.04 - 0.02);
+  const wrapped = (turns: Float64Array) => turns.map((turn) => turn - Math.floor(turn));
+
+  test.each([0.5, 0.3, 0.7])('opposite seasons: %s of the draws around the turn of the year are one group', (share) => {
+    const turns = opposite(share);
+    const early = turns.filter((turn) => turn < 0.25);
+    const late = turns.filter((turn) => turn > 0.25);
+    for (const mean of [null, 0.5, 0.7]) {
+      const groups = twoArcs(Float64Array.from([...wrapped(turns), Number.NaN]), mean)!;
+      for (const [i, part] of [early, late].entries()) {
+        expect(groups[i]!.share).toBeCloseTo(part.length / 1000, 12);
+        expect(groups[i]!.from).toBeCloseTo(Math.min(...part), 12);
+        expect(groups[i]!.to).toBeCloseTo(Math.max(...part), 12);
+      }
+    }
+    // the group that holds the mean stands where the mean does
+    expect(twoArcs(wrapped(turns), 1.01)!.map(({ from }) => Math.round(from))).toEqual([0, 1]);
+    expect(twoArcs(wrapped(turns), 1.01)![0].from).toBeCloseTo(Math.min(...late), 12);
+  });
+
+  test('exactly two times are two groups, which stand where they are; one time, and one time but for rounding, are none', () => {
+    const two = Float64Array.from({ length: 100 }, (_, draw) => (draw < 30 ? 0 : 0.5));
+    expect(twoArcs(two, 0.5)).toEqual([
+      { share: expect.closeTo(0.3, 12), from: 0, to: 0 },
+      { share: 0.7, from: 0.5, to: 0.5 },
+    ]);
+    expect(twoArcs(new Float64Array(100).fill(0.2), 0.2)).toBeNull();
+    expect(
+      twoArcs(
+        two.map((turn) => (turn === 0 ? 1 - 1e-16 : 1e-16)),
+        0,
+      ),
+    ).toBeNull();
+    expect(twoArcs(new Float64Array(100).fill(Number.NaN), null)).toBeNull();
+  });
+
+  test('smooth distributions of a circle are one group, wherever they lie', () => {
+    const smooth = {
+      uniform: (share: number) => share,
+      normal: (share: number) => 0.05 * normalQuantile(share),
+      wide: (share: number) => 0.2 * normalQuantile(share),
+      exponential: (share: number) => -0.1 * Math.log1p(-share),
+    };
+    for (const quantile of Object.values(smooth))
+      for (let seed = 1; seed <= 50; seed++)
+        expect(twoArcs(wrapped(drawn(512, seed, (share) => quantile(share) + seed / 50)), null)).toBeNull();
   });
 });
 

@@ -19,6 +19,12 @@ test('an input of which nothing can be told stays null, with its reason, beside 
 
 test('where nothing can be told of any input there are no ranks, and one reason', () => {
   const all = importanceByRanks([rising, alternating].map(rankOrder), rankOrder(constant), rows);
-  expect(all).toEqual({ first: null, total: null, ranks: null, reason: 'the finding is the same in every draw' });
+  expect(all).toEqual({
+    first: null,
+    total: null,
+    ranks: null,
+    leftOut: 0,
+    reason: 'the finding is the same in every draw',
+  });
   expect(importanceByRanks([], rankOrder(rising), rows).reason).toBe('no input is drawn');
 });

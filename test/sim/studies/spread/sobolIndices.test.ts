@@ -1,9 +1,10 @@
 import { describe, expect, test } from 'vitest';
 import { resampledSums, resamples } from '../../../../sim/studies/spread/bootstrap.ts';
 import {
+  type DesignInput,
   type DesignValues,
-  designInto,
   designPlace,
+  designRuns,
   designValues,
   furtherRuns,
 } from '../../../../sim/studies/spread/indexDesign.ts';
@@ -56,19 +57,17 @@ function gFunction(weights: readonly number[]): TestFunction {
 }
 
 function valuesOf({ inputs, of }: TestFunction, draws: UniformDraws, rows: number): DesignValues {
-  const evaluate = (columns: readonly Float64Array[]) =>
-    columns[0].map((_, run) => of(columns.map((column) => column[run])));
-  const columns = (length: number, fill: (input: number, out: Float64Array) => void) =>
-    Array.from({ length: inputs }, (_, input) => {
-      const out = new Float64Array(length);
-      fill(input, out);
-      return out;
-    });
+  const further = designRuns(draws, inputs, plainInputs(inputs));
   return designValues(
-    evaluate(columns(rows, (input, out) => draws.fillInto(input, 0, out))),
-    evaluate(columns(furtherRuns(rows, inputs), (input, out) => designInto(draws, inputs, input, 0, out))),
+    Float64Array.from({ length: rows }, (_, row) => of(Array.from({ length: inputs }, (_, i) => draws.at(row, i)))),
+    Float64Array.from({ length: furtherRuns(rows, inputs) }, (_, run) => of([...further(designPlace(run, inputs))])),
     inputs,
   );
+}
+
+/** The numbers in (0, 1) themselves. */
+function plainInputs(inputs: number): DesignInput[] {
+  return Array.from({ length: inputs }, (_, dimension) => ({ dimension, at: (share) => share }));
 }
 
 test('Ishigami: the formulas give the published figures', () => {
@@ -201,9 +200,25 @@ test('the design: row by row, B first, then A with one column of B', () => {
     { row: 1, changed: 0 },
   ]);
   const draws = sobolDraws(3);
-  const out = new Float64Array(4);
-  designInto(draws, 2, 1, 3, out);
-  expect([...out]).toEqual([draws.at(1, 3), draws.at(1, 1), draws.at(1, 3), draws.at(2, 3)]);
+  const second = designRuns(draws, 2, plainInputs(2));
+  const runs = [3, 4, 5, 6].map((run) => second(designPlace(run, 2))[1]);
+  expect(runs).toEqual([draws.at(1, 3), draws.at(1, 1), draws.at(1, 3), draws.at(2, 3)]);
+});
+
+test('the design of a case that has some of the dimensions, one of them twice', () => {
+  const draws = sobolDraws(3);
+  const tenfold = (share: number) => 10 * share;
+  const values = designRuns(draws, 3, [
+    { dimension: 2, at: tenfold },
+    { dimension: 0, at: (share) => share },
+    { dimension: 2, at: (share) => share },
+  ]);
+  const [a, b] = [0, 3].map((from) => [0, 2].map((dimension) => draws.at(5, from + dimension)));
+  const at = (changed: number | 'all') => [...values({ row: 5, changed })];
+  expect(at('all')).toEqual([10 * b[1], b[0], b[1]]);
+  expect(at(0)).toEqual([10 * a[1], b[0], a[1]]);
+  expect(at(1)).toEqual([10 * a[1], a[0], a[1]]); // that of no input here: the run of A
+  expect(at(2)).toEqual([10 * b[1], a[0], b[1]]);
 });
 
 test('resamples: as many rows each time, from the seed alone; sums as by definition', () => {

@@ -4,7 +4,9 @@ import type { SpreadFinding } from '../../../../sim/studies/spread/spreadReport.
 import {
   circleNote,
   climateWarnings,
+  cutWarnings,
   groupWarnings,
+  leftOutWarnings,
   warmestNote,
 } from '../../../../sim/studies/spread/spreadWarnings.ts';
 import { rampAlbedo } from '../../../../sim/surface/albedo/ramp.ts';
@@ -19,6 +21,16 @@ describe('climates', () => {
     expect(climateWarnings(found)).toEqual([
       '67 % of the draws allow a second, colder climate that lasts as well. Every number here is of the warm one; which of them a planet is in depends on its past.',
       'The draws are of several climates: 25 % free of ice, 50 % partly under ice and 25 % frozen over (area and time under ice below 1 %, between, above 99 %).',
+    ]);
+  });
+
+  test('a share near nothing or all is neither, and stands within its sentence', () => {
+    const most = { second: 0.0003, known: 1, iceFree: 0.9997, partlyFrozen: 0.0003, frozenOver: 0 };
+    expect(climateWarnings(most)).toEqual([
+      expect.stringMatching(/^Less than 0\.1 % of the draws allow a second/),
+      expect.stringContaining(
+        'several climates: more than 99.9 % free of ice and less than 0.1 % partly under ice (area',
+      ),
     ]);
   });
 
@@ -39,7 +51,7 @@ function finding(name: string, label: string, unit: string, mean: number, [to, f
     circular: false,
     missingBecause: null,
     histogram: null,
-    importance: { first: null, total: null, ranks: null, reason: 'none' },
+    importance: { first: null, total: null, ranks: null, leftOut: 0, reason: 'none' },
     summary: { mean, percentiles: null, defined: 1 },
     groups: [
       { share: 0.0975, from: 200, to },
@@ -60,9 +72,53 @@ describe('two groups in words', () => {
     expect(groupWarnings([mean, ...many])[0]).toContain('So do those of 4 other findings.');
   });
 
+  test('on the circle a mean beyond both groups is that of no draw either', () => {
+    const round = { ...finding('timeOfMax', 'Time of maximum', 's', 8 * 86400), circular: true };
+    const groups = [
+      { share: 0.5, from: 3 * 86400, to: 4 * 86400 },
+      { share: 0.5, from: 6 * 86400, to: 7 * 86400 },
+    ] as const;
+    const [said] = groupWarnings([{ ...round, groups }]);
+    expect(said).toContain('two groups on the orbit, 50 % of them from 3 to 4 d and 50 % of them from 6 to 7 d');
+    expect(said).toContain('the mean, 8 d, is that of no draw');
+    expect(said).toContain('stands at both');
+    const within = { ...round, groups, summary: { ...round.summary, mean: 6.5 * 86400 } };
+    expect(groupWarnings([within])[0]).not.toContain('of no draw');
+  });
+
   test('times are told in days; nothing is said where none falls apart', () => {
     expect(groupWarnings([finding('lagOfMax', 'Lag', 's', 5 * 86400, [4 * 86400, 6 * 86400])])[0]).toContain('to 4 d');
     expect(groupWarnings([{ ...finding('damping', 'Damping', '1', 1), groups: null }])).toEqual([]);
+  });
+});
+
+test('more than 5 % cut away is warned of, with the share and what was written', () => {
+  const input = (key: string, truncatedShare: number) => ({ key, text: '0.1 ± 0.3', truncatedShare });
+  expect(cutWarnings([input('planet.bondAlbedo', 0.072), input('orbit.eccentricity', 0.05)])).toEqual([
+    '7.2 % of planet.bondAlbedo 0.1 ± 0.3 lies beyond what is physical and was cut away: what is drawn is no longer the spread as published. A spread that keeps within bounds would describe it better.',
+  ]);
+});
+
+describe('rows that indices leave out', () => {
+  const of = (name: string, leftOut: number) => ({
+    ...finding(name, name, 's', 1),
+    importance: { first: [], total: [], ranks: null, leftOut },
+  });
+
+  test('above 5 % they are told, of all findings in one sentence', () => {
+    expect(leftOutWarnings([of('lag', 0.05)])).toEqual([]);
+    expect(leftOutWarnings([of('lag', 0.38), of('mean', 0)])).toEqual([
+      'Which input matters: the indices of lag leave out 38 % of the rows of runs, in which one failed or lacks the finding. They tell of the other rows alone.',
+    ]);
+    expect(leftOutWarnings([of('lag', 0.1), of('damping', 0.38)])[0]).toContain(
+      'of damping and lag leave out up to 38 % of',
+    );
+    expect(leftOutWarnings(['a', 'b', 'c', 'd'].map((name) => of(name, 0.1)))[0]).toContain('of 4 findings leave out');
+  });
+
+  test('where there are no indices, their reason stands there', () => {
+    const none = { first: null, total: null, ranks: null, leftOut: 0.9, reason: 'fewer than 64 rows' };
+    expect(leftOutWarnings([{ ...of('lag', 0.9), importance: none }])).toEqual([]);
   });
 });
 

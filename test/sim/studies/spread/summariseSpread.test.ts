@@ -1,4 +1,5 @@
 import { expect, test } from 'vitest';
+import { spreadSummary } from '../../../../cli/output/spreadSummary.ts';
 import { SimError } from '../../../../sim/error.ts';
 import { originOf } from '../../../../sim/origin.ts';
 import { readScenario } from '../../../../sim/scenario/read.ts';
@@ -93,6 +94,60 @@ test('a run at the centre is told in the turn of the median, in its own seconds'
   const late = await told(3, 290); // below three quarters: the turn that has begun
   expect(late.summary.percentiles!['50']).toBeCloseTo(290, 9);
   expect(late.atCentre).toBe(413);
+});
+
+test.each([0.5, 0.3])(
+  'opposite seasons, %s of the draws about periapsis: two groups with their own shares',
+  async (share) => {
+    const period = 400 * 86_400;
+    // 8 d around periapsis, and around half an orbit after it
+    const timeAt = (draw: number) => {
+      const u = plan.draws.at(draw, 0);
+      const days = u < share ? 8 * (u / share - 0.5) : 200 + 8 * ((u - share) / (1 - share) - 0.5);
+      return ((days + 400) % 400) * 86_400;
+    };
+    const column = async (name: string) =>
+      Float64Array.from({ length: draws }, (_, draw) => (name === 'timeOfMax' ? timeAt(draw) : period));
+    const [told] = (await summariseSpread(plan, origin, tables({ draws: column }))).cases;
+    const { groups } = told!.findings.find(({ name }) => name === 'timeOfMax')!;
+    expect(groups!.map(({ share }) => share)).toEqual([expect.closeTo(share, 2), expect.closeTo(1 - share, 2)]);
+    const ends = groups!.flatMap(({ from, to }) => [from / 86_400, to / 86_400]);
+    for (const [i, end] of [-4, 4, 196, 204].entries()) expect(Math.abs(ends[i]! - end)).toBeLessThan(0.1);
+    expect(told!.warnings.find((text) => text.startsWith('Time of maximum'))).toMatch(
+      share === 0.5
+        ? /two groups on the orbit, 50 % of them from −?-?[34]\.\d+ to [34]\.?\d* d and 50 % of them from 196/
+        : /two groups on the orbit, 30 % of them from −?-?[34]\.\d+ to [34]\.?\d* d and 70 % of them from 196/,
+    );
+  },
+);
+
+test('what was cut away, and rows that indices lack, are among the warnings', async () => {
+  const wide = planSpread({ ...plan.setup, text: text.replace('0.1 to 0.5', '0.1 ± 0.2') });
+  // in a tenth of the rows the run of B lacks the damping
+  const further = furtherRuns(draws, 2);
+  const value = (row: number) => wide.draws.at(row, 0);
+  const report = await summariseSpread(
+    wide,
+    origin,
+    tables({
+      draws: async () => Float64Array.from({ length: draws }, (_, row) => value(row)),
+      indices: async (name) =>
+        Float64Array.from({ length: further }, (_, run) => {
+          const { row, changed } = designPlace(run, 2);
+          if (name === 'damping' && changed === 'all' && row % 10 === 0) return Number.NaN;
+          return wide.draws.at(row, changed === 'all' || changed === 0 ? 2 : 0);
+        }),
+    }),
+  );
+  const [told] = report.cases;
+  const importance = (name: string) => told!.findings.find((one) => one.name === name)!.importance;
+  expect(importance('damping').leftOut).toBeCloseTo(52 / 512, 12);
+  expect(importance('temperatureMean').leftOut).toBe(0);
+  expect(told!.warnings).toContainEqual(expect.stringMatching(/of planet\.bondAlbedo 0\.1 ± 0\.2 lies beyond what/));
+  expect(told!.warnings).toContainEqual(expect.stringMatching(/indices of Damping.* leave out 10 % of the rows/));
+  const summary = spreadSummary(report).cases[0]!;
+  expect(summary.importance.damping).toMatchObject({ leftOut: 52 / 512 });
+  expect(summary.warnings).toEqual(told!.warnings);
 });
 
 test('a finding that some draws lack: the share that has it, and why one lacks it, in the words of the model', async () => {
