@@ -62,6 +62,7 @@ function run(page: RunPage, original: RunResult, tree: unknown, box: HTMLElement
   let known: readonly CaseDials[] = [];
   let controls: Panel | null = null;
   let shown = original;
+  let shownCases: readonly EditedCase[] = presentCases(unmoved, names);
   let writing = 0;
   let reading = plainReading;
   const linkOf = () => [toHash(state, names), readingToHash(reading)].filter((part) => part !== '').join('&');
@@ -153,12 +154,16 @@ function run(page: RunPage, original: RunResult, tree: unknown, box: HTMLElement
     if (!cases.every((one) => one !== undefined)) return;
     const isOriginal = whole.every(({ edits, name }, i) => edits.length === 0 && name === names[i]);
     shown = isOriginal ? original : { ...original, cases };
+    shownCases = whole;
     page.show(shown, movesText(whole, known));
     controls?.show(state, siOf);
     document.body.dataset.shown = String(Number(document.body.dataset.shown ?? 0) + 1);
   }
 
+  /** Null where what is shown was computed with another number: a slider must not go back to it under the hand. */
   function siOf(caseName: string, key: string): number | null {
+    const computed = shownCases.find(({ name }) => name === caseName)?.edits ?? [];
+    if (textOf(computed, key) !== textOf(editsOf(state, caseName), key)) return null;
     const inputs = shown.cases.find(({ name }) => name === caseName)?.inputs;
     return inputs?.find((input) => input.key === key)?.value ?? null;
   }
@@ -197,4 +202,8 @@ function run(page: RunPage, original: RunResult, tree: unknown, box: HTMLElement
       controls?.fail({ where: null, message: (error as Error).message });
     }
   }
+}
+
+function textOf(edits: EditedCase['edits'], key: string): string | undefined {
+  return edits.find((one) => one.key === key)?.text;
 }
