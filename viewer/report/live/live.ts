@@ -36,9 +36,11 @@ const wide = matchMedia('(min-width: 76rem)');
 
 export function live(page: RunPage, original: RunResult, tree: unknown): Live {
   const box = element('div', { class: 'instrument-box' });
-  const drawer = element('details', { class: 'instruments' }, element('summary', {}, 'Move an assumption'), box);
+  const summary = element('summary', {}, 'Move an assumption');
+  const drawer = element('details', { class: 'instruments' }, summary, box);
   const adjust = () => {
     drawer.open = wide.matches;
+    summary.tabIndex = wide.matches ? -1 : 0; // where there is room it is a title
   };
   adjust();
   wide.addEventListener('change', adjust);
