@@ -6,5 +6,6 @@ export default defineConfig({
     exclude: ['test/**/*.long.test.ts', 'node_modules/**'],
     testTimeout: 60_000,
     hookTimeout: 60_000,
+    expect: { poll: { timeout: 10_000 } }, // pages answer late on a busy machine
   },
 });

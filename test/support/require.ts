@@ -6,10 +6,11 @@ import { spawnSync } from 'node:child_process';
 import { accessSync, constants } from 'node:fs';
 import { delimiter, join } from 'node:path';
 
-export type Tool = 'chromium' | 'python' | 'scipy' | 'xarray' | 'ncdump' | 'slurm';
+export type Tool = 'chromium' | 'firefox' | 'python' | 'scipy' | 'xarray' | 'ncdump' | 'slurm';
 
 const finders: Readonly<Record<Tool, () => string | null>> = {
   chromium: () => onPath(['chromium', 'chromium-browser', 'google-chrome', 'google-chrome-stable']),
+  firefox: () => onPath(['firefox-esr', 'firefox']),
   python: () => pythonWith('csv, json, xml.dom'),
   scipy: () => pythonWith('scipy.integrate'),
   xarray: () => pythonWith('xarray, netCDF4'),
@@ -19,6 +20,7 @@ const finders: Readonly<Record<Tool, () => string | null>> = {
 };
 const packages: Readonly<Record<Tool, string>> = {
   chromium: 'chromium',
+  firefox: 'firefox-esr',
   python: 'python3',
   scipy: 'python3-scipy',
   xarray: 'python3-xarray python3-netcdf4',

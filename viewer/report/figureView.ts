@@ -55,7 +55,10 @@ export function figureView(
   const plot = element('div', { class: 'plot', role: 'group' });
   const layer = momentLayer(plot);
   const legend = element('ul', { class: 'legend' });
-  const whole = button('Show all', () => show(null));
+  const whole = button('Show all', () => {
+    saving[0]!.focus(); // the button goes
+    return show(null);
+  });
   whole.hidden = true;
   const saving = [
     ...(['svg', 'png'] as const).map((format) => button(`Save ${format.toUpperCase()}`, () => save(asShown(), format))),

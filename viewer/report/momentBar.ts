@@ -25,7 +25,10 @@ export function momentBar(moved: (share: number | null) => void): MomentBar {
   const when = element('output', { for: 'moment' });
   const list = element('ul', { class: 'moment-values' });
   slider.addEventListener('input', () => moved(slider.valueAsNumber / steps));
-  none.addEventListener('click', () => moved(null));
+  none.addEventListener('click', () => {
+    slider.focus(); // the button goes
+    moved(null);
+  });
 
   function show(...[share, unit]: Parameters<MomentBar['show']>): void {
     last = [share, unit];

@@ -37,9 +37,11 @@ const wide = matchMedia('(min-width: 76rem)');
 
 export function live(page: RunPage, original: RunResult, tree: unknown): Live {
   const box = element('div', { class: 'instrument-box' }, element('p', { class: 'run-line' }, 'Getting ready …'));
-  const drawer = element('details', { class: 'instruments' }, element('summary', {}, 'Move an assumption'), box);
+  const summary = element('summary', {}, 'Move an assumption');
+  const drawer = element('details', { class: 'instruments' }, summary, box);
   const adjust = () => {
     drawer.open = wide.matches;
+    summary.tabIndex = wide.matches ? -1 : 0; // where there is room it is a title
   };
   adjust();
   wide.addEventListener('change', adjust);
@@ -62,6 +64,7 @@ function run(page: RunPage, original: RunResult, tree: unknown, box: HTMLElement
   let known: readonly CaseDials[] = [];
   let controls: Panel | null = null;
   let shown = original;
+  let shownCases: readonly EditedCase[] = presentCases(unmoved, names);
 
   const solverEvents: SolverEvents = {
     opened(cases) {
@@ -128,13 +131,17 @@ function run(page: RunPage, original: RunResult, tree: unknown, box: HTMLElement
     const found = results.whole(whole);
     if (found === null) return;
     shown = found;
+    shownCases = whole;
     page.show(shown, movesText(whole, known));
     controls?.show(state, siOf);
     spoken.say(answer(shown).lead);
     document.body.dataset.shown = String(Number(document.body.dataset.shown ?? 0) + 1);
   }
 
+  /** Null where what is shown was computed with another number: a slider must not go back to it under the hand. */
   function siOf(caseName: string, key: string): number | null {
+    const computed = shownCases.find(({ name }) => name === caseName)?.edits ?? [];
+    if (textOf(computed, key) !== textOf(editsOf(state, caseName), key)) return null;
     const inputs = shown.cases.find(({ name }) => name === caseName)?.inputs;
     return inputs?.find((input) => input.key === key)?.value ?? null;
   }
@@ -161,6 +168,10 @@ function run(page: RunPage, original: RunResult, tree: unknown, box: HTMLElement
       controls?.fail({ where: null, message: (error as Error).message });
     }
   }
+}
+
+function textOf(edits: EditedCase['edits'], key: string): string | undefined {
+  return edits.find((one) => one.key === key)?.text;
 }
 
 /** Two digits, at least 1. */

@@ -32,12 +32,12 @@ export function panel(cases: readonly CaseDials[], events: PanelEvents): Panel {
   let last: Parameters<Panel['show']> | null = null;
 
   const dials = element('div', { class: 'dials' });
-  const keptList = element('ul', { class: 'kept-cases' });
   const fault = element('p', { class: 'fault', role: 'alert' });
   const line = element('p', { class: 'run-line', role: 'status' });
   const keep = action('Keep as a case', () => events.keep(scope));
   const all = action('Reset all', events.resetAll);
   const save = action('Save as scenario', events.save);
+  const keptList = keptCases(events.drop, keep);
 
   function lay(): void {
     views = dialsIn(cases, scope).map((dial) => ({
@@ -63,18 +63,9 @@ export function panel(cases: readonly CaseDials[], events: PanelEvents): Panel {
       view.show(text ?? dial.text, text === undefined ? dial.value : siOf(first!, key), text !== undefined);
     }
     const isMoved = scope.some((name) => editsOf(state, name).length > 0);
-    keep.disabled = !isMoved;
-    all.disabled = state.changes.length === 0 && state.kept.length === 0;
-    keptList.replaceChildren(
-      ...state.kept.map(({ name }) =>
-        element(
-          'li',
-          {},
-          userText(name),
-          action('Remove', () => events.drop(name), `Remove ${name}`),
-        ),
-      ),
-    );
+    allow(keep, isMoved);
+    allow(all, state.changes.length > 0 || state.kept.length > 0);
+    keptList.show(state.kept.map(({ name }) => name));
   }
 
   lay();
@@ -93,7 +84,7 @@ export function panel(cases: readonly CaseDials[], events: PanelEvents): Panel {
       line,
       fault,
       chooser,
-      keptList,
+      keptList.element,
       dials,
     ),
     show,
@@ -105,6 +96,31 @@ export function panel(cases: readonly CaseDials[], events: PanelEvents): Panel {
     },
     tell(text) {
       line.textContent = text;
+    },
+  };
+}
+
+/** When one is removed the focus goes to its neighbour's button, after the last one to `before`. */
+function keptCases(
+  drop: (name: string) => void,
+  before: HTMLElement,
+): { readonly element: HTMLElement; show(names: readonly string[]): void } {
+  const list = element('ul', { class: 'kept-cases' });
+  let shown: readonly string[] = [];
+  const removing = (name: string, place: number) => () => {
+    drop(name);
+    const left = list.querySelectorAll('button');
+    (left[Math.min(place, left.length - 1)] ?? before).focus();
+  };
+  return {
+    element: list,
+    show(names) {
+      if (names.length === shown.length && names.every((name, i) => name === shown[i])) return;
+      shown = names;
+      const entries = names.map((name, i) =>
+        element('li', {}, userText(name), action('Remove', removing(name, i), `Remove ${name}`)),
+      );
+      list.replaceChildren(...entries);
     },
   };
 }
@@ -132,6 +148,13 @@ function action(label: string, pressed: () => void, longLabel = label): HTMLButt
     { type: 'button', ...(longLabel === label ? {} : { 'aria-label': longLabel }) },
     label,
   );
-  made.addEventListener('click', pressed);
+  made.addEventListener('click', () => {
+    if (made.ariaDisabled !== 'true') pressed();
+  });
   return made;
+}
+
+/** A button that is not at hand now keeps the focus that it has: `disabled` would lose it. */
+function allow(button: HTMLButtonElement, isAllowed: boolean): void {
+  button.ariaDisabled = isAllowed ? null : 'true';
 }
