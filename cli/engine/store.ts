@@ -8,12 +8,12 @@ import { chunkPieces, readChunk } from './chunkFile.ts';
 import { columnsOf, type Range, type Rows } from './job.ts';
 import { landBytes, removeAbandoned } from './landing.ts';
 import { differences, type Manifest, manifestText, readManifest, shardWords } from './manifest.ts';
-import { countRows } from './plan.ts';
+import { countRows, withoutOverlaps } from './plan.ts';
 
 export interface Store {
   readonly folder: string;
   readonly manifest: Manifest;
-  /** What is there, in order. */
+  /** What is there, in order, each row once. */
   chunks(): readonly Range[];
   /** Errors: as the system gives them. */
   land(chunk: Range & Rows): Promise<void>;
@@ -92,7 +92,8 @@ function refuseOthers({ folder, manifest, chunks }: Store, wanted: Manifest): vo
 function storeOf(folder: string, manifest: Manifest): Store {
   const columns = columnsOf(manifest.job).length;
   const path = ({ from, to }: Range) => join(folder, `rows-${from}-${to}.bin`);
-  const present = chunksIn(folder);
+  // Two runs at once, as on two machines, may have cut their chunks elsewhere: rows follow from their numbers, so none is lost.
+  const present = [...withoutOverlaps(chunksIn(folder))];
   return {
     folder,
     manifest,
