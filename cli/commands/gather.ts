@@ -3,10 +3,12 @@ import { resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
 import { readScenario } from '../../sim/scenario/read.ts';
 import { planSpread } from '../../sim/studies/spread/plan.ts';
-import { gatherTable } from '../engine/gather.ts';
+import { gatherTable, requireStore } from '../engine/gather.ts';
+import { whileListening } from '../engine/interruption.ts';
 import { settingsApart } from '../engine/manifest.ts';
 import { requireMemory } from '../engine/room.ts';
-import { findStore, tablesIn, workFolder } from '../engine/store.ts';
+import { tablesIn } from '../engine/store.ts';
+import { Interrupted } from '../exit.ts';
 import { type FigureOptions, figureRequest } from '../figures/request.ts';
 import { writeFigures } from '../figures/write.ts';
 import type { Io } from '../io.ts';
@@ -17,7 +19,7 @@ import { requireName } from './outputFolder.ts';
 import type { Program } from './run.ts';
 import type { SpreadContext } from './spreadContext.ts';
 import { finishSpread, type SpreadTableFiles } from './spreadFiles.ts';
-import { heldBySpread } from './spreadJobs.ts';
+import { heldBySpread, spreadTables } from './spreadJobs.ts';
 
 export interface GatherOptions extends FigureOptions {
   readonly out: string;
@@ -37,11 +39,29 @@ export async function gather(
   const paths = folders.map((folder) => resolve(io.cwd, folder));
   const tables = tablesOf(paths, folders);
   refuseMixture(paths[0]!, tables, program);
-  const { job } = findStore(workFolder(paths[0]!, 'draws'))!.manifest;
-  requireMemory('draws', job, heldBySpread);
+  const jobs = tables.map((table) => requireStore(paths[0]!, table).manifest.job);
+  for (const [i, job] of jobs.entries()) requireMemory(tables[i]!, job, heldBySpread);
   const out = resolve(io.cwd, options.out);
+  const code = await whileListening(io, { quiet: options.quiet ?? false }, (interruption) =>
+    joinAndFinish(paths, tables, out, options, io, () => {
+      if (interruption.requested) throw new Interrupted();
+    }),
+  );
+  const figuresCode = await writeFigures([options.out], figures, options, io);
+  return code || figuresCode;
+}
+
+/** Gives the exit code. */
+async function joinAndFinish(
+  paths: readonly string[],
+  tables: readonly string[],
+  out: string,
+  options: GatherOptions,
+  io: Io,
+  checkpoint: () => void,
+): Promise<number> {
   const gathered = [];
-  for (const table of tables) gathered.push({ table, ...(await gatherTable(paths, table, out)) });
+  for (const table of tables) gathered.push({ table, ...(await gatherTable(paths, table, out, checkpoint)) });
   const context = gathered[0]!.job.context as unknown as SpreadContext;
   const item = scenarioOf(context);
   const plan = planSpread({
@@ -56,13 +76,8 @@ export async function gather(
   const files = Object.fromEntries(
     gathered.map(({ table, files: made }) => [table, made]),
   ) as unknown as SpreadTableFiles;
-  const code = await finishSpread(
-    { plan, context, files, settings: gathered[0]!.job.settings, out: options.out, item },
-    options,
-    io,
-  );
-  const figuresCode = await writeFigures([options.out], figures, options, io);
-  return code || figuresCode;
+  const finished = { plan, context, files, settings: gathered[0]!.job.settings, out: options.out, item };
+  return finishSpread(finished, options, io, checkpoint);
 }
 
 /** The tables that all folders have. Errors: SimError where one has others than the first: nothing is left out unsaid. */
@@ -85,7 +100,7 @@ function tablesOf(paths: readonly string[], named: readonly string[]): readonly 
 
 /** The tables of one folder are of one run, and of this program: else what is told of the draws is not what made them. */
 function refuseMixture(path: string, tables: readonly string[], { version }: Pick<Program, 'version'>): void {
-  const stores = tables.map((table) => findStore(workFolder(path, table))!);
+  const stores = tables.map((table) => requireStore(path, table));
   const { job } = stores[tables.indexOf('draws')]!.manifest;
   for (const { folder, manifest } of stores) {
     const found = settingsApart(job, manifest.job, ['in the draws', 'here']);
@@ -98,9 +113,11 @@ function refuseMixture(path: string, tables: readonly string[], { version }: Pic
   throw new SimError(path, what, 'Gather them with the program that computed them');
 }
 
+/** What else is called `*.work` there is none of ours. */
 function foundTables(path: string): readonly string[] {
   try {
-    return tablesIn(path);
+    const found = tablesIn(path);
+    return spreadTables.filter((table) => found.includes(table));
   } catch {
     return [];
   }

@@ -1,14 +1,15 @@
 /** `perilag grid`: every finding of each case over one or two inputs, as curves or maps and as files. */
 import { readFileSync } from 'node:fs';
-import { availableParallelism } from 'node:os';
 import { resolve } from 'node:path';
+import { setImmediate } from 'node:timers/promises';
 import { originOf } from '../../sim/origin.ts';
 import { findingColumns } from '../../sim/studies/columnName.ts';
 import type { GridReport } from '../../sim/studies/grid/gridReport.ts';
 import { type GridPlan, type GridSetup, planGrid } from '../../sim/studies/grid/plan.ts';
 import { summariseGrid } from '../../sim/studies/grid/summariseGrid.ts';
 import { csvRecords } from '../csvRecords.ts';
-import { computeTable } from '../engine/compute.ts';
+import { type ComputeOptions, computeTables } from '../engine/compute.ts';
+import { whileListening, whileRowsAreKept } from '../engine/interruption.ts';
 import type { Job } from '../engine/job.ts';
 import { kinds } from '../engine/kinds.ts';
 import { type Held, requireMemory } from '../engine/room.ts';
@@ -16,7 +17,7 @@ import type { TableFiles } from '../engine/table.ts';
 import { type FigureOptions, figureRequest } from '../figures/request.ts';
 import { writeFigures } from '../figures/write.ts';
 import type { Io } from '../io.ts';
-import { writeFolder } from '../output/folder.ts';
+import { type OutputFile, writeFolder } from '../output/folder.ts';
 import { gridCsvText, gridNetcdf, gridSummary } from '../output/gridFiles.ts';
 import { gridLines } from '../output/gridTable.ts';
 import { historyLine } from '../output/history.ts';
@@ -44,9 +45,6 @@ export interface GridOptions extends FigureOptions {
   readonly quiet?: boolean;
 }
 
-/** Below this many nodes of a quick model a thread takes longer to start than the work. */
-const fewNodes = 4000;
-
 /** All columns; every number again as an object of the report, as a text of the page, and all of them in one text of the CSV. */
 const heldByGrid: Held = { columns: Number.POSITIVE_INFINITY, heapANumber: 45, textANumber: 19 };
 
@@ -60,23 +58,33 @@ export async function grid(file: string, options: GridOptions, program: Program,
   const folder = resolve(io.cwd, out);
   const job = jobOf(plan, item!, program);
   requireMemory('--steps', job, heldByGrid);
-  const computed = await computeTable(
-    job,
-    {
-      table: 'grid',
-      folder,
-      shard: null,
-      resume: options.resume ?? false,
-      workers: options.workers ?? workersFor(plan),
-      quiet: options.quiet ?? false,
-      words: program.words,
-    },
-    kinds,
-    io,
-  );
-  const report = await reportOf(plan, item!, computed.files!, program);
-  const scenarioYaml = scenarioYamlText(item!.scenario, samplesFrom(folder, item!, io.cwd));
-  await writeFolder(folder, [
+  const settled: ComputeOptions = {
+    folder,
+    shard: null,
+    resume: options.resume ?? false,
+    workers: options.workers ?? null,
+    quiet: options.quiet ?? false,
+    words: program.words,
+  };
+  const report = await whileListening(io, settled, async (interruption) => {
+    const [computed] = await computeTables([{ table: 'grid', job }], settled, kinds, io, interruption);
+    const made = await whileRowsAreKept(settled, interruption, async (checkpoint) => {
+      const summarised = await reportOf(plan, item!, computed!.files!, program);
+      await setImmediate(); // a signal is heard
+      checkpoint();
+      await writeFolder(folder, filesOf(summarised, item!, folder, program, io));
+      return summarised;
+    });
+    await computed!.discardWork();
+    return made;
+  });
+  show(report, out, options, io);
+  return writeFigures([out], figures, options, io);
+}
+
+function filesOf(report: GridReport, item: ScenarioFile, folder: string, program: Program, io: Io): OutputFile[] {
+  const scenarioYaml = scenarioYamlText(item.scenario, samplesFrom(folder, item, io.cwd));
+  return [
     { name: 'summary.json', pieces: [`${jsonText(gridSummary(report))}\n`] },
     { name: 'grid.csv', pieces: [gridCsvText(report)] },
     {
@@ -89,10 +97,7 @@ export async function grid(file: string, options: GridOptions, program: Program,
     },
     { name: 'scenario.yaml', pieces: [scenarioYaml] },
     { name: 'report.html', pieces: pagePieces({ grid: report }, io.reportTemplate) },
-  ]);
-  await computed.discardWork();
-  show(report, out, options, io);
-  return writeFigures([out], figures, options, io);
+  ];
 }
 
 function setupOf({ text, file, scenario }: ScenarioFile, { along, hold, steps, of, only }: GridOptions): GridSetup {
@@ -105,10 +110,6 @@ function setupOf({ text, file, scenario }: ScenarioFile, { along, hold, steps, o
     steps,
     of: of === undefined ? null : [...new Set(of.split(',').map((name) => name.trim()))].filter((name) => name !== ''),
   };
-}
-
-function workersFor({ cases, count }: GridPlan): number {
-  return cases.every(({ over }) => over.model === 'lumped') && count < fewNodes ? 1 : availableParallelism();
 }
 
 function jobOf(plan: GridPlan, { sha256 }: ScenarioFile, { version }: Program): Job {

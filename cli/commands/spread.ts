@@ -3,10 +3,12 @@ import { resolve } from 'node:path';
 import { SimError } from '../../sim/error.ts';
 import { casesDrawn } from '../../sim/scenario/drawn.ts';
 import { planSpread, type SpreadSetup } from '../../sim/studies/spread/plan.ts';
-import { type Computed, computeInPool, withPool } from '../engine/compute.ts';
+import { computeTables } from '../engine/compute.ts';
+import { whileListening, whileRowsAreKept } from '../engine/interruption.ts';
 import { kinds } from '../engine/kinds.ts';
 import type { Shard } from '../engine/plan.ts';
 import { requireMemory } from '../engine/room.ts';
+import { exitCode } from '../exit.ts';
 import { type FigureOptions, type FigureRequest, figureRequest } from '../figures/request.ts';
 import { writeFigures } from '../figures/write.ts';
 import type { Io } from '../io.ts';
@@ -47,27 +49,25 @@ export async function spread(file: string, options: SpreadOptions, program: Prog
   const hasLatitudes = plan.cases.some(({ drawn }) => drawn.model !== 'lumped');
   const phases = spreadPhases(jobs, options.shard ?? null, hasLatitudes);
   if (!options.shard) for (const { job } of jobs) requireMemory('--draws', job, heldBySpread);
-  const computed = await withPool(options.workers ?? null, kinds, io, async (pool) => {
-    const found: Computed[] = [];
-    for (const [i, { table, job }] of jobs.entries()) {
-      const settled = { ...engineOptions(options, out, program, io), table, phase: phases[i] };
-      found.push(await computeInPool(job, settled, pool, io));
-    }
+  const settled = engineOptions(options, out, program, io);
+  const tables = jobs.map((one, i) => ({ ...one, phase: phases[i] }));
+  const code = await whileListening(io, settled, async (interruption) => {
+    const computed = await computeTables(tables, settled, kinds, io, interruption);
+    if (options.shard) return exitCode.done;
+    const files = Object.fromEntries(
+      jobs.map(({ table }, i) => [table, computed[i]!.files]),
+    ) as unknown as SpreadTableFiles;
+    const finished = { plan, context, files, settings: jobs[0]!.job.settings, out, item: item! };
+    const found = await whileRowsAreKept(settled, interruption, (checkpoint) =>
+      finishSpread(finished, options, io, checkpoint),
+    );
+    for (const one of computed) await one.discardWork();
     return found;
   });
   if (options.shard) {
     if (!options.quiet) tellShard(out, options.shard, io);
-    return 0;
+    return code;
   }
-  const files = Object.fromEntries(
-    jobs.map(({ table }, i) => [table, computed[i]!.files]),
-  ) as unknown as SpreadTableFiles;
-  const code = await finishSpread(
-    { plan, context, files, settings: jobs[0]!.job.settings, out, item: item! },
-    options,
-    io,
-  );
-  for (const one of computed) await one.discardWork();
   const figuresCode = await writeFigures([out], figures, options, io);
   return code || figuresCode;
 }
@@ -128,6 +128,7 @@ function engineOptions(options: SpreadOptions, out: string, program: Program, io
     folder: resolve(io.cwd, out),
     shard: options.shard ?? null,
     resume: options.resume ?? false,
+    workers: options.workers ?? null,
     quiet: options.quiet ?? false,
     words: program.words,
   };

@@ -1,5 +1,6 @@
 /** From the finished tables of a spread to what stands beside them: summary, scenario, report, and the table of the terminal. */
 import { basename, resolve } from 'node:path';
+import { setImmediate } from 'node:timers/promises';
 import { originOf } from '../../sim/origin.ts';
 import { runScenario } from '../../sim/run.ts';
 import type { SpreadPlan } from '../../sim/studies/spread/plan.ts';
@@ -45,14 +46,17 @@ export interface FinishedSpread {
 /** More failed draws than this share are no longer a few odd ones. */
 const tolerableFailures = 0.01;
 
-/** Writes the files and shows the table; gives the exit code. */
+/** Writes the files and shows the table; gives the exit code. `checkpoint` is called before the first is written, and may throw. */
 export async function finishSpread(
   finished: FinishedSpread,
   options: { readonly json?: boolean; readonly quiet?: boolean },
   io: Io,
+  checkpoint: () => void,
 ): Promise<number> {
   const { plan, context, item, out } = finished;
   const report = await reportOf(finished);
+  await setImmediate(); // a signal is heard
+  checkpoint();
   const folder = resolve(io.cwd, out);
   const run = runScenario(item.scenario, { sha256: context.sha256, version: context.version });
   const summary = { ...summaryOf(run), spread: spreadSummary(report) };

@@ -1,6 +1,7 @@
 /** Rows on their way from workers to the table: a row group is handed on when all of it is there, while others are computed. */
 import type { Chunk } from './chunk.ts';
 import { groupRows, type Range } from './job.ts';
+import { missing } from './plan.ts';
 import type { Store } from './store.ts';
 import type { Piece, Source } from './table.ts';
 
@@ -48,7 +49,7 @@ export function arrivalsOf(store: Store): Arrivals {
     if (waiting === null) return;
     const { range, resolve } = waiting;
     const pieces = groups.get(groupOf(range)) ?? [];
-    if (pieces.reduce((sum, { from, to }) => sum + to - from, 0) < range.to - range.from) return;
+    if (missing(range, pieces).length > 0) return;
     waiting = null;
     groups.delete(groupOf(range));
     resolve(pieces.sort((a, b) => a.from - b.from));

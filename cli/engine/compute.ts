@@ -2,35 +2,42 @@
 import { SimError } from '../../sim/error.ts';
 import { Interrupted } from '../exit.ts';
 import type { Io } from '../io.ts';
-import { commandLine } from '../output/history.ts';
 import type { Phase } from '../output/phases.ts';
 import { grouped, showProgress } from '../output/progressBar.ts';
 import { writingFault } from '../output/writingFault.ts';
 import { arrivalsOf } from './arrivals.ts';
-import { type Interruption, listen } from './interruption.ts';
+import { type Interruption, resumeLine } from './interruption.ts';
 import { columnsOf, fingerprintOf, type Job, type Kinds, recordOf } from './job.ts';
 import { type LanesWork, runLanes } from './lanes.ts';
+import { refuseHeld, whileHeld } from './lock.ts';
+import type { Manifest } from './manifest.ts';
 import { countRows, missing, type Shard, shardRange } from './plan.ts';
 import { type Pool, poolOf } from './pool.ts';
 import { requireDisk } from './room.ts';
-import { findStore, openStore, type Store, workFolder } from './store.ts';
+import { findFitting, findStore, openStore, type Store, workFolder } from './store.ts';
 import { finishedTable, type TableFiles, writeTable } from './table.ts';
 
-export interface ComputeOptions {
+export interface TableJob {
   /** Name of the table's file without its extension: `draws`. */
   readonly table: string;
+  readonly job: Job;
+  /** Where the table is one of several. */
+  readonly phase?: Phase | undefined;
+}
+
+export interface ComputeOptions {
   /** Output folder, absolute. */
   readonly folder: string;
   readonly shard: Shard | null;
   readonly resume: boolean;
+  /** How many workers; null for one a processor, where it pays. */
+  readonly workers: number | null;
   readonly quiet: boolean;
-  /** Where the table is one of several. */
-  readonly phase?: Phase | undefined;
   /** With which the program was called: how to go on is told with them. */
   readonly words: readonly string[];
 }
 
-type EngineIo = Pick<Io, 'stderr' | 'stderrIsTTY' | 'stderrColumns' | 'now' | 'signals' | 'worker'>;
+export type EngineIo = Pick<Io, 'stderr' | 'stderrIsTTY' | 'stderrColumns' | 'now' | 'signals' | 'worker'>;
 
 export interface Computed {
   /** Null for a shard: its rows stay in the work folder, for `gather`. */
@@ -40,7 +47,7 @@ export interface Computed {
   discardWork(): Promise<void>;
 }
 
-/** What a table is computed with. */
+/** What tables are computed with. */
 interface Run {
   readonly options: ComputeOptions;
   readonly io: EngineIo;
@@ -48,72 +55,98 @@ interface Run {
   readonly interruption: Interruption;
 }
 
-/** Calls `work` with a pool for all the tables of a command (`poolOf`), and lets the threads go when it has ended. */
-export async function withPool<T>(
-  workers: number | null,
+/**
+ * Computes of each table the rows that are not there yet, and writes it, one after the other. The bytes depend on the jobs alone.
+ * Errors: SimError when the folder cannot be written, holds other rows of any of them, or is in use: before the first is computed;
+ * Interrupted after a signal. What is finished stays.
+ */
+export async function computeTables(
+  tables: readonly TableJob[],
+  options: ComputeOptions,
   kinds: Kinds,
-  io: Pick<Io, 'worker'>,
-  work: (pool: Pool) => Promise<T>,
-): Promise<T> {
-  const pool = poolOf(workers, kinds, io.worker);
+  io: EngineIo,
+  interruption: Interruption,
+): Promise<readonly Computed[]> {
+  for (const { job } of tables) requireSound(job, options.shard);
+  const finished = await foundFinished(tables, options);
+  await refuseBefore(
+    tables.filter((_, i) => finished[i] === null),
+    options,
+    io,
+  ).catch((error) => {
+    throw writingFault(options.folder, error);
+  });
+  const pool = poolOf(options.workers, kinds, io.worker);
+  const computed: Computed[] = [];
   try {
-    return await work(pool);
+    for (const [i, table] of tables.entries()) {
+      const files = finished[i]!;
+      computed.push(
+        files === null
+          ? await computeTable(table, { options, io, pool, interruption })
+          : computedOf(files, table, options, leftOver(table, options)),
+      );
+    }
+    return computed;
   } finally {
     await pool.close();
   }
 }
 
-/** `computeInPool` for a command with one table. */
-export async function computeTable(
-  job: Job,
-  options: ComputeOptions & { readonly workers: number | null },
-  kinds: Kinds,
-  io: EngineIo,
-): Promise<Computed> {
-  return withPool(options.workers, kinds, io, (pool) => computeInPool(job, options, pool, io));
+/** Of each table its files, when an earlier run has finished them; else null. */
+async function foundFinished(tables: readonly TableJob[], { folder, shard, resume }: ComputeOptions) {
+  const found: (TableFiles | null)[] = [];
+  for (const { table, job } of tables)
+    found.push(resume && shard === null ? await finishedTable(folder, table, recordOf(job)) : null);
+  return found;
 }
 
-/**
- * Computes the rows of `job` that are not there yet, and writes the table. The bytes depend on the job alone.
- * Errors: SimError when the folder cannot be written, or holds other rows; Interrupted after a signal. What is finished stays.
- */
-export async function computeInPool(job: Job, options: ComputeOptions, pool: Pool, io: EngineIo): Promise<Computed> {
-  requireSound(job, options.shard);
-  const folder = workFolder(options.folder, options.table);
-  const say = (text: string) => {
-    if (!options.quiet) io.stderr.write(`${text}\n`);
-  };
-  return attempt(folder, options, async () => {
-    if (options.resume && options.shard === null) {
-      const files = await finishedTable(options.folder, options.table, recordOf(job));
-      if (files !== null) return computed(files, folder, leftOver(folder, job));
-    }
-    const manifest = manifestOf(job, options);
-    const missingRows = countRows([manifest.range]) - countRows(findStore(folder)?.chunks() ?? []);
-    const warning = await requireDisk(options.folder, { missingRows, job, isTable: options.shard === null });
-    if (warning !== null) say(`warning: ${warning}`);
-    const store = await openStore(folder, manifest, options.resume);
-    const found = countRows(store.chunks());
-    if (found > 0) say(`${options.table}: going on with ${grouped(found)} finished rows`);
-    const interruption = listen(io.signals, () =>
-      say(`${io.stderrIsTTY ? '\n' : ''}Stopping: what is running is finished first. Another signal stops it at once.`),
-    );
-    try {
-      const files = await fillAndWrite(job, store, { options, io, pool, interruption });
-      return computed(files, folder, files === null ? null : store);
-    } finally {
-      interruption.off();
-    }
+/** What would be refused when its turn comes is refused now: an hour of other tables later is late to hear of it. */
+async function refuseBefore(tables: readonly TableJob[], options: ComputeOptions, io: EngineIo): Promise<void> {
+  const needs = tables.map((table) => {
+    const folder = workFolder(options.folder, table.table);
+    const manifest = manifestOf(table, options);
+    refuseHeld(folder);
+    const store = findFitting(folder, manifest, options.resume);
+    const missingRows = countRows(missing(manifest.range, store?.chunks() ?? []));
+    return { missingRows, job: table.job, isTable: options.shard === null };
   });
+  const warning = await requireDisk(options.folder, needs);
+  if (warning !== null) say(`warning: ${warning}`, options, io);
 }
 
-function computed(files: TableFiles | null, folder: string, store: Store | null): Computed {
-  return { files, workFolder: folder, discardWork: async () => store?.remove() };
+async function computeTable(table: TableJob, run: Run): Promise<Computed> {
+  const { options, io, interruption } = run;
+  const folder = workFolder(options.folder, table.table);
+  const warn = (text: string) => say(`warning: ${text}`, options, io);
+  return attempt(folder, run, () =>
+    whileHeld(folder, warn, async (isShared) => {
+      const store = await openStore(folder, manifestOf(table, options), { resume: options.resume, isShared });
+      const found = countRows(store.chunks());
+      if (found > 0) say(`${table.table}: going on with ${grouped(found)} finished rows`, options, io);
+      requireGoing(interruption, store, options);
+      const files = await fillAndWrite(table, store, run);
+      return computedOf(files, table, options, files === null ? null : store);
+    }),
+  );
+}
+
+function say(text: string, { quiet }: ComputeOptions, { stderr }: EngineIo): void {
+  if (!quiet) stderr.write(`${text}\n`);
+}
+
+function computedOf(
+  files: TableFiles | null,
+  { table }: TableJob,
+  { folder }: ComputeOptions,
+  store: Store | null,
+): Computed {
+  return { files, workFolder: workFolder(folder, table), discardWork: async () => store?.remove() };
 }
 
 /** The store of this job, when a run that finished its table had no time to remove it. */
-function leftOver(folder: string, job: Job): Store | null {
-  const store = findStore(folder);
+function leftOver({ table, job }: TableJob, { folder }: ComputeOptions): Store | null {
+  const store = findStore(workFolder(folder, table));
   return store?.manifest.fingerprint === fingerprintOf(recordOf(job)) ? store : null;
 }
 
@@ -129,16 +162,16 @@ function requireSound(job: Job, shard: Shard | null): void {
     );
 }
 
-function manifestOf(job: Job, { table, shard }: ComputeOptions) {
+function manifestOf({ table, job }: TableJob, { shard }: ComputeOptions): Manifest {
   const range = shard === null ? { from: 0, to: job.rows } : shardRange(job.rows, shard);
   return { table, job: recordOf(job), fingerprint: fingerprintOf(recordOf(job)), range, shard };
 }
 
 /** Computes what is missing, and writes the table meanwhile; null for a shard. */
-async function fillAndWrite(job: Job, store: Store, run: Run): Promise<TableFiles | null> {
+async function fillAndWrite({ table, job, phase }: TableJob, store: Store, run: Run): Promise<TableFiles | null> {
   const { options, interruption } = run;
   const arrivals = arrivalsOf(store);
-  const target = { folder: options.folder, table: options.table, job: recordOf(job) };
+  const target = { folder: options.folder, table, job: recordOf(job) };
   let stopped = false;
   const writing =
     options.shard === null ? writeTable(target, arrivals, () => requireGoing(interruption, store, options)) : null;
@@ -146,7 +179,7 @@ async function fillAndWrite(job: Job, store: Store, run: Run): Promise<TableFile
     stopped = true; // told below
   });
   try {
-    await fillStore(job, store, run, { landed: arrivals.landed, stopped: () => stopped });
+    await fillStore({ table, job, phase }, store, run, { landed: arrivals.landed, stopped: () => stopped });
   } catch (error) {
     arrivals.fail(error);
     await writing?.catch(() => undefined); // it leaves nothing of its own
@@ -156,7 +189,7 @@ async function fillAndWrite(job: Job, store: Store, run: Run): Promise<TableFile
 }
 
 async function fillStore(
-  job: Job,
+  { table, job, phase }: TableJob,
   store: Store,
   { options, io, pool, interruption }: Run,
   others: Pick<LanesWork, 'landed' | 'stopped'>,
@@ -166,10 +199,7 @@ async function fillStore(
   if (gaps.length === 0) return;
   const total = countRows([whole]);
   const already = total - countRows(gaps);
-  const progress = showProgress(
-    { label: options.table, total, already, quiet: options.quiet, phase: options.phase },
-    io,
-  );
+  const progress = showProgress({ label: table, total, already, quiet: options.quiet, phase }, io);
   try {
     await runLanes({ job, gaps, store, pool, progress, interruption, ...others });
   } finally {
@@ -185,18 +215,26 @@ function requireGoing({ requested }: Interruption, store: Store, options: Comput
   throw new Interrupted(`Interrupted: ${kept} are kept in ${store.folder}. To go on:\n  ${resumeLine(options.words)}`);
 }
 
-function resumeLine(words: readonly string[]): string {
-  return commandLine(words.includes('--resume') ? words : [...words, '--resume']);
-}
-
-/** Says that something is kept only where something is. */
-async function attempt<T>(folder: string, { words }: ComputeOptions, work: () => Promise<T>): Promise<T> {
+/** Says that something is kept only where something is, and then whatever has happened. */
+async function attempt<T>(folder: string, { options, io }: Run, work: () => Promise<T>): Promise<T> {
   try {
     return await work();
   } catch (error) {
-    if (!hasRows(folder)) throw writingFault(folder, error);
-    throw writingFault(folder, error, `What is finished stays there. When this is mended, go on: ${resumeLine(words)}`);
+    if (!hasRows(folder)) throw readable(folder, error, []);
+    const fault = readable(folder, error, [
+      `What is finished stays there. When this is mended, go on: ${resumeLine(options.words)}`,
+    ]);
+    const isTold = fault instanceof SimError || fault instanceof Interrupted;
+    if (!isTold) io.stderr.write(`What is finished stays in ${folder}. To go on: ${resumeLine(options.words)}\n`);
+    throw fault;
   }
+}
+
+/** A SimError for what the user can mend; anything else as it is. `kept` is what is said of the rows. */
+function readable(folder: string, error: unknown, kept: readonly [string] | readonly []): unknown {
+  if ((error as NodeJS.ErrnoException).code !== 'ERR_WORKER_OUT_OF_MEMORY') return writingFault(folder, error, ...kept);
+  const mend = 'Allow Node more, e.g. NODE_OPTIONS=--max-old-space-size=8192 (in MB)';
+  return new SimError(folder, 'a thread that computed its rows ran out of memory', [mend, ...kept].join('. '), error);
 }
 
 function hasRows(folder: string): boolean {

@@ -1,4 +1,5 @@
 /** Joins the rows of shards, computed anywhere, to the table that one run would have written. */
+import { existsSync } from 'node:fs';
 import { SimError } from '../../sim/error.ts';
 import { writingFault } from '../output/writingFault.ts';
 import type { JobRecord, Range } from './job.ts';
@@ -37,9 +38,13 @@ export async function gatherTable(
   }
 }
 
-function requireStore(folder: string, table: string): Store {
-  const store = findStore(workFolder(folder, table));
+/** Errors: SimError where no manifest is. */
+export function requireStore(folder: string, table: string): Store {
+  const path = workFolder(folder, table);
+  const store = findStore(path);
   if (store !== null) return store;
+  if (existsSync(path))
+    throw new SimError(path, 'manifest.json is missing: of which run it is cannot be told', 'Compute its rows again');
   throw new SimError(folder, `no rows of ${table} are kept there`, 'Name the output folders of the shards');
 }
 

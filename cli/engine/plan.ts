@@ -30,6 +30,17 @@ export function missing(whole: Range, present: readonly Range[]): readonly Range
   return gaps.filter((gap) => gap.from < gap.to);
 }
 
+/**
+ * Ranges that stand alone, in order: of those that overlap, the one that begins first, and the longer where two begin together.
+ * Whatever is computed of the gaps then, the same ones are taken again.
+ */
+export function withoutOverlaps(ranges: readonly Range[]): readonly Range[] {
+  const taken: Range[] = [];
+  for (const range of ranges.toSorted((a, b) => a.from - b.from || b.to - a.to))
+    if (range.from >= (taken.at(-1)?.to ?? 0)) taken.push(range);
+  return taken;
+}
+
 export function countRows(ranges: readonly Range[]): number {
   return ranges.reduce((sum, { from, to }) => sum + to - from, 0);
 }

@@ -75,15 +75,18 @@ export interface Need {
 }
 
 /**
+ * For all tables of a command: their rows are kept until its end.
  * Errors: SimError when the disk cannot even hold the rows; gives a warning where it holds them, but probably not the
- * table beside them, else null.
+ * tables beside them, else null.
  */
-export async function requireDisk(folder: string, { missingRows, job, isTable }: Need): Promise<string | null> {
+export async function requireDisk(folder: string, needs: readonly Need[]): Promise<string | null> {
   const free = await freeBytes(folder);
   if (free === null) return null;
-  const row = 8 * columnsOf(job).length;
-  const rows = row * missingRows;
-  const all = rows + (isTable ? row * job.rows : 0);
+  const sum = (bytesOf: (need: Need, row: number) => number) =>
+    needs.reduce((bytes, need) => bytes + bytesOf(need, 8 * columnsOf(need.job).length), 0);
+  const rows = sum(({ missingRows }, row) => row * missingRows);
+  const all = rows + sum(({ isTable, job }, row) => (isTable ? row * job.rows : 0));
+  const missingRows = needs.reduce((count, need) => count + need.missingRows, 0);
   const there = `${bytesText(free)} are free there`;
   const what = `${grouped(missingRows)} rows take ${bytesText(rows)} of disk while they are computed, and ${there}`;
   if (rows > free) throw new SimError(folder, what, 'Make room, choose another folder with -o, or ask for fewer');

@@ -1,19 +1,18 @@
 /** The work folder of a table: a manifest, and the rows that are computed, a whole file for each chunk. */
-import { readdirSync } from 'node:fs';
+import { existsSync, readdirSync } from 'node:fs';
 import { rm } from 'node:fs/promises';
 import { join } from 'node:path';
 import { SimError } from '../../sim/error.ts';
-import { makeFolder } from '../output/makeFolder.ts';
 import { chunkPieces, readChunk } from './chunkFile.ts';
 import { columnsOf, type Range, type Rows } from './job.ts';
 import { landBytes, removeAbandoned } from './landing.ts';
 import { differences, type Manifest, manifestText, readManifest, shardWords } from './manifest.ts';
-import { countRows } from './plan.ts';
+import { countRows, withoutOverlaps } from './plan.ts';
 
 export interface Store {
   readonly folder: string;
   readonly manifest: Manifest;
-  /** What is there, in order. */
+  /** What is there, in order, each row once. */
   chunks(): readonly Range[];
   /** Errors: as the system gives them. */
   land(chunk: Range & Rows): Promise<void>;
@@ -42,22 +41,49 @@ export function findStore(folder: string): Store | null {
 }
 
 /**
- * A store for these rows: a new one, or with `resume` the one that is there.
- * Errors: SimError when rows are there and `resume` is false, or they are of another job; nothing is lost either way.
+ * What is there of these rows, null for none. Looks only.
+ * Errors: SimError when rows are there and `resume` is false, or they are of another job.
  */
-export async function openStore(folder: string, manifest: Manifest, resume: boolean): Promise<Store> {
+export function findFitting(folder: string, manifest: Manifest, resume: boolean): Store | null {
   const found = findStore(folder);
-  if (found !== null && found.chunks().length > 0) {
-    refuseOthers(found, manifest);
-    if (!resume) refuseFresh(found);
-    await removeAbandoned(folder);
-    return found;
+  if (found === null) {
+    if (chunksIn(folder).length > 0) refuseNameless(folder);
+    return null;
   }
-  await makeFolder(folder);
+  if (found.chunks().length === 0) return null;
+  refuseOthers(found, manifest);
+  if (!resume) refuseFresh(found);
+  return found;
+}
+
+/**
+ * A store for these rows in a folder that is held (`whileHeld`): a new one, or with `resume` the one that is there. Where a run on
+ * another computer may be at work there, too, its manifest is never written over.
+ * Errors: as `findFitting`, and SimError when that other run is of another job; nothing is lost either way.
+ */
+export async function openStore(
+  folder: string,
+  manifest: Manifest,
+  { resume, isShared }: { readonly resume: boolean; readonly isShared: boolean },
+): Promise<Store> {
+  const found = findFitting(folder, manifest, resume) ?? (isShared ? requireSame(folder, manifest) : null);
   await removeAbandoned(folder);
-  if (chunksIn(folder).length > 0) refuseNameless(folder);
+  if (found !== null) return found;
   await landBytes(join(folder, 'manifest.json'), [Buffer.from(manifestText(manifest))]);
   return storeOf(folder, manifest);
+}
+
+/** What a run on another computer has begun, without rows so far. */
+function requireSame(folder: string, manifest: Manifest): Store {
+  const found = findStore(folder);
+  if (found === null)
+    throw new SimError(
+      folder,
+      'a run on another computer begins there, or was cut off at its beginning',
+      'Try again when it is under way, or remove that folder if it is no more',
+    );
+  refuseOthers(found, manifest);
+  return found;
 }
 
 function refuseFresh({ folder, manifest, chunks }: Store): void {
@@ -92,7 +118,8 @@ function refuseOthers({ folder, manifest, chunks }: Store, wanted: Manifest): vo
 function storeOf(folder: string, manifest: Manifest): Store {
   const columns = columnsOf(manifest.job).length;
   const path = ({ from, to }: Range) => join(folder, `rows-${from}-${to}.bin`);
-  const present = chunksIn(folder);
+  // Two runs at once, as on two machines, may have cut their chunks elsewhere: rows follow from their numbers, so none is lost.
+  const present = [...withoutOverlaps(chunksIn(folder))];
   return {
     folder,
     manifest,
@@ -107,6 +134,6 @@ function storeOf(folder: string, manifest: Manifest): Store {
 }
 
 function chunksIn(folder: string): Range[] {
-  const names = readdirSync(folder).map((name) => /^rows-(\d+)-(\d+)\.bin$/.exec(name));
+  const names = (existsSync(folder) ? readdirSync(folder) : []).map((name) => /^rows-(\d+)-(\d+)\.bin$/.exec(name));
   return names.filter((match) => match !== null).map(([, from, to]) => ({ from: Number(from), to: Number(to) }));
 }

@@ -16,6 +16,7 @@ import {
   type Rows,
 } from './job.ts';
 import { land, removeAbandoned } from './landing.ts';
+import { countRows, missing } from './plan.ts';
 
 /** Some rows that are there, and how to get them. */
 export interface Piece extends Range {
@@ -114,6 +115,7 @@ async function fill(
     for (let from = 0; from < job.rows; from += groupRows) {
       const to = Math.min(from + groupRows, job.rows);
       const pieces = await source.group({ from, to });
+      requireOnce({ from, to }, pieces);
       const group = emptyGroup(from, to - from, columnsOf(job).length);
       for (const piece of pieces) copyInto(group, piece);
       append(from, group.columns);
@@ -128,6 +130,12 @@ async function fill(
   }
 }
 
+/** A source that breaks its promise would leave rows that nobody computed, or count failures twice. */
+function requireOnce(range: Range, pieces: readonly Piece[]): void {
+  if (missing(range, pieces).length === 0 && countRows(pieces) === countRows([range])) return;
+  throw new Error(`rows ${range.from} to ${range.to - 1} are not all there, or some of them twice`);
+}
+
 interface Group {
   readonly from: number;
   readonly columns: readonly Float64Array[];
@@ -135,7 +143,7 @@ interface Group {
 }
 
 function emptyGroup(from: number, rows: number, columns: number): Group {
-  return { from, columns: Array.from({ length: columns }, () => new Float64Array(rows)), failures: [] };
+  return { from, columns: Array.from({ length: columns }, () => new Float64Array(rows).fill(NaN)), failures: [] };
 }
 
 function copyInto({ from, columns, failures }: Group, piece: Piece): void {

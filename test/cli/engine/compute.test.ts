@@ -1,9 +1,11 @@
 import { existsSync, readdirSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
+import { calculateOf } from '../../../cli/engine/job.ts';
+import { findStore } from '../../../cli/engine/store.ts';
 import { Interrupted } from '../../../cli/exit.ts';
 import { SimError } from '../../../sim/error.ts';
 import { readColumn } from '../readColumn.ts';
-import { demoJob, hashed } from './demo.ts';
+import { demoJob, demoKinds, hashed } from './demo.ts';
 import { type Bench, bench } from './support.ts';
 
 let place: Bench;
@@ -134,6 +136,34 @@ describe('--resume', () => {
     for (const [name, bytes] of kept)
       expect(readFileSync(place.path('a', 'draws.work', name)).equals(bytes)).toBe(true);
     expect(place.bytes('a') === place.bytes('whole')).toBe(true);
+  });
+
+  test('chunks that overlap, of two runs at once: every row once, no failure twice, the same bytes', async () => {
+    await place.compute(job, 'whole');
+    const calculate = await calculateOf(job, demoKinds);
+    for (const [folder, ranges] of Object.entries({
+      a: [
+        [0, 1200],
+        [100, 1700],
+        [16300, 16384],
+      ],
+      b: [
+        [0, 400],
+        [0, 1200],
+        [1200, 16384],
+        [15000, 16384],
+        [16384, 32768],
+        [20000, 21000],
+        [32768, 40000],
+      ],
+    })) {
+      await interrupted(folder, 1);
+      for (const name of chunkNames(folder)) rmSync(place.path(folder, 'draws.work', name));
+      const store = findStore(place.path(folder, 'draws.work'))!;
+      for (const [from, to] of ranges as [number, number][]) await store.land({ from, to, ...calculate(from, to) });
+      expect((await place.compute(job, folder, { resume: true })).files).toMatchObject({ rows: 40_000, failed: 40 });
+      expect(place.bytes(folder) === place.bytes('whole')).toBe(true);
+    }
   });
 
   test('with nothing there begins at the beginning', async () => {

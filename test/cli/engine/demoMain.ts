@@ -1,11 +1,11 @@
 /** A program for tests of whole processes: `node --import tsx demoMain.ts FOLDER ROWS PRICE WORKERS [--resume] [--columns N] [--memory]`: the last reads all back, and says how long it took and how much memory. */
 import { fileURLToPath } from 'node:url';
 import { parseArgs } from 'node:util';
-import { computeTable } from '../../../cli/engine/compute.ts';
 import { tellError } from '../../../cli/exit.ts';
 import { processIo } from '../../../cli/io.ts';
 import { readColumn } from '../readColumn.ts';
 import { demoJob, demoKinds } from './demo.ts';
+import { computeTable } from './support.ts';
 
 const { positionals, values } = parseArgs({
   allowPositionals: true,

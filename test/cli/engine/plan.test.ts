@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { groupRows, type Range } from '../../../cli/engine/job.ts';
-import { countRows, missing, planChunks, shardRange } from '../../../cli/engine/plan.ts';
+import { countRows, missing, planChunks, shardRange, withoutOverlaps } from '../../../cli/engine/plan.ts';
 
 /** All chunks, when each row takes so many seconds. */
 function chunks(gaps: readonly Range[], workers: number, secondsPerRow: number): Range[] {
@@ -94,4 +94,22 @@ test('shards tile the rows, and differ by one at most', () => {
       expect(Math.max(...sizes) - Math.min(...sizes)).toBeLessThanOrEqual(1);
     }),
   );
+});
+
+describe('withoutOverlaps', () => {
+  test('each row once; what is computed of the gaps afterwards, and no other, joins the same ones', () => {
+    const range = fc
+      .tuple(fc.nat(99), fc.integer({ min: 1, max: 30 }))
+      .map(([from, rows]) => ({ from, to: from + rows }));
+    fc.assert(
+      fc.property(fc.array(range, { maxLength: 12 }), (present) => {
+        const taken = withoutOverlaps(present);
+        for (const [i, { from }] of taken.slice(1).entries()) expect(from).toBeGreaterThanOrEqual(taken[i]!.to);
+        const gaps = missing({ from: 0, to: 130 }, taken);
+        const all = [...taken, ...gaps].toSorted((a, b) => a.from - b.from);
+        expect(withoutOverlaps([...present, ...gaps])).toEqual(all);
+        expect(countRows(all)).toBe(130);
+      }),
+    );
+  });
 });

@@ -43,9 +43,9 @@ test('what V8 keeps itself has a limit of its own, and so has a text', () => {
 test('a folder that is not there yet is on the disk of the one above it', async () => {
   const home = mkdtempSync(join(tmpdir(), 'perilag-room-'));
   const folder = join(home, 'not', 'yet');
-  expect(await requireDisk(folder, { missingRows: 10, job: job(10), isTable: true })).toBeNull();
+  expect(await requireDisk(folder, [{ missingRows: 10, job: job(10), isTable: true }])).toBeNull();
   const far = { missingRows: 1e15, job: job(1e15), isTable: true };
-  await expect(requireDisk(folder, far)).rejects.toThrow(
+  await expect(requireDisk(folder, [far])).rejects.toThrow(
     /not\/yet: 1,000,000,000,000,000 rows take 2\.40e\+8 GB of disk while they are computed, and .* are free there\./,
   );
   rmSync(home, { recursive: true });

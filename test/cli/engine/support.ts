@@ -3,14 +3,28 @@ import { mkdtempSync, readdirSync, readFileSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
-import { type Computed, type ComputeOptions, computeTable } from '../../../cli/engine/compute.ts';
-import type { Job } from '../../../cli/engine/job.ts';
+import { type Computed, type ComputeOptions, computeTables, type EngineIo } from '../../../cli/engine/compute.ts';
+import { whileListening } from '../../../cli/engine/interruption.ts';
+import type { Job, Kinds } from '../../../cli/engine/job.ts';
 import { undisturbed } from '../support.ts';
 import { demoKinds } from './demo.ts';
 
 export const demoWorker = fileURLToPath(new URL('demoWorker.mjs', import.meta.url));
 
-type EngineOptions = ComputeOptions & { readonly workers: number };
+type EngineOptions = ComputeOptions & { readonly table: string };
+
+/** One table of a command. */
+export function computeTable(
+  job: Job,
+  { table, ...options }: EngineOptions,
+  kinds: Kinds,
+  io: EngineIo,
+): Promise<Computed> {
+  return whileListening(io, options, async (interruption) => {
+    const [computed] = await computeTables([{ table, job }], options, kinds, io, interruption);
+    return computed!;
+  });
+}
 
 export interface Bench {
   readonly home: string;
