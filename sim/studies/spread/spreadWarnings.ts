@@ -1,6 +1,6 @@
 /**
- * What must be said beside the numbers of a spread, for terminal, file and page alike: several climates, draws in two groups, spreads that were cut, rows
- * that indices lack.
+ * What must be said beside the numbers of a spread, for terminal, file and page alike: several climates, draws in two groups, spreads
+ * that were cut, rows that indices lack.
  */
 import { formatNumber, formatQuantity, inUnit } from '../../quantity/index.ts';
 import type { SolveOptions, World } from '../../world.ts';
