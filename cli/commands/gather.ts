@@ -8,10 +8,13 @@ import { whileListening } from '../engine/interruption.ts';
 import { settingsApart } from '../engine/manifest.ts';
 import { requireMemory } from '../engine/room.ts';
 import { tablesIn } from '../engine/store.ts';
+import { discardWaiting, waitingFolder } from '../engine/table.ts';
 import { Interrupted } from '../exit.ts';
 import { type FigureOptions, figureRequest } from '../figures/request.ts';
 import { writeFigures } from '../figures/write.ts';
 import type { Io } from '../io.ts';
+import { removeEmpty } from '../output/folder.ts';
+import { makeFolder } from '../output/makeFolder.ts';
 import { readSamples } from '../posteriorFile.ts';
 import type { ScenarioFile } from '../scenarioFile.ts';
 import { onlyCases } from './only.ts';
@@ -60,8 +63,12 @@ async function joinAndFinish(
   io: Io,
   checkpoint: () => void,
 ): Promise<number> {
-  const gathered = [];
-  for (const table of tables) gathered.push({ table, ...(await gatherTable(paths, table, out, checkpoint)) });
+  const gathered = await whole(out, async () => {
+    const found = [];
+    for (const table of tables)
+      found.push({ table, ...(await gatherTable(paths, table, waitingFolder(out), checkpoint)) });
+    return found;
+  });
   const context = gathered[0]!.job.context as unknown as SpreadContext;
   const item = scenarioOf(context);
   const plan = planSpread({
@@ -78,6 +85,18 @@ async function joinAndFinish(
   ) as unknown as SpreadTableFiles;
   const finished = { plan, context, files, settings: gathered[0]!.job.settings, out: options.out, item };
   return finishSpread(finished, options, io, checkpoint);
+}
+
+/** Of tables that could not all be joined nothing is left. */
+async function whole<T>(out: string, join: () => Promise<T>): Promise<T> {
+  const firstMade = await makeFolder(out);
+  try {
+    return await join();
+  } catch (error) {
+    await discardWaiting(out);
+    if (firstMade !== undefined) await removeEmpty(out, firstMade);
+    throw error;
+  }
 }
 
 /** The tables that all folders have. Errors: SimError where one has others than the first: nothing is left out unsaid. */

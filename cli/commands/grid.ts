@@ -13,7 +13,7 @@ import { whileListening, whileRowsAreKept } from '../engine/interruption.ts';
 import type { Job } from '../engine/job.ts';
 import { kinds } from '../engine/kinds.ts';
 import { type Held, requireMemory } from '../engine/room.ts';
-import type { TableFiles } from '../engine/table.ts';
+import { discardWaiting, madeBefore, type TableFiles, waitingFolder } from '../engine/table.ts';
 import { type FigureOptions, figureRequest } from '../figures/request.ts';
 import { writeFigures } from '../figures/write.ts';
 import type { Io } from '../io.ts';
@@ -60,6 +60,7 @@ export async function grid(file: string, options: GridOptions, program: Program,
   requireMemory('--steps', job, heldByGrid);
   const settled: ComputeOptions = {
     folder,
+    tables: waitingFolder(folder),
     shard: null,
     resume: options.resume ?? false,
     workers: options.workers ?? null,
@@ -72,7 +73,9 @@ export async function grid(file: string, options: GridOptions, program: Program,
       const summarised = await reportOf(plan, item!, computed!.files!, program);
       await setImmediate(); // a signal is heard
       checkpoint();
-      await writeFolder(folder, filesOf(summarised, item!, folder, program, io));
+      const before = madeBefore(folder, [computed!.files!]);
+      await writeFolder(folder, filesOf(summarised, item!, folder, program, io), before);
+      await discardWaiting(folder);
       return summarised;
     });
     await computed!.discardWork();

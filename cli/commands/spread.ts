@@ -8,6 +8,7 @@ import { whileListening, whileRowsAreKept } from '../engine/interruption.ts';
 import { kinds } from '../engine/kinds.ts';
 import type { Shard } from '../engine/plan.ts';
 import { requireMemory } from '../engine/room.ts';
+import { waitingFolder } from '../engine/table.ts';
 import { exitCode } from '../exit.ts';
 import { type FigureOptions, type FigureRequest, figureRequest } from '../figures/request.ts';
 import { writeFigures } from '../figures/write.ts';
@@ -124,8 +125,10 @@ function seedOf({ scenario }: ScenarioFile): number {
 }
 
 function engineOptions(options: SpreadOptions, out: string, program: Program, io: Io) {
+  const folder = resolve(io.cwd, out);
   return {
-    folder: resolve(io.cwd, out),
+    folder,
+    tables: waitingFolder(folder),
     shard: options.shard ?? null,
     resume: options.resume ?? false,
     workers: options.workers ?? null,

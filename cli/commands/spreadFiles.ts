@@ -8,7 +8,7 @@ import type { SpreadReport } from '../../sim/studies/spread/spreadReport.ts';
 import { summariseSpread } from '../../sim/studies/spread/summariseSpread.ts';
 import { clearEarlier } from '../engine/earlier.ts';
 import type { Settings } from '../engine/job.ts';
-import type { TableFiles } from '../engine/table.ts';
+import { discardWaiting, madeBefore, type TableFiles } from '../engine/table.ts';
 import { exitCode } from '../exit.ts';
 import type { Io } from '../io.ts';
 import { writeFolder } from '../output/folder.ts';
@@ -60,11 +60,13 @@ export async function finishSpread(
   const folder = resolve(io.cwd, out);
   const run = runScenario(item.scenario, { sha256: context.sha256, version: context.version });
   const summary = { ...summaryOf(run), spread: spreadSummary(report) };
-  await writeFolder(folder, [
+  const own = [
     { name: 'summary.json', pieces: [`${jsonText(summary)}\n`] },
     { name: 'scenario.yaml', pieces: [scenarioYamlText(item.scenario, samplesFrom(folder, item, io.cwd))] },
     { name: 'report.html', pieces: pagePieces({ spread: report }, io.reportTemplate) },
-  ]);
+  ];
+  await writeFolder(folder, own, madeBefore(folder, tablesOf(finished.files)));
+  await discardWaiting(folder);
   await tellEarlier(folder, finished, io);
   if (options.json) io.stdout.write(`${jsonText(summary)}\n`);
   if (!options.quiet) show(report, finished, options.json ?? false, io);
@@ -93,11 +95,14 @@ async function reportOf({ plan, context, files, item }: FinishedSpread): Promise
   }
 }
 
+function tablesOf({ draws, bands, indices }: SpreadTableFiles): TableFiles[] {
+  return [draws, bands, indices].filter((one) => one !== undefined);
+}
+
 function show(report: SpreadReport, { files, out }: FinishedSpread, json: boolean, io: Io): void {
   const terminal = terminalOf(io);
   if (!json) io.stdout.write(`${spreadLines(report, terminal).join('\n')}\n`);
-  const tables = [files.draws, files.bands, files.indices].filter((one) => one !== undefined);
-  const paths = tables.flatMap(({ path, failedPath }) => [path, ...(failedPath === null ? [] : [failedPath])]);
+  const paths = tablesOf(files).flatMap(({ path, failedPath }) => [path, ...(failedPath === null ? [] : [failedPath])]);
   const beside = ['summary.json', ...paths.map((path) => basename(path)), 'scenario.yaml'];
   io.stderr.write(writtenText(out, beside, terminal));
 }

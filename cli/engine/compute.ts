@@ -28,6 +28,8 @@ export interface TableJob {
 export interface ComputeOptions {
   /** Output folder, absolute. */
   readonly folder: string;
+  /** Where finished tables go; the output folder where it is left out. */
+  readonly tables?: string;
   readonly shard: Shard | null;
   readonly resume: boolean;
   /** How many workers; null for one a processor, where it pays. */
@@ -94,11 +96,21 @@ export async function computeTables(
 }
 
 /** Of each table its files, when an earlier run has finished them; else null. */
-async function foundFinished(tables: readonly TableJob[], { folder, shard, resume }: ComputeOptions) {
+async function foundFinished(tables: readonly TableJob[], options: ComputeOptions) {
   const found: (TableFiles | null)[] = [];
   for (const { table, job } of tables)
-    found.push(resume && shard === null ? await finishedTable(folder, table, recordOf(job)) : null);
+    found.push(options.resume && options.shard === null ? await finishedAnywhere(options, table, job) : null);
   return found;
+}
+
+/** In its place, or waiting for the other tables of its run. */
+async function finishedAnywhere(
+  { folder, tables = folder }: ComputeOptions,
+  table: string,
+  job: Job,
+): Promise<TableFiles | null> {
+  const record = recordOf(job);
+  return (await finishedTable(tables, table, record)) ?? (await finishedTable(folder, table, record));
 }
 
 /** What would be refused when its turn comes is refused now: an hour of other tables later is late to hear of it. */
@@ -171,7 +183,7 @@ function manifestOf({ table, job }: TableJob, { shard }: ComputeOptions): Manife
 async function fillAndWrite({ table, job, phase }: TableJob, store: Store, run: Run): Promise<TableFiles | null> {
   const { options, interruption } = run;
   const arrivals = arrivalsOf(store);
-  const target = { folder: options.folder, table, job: recordOf(job) };
+  const target = { folder: options.tables ?? options.folder, table, job: recordOf(job) };
   let stopped = false;
   const writing =
     options.shard === null ? writeTable(target, arrivals, () => requireGoing(interruption, store, options)) : null;

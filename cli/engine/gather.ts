@@ -32,7 +32,10 @@ export async function gatherTable(
   refuseGaps(stores);
   const { job } = first.manifest;
   try {
-    return { files: await writeTable({ folder: out, table, job }, sourceOf(piecesOf(stores)), checkpoint), job };
+    return {
+      files: await writeTable({ folder: out, table, job }, sourceOf(piecesOf(stores)), checkpoint),
+      job,
+    };
   } catch (error) {
     throw writingFault(out, error);
   }

@@ -1,9 +1,10 @@
 /** From rows in pieces to the files of a table: the Parquet file, and a list of the draws that failed. */
 import { closeSync, existsSync, openSync, writeSync } from 'node:fs';
 import { rm } from 'node:fs/promises';
-import { join } from 'node:path';
+import { basename, dirname, join } from 'node:path';
 import { setImmediate } from 'node:timers/promises';
 import { csvField, csvHeader } from '../output/csv.ts';
+import type { MadeBefore } from '../output/folder.ts';
 import { makeFolder } from '../output/makeFolder.ts';
 import {
   type Column,
@@ -48,6 +49,29 @@ export interface TableFiles {
   readonly failed: number;
   /** Where the failed draws are listed; null when none failed. */
   readonly failedPath: string | null;
+}
+
+/**
+ * Where tables wait that are whole, while others of the same run are not: they go to their places all at once, so that a folder
+ * never holds tables of two runs.
+ */
+export function waitingFolder(folder: string): string {
+  return join(folder, 'tables.work');
+}
+
+/** The files of finished tables, to be moved to their places in `folder` with the other files of their run. */
+export function madeBefore(folder: string, tables: readonly TableFiles[]): MadeBefore {
+  const paths = tables.flatMap(({ path, failedPath }) => [path, ...(failedPath === null ? [] : [failedPath])]);
+  const clean = tables.filter(({ failedPath }) => failedPath === null);
+  return {
+    files: paths.filter((path) => dirname(path) !== folder).map((path) => ({ name: basename(path), path })),
+    removed: clean.map(({ path }) => basename(tablePaths(folder, basename(path, '.parquet')).failedPath)),
+  };
+}
+
+/** To be called when the tables stand in their places. */
+export async function discardWaiting(folder: string): Promise<void> {
+  await rm(waitingFolder(folder), { recursive: true, force: true });
 }
 
 /** What a row of a table is called where rows are listed: a draw, or a node of a grid. */

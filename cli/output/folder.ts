@@ -26,19 +26,32 @@ export interface SelfWritingFile {
 
 export type OutputFile = PiecedFile | SelfWritingFile;
 
+/** Files that are there already, on the same disk, and go to their places with the others. */
+export interface MadeBefore {
+  /** Name in the folder, and where the file is now. */
+  readonly files: readonly { readonly name: string; readonly path: string }[];
+  /** Of an earlier run, where this one has no such file. */
+  readonly removed: readonly string[];
+}
+
 const stagePrefix = '.perilag-';
 
 /**
  * `folder` is an absolute path; it and its parents are made where missing.
  * Errors: SimError when the folder cannot be written, Interrupted on a signal; either way nothing of this run is left.
  */
-export async function writeFolder(folder: string, files: readonly OutputFile[]): Promise<void> {
+export async function writeFolder(
+  folder: string,
+  files: readonly OutputFile[],
+  before: MadeBefore = { files: [], removed: [] },
+): Promise<void> {
   await interruptible(async (checkpoint) => {
     const firstMade = await attempt(folder, () => makeFolder(folder));
     const stage = join(folder, `${stagePrefix}${hostname()}-${process.pid}`);
     try {
       await attempt(folder, () => fillStage(stage, files, checkpoint));
-      await attempt(folder, () => moveInto(folder, stage, files));
+      const made = files.map(({ name }) => ({ name, path: join(stage, name) }));
+      await attempt(folder, () => moveInto(folder, [...before.files, ...made], before.removed));
     } catch (error) {
       await rm(stage, { recursive: true, force: true });
       if (firstMade !== undefined) await removeEmpty(folder, firstMade);
@@ -74,9 +87,10 @@ function writeWhole(path: string, pieces: PiecedFile['pieces']): void {
   }
 }
 
-async function moveInto(folder: string, stage: string, files: readonly OutputFile[]): Promise<void> {
-  for (const file of files) await refuseFolder(join(folder, file.name));
-  for (const file of files) await rename(join(stage, file.name), join(folder, file.name));
+async function moveInto(folder: string, files: MadeBefore['files'], removed: readonly string[]): Promise<void> {
+  for (const { name } of files) await refuseFolder(join(folder, name));
+  for (const { name, path } of files) await rename(path, join(folder, name));
+  for (const name of removed) await rm(join(folder, name), { force: true });
 }
 
 /** A folder where a file should go would stop the renames half-way: found before the first. */
@@ -91,7 +105,7 @@ async function refuseFolder(path: string): Promise<void> {
 }
 
 /** From `folder` up to the first one that this run made. */
-async function removeEmpty(folder: string, firstMade: string): Promise<void> {
+export async function removeEmpty(folder: string, firstMade: string): Promise<void> {
   for (let path = folder; path.length >= firstMade.length; path = dirname(path)) {
     await rmdir(path).catch(() => undefined);
   }

@@ -1,5 +1,14 @@
 /** What lies in the folder of a spread beside what it made, what it tells of inputs that it does not draw, and parts that do not fit. */
-import { copyFileSync, existsSync, mkdirSync, readdirSync, readFileSync, writeFileSync } from 'node:fs';
+import {
+  copyFileSync,
+  existsSync,
+  mkdirSync,
+  readdirSync,
+  readFileSync,
+  rmdirSync,
+  rmSync,
+  writeFileSync,
+} from 'node:fs';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { type Workplace, workplace } from './support.ts';
 
@@ -54,6 +63,40 @@ describe('a folder with tables of an earlier spread', () => {
     const same = await spread('same', '--no-indices', '--quiet');
     expect(same.stderr).toBe('indices.work in same: rows of this spread, to go on with by --resume\n');
     expect(existsSync(place.path('same', 'indices.work'))).toBe(true);
+  });
+});
+
+describe('a run that does not come to its end', () => {
+  const bytes = (folder: string, name: string) => readFileSync(place.path(folder, name), 'latin1');
+  const tables = ['draws.parquet', 'bands.parquet', 'indices.parquet', 'summary.json'];
+
+  test('leaves all of the earlier one in its place, and goes on to the bytes of a run at one go', async () => {
+    await spread('out');
+    const before = tables.map((name) => bytes('out', name));
+    rmSync(place.path('out', 'report.html'));
+    mkdirSync(place.path('out', 'report.html'));
+    const { code, stderr } = await spread('out', '--seed', '2');
+    expect(code).toBe(2);
+    expect(stderr).toContain('a folder stands where this file should go');
+    expect(tables.map((name) => bytes('out', name))).toEqual(before);
+    rmdirSync(place.path('out', 'report.html'));
+    expect((await spread('out', '--seed', '2', '--resume')).code).toBe(0);
+    await spread('fresh', '--seed', '2');
+    expect(tables.map((name) => bytes('out', name))).toEqual(tables.map((name) => bytes('fresh', name)));
+    expect(readdirSync(place.path('out')).sort()).toEqual(readdirSync(place.path('fresh')).sort());
+  });
+
+  test('parts that cannot all be joined leave nothing', async () => {
+    for (const part of ['1', '2']) await spread(`p${part}`, '--shard', `${part}/2`);
+    await spread('out');
+    const before = tables.map((name) => bytes('out', name));
+    const work = place.path('p2', 'draws.work');
+    const rows = readdirSync(work).find((name) => name.startsWith('rows-'))!;
+    writeFileSync(`${work}/${rows}`, readFileSync(`${work}/${rows}`).subarray(0, 40));
+    for (const out of ['out', 'new']) expect((await place.perilag('gather', 'p1', 'p2', '-o', out)).code).toBe(2);
+    expect(tables.map((name) => bytes('out', name))).toEqual(before);
+    expect(readdirSync(place.path('out')).filter((name) => name.endsWith('.work'))).toEqual([]);
+    expect(existsSync(place.path('new'))).toBe(false);
   });
 });
 
