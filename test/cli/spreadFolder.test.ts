@@ -1,5 +1,5 @@
 /** What lies in the folder of a spread beside what it made, what it tells of inputs that it does not draw, and parts that do not fit. */
-import { copyFileSync, existsSync, mkdirSync, readdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { copyFileSync, existsSync, mkdirSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { type Workplace, workplace } from './support.ts';
 
@@ -99,4 +99,26 @@ test('gather refuses parts of which some have indices and others have none, whic
     expect(stderr).toContain('all of them with --no-indices or none');
   }
   expect(existsSync(place.path('whole'))).toBe(false);
+});
+
+test('gather looks for tables of a spread only; a folder without its manifest is the input’s fault', async () => {
+  await spread('part', '--shard', '1/1');
+  mkdirSync(place.path('part', 'notes.work'));
+  expect((await place.perilag('gather', 'part', '-o', 'whole', '--quiet')).code).toBe(0);
+  rmSync(place.path('part', 'draws.work', 'manifest.json'));
+  const { code, stderr } = await place.perilag('gather', 'part', '-o', 'other');
+  expect(code).toBe(2);
+  expect(stderr).toContain('draws.work: manifest.json is missing');
+  expect(existsSync(place.path('other'))).toBe(false);
+});
+
+test('a later table that would be refused is refused before the first is computed', async () => {
+  await spread('part', '--shard', '1/1');
+  mkdirSync(place.path('out', 'indices.work'), { recursive: true });
+  for (const name of readdirSync(place.path('part', 'indices.work')))
+    copyFileSync(place.path('part', 'indices.work', name), place.path('out', 'indices.work', name));
+  const { code, stderr } = await spread('out', '--seed', '2');
+  expect(code).toBe(2);
+  expect(stderr).toContain('indices.work: ');
+  expect(readdirSync(place.path('out'))).toEqual(['indices.work']);
 });
