@@ -112,6 +112,15 @@ test('gather looks for tables of a spread only; a folder without its manifest is
   expect(existsSync(place.path('other'))).toBe(false);
 });
 
+test('a shard answers --json with where it is', async () => {
+  const { stdout } = await spread('part', '--shard', '1/2', '--json', '--quiet');
+  expect(JSON.parse(stdout)).toEqual({
+    shard: { index: 1, count: 2 },
+    folder: 'part',
+    tables: ['draws', 'bands', 'indices'],
+  });
+});
+
 test('a later table that would be refused is refused before the first is computed', async () => {
   await spread('part', '--shard', '1/1');
   mkdirSync(place.path('out', 'indices.work'), { recursive: true });

@@ -95,6 +95,24 @@ describe('computeTable', () => {
   });
 });
 
+describe('a thread that dies', () => {
+  test('our fault, but what is kept and how to go on is said', async () => {
+    const job = { ...demoJob(100_000, { findings: 0 }), kind: 'dying' };
+    await expect(place.compute(job, 'a', { workers: 2 })).rejects.toThrow('a worker thread ended (1)');
+    expect(place.told()).toMatch(
+      /What is finished stays in .*a\/draws\.work\. To go on: perilag spread .* --resume\n$/,
+    );
+  });
+
+  test('of too little memory: the machine’s, with what to allow', async () => {
+    const run = place.compute({ ...demoJob(100, { findings: 0 }), kind: 'hungry' }, 'a');
+    await expect(run).rejects.toBeInstanceOf(SimError);
+    await expect(run).rejects.toThrow(
+      /ran out of memory\. Allow Node more, .*\. What is finished stays there\. .* --resume\.$/,
+    );
+  });
+});
+
 describe('a signal', () => {
   test.each([1, 3])('ends the run after the running chunks, and says how to go on (%i workers)', async (workers) => {
     const message = await interrupted('a', 4, { workers });
