@@ -1,5 +1,6 @@
 import { existsSync, readdirSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
+import { whileListening, whileRowsAreKept } from '../../../cli/engine/interruption.ts';
 import { calculateOf } from '../../../cli/engine/job.ts';
 import { findStore } from '../../../cli/engine/store.ts';
 import { Interrupted } from '../../../cli/exit.ts';
@@ -93,6 +94,21 @@ describe('computeTable', () => {
     await expect(run).rejects.toBeInstanceOf(SimError);
     await expect(run).rejects.toThrow('--seed: -1 is below zero. Give zero or more.');
   });
+});
+
+test('a signal after the last table, while the rest is made: how to go on is said', async () => {
+  const io = { signals: place.signals, stderr: { write: () => true }, stderrIsTTY: false };
+  const kept = { folder: '/there', words: ['spread', 'a.yaml'] };
+  const run = whileListening(io, { quiet: true }, (interruption) =>
+    whileRowsAreKept(kept, interruption, async (checkpoint) => {
+      checkpoint();
+      place.signal();
+      checkpoint();
+    }),
+  );
+  await expect(run).rejects.toBeInstanceOf(Interrupted);
+  await expect(run).rejects.toThrow('all rows are kept in /there. To go on:\n  perilag spread a.yaml --resume');
+  expect(place.listeners()).toBe(0);
 });
 
 describe('a thread that dies', () => {
