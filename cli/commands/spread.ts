@@ -14,6 +14,7 @@ import { type FigureOptions, type FigureRequest, figureRequest } from '../figure
 import { writeFigures } from '../figures/write.ts';
 import type { Io } from '../io.ts';
 import { commandLine } from '../output/history.ts';
+import { jsonText } from '../output/json.ts';
 import { spreadPhases } from '../output/spreadPhases.ts';
 import { readSamples } from '../posteriorFile.ts';
 import { readScenarioFile, type ScenarioFile } from '../scenarioFile.ts';
@@ -66,6 +67,8 @@ export async function spread(file: string, options: SpreadOptions, program: Prog
     return found;
   });
   if (options.shard) {
+    if (options.json)
+      io.stdout.write(`${jsonText({ shard: options.shard, folder: out, tables: jobs.map(({ table }) => table) })}\n`);
     if (!options.quiet) tellShard(out, options.shard, io);
     return code;
   }

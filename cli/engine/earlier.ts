@@ -52,7 +52,12 @@ async function settingsOf(path: string): Promise<Settings | null> {
   if (file === null) return null;
   await file.close();
   const { fingerprint, settings } = file.metadata;
-  return fingerprint === undefined || settings === undefined ? null : (JSON.parse(settings) as Settings);
+  if (fingerprint === undefined || settings === undefined) return null;
+  try {
+    return JSON.parse(settings) as Settings;
+  } catch {
+    return null; // of a file that another program wrote under our words
+  }
 }
 
 /** Null where there is none, or one whose manifest cannot be read. */

@@ -1,4 +1,7 @@
-/** Files appear whole or not at all, also when the process is killed or the power fails: written beside, synced, renamed. */
+/**
+ * Files appear whole or not at all, also when the process is killed: written beside, synced, renamed. When the power fails, the last
+ * names may be lost, as the folder itself is not synced; what stands under a name is whole.
+ */
 import { closeSync, fsync, openSync, renameSync, writeSync } from 'node:fs';
 import { open, readdir, rename, rm } from 'node:fs/promises';
 import { hostname } from 'node:os';

@@ -28,6 +28,12 @@ const leastSeen = 0.03;
 /** This thread takes shorter chunks than others: meanwhile it neither writes nor hears. */
 const ownShare = 0.5;
 
+/**
+ * While this thread computes it does not hear of a signal, nor does the system end the process at a second one: rows that take
+ * longer than these seconds are left to other threads, all of them.
+ */
+const deafAtMost = 0.3;
+
 /** Chunks under way to the disk: where it is slow, this thread waits for it rather than pile them up in memory. */
 function landingAtMost({ workers }: Pool): number {
   return workers + 2;
@@ -64,9 +70,10 @@ export async function runLanes(work: LanesWork): Promise<void> {
   const begin = (lane: () => Promise<void>) => {
     lanes.push(lane().catch((error) => void failures.push(error)));
   };
-  const beginThreads = () => {
-    pool.start(countRows(work.gaps));
-    for (let i = 0; i < requestsAThread * pool.threads; i++) begin(threadLane);
+  let served = 0;
+  const beginThreads = (besides: boolean) => {
+    pool.start(countRows(work.gaps), besides);
+    for (; served < pool.threads; served++) for (let i = 0; i < requestsAThread; i++) begin(threadLane);
   };
   const ownLane = async () => {
     const compute = await pool.here(job);
@@ -79,15 +86,19 @@ export async function runLanes(work: LanesWork): Promise<void> {
       land(chunk).catch((error) => void failures.push(error));
       if (alone && pool.workers > 1 && spent >= leastSeen && plan.secondsLeft() >= worthThreads) {
         alone = false;
-        beginThreads();
+        beginThreads(true);
+      }
+      if (chunk.seconds > deafAtMost * (range.to - range.from)) {
+        if (plan.secondsLeft() > 0) beginThreads(false);
+        return;
       }
       // Signals are heard, files land, and threads get new work before this thread computes again.
       await setImmediate();
       while (landing.size > landingAtMost(pool) && goesOn()) await Promise.race(landing).catch(() => undefined);
     }
   };
-  if (pool.threads > 0 || pool.atOnce) beginThreads();
-  begin(ownLane);
+  if (pool.threads > 0 || pool.atOnce) beginThreads(true);
+  if (pool.threads < pool.workers) begin(ownLane); // else threads have taken its place, in a table before this
   for (let i = 0; i < lanes.length; i++) await lanes[i]; // more may begin meanwhile
   await Promise.allSettled(landing);
   if (failures.length > 0) throw failures[0];

@@ -10,14 +10,14 @@ import { calculateOf, columnsOf, type Job, type Kinds, type Range } from './job.
 import { type Answer, errorOf, type Order } from './serve.ts';
 
 export interface Pool {
-  /** This thread and the others together, at most. */
+  /** So many compute at once, at most: this thread and others, or others only. */
   readonly workers: number;
   /** Are so many wanted whatever the work? Else the others are started where it pays. */
   readonly atOnce: boolean;
   /** Other threads that are there: none until they are asked for. */
   readonly threads: number;
-  /** Starts other threads, no more than can have one of so many rows. */
-  start(rows: number): void;
+  /** Starts other threads, no more than can have one of so many rows. `besides`: does this thread compute, too? */
+  start(rows: number, besides: boolean): void;
   /** The job's rows in this thread, at once. Errors: what the arithmetic throws. */
   here(job: Job): Promise<(range: Range) => Chunk>;
   /** The same in another thread. Errors: what the arithmetic throws; when a thread dies. */
@@ -88,8 +88,8 @@ export function poolOf(wanted: number | null, kinds: Kinds, entry: string): Pool
     get threads() {
       return threads.length;
     },
-    start: (rows) => {
-      while (threads.length < Math.min(workers, rows) - 1) begin();
+    start: (rows, besides) => {
+      while (threads.length < Math.min(workers, rows) - (besides ? 1 : 0)) begin();
     },
     here: async (job) => {
       const calculate = await calculateOf(job, kinds);

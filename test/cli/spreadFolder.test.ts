@@ -143,3 +143,34 @@ test('gather refuses parts of which some have indices and others have none, whic
   }
   expect(existsSync(place.path('whole'))).toBe(false);
 });
+
+test('gather looks for tables of a spread only; a folder without its manifest is the input’s fault', async () => {
+  await spread('part', '--shard', '1/1');
+  mkdirSync(place.path('part', 'notes.work'));
+  expect((await place.perilag('gather', 'part', '-o', 'whole', '--quiet')).code).toBe(0);
+  rmSync(place.path('part', 'draws.work', 'manifest.json'));
+  const { code, stderr } = await place.perilag('gather', 'part', '-o', 'other');
+  expect(code).toBe(2);
+  expect(stderr).toContain('draws.work: manifest.json is missing');
+  expect(existsSync(place.path('other'))).toBe(false);
+});
+
+test('a shard answers --json with where it is', async () => {
+  const { stdout } = await spread('part', '--shard', '1/2', '--json', '--quiet');
+  expect(JSON.parse(stdout)).toEqual({
+    shard: { index: 1, count: 2 },
+    folder: 'part',
+    tables: ['draws', 'bands', 'indices'],
+  });
+});
+
+test('a later table that would be refused is refused before the first is computed', async () => {
+  await spread('part', '--shard', '1/1');
+  mkdirSync(place.path('out', 'indices.work'), { recursive: true });
+  for (const name of readdirSync(place.path('part', 'indices.work')))
+    copyFileSync(place.path('part', 'indices.work', name), place.path('out', 'indices.work', name));
+  const { code, stderr } = await spread('out', '--seed', '2');
+  expect(code).toBe(2);
+  expect(stderr).toContain('indices.work: ');
+  expect(readdirSync(place.path('out'))).toEqual(['indices.work']);
+});

@@ -1,5 +1,6 @@
 import { existsSync, readdirSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
+import { whileListening, whileRowsAreKept } from '../../../cli/engine/interruption.ts';
 import { calculateOf } from '../../../cli/engine/job.ts';
 import { findStore } from '../../../cli/engine/store.ts';
 import { Interrupted } from '../../../cli/exit.ts';
@@ -92,6 +93,39 @@ describe('computeTable', () => {
     const run = place.compute(demoJob(100, { seed: -1 }), 'a', { workers });
     await expect(run).rejects.toBeInstanceOf(SimError);
     await expect(run).rejects.toThrow('--seed: -1 is below zero. Give zero or more.');
+  });
+});
+
+test('a signal after the last table, while the rest is made: how to go on is said', async () => {
+  const io = { signals: place.signals, stderr: { write: () => true }, stderrIsTTY: false };
+  const kept = { folder: '/there', words: ['spread', 'a.yaml'] };
+  const run = whileListening(io, { quiet: true }, (interruption) =>
+    whileRowsAreKept(kept, interruption, async (checkpoint) => {
+      checkpoint();
+      place.signal();
+      checkpoint();
+    }),
+  );
+  await expect(run).rejects.toBeInstanceOf(Interrupted);
+  await expect(run).rejects.toThrow('all rows are kept in /there. To go on:\n  perilag spread a.yaml --resume');
+  expect(place.listeners()).toBe(0);
+});
+
+describe('a thread that dies', () => {
+  test('our fault, but what is kept and how to go on is said', async () => {
+    const job = { ...demoJob(100_000, { findings: 0 }), kind: 'dying' };
+    await expect(place.compute(job, 'a', { workers: 2 })).rejects.toThrow('a worker thread ended (1)');
+    expect(place.told()).toMatch(
+      /What is finished stays in .*a\/draws\.work\. To go on: perilag spread .* --resume\n$/,
+    );
+  });
+
+  test('of too little memory: the machine’s, with what to allow', async () => {
+    const run = place.compute({ ...demoJob(100, { findings: 0 }), kind: 'hungry' }, 'a');
+    await expect(run).rejects.toBeInstanceOf(SimError);
+    await expect(run).rejects.toThrow(
+      /ran out of memory\. Allow Node more, .*\. What is finished stays there\. .* --resume\.$/,
+    );
   });
 });
 

@@ -1,4 +1,5 @@
 /** A job for tests: rows of hashed numbers, some of them undefined or failed, at a price that can be set. */
+import { isMainThread } from 'node:worker_threads';
 import type { Calculate, Job, Kinds, Settings } from '../../../cli/engine/job.ts';
 import { SimError } from '../../../sim/error.ts';
 
@@ -73,4 +74,26 @@ function broken(): Calculate {
   };
 }
 
-export const demoKinds: Kinds = { demo: async () => demo, broken: async () => broken };
+/** Ends the thread it runs in, if that is not the first. */
+function dying(): Calculate {
+  return (from, to) => {
+    if (!isMainThread) process.exit(1);
+    work(2000);
+    return { columns: [new Float64Array(to - from)], failures: [] };
+  };
+}
+
+/** Runs out of memory, as Node tells it. */
+function hungry(): Calculate {
+  return (from, to) => {
+    if (from > 0) throw Object.assign(new Error('heap out of memory'), { code: 'ERR_WORKER_OUT_OF_MEMORY' });
+    return { columns: [new Float64Array(to - from)], failures: [] };
+  };
+}
+
+export const demoKinds: Kinds = {
+  demo: async () => demo,
+  broken: async () => broken,
+  dying: async () => dying,
+  hungry: async () => hungry,
+};

@@ -35,6 +35,7 @@ export interface Bench {
   stopAfter(chunks: number): void;
   /** It comes now. */
   signal(): void;
+  readonly signals: EngineIo['signals'];
   listeners(): number;
   compute(job: Job, folder: string, options?: Partial<EngineOptions>): Promise<Computed>;
   /** `draws.parquet` and `failed.csv`, as one text. */
@@ -50,16 +51,17 @@ export function bench(): Bench {
   const signal = () => {
     for (const listener of [...listeners]) listener();
   };
+  const signals = {
+    on: (listener: () => void) => {
+      listeners.add(listener);
+      return () => listeners.delete(listener);
+    },
+  };
   const io = {
     ...undisturbed,
     worker: demoWorker,
     stderr: { write: (text: string) => (state.told += text) },
-    signals: {
-      on: (listener: () => void) => {
-        listeners.add(listener);
-        return () => listeners.delete(listener);
-      },
-    },
+    signals,
     // The clock is read once for each chunk that has landed.
     now: () => {
       if (state.stopAfter-- <= 0) signal();
@@ -78,6 +80,7 @@ export function bench(): Bench {
       state.stopAfter = chunks;
     },
     signal,
+    signals,
     listeners: () => listeners.size,
     compute: (job, folder, options = {}) => {
       const words = ['spread', 'a planet.yaml', '-o', folder];
