@@ -16,6 +16,8 @@ export interface MomentBar {
 }
 
 const steps = 1000;
+/** With more the temperatures alone are told. */
+const mostInFull = 6;
 
 export function momentBar(moved: (share: number | null) => void): MomentBar {
   let columns: readonly Column[] = [];
@@ -48,13 +50,16 @@ export function momentBar(moved: (share: number | null) => void): MomentBar {
       ? `${duration(values[0]!.time, time)} after periapsis`
       : `${percent(share)} of the period after periapsis`;
     when.textContent = text;
-    const words = values.map(({ temperature, steady, instellation }) =>
-      [
+    const isFull = values.length <= mostInFull;
+    list.classList.toggle('many', !isFull);
+    const words = values.map(({ temperature, steady, instellation }) => {
+      if (!isFull) return shown(temperature, unit);
+      return [
         shown(temperature, unit),
         `steady ${shown(steady, unit)}`,
         `${significant(instellation, 4)}${nbsp}${unitText('W/m2')}`,
-      ].join(', '),
-    );
+      ].join(', ');
+    });
     slider.setAttribute('aria-valuetext', `${text}: ${values.map(({ name }, i) => `${name} ${words[i]}`).join('; ')}`);
     list.replaceChildren(
       ...values.map(({ name, caseIndex }, i) =>

@@ -40,6 +40,12 @@ const sections = {
 
 type SectionName = keyof typeof sections;
 
+/** What is renewed with the figures in view; the others right after, when the screen shows these. */
+const atOnce: readonly SectionName[] = ['heading', 'answer'];
+
+/** A frame or two, ms. */
+const soon = 30;
+
 export function page(original: RunResult): RunPage {
   const made = (name: SectionName, result: RunResult, moves: string | null = null) =>
     sections[name](result, original, moves);
@@ -48,6 +54,7 @@ export function page(original: RunResult): RunPage {
   ) as Record<SectionName, HTMLElement>;
   const builders = (result: RunResult) => figureBuilders(columnsOf(result), movedFrom(original, result));
   const figures = figureList(builders(original), figureChoices(columnsOf(original)));
+  let waiting = 0;
   return {
     element: element(
       'main',
@@ -65,8 +72,14 @@ export function page(original: RunResult): RunPage {
     ),
     figures,
     show(result, moves) {
-      for (const name of Object.keys(sections) as SectionName[]) renew(shown[name], made(name, result, moves));
+      const renewAll = (names: readonly SectionName[]) => {
+        for (const name of names) renew(shown[name], made(name, result, moves));
+      };
+      renewAll(atOnce);
       figures.show(builders(result), figureChoices(columnsOf(result)));
+      clearTimeout(waiting);
+      const others = (Object.keys(sections) as SectionName[]).filter((name) => !atOnce.includes(name));
+      waiting = setTimeout(() => renewAll(others), soon) as unknown as number;
     },
   };
 }
