@@ -65,7 +65,7 @@ planet: { bondAlbedo: 0.3, heatStore: { heatCapacity: 1e4 J/m2/K } }
   expect(spread.stderr).toMatch(/^--draws: .*2,147,483,648 rows takes? about [\d.]+ GB of memory/);
   place.write(
     'many.yaml',
-    `${readFileSync(place.path('p.yaml'), 'utf8')}cases: { a: {}, b: {}, c: {}, d: {}, e: {} }\n`,
+    `${readFileSync(place.path('p.yaml'), 'utf8')}cases: { ${['a', 'b', 'c', 'd', 'e'].map((name, i) => `${name}: { planet: { heatStore: { heatCapacity: ${i + 1}e5 J/m2/K } } }`).join(', ')} }\n`,
   );
   const along = ['orbit.eccentricity=0 to 0.9', 'planet.bondAlbedo=0 to 0.9'].flatMap((one) => ['--along', one]);
   const grid = await place.perilag('grid', 'many.yaml', ...along, '--steps', '1000', '-o', 'out');
