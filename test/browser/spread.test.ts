@@ -93,6 +93,7 @@ describe.skipIf(!hasBrowser)('the report of a spread in Chromium', () => {
     const before = await label(page, 3);
     await page.keyboard.press('Tab'); // Save SVG
     await page.keyboard.press('Tab'); // Save PNG
+    await page.keyboard.press('Tab'); // Save CSV
     await page.keyboard.press('Tab');
     expect(await chosen.nth(1).evaluate((select) => select === document.activeElement)).toBe(true);
     await page.keyboard.press('ArrowDown');
