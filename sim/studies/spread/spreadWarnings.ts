@@ -32,6 +32,43 @@ export function climateWarnings(climates: DrawnClimates | null): string[] {
   ];
 }
 
+/** Five of them lie beyond a percentile of 2.5 %. */
+const leastSamples = 200;
+
+/** Of a posterior: few samples make rough percentiles, however often they are drawn. Weights (count,) or null; none where there are enough. */
+export function fewSamplesWarnings({ count, weights }: { count: number; weights: Float64Array | null }): string[] {
+  const effective = weights === null ? count : Math.round(effectiveNumber(weights));
+  if (effective >= leastSamples) return [];
+  const counting = effective < count ? `, which by their weights count as ${effective}` : '';
+  const samples = count === 1 ? '1 sample' : `${count} samples`;
+  return [
+    `The posterior has ${samples}${counting}: draws repeat them, and percentiles far from the median rest on a few. Take at least ${leastSamples}.`,
+  ];
+}
+
+/** Kish (1965) Survey Sampling, ch. 8 (from memory): (Σw)² / Σw². */
+function effectiveNumber(weights: Float64Array): number {
+  let sum = 0;
+  let squares = 0;
+  for (const weight of weights) {
+    sum += weight;
+    squares += weight ** 2;
+  }
+  return sum ** 2 / squares;
+}
+
+/** Where draws have different periods, times and lags are not told in the same days; null where they have one. Periods (draws,), NaN where undefined. */
+export function periodNote(periods: Float64Array): string | null {
+  let low = Number.POSITIVE_INFINITY;
+  let high = Number.NEGATIVE_INFINITY;
+  for (const period of periods) {
+    if (period < low) low = period;
+    if (period > high) high = period;
+  }
+  if (!(high > low * (1 + 1e-9))) return null;
+  return 'The period is drawn: a time after periapsis is a share of its own draw’s period, told in the median period; a lag is in the days of its own draw.';
+}
+
 /** What times count from where every draw is on a circle, and has no periapsis; null where that is of no account. */
 export function circleNote({ orbit, globe }: World, isDrawn: boolean): string | null {
   if (orbit.eccentricity > 0 || isDrawn || !globe) return null;

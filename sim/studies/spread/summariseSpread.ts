@@ -19,8 +19,10 @@ import {
   circleNote,
   climateWarnings,
   cutWarnings,
+  fewSamplesWarnings,
   groupWarnings,
   leftOutWarnings,
+  periodNote,
   warmestNote,
 } from './spreadWarnings.ts';
 
@@ -82,12 +84,13 @@ async function summariseCase(
     sample: { inputs: inputs.sample, findings: findings.sample },
     warnings: [
       ...drawn.warnings,
+      ...(plan.setup.samples === null ? [] : fewSamplesWarnings(plan.setup.samples)),
       ...cutWarnings(inputs.told),
       ...climateWarnings(climates),
       ...groupWarnings(findings.told),
       ...leftOutWarnings(findings.told),
     ],
-    notes: [...drawn.notes, ...worldNotes(plan.cases[index])],
+    notes: [...drawn.notes, ...worldNotes(plan.cases[index]), ...[periodNote(periods)].filter((note) => note !== null)],
   };
 }
 

@@ -5,8 +5,10 @@ import {
   circleNote,
   climateWarnings,
   cutWarnings,
+  fewSamplesWarnings,
   groupWarnings,
   leftOutWarnings,
+  periodNote,
   warmestNote,
 } from '../../../../sim/studies/spread/spreadWarnings.ts';
 import { rampAlbedo } from '../../../../sim/surface/albedo/ramp.ts';
@@ -135,4 +137,24 @@ test('where climates are not counted draw by draw, ice brings a word on which is
   expect(warmestNote(zonalWorld({ albedo: ramp }), 'periodic')).toContain('every number here is of the warmest');
   expect(warmestNote(zonalWorld({ albedo: ramp }), { temperature: 250, orbits: 2, at: 0 })).toBeNull();
   expect(warmestNote(zonalWorld(), 'periodic')).toBeNull();
+});
+
+describe('a posterior of few samples', () => {
+  test('is warned of, by the number that its weights leave', () => {
+    expect(fewSamplesWarnings({ count: 400, weights: null })).toEqual([]);
+    expect(fewSamplesWarnings({ count: 1, weights: null })[0]).toMatch(/^The posterior has 1 sample: /);
+    // Half of the weight on one sample: (1 + 1)² / (1 + 1/399) for the sums over one and over 399 others.
+    const weights = Float64Array.from({ length: 400 }, (_, i) => (i === 0 ? 399 : 1));
+    expect(fewSamplesWarnings({ count: 400, weights })[0]).toMatch(
+      /has 400 samples, which by their weights count as 4: /,
+    );
+  });
+});
+
+describe('the period', () => {
+  test('is told of where it is drawn', () => {
+    expect(periodNote(Float64Array.of(8.6e6, none, 8.6e6))).toBeNull();
+    expect(periodNote(Float64Array.of(8.6e6, none, 8.7e6))).toMatch(/^The period is drawn: /);
+    expect(periodNote(Float64Array.of(none))).toBeNull();
+  });
 });
