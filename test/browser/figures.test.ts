@@ -65,9 +65,16 @@ describe.skipIf(!hasBrowser)('figures as files, by Chromium', () => {
     expect(svgs.map((name) => name.slice(0, -4))).toEqual(pngs.map((name) => name.slice(0, -4)));
     expect(svgs.length + pngs.length).toBe(files.length);
     expect(stderr).toContain(`figures out/chione/figures: ${svgs.length} figures as svg and png, 180 mm wide`);
-    // One through the orbit, one map a state of temperature, one of insolation, profile and lags.
+    // Through the orbit, the orbit of the first state, the loop, a map a state, one of insolation, profile, lags and windows.
     const states = JSON.parse(readFileSync(place.path('out/chione/summary.json'), 'utf8')).cases[0].states.length;
-    expect(svgs).toHaveLength(1 + states + 1 + 2);
+    const several = states > 1 ? '-1' : '';
+    expect(svgs.map((name) => name.slice(3, -4)).slice(0, 3)).toEqual([
+      'temperature-through-the-orbit',
+      `orbit-from-above${several}`,
+      'lag-loop',
+    ]);
+    expect(svgs.filter((name) => name.includes('temperature-by-latitude'))).toHaveLength(states);
+    expect(svgs).toHaveLength(3 + states + 1 + 3);
     expect(svgs[0]).toBe('01-temperature-through-the-orbit.svg');
     for (const [at, name] of svgs.entries()) {
       const { name: root, width, height, viewBox } = parsedSvg(place.path('out/chione/figures', name));
