@@ -1,8 +1,9 @@
 /** `report.html`: the page that the build made, with this run's results in its one data block. */
 import { readFileSync } from 'node:fs';
-import { forPage, pageStride } from '../../sim/dataset/forPage.ts';
+import { pageStride } from '../../sim/dataset/forPage.ts';
 import { toPortable } from '../../sim/dataset/portable.ts';
 import { SimError } from '../../sim/error.ts';
+import { caseForPage } from '../../sim/live/caseForPage.ts';
 import type { RunResult } from '../../sim/run.ts';
 import { toPortableTree } from '../../sim/scenario/portableTree.ts';
 import type { Branch } from '../../sim/scenario/tree.ts';
@@ -29,10 +30,7 @@ function thinned(result: RunResult): RunResult {
   if (longest === 1) return result;
   return {
     ...result,
-    cases: result.cases.map((one) => ({
-      ...one,
-      states: one.states.map((state) => ({ ...state, dataset: forPage(state.dataset) })),
-    })),
+    cases: result.cases.map(caseForPage),
     notes: [
       ...result.notes,
       `The figures of this page are drawn from one row of the year in ${longest}, or more; the tables are of the whole, and fields.nc and series.csv hold every row.`,

@@ -1,5 +1,4 @@
 /** A scenario whose numbers a reader moves: which there are, and what comes of them. The same code as behind every other result. */
-import { forPage } from '../dataset/forPage.ts';
 import { SimError } from '../error.ts';
 import { type CaseResult, runCase } from '../run.ts';
 import type { Dial } from '../scenario/dial.ts';
@@ -9,6 +8,7 @@ import { ScenarioError } from '../scenario/problem.ts';
 import { readTree } from '../scenario/readTree.ts';
 import type { Branch } from '../scenario/tree.ts';
 import type { Scenario } from '../scenario/types.ts';
+import { caseForPage } from './caseForPage.ts';
 
 export interface Session {
   /** Of each case of the file, in its order. */
@@ -25,13 +25,9 @@ export function openSession(tree: Branch, file: string): Session {
     withoutPlaces(() => readTree(editedTree(tree, cases), file).scenario);
   return {
     dials: scenario.cases.map((one) => ({ name: one.name, dials: dialsOf(one) })),
-    run: (cases) => edited(cases).cases.map((one) => thinned(runCase(one))),
+    run: (cases) => edited(cases).cases.map((one) => caseForPage(runCase(one))),
     write: (cases) => edited(cases).asUnderstood,
   };
-}
-
-function thinned(result: CaseResult): CaseResult {
-  return { ...result, states: result.states.map((state) => ({ ...state, dataset: forPage(state.dataset) })) };
 }
 
 /** What was moved stands in no file: its key says where. */

@@ -5,7 +5,7 @@
 import { SimError } from '../error.ts';
 import { takeApart } from './cases.ts';
 import { merge } from './merge.ts';
-import { type Branch, type Entry, type Leaf, subtree, type Tree } from './tree.ts';
+import { type Branch, branchAt, type Entry, type Leaf, nowhere, subtree, type Tree } from './tree.ts';
 
 /** A key of a case and what shall stand there, as it would be typed: `0.5`, `12 m`. */
 export interface Edit {
@@ -46,19 +46,9 @@ function laidOver(patch: Branch, base: Branch, { key, text }: Edit): Branch {
   const path = key.split('.');
   const whole = merge(base, patch);
   const listAt = path.findIndex((_, depth) => subtree(whole, path.slice(0, depth))?.kind === 'list');
-  if (listAt < 0) return merge(patch, at(path, leafOf(text, path)));
+  if (listAt < 0) return merge(patch, branchAt(path, leafOf(text, path)));
   const list = path.slice(0, listAt);
-  return merge(patch, at(list, withLeaf(subtree(whole, list)!, path.slice(listAt), leafOf(text, path), key)));
-}
-
-/** A branch with nothing but a tree at a path. */
-function at(path: readonly string[], tree: Tree): Branch {
-  let made = tree;
-  for (let depth = path.length - 1; depth >= 0; depth--) {
-    const entries: Map<string, Entry> = new Map([[path[depth]!, { keyAt: nowhere, tree: made }]]);
-    made = { kind: 'branch', at: nowhere, path: path.slice(0, depth), entries };
-  }
-  return made as Branch;
+  return merge(patch, branchAt(list, withLeaf(subtree(whole, list)!, path.slice(listAt), leafOf(text, path), key)));
 }
 
 function withLeaf(tree: Tree, path: readonly string[], leaf: Leaf, key: string): Tree {
@@ -77,7 +67,6 @@ function withLeaf(tree: Tree, path: readonly string[], leaf: Leaf, key: string):
   return { ...tree, entries: new Map([...tree.entries, [step, { ...entry, tree: withLeaf(below, rest, leaf, key) }]]) };
 }
 
-const nowhere = { line: 1, column: 1 };
 const bareNumber = /^[-+]?(0|[1-9]\d*)(\.\d*)?([eE][-+]?\d+)?$/;
 
 /** A bare number is one in the file, too. */

@@ -2,7 +2,7 @@
  * Lays one tree over another: key by key, lists replaced whole, null removing a key, and alternatives replacing one
  * another whole. Cases use it, and so does everything that varies an input.
  */
-import { type Branch, type Entry, isNull, type Tree } from './tree.ts';
+import { type Branch, branchAt, type Entry, isNull, nowhere, type Tree } from './tree.ts';
 
 /** Ways to say one thing; each way is the keys that it needs. */
 export interface Alternatives {
@@ -115,12 +115,13 @@ function withoutNulls(tree: Tree): Tree {
 
 /** A patch that sets one dotted key, for `merge`: what `--along` and live controls lay over a case. */
 export function patchOf(key: string, value: string | number): Branch {
-  const at = { line: 1, column: 1 };
-  const steps = key.split('.');
-  let tree: Tree = { kind: 'leaf', at, path: steps, value, text: String(value), quoted: typeof value === 'string' };
-  for (let depth = steps.length - 1; depth >= 0; depth--) {
-    const entries: Map<string, Entry> = new Map([[steps[depth]!, { keyAt: at, tree }]]);
-    tree = { kind: 'branch', at, path: steps.slice(0, depth), entries };
-  }
-  return tree as Branch;
+  const path = key.split('.');
+  return branchAt(path, {
+    kind: 'leaf',
+    at: nowhere,
+    path,
+    value,
+    text: String(value),
+    quoted: typeof value === 'string',
+  });
 }

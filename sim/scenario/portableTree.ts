@@ -1,6 +1,6 @@
 /** The tree of a scenario file as JSON and back: for a page that changes its numbers and has no reader of YAML. Places are left behind. */
 import { SimError } from '../error.ts';
-import type { Branch, Entry, Leaf, Tree } from './tree.ts';
+import { type Branch, type Entry, type Leaf, nowhere, type Tree } from './tree.ts';
 
 /** A list is an array; a leaf has its value and, where that differs from it, what was typed. */
 export type PortableTree =
@@ -15,8 +15,6 @@ export function toPortableTree(tree: Tree): PortableTree {
   const { value, text, quoted } = tree;
   return { value, ...(String(value) === text ? {} : { text }), ...(quoted ? { quoted } : {}) };
 }
-
-const nowhere = { line: 1, column: 1 };
 
 /** Errors: SimError for anything but what `toPortableTree` gave for the whole of a file. */
 export function fromPortableTree(portable: unknown): Branch {

@@ -41,6 +41,19 @@ export interface Entry {
 
 export type Tree = Leaf | List | Branch;
 
+/** Where what stands in no file is said to be. */
+export const nowhere: Place = { line: 1, column: 1 };
+
+/** A branch with nothing but a tree at a path. */
+export function branchAt(path: readonly string[], tree: Tree): Branch {
+  let made = tree;
+  for (let depth = path.length - 1; depth >= 0; depth--) {
+    const entries: Map<string, Entry> = new Map([[path[depth]!, { keyAt: nowhere, tree: made }]]);
+    made = { kind: 'branch', at: nowhere, path: path.slice(0, depth), entries };
+  }
+  return made as Branch;
+}
+
 export function isNull(tree: Tree | undefined): boolean {
   return tree?.kind === 'leaf' && tree.value === null;
 }

@@ -1,14 +1,12 @@
 /** The live report by the keyboard alone: everything can be done, the focus is always seen and never lost. */
 import { readFile } from 'node:fs/promises';
-import { createRequire } from 'node:module';
 import type { BrowserContextOptions, Locator, Page } from 'playwright-core';
 import { describe, expect, test } from 'vitest';
 import { requireTool } from '../support/require.ts';
-import { chromiumPath } from './page.ts';
+import { axeFindings, chromiumPath } from './page.ts';
 import { reportBench } from './reportBench.ts';
 
 const hasBrowser = chromiumPath() !== null || requireTool('chromium');
-const axePath = createRequire(import.meta.url).resolve('axe-core/axe.min.js');
 
 const scenario = `
 title: Velmora b, by keys
@@ -185,15 +183,7 @@ describe.skipIf(!hasBrowser)('the live report by the keyboard alone', () => {
         await page.getByRole('button', { name: 'Keep as a case' }).click();
         await slider(page, 'Moment').fill('300');
         await expect.poll(() => page.locator('.moment-values li').count()).toBeGreaterThan(2);
-        await page.evaluate(await readFile(axePath, 'utf8'));
-        const violations = await page.evaluate(async () => {
-          const { axe } = globalThis as unknown as {
-            axe: { run: (options: object) => Promise<{ violations: { id: string; nodes: { target: string[] }[] }[] }> };
-          };
-          const found = await axe.run({ runOnly: ['wcag2a', 'wcag2aa', 'wcag21aa', 'wcag22aa', 'best-practice'] });
-          return found.violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => target).join(' ')}`);
-        });
-        expect(violations).toEqual([]);
+        expect(await axeFindings(page)).toEqual([]);
       }
     },
   );

@@ -1,6 +1,5 @@
 /** The live report in Chromium: what a reader moves is computed in a worker, and is what the command line would give. */
 import { readFile } from 'node:fs/promises';
-import { createRequire } from 'node:module';
 import type { Locator, Page } from 'playwright-core';
 import { describe, expect, test } from 'vitest';
 import { openSession } from '../../sim/live/session.ts';
@@ -9,11 +8,10 @@ import type { Edit } from '../../sim/scenario/edited.ts';
 import { readScenario } from '../../sim/scenario/read.ts';
 import { answer } from '../../viewer/words/answer.ts';
 import { requireTool } from '../support/require.ts';
-import { chromiumPath } from './page.ts';
+import { axeFindings, chromiumPath } from './page.ts';
 import { reportBench } from './reportBench.ts';
 
 const hasBrowser = chromiumPath() !== null || requireTool('chromium');
-const axePath = createRequire(import.meta.url).resolve('axe-core/axe.min.js');
 
 const scenario = `
 title: Velmora b, moved
@@ -211,15 +209,7 @@ describe.skipIf(!hasBrowser)('the live report in Chromium', () => {
       await field(page, 'Eccentricity').fill('0.1');
       await page.keyboard.press('Enter');
       await expect.poll(() => page.locator('.moves').count()).toBe(1);
-      await page.evaluate(await readFile(axePath, 'utf8'));
-      const violations = await page.evaluate(async () => {
-        const { axe } = globalThis as unknown as {
-          axe: { run: (options: object) => Promise<{ violations: { id: string; nodes: { target: string[] }[] }[] }> };
-        };
-        const found = await axe.run({ runOnly: ['wcag2a', 'wcag2aa', 'wcag21aa', 'wcag22aa', 'best-practice'] });
-        return found.violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => target).join(' ')}`);
-      });
-      expect(violations).toEqual([]);
+      expect(await axeFindings(page)).toEqual([]);
     }
   });
 

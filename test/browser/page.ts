@@ -1,5 +1,6 @@
 /** A report opened in Chromium from disk, offline, with everything that it should not do written down. */
-import { writeFile } from 'node:fs/promises';
+import { readFile, writeFile } from 'node:fs/promises';
+import { createRequire } from 'node:module';
 import { join } from 'node:path';
 import { fileURLToPath, pathToFileURL } from 'node:url';
 import { type Browser, type BrowserContextOptions, chromium, type Page } from 'playwright-core';
@@ -81,3 +82,17 @@ export async function openFile(
 export const drawn = (page: Page): Promise<void> => page.locator('body[data-drawn="yes"]').waitFor({ timeout: 30_000 });
 
 export const live = (page: Page): Promise<void> => page.locator('body[data-live="yes"]').waitFor({ timeout: 30_000 });
+
+const axePath = createRequire(import.meta.url).resolve('axe-core/axe.min.js');
+
+/** What axe finds wrong for those who do not see the page or use no mouse; to be empty. */
+export async function axeFindings(page: Page): Promise<readonly string[]> {
+  await page.evaluate(await readFile(axePath, 'utf8'));
+  return page.evaluate(async () => {
+    const { axe } = globalThis as unknown as {
+      axe: { run: (options: object) => Promise<{ violations: { id: string; nodes: { target: string[] }[] }[] }> };
+    };
+    const found = await axe.run({ runOnly: ['wcag2a', 'wcag2aa', 'wcag21aa', 'wcag22aa', 'best-practice'] });
+    return found.violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => target).join(' ')}`);
+  });
+}
